@@ -1,0 +1,18 @@
+import { defineConfig } from 'vitest/config';
+
+export default defineConfig({
+  root: new URL('..', import.meta.url).pathname,
+  test: {
+    include: ['test/**/*.test.ts'],
+    pool: 'forks',
+    testTimeout: 30_000,
+    hookTimeout: 30_000,
+    reporters: ['default'],
+    passWithNoTests: true,
+    coverage: {
+      provider: 'v8',
+      include: ['src/**/*.ts', 'commands/**/*.ts'],
+      reportsDirectory: 'coverage',
+    },
+  },
+});
