@@ -1,14 +1,15 @@
+import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'vitest/config';
 
 export default defineConfig({
-  root: new URL('..', import.meta.url).pathname,
+  root: fileURLToPath(new URL('..', import.meta.url)),
   test: {
     include: ['test/**/*.test.ts'],
     pool: 'forks',
     testTimeout: 30_000,
     hookTimeout: 30_000,
     reporters: ['default'],
-    passWithNoTests: true,
+    allowOnly: false,
     coverage: {
       provider: 'v8',
       include: ['src/**/*.ts', 'commands/**/*.ts'],
