@@ -28,12 +28,14 @@ export async function alone(lock, work) {
 /** @param {string} lock */
 async function take(lock) {
   fs.mkdirSync(path.dirname(lock), { recursive: true });
-  for (let told = false; !tryMakeFolder(lock); await pause(100)) {
+  let told = false;
+  while (!tryMakeFolder(lock)) {
     if (isAbandoned(lock)) removeAbandoned(lock);
     else if (!told) {
       told = true;
       process.stderr.write('Another start is installing or building; waiting for it …\n');
     }
+    await pause(100);
   }
   fs.writeFileSync(
     path.join(lock, OWNER),
@@ -66,8 +68,9 @@ function isAbandoned(lock) {
  * @returns {{ pid: number, host: string } | undefined} */
 function ownerOf(lock) {
   try {
-    const text = fs.readFileSync(path.join(lock, OWNER), 'utf8');
-    return /** @type {{ pid: number, host: string }} */ (JSON.parse(text));
+    /** @type {unknown} */
+    const owner = JSON.parse(fs.readFileSync(path.join(lock, OWNER), 'utf8'));
+    return /** @type {{ pid: number, host: string }} */ (owner);
   } catch {
     // Not yet written, or just removed: nobody is known to have ended.
     return undefined;

@@ -98,7 +98,9 @@ function runTests(chosen) {
  * @returns {string | undefined} */
 function tally() {
   if (!fs.existsSync(RESULTS)) return undefined;
-  const results = /** @type {Results} */ (JSON.parse(fs.readFileSync(RESULTS, 'utf8')));
+  /** @type {unknown} */
+  const written = JSON.parse(fs.readFileSync(RESULTS, 'utf8'));
+  const results = /** @type {Results} */ (written);
   const unread = results.testResults.filter(
     ({ status, assertionResults }) =>
       status === 'failed' && !assertionResults.some((test) => test.status === 'failed'),

@@ -171,16 +171,22 @@ async function build() {
   // Taken before compiling: a file that is saved meanwhile makes the next start compile again.
   const mark = buildMark(files);
   const wanted = files.filter((f) => f.endsWith('.ts') && !f.endsWith('.d.ts')).map(builtFile);
-  // The compiler writes only what changed since its own record; without the files the record lies.
-  if (!wanted.every((file) => fs.existsSync(file))) fs.rmSync(BUILD_INFO, { force: true });
-  const code = await run(process.execPath, [COMPILER, '-p', at('tsconfig.json')]);
-  if (code !== 0) {
-    throw new NotReady(
-      'The program could not be built: the compiler names the lines above. Correct them, then start again.',
-    );
+  await compile();
+  if (!wanted.every((file) => fs.existsSync(file))) {
+    // The compiler writes only what changed since its own record; files were removed behind it.
+    fs.rmSync(BUILD_INFO, { force: true });
+    await compile();
   }
   removeLeftovers(new Set(wanted));
   writeStamp(BUILD_STAMP, mark);
+}
+
+async function compile() {
+  const code = await run(process.execPath, [COMPILER, '-p', at('tsconfig.json')]);
+  if (code === 0) return;
+  throw new NotReady(
+    'The program could not be built: the compiler names the lines above. Correct them, then start again.',
+  );
 }
 
 /** Built files whose source is gone would still be found by an import.
@@ -211,7 +217,7 @@ function writeStamp(file, mark) {
  * @param {Record<string, string>} [env]
  * @returns {Promise<number>} */
 function run(command, args, env = {}) {
-  return new Promise((resolve) => {
+  return new Promise((resolve, reject) => {
     const child = spawn(command, args, {
       cwd: root,
       env: { ...process.env, ...env },
@@ -220,12 +226,17 @@ function run(command, args, env = {}) {
     });
     /** @type {NodeJS.Signals[]} */
     const signals = ['SIGINT', 'SIGTERM'];
-    /** @param {NodeJS.Signals} signal */
-    const passOn = (signal) => child.kill(signal);
+    let stopped = false;
+    const passOn = (/** @type {NodeJS.Signals} */ signal) => {
+      stopped = true;
+      child.kill(signal);
+    };
     for (const signal of signals) process.on(signal, passOn);
     const finish = (/** @type {number | null} */ code) => {
       for (const signal of signals) process.off(signal, passOn);
-      resolve(code ?? 1);
+      if (stopped)
+        reject(new NotReady('Stopped while installing or building. Start again to go on.'));
+      else resolve(code ?? 1);
     };
     child.on('error', (error) => {
       process.stderr.write(`${error.message}\n`);
