@@ -156,6 +156,12 @@ const GEOMETRY = {
     taken: 'the odd gap s after one turn: take off s·p_t/π, effective pitch π·D/(n − 1 + s)',
     mark: 'derived',
   },
+  'tooth-geometry': {
+    title: 'A tooth as a triangle',
+    taken:
+      'sharp height Hf = p/(2·tan a), flat left on a crest p·(1 − x), the lower tooth of a round wheel',
+    mark: 'derived',
+  },
   'volume-constancy': {
     title: 'The metal displaced rises',
     taken:

@@ -56,7 +56,7 @@ export function materialById(id: string): Material | undefined {
  *
  * | symbol | meaning | unit | range |
  * | --- | --- | --- | --- |
- * | material | the material, or anything of its group | - | |
+ * | group | family the material belongs to | - | |
  * | → plastic | is a plastic | - | |
  *
  * Assumes every plastic of the table stands in the group of that name.

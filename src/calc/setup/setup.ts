@@ -1,0 +1,391 @@
+import { type CautionId, cautionsFor } from '../caution.ts';
+import type { Check, Figure } from '../check.ts';
+import { figure } from '../check.ts';
+import { edgeCheck } from '../edge.ts';
+import { infeedPerTurn } from '../feed.ts';
+import { fillCheck } from '../fill.ts';
+import { formRating, materialCheck } from '../formOrCut.ts';
+import { crestFlat, formedRound } from '../growth/index.ts';
+import { formOf, type WheelKind, wheelFor } from '../pattern.ts';
+import { standardDp } from '../pitch.ts';
+import type { Process } from '../speed.ts';
+import {
+  FEWEST_TEETH,
+  largestWholeCount,
+  toothCount,
+  toothError,
+  wholeToothDiameter,
+} from '../teeth.ts';
+import {
+  firstBite,
+  runoutCheck,
+  TRACKS_WITHIN,
+  trackingCheck,
+  trackingWindow,
+  type Window,
+  wheelCheck,
+} from '../tracking.ts';
+import { type Mm, mm, type UnitName } from '../units.ts';
+import { type ChosenBlank, chooseBlank } from './blank.ts';
+import { finishCheck } from './finish.ts';
+import {
+  type Motion,
+  motion,
+  type Running,
+  running,
+  type WheelInUse,
+  wheelInUse,
+} from './motion.ts';
+import { type ResolvedPitch, resolvePitch } from './pitch.ts';
+import type { SetupRequest } from './request.ts';
+import { startingFill, type ToothPlan, toothPlan } from './tooth.ts';
+
+/** The figures every set-up card has, each with its unit; one that does not apply is null. */
+export const SETUP_FIGURES = {
+  stockToothCount: '1',
+  stockToothError: '1',
+  toothCount: '1',
+  blankDiameter: 'mm',
+  blankWindowLow: 'mm',
+  blankWindowHigh: 'mm',
+  pitch: 'mm',
+  transversePitch: 'mm',
+  sharpHeight: 'mm',
+  toothHeight: 'mm',
+  fill: '1',
+  infeed: 'mm',
+  fullInfeed: 'mm',
+  growth: 'mm',
+  growthFactor: '1',
+  crestDiameter: 'mm',
+  crestDiameterLow: 'mm',
+  crestDiameterHigh: 'mm',
+  crestFlat: 'mm',
+  firstBite: 'mm',
+  infeedPerTurn: 'mm',
+  surfaceSpeed: 'm/min',
+  spindleSpeed: 'rev/min',
+  feed: 'mm/rev',
+  feedLow: 'mm/rev',
+  feedHigh: 'mm/rev',
+  turns: '1',
+  passes: '1',
+  time: 's',
+} as const satisfies Record<string, UnitName>;
+export type SetupFigureName = keyof typeof SETUP_FIGURES;
+export type SetupFigures = Readonly<Record<SetupFigureName, Figure | null>>;
+
+export type Alternative = { readonly toothCount: number; readonly blankDiameter: Mm };
+
+export type SetupResult = {
+  readonly figures: SetupFigures;
+  readonly checks: readonly Check[];
+  readonly cautions: readonly CautionId[];
+  /** The next three whole counts below. */
+  readonly alternatives: readonly Alternative[];
+  /** The next whole count above that the bar or the print still allows. */
+  readonly larger: Alternative | null;
+  readonly pitch: ResolvedPitch;
+  readonly process: Process;
+  /** The material does not form, so the knurl is cut without having been asked for. */
+  readonly switchedToCut: boolean;
+  readonly blank: ChosenBlank;
+  readonly window: Window;
+  readonly wheel: WheelKind;
+  readonly wheelInUse: WheelInUse;
+  readonly motion: Motion;
+  readonly running: Running | null;
+  /** The bar as it is, where it tracks without being turned. */
+  readonly asIs: { readonly toothCount: number; readonly toothError: number } | null;
+  /** Largest whole count under the bar, or nearest to the print, read the other way. */
+  readonly otherWayTeeth: number | null;
+};
+
+const ALTERNATIVES = 3;
+
+const processOf = (request: SetupRequest): { process: Process; switched: boolean } => {
+  if (request.process !== null) return { process: request.process, switched: false };
+  const forms = formRating(request.material, request.hardness) !== 'no';
+  return { process: forms ? 'form' : 'cut', switched: !forms };
+};
+
+/** Infeed at which the pattern is full: the wheel is up to its root in the work. */
+const fullInfeed = (plan: ToothPlan, blank: Mm): Mm | null => {
+  if (plan.process === 'cut') return plan.sharpHeight;
+  if (plan.sharpHeight >= blank / 2) return null;
+  return formedRound({
+    form: formOf(plan.pattern),
+    blankDiameter: blank,
+    height: plan.sharpHeight,
+    sharpHeight: plan.sharpHeight,
+  }).infeed;
+};
+
+/** A cut removes what a form pushes up, so its first turn is as deep as its first groove. */
+const biteOf = (plan: ToothPlan): Mm =>
+  plan.process === 'cut'
+    ? mm(2 * TRACKS_WITHIN * plan.sharpHeight)
+    : firstBite(plan.sharpHeight, TRACKS_WITHIN);
+
+const smallerBlanks = (teeth: number, transverse: Mm, below: Mm): readonly Alternative[] => {
+  const list: Alternative[] = [];
+  for (let n = teeth; n >= FEWEST_TEETH && list.length < ALTERNATIVES; n -= 1) {
+    const blankDiameter = wholeToothDiameter(n, transverse);
+    if (blankDiameter < below - 1e-9) list.push({ toothCount: n, blankDiameter });
+  }
+  return list;
+};
+
+const largerBlank = (request: SetupRequest, teeth: number, transverse: Mm): Alternative | null => {
+  const blankDiameter = wholeToothDiameter(teeth + 1, transverse);
+  const ceiling = request.stock ?? (request.finish === null ? null : request.finish.high);
+  return ceiling !== null && blankDiameter <= ceiling
+    ? { toothCount: teeth + 1, blankDiameter }
+    : null;
+};
+
+const asIsOffer = (request: SetupRequest, transverse: Mm, chosen: ChosenBlank) => {
+  const { stock } = request;
+  if (stock === null || request.asIs || Math.abs(stock - chosen.diameter) < 1e-6) return null;
+  const delta = toothError(stock, transverse);
+  if (Math.abs(delta) > TRACKS_WITHIN) return null;
+  return { toothCount: Math.round(toothCount(stock, transverse)), toothError: delta };
+};
+
+type Worked = {
+  readonly request: SetupRequest;
+  readonly process: Process;
+  readonly pitch: ResolvedPitch;
+  readonly plan: ToothPlan;
+  readonly blank: ChosenBlank;
+  readonly window: Window;
+  readonly bite: Mm;
+  readonly wheel: WheelInUse;
+  readonly running: Running | null;
+  readonly motion: Motion;
+};
+
+const runningOf = (request: SetupRequest, process: Process, diameter: Mm): Running | null => {
+  const { material } = request;
+  const band = process === 'cut' ? material.cutSpeed.value : material.formSpeed.value;
+  const stopped = process === 'form' && formRating(material, request.hardness) === 'no';
+  if (band === null || stopped) return null;
+  return running({ ...request, band, process, diameter });
+};
+
+const windowOf = (request: SetupRequest, teeth: number, transverse: Mm): Window => {
+  const dp = request.pitch?.system === 'dp' ? standardDp(request.pitch.value) : null;
+  return trackingWindow({ teeth, transversePitch: transverse, dp, knurlClass: request.knurlClass });
+};
+
+const workOut = (request: SetupRequest): Worked => {
+  const pitch = resolvePitch(request);
+  const { process } = processOf(request);
+  const plan = toothPlan(request, pitch.normal, process);
+  const materialFill = process === 'form' ? request.material.maxFill.value : null;
+  const blank = chooseBlank(plan, {
+    ...request,
+    transverse: pitch.transverse,
+    fill: startingFill(plan, request.fill, materialFill),
+    deepestFill: request.fill === null ? (materialFill ?? 1) : null,
+  });
+  const wheel = wheelInUse(request, process);
+  const run = runningOf(request, process, blank.diameter);
+  const hardening = request.material.hardeningClass ?? 'low';
+  return {
+    request,
+    process,
+    pitch,
+    plan,
+    blank,
+    window: windowOf(request, blank.teeth, pitch.transverse),
+    bite: biteOf(plan),
+    wheel,
+    running: run,
+    motion: motion(
+      {
+        request,
+        width: wheel.width,
+        normal: pitch.normal,
+        hardening,
+        rotation: run?.rotation ?? null,
+      },
+      process,
+    ),
+  };
+};
+
+const isOnePiece = (request: SetupRequest): boolean =>
+  request.pattern.kind === 'square' || (request.pattern.kind === 'diamond' && request.onePiece);
+
+const checksOf = (w: Worked): readonly Check[] => {
+  const { request, blank, pitch } = w;
+  const dp = request.pitch?.system === 'dp' ? standardDp(request.pitch.value) : null;
+  const materialFill = w.process === 'form' ? request.material.maxFill.value : null;
+  const checks: (Check | null)[] = [
+    trackingCheck({
+      diameter: blank.diameter,
+      transversePitch: pitch.transverse,
+      dp,
+      knurlClass: request.knurlClass,
+    }),
+    wheelCheck({
+      blankDiameter: blank.diameter,
+      teeth: blank.teeth,
+      pitch: request.pitch,
+      knowledge: pitch.knowledge,
+      setOver: pitch.setOver,
+    }),
+    request.runout === null ? null : runoutCheck(request.runout, w.bite),
+    request.finish === null ? null : finishCheck(blank.tooth, request.finish),
+    fillCheck(blank.tooth.fill, materialFill),
+    w.motion.check,
+    edgeCheck({
+      edge: w.wheel.edge,
+      travel: w.motion.travel,
+      process: w.process,
+      onePiece: isOnePiece(request),
+    }),
+    materialCheck(request.material, request.hardness, w.process),
+    w.running?.check ?? null,
+  ];
+  return checks.filter((check) => check !== null);
+};
+
+const stockFigures = (w: Worked) => {
+  const { stock } = w.request;
+  const { transverse } = w.pitch;
+  return {
+    stockToothCount: stock === null ? null : Math.round(toothCount(stock, transverse)),
+    stockToothError: stock === null ? null : toothError(stock, transverse),
+  };
+};
+
+const toothFigures = (w: Worked) => {
+  const { tooth, diameter, teeth } = w.blank;
+  return {
+    toothCount: teeth,
+    blankDiameter: diameter,
+    blankWindowLow: w.window.low,
+    blankWindowHigh: w.window.high,
+    pitch: w.pitch.normal,
+    transversePitch: w.pitch.transverse,
+    sharpHeight: w.plan.sharpHeight,
+    toothHeight: tooth.height,
+    fill: tooth.fill,
+    infeed: tooth.infeed,
+    fullInfeed: fullInfeed(w.plan, diameter),
+    growth: tooth.growth,
+    growthFactor: w.process === 'cut' ? null : w.plan.growth.mean,
+    crestDiameter: tooth.crest,
+    crestDiameterLow: tooth.crestLow,
+    crestDiameterHigh: tooth.crestHigh,
+    crestFlat: crestFlat(w.pitch.normal, tooth.fill),
+    firstBite: w.bite,
+  };
+};
+
+const motionFigures = (w: Worked) => {
+  const { motion: m } = w;
+  const each =
+    m.travel === 'plunge' && m.turns !== null
+      ? infeedPerTurn(w.blank.tooth.infeed, w.bite, m.turns)
+      : null;
+  return {
+    infeedPerTurn: each,
+    surfaceSpeed: w.running?.surfaceSpeed ?? null,
+    spindleSpeed: w.running?.rotation ?? null,
+    feed: m.feed,
+    feedLow: m.feedLow,
+    feedHigh: m.feedHigh,
+    turns: m.turns,
+    passes: m.passes,
+    time: m.time,
+  };
+};
+
+const figuresOf = (w: Worked): SetupFigures => {
+  const values: Record<SetupFigureName, number | null> = {
+    ...stockFigures(w),
+    ...toothFigures(w),
+    ...motionFigures(w),
+  };
+  const named = Object.entries(SETUP_FIGURES).map(([name, unit]) => {
+    const value = values[name as SetupFigureName];
+    return [name, value === null ? null : figure(value, unit)] as const;
+  });
+  return Object.fromEntries(named) as Record<SetupFigureName, Figure | null>;
+};
+
+const otherWayTeeth = (w: Worked): number | null => {
+  const { otherWay } = w.pitch;
+  if (otherWay === null) return null;
+  const { stock } = w.request;
+  if (stock === null || w.request.asIs || w.request.finish !== null)
+    return Math.round(toothCount(w.blank.diameter, otherWay.transverse));
+  return largestWholeCount(stock, otherWay.transverse);
+};
+
+const cautionsOf = (w: Worked): readonly CautionId[] => {
+  const { request } = w;
+  return cautionsFor({
+    blankDiameter: w.blank.diameter,
+    stickout: request.stickout,
+    supported: request.support !== 'chuck',
+    stockLength: request.stockLength,
+    bore: request.bore,
+    fill: w.blank.tooth.fill,
+    materialFill: request.material.maxFill.value,
+    materialGroup: request.material.group,
+    rotation: w.running?.rotation ?? null,
+    machineTopSpeed: request.machine?.topSpeed ?? null,
+    seamTest: false,
+    warmUp: null,
+    bending: null,
+    ring: null,
+    pinHeat: null,
+  });
+};
+
+/**
+ * The whole set-up from what an operator knows: blank, tooth, motion, checks and cautions.
+ *
+ *     N whole → D = N p_t/π → H = x Hf → infeed and crest on round work → v, n, f, turns, t
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | request | what was said, lengths in mm; null where not said | - | |
+ * | → figures | every figure of the card, null where it does not apply | - | |
+ * | → checks | each fine, watch or stop, with its numbers | - | |
+ *
+ * Assumes the defaults named in this folder where nothing was said.
+ *
+ * @source whole-tooth (blank)
+ * @source round-work (infeed and crest)
+ * @source feed-window (feed and turns)
+ * @source speed-band (speed)
+ * @example setUp({ pattern: { kind: 'straight' }, pitch: { system: 'tpi', value: 21 }, alongRim: false, counted: null, proven: null, helix: null, tilt: null, included: DEFAULT_INCLUDED, stock: inch(1), finish: null, asIs: false, wantedTeeth: null, knurlClass: null, fill: null, material: materialById('steel-lowC-CD'), hardness: null, process: null, wheel: DEFAULT_WHEEL, edge: null, pin: 'hardened', pinDiameter: null, onePiece: false, length: null, stickout: null, support: 'chuck', layout: null, stockLength: null, bore: null, plug: false, feed: null, speed: null, rotation: null, turns: null, batch: 1, runout: null, machine: null, growth: growthBeforeResults() }).figures.blankDiameter.value // 25.0252 mm
+ */
+export function setUp(request: SetupRequest): SetupResult {
+  const w = workOut(request);
+  const { teeth, diameter } = w.blank;
+  const { transverse } = w.pitch;
+  return {
+    figures: figuresOf(w),
+    checks: checksOf(w),
+    cautions: cautionsOf(w),
+    alternatives: smallerBlanks(teeth, transverse, diameter),
+    larger: largerBlank(request, teeth, transverse),
+    pitch: w.pitch,
+    process: w.process,
+    switchedToCut: processOf(request).switched,
+    blank: w.blank,
+    window: w.window,
+    wheel: wheelFor(request.pattern, request.onePiece, w.pitch.setOver),
+    wheelInUse: w.wheel,
+    motion: w.motion,
+    running: w.running,
+    asIs: asIsOffer(request, transverse, w.blank),
+    otherWayTeeth: otherWayTeeth(w),
+  };
+}

@@ -1,0 +1,76 @@
+/**
+ * What a person gets instead of a card. A refusal is a value: the phrase book turns it into a
+ * sentence that says what was wrong, why, and what to type instead.
+ */
+export type Suggestion = {
+  /** What a button would say. */
+  readonly label: string;
+  /** The line the button would send. */
+  readonly words: string;
+};
+
+export type Unreadable = {
+  readonly code: 'unreadable';
+  readonly word: string;
+  /** Where the word stands in what was typed, so that the reply can point at it. */
+  readonly start: number;
+  readonly end: number;
+  readonly nearest: readonly string[];
+};
+
+export type Missing = {
+  readonly code: 'missing';
+  readonly parameter: string;
+  readonly examples: readonly string[];
+};
+
+export type OutOfRangeRefusal = {
+  readonly code: 'outOfRange';
+  readonly what: string;
+  readonly value: number;
+  readonly min: number;
+  readonly max: number;
+  readonly unit: string;
+};
+
+export type Unclear = {
+  readonly code: 'unclear';
+  readonly what: string;
+  readonly readings: readonly Suggestion[];
+};
+
+export type NotAllowed = {
+  readonly code: 'notAllowed';
+  readonly role: string;
+  readonly people: readonly string[];
+};
+
+export type NotFound = {
+  readonly code: 'notFound';
+  readonly what: string;
+  readonly nearest: readonly string[];
+};
+
+export type Stale = {
+  readonly code: 'stale';
+  readonly what: string;
+  readonly by: string;
+  readonly when: string;
+};
+
+export type Unavailable = {
+  readonly code: 'unavailable';
+  readonly what: string;
+  /** The person's own words, repeated so that they can be sent again. */
+  readonly words: string;
+};
+
+export type Refusal =
+  | Unreadable
+  | Missing
+  | OutOfRangeRefusal
+  | Unclear
+  | NotAllowed
+  | NotFound
+  | Stale
+  | Unavailable;
