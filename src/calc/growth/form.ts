@@ -45,7 +45,7 @@ export const voidOf = (form: Form, first: number, second: number): number => {
  *
  * Assumes two groove families of one depth that cross at any angle, or one family.
  *
- * @source tooth-geometry (two crossing families cut independently of each other)
+ * @source volume-constancy (solid shares: two crossing families press independently of each other)
  * @example solidShare('raised', mm(0.3), mm(0.4)) // 0.0625
  * @example solidShare('grooves', mm(0), mm(0.4), 0.1) // 0.9
  */

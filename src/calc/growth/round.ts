@@ -187,7 +187,7 @@ const takesFullForm = (form: Form, blankDiameter: Mm, sharp: Mm): void => {
  * Assumes that volume is kept and static growth: a measured growth is divided by its factor first.
  *
  * @source round-work (formedRound, solved for H)
- * @example heightFromCrest({ form: 'grooves', blankDiameter: mm(6), crestDiameter: mm(6.2), sharpHeight: mm(0.4) }) // 0.283825 mm
+ * @example heightFromCrest({ form: 'grooves', blankDiameter: mm(6), crestDiameter: mm(6.2), sharpHeight: mm(0.4) }) // 0.284952 mm
  * @example heightFromCrest({ form: 'grooves', blankDiameter: mm(6), crestDiameter: mm(6.4), sharpHeight: mm(0.4) }) // null
  */
 export function heightFromCrest(of: {
