@@ -6,7 +6,7 @@ import type { CalcFunction } from './calcFunctions.ts';
  * Reads the formula card above a function: a sentence, the formula, a table of symbols, what is
  * assumed, sources and worked examples.
  */
-export interface FormulaCard {
+interface FormulaCard {
   readonly sentence: string;
   readonly formula: readonly string[];
   /** Cells of each table line, the heading first and without the line under it. */
@@ -24,7 +24,7 @@ export interface Known {
 const HEADING = ['symbol', 'meaning', 'unit', 'range'];
 const NO_UNIT = '-';
 
-export function readCard(comment: string): FormulaCard {
+function readCard(comment: string): FormulaCard {
   const lines = comment
     .replace(/^\s*\/\*\*/, '')
     .replace(/\*\/\s*$/, '')

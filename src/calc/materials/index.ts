@@ -3,10 +3,8 @@ import type { Material } from './material.ts';
 
 export { MATERIALS } from './data.ts';
 export type {
-  HardeningClass,
   Material,
   MaterialGroup,
-  SpeedBand,
   Suits,
   Valued,
 } from './material.ts';

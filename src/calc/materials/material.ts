@@ -1,3 +1,4 @@
+import type { HardeningClass } from '../feed.ts';
 import type { Mark, SourceId } from '../sources.ts';
 import type { MPa, MPerMin } from '../units.ts';
 
@@ -22,9 +23,6 @@ export type MaterialGroup =
   | 'magnesium'
   | 'iron'
   | 'plastic';
-
-/** How much the metal hardens under the wheel, which limits the turns on one spot. */
-export type HardeningClass = 'low' | 'medium' | 'high';
 
 /** Whether a process suits the material. */
 export type Suits = 'yes' | 'marginal' | 'no';

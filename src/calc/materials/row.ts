@@ -1,5 +1,6 @@
+import type { HardeningClass } from '../feed.ts';
 import type { SourceId } from '../sources.ts';
-import type { HardeningClass, MaterialGroup, Suits } from './material.ts';
+import type { MaterialGroup, Suits } from './material.ts';
 
 type TableId = Extract<SourceId, `materials-S${number}`>;
 
