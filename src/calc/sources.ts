@@ -316,10 +316,42 @@ const STRENGTH = {
 } as const satisfies Record<string, Source>;
 
 const ADVICE = {
+  'check-limits': {
+    title: 'When a measured part is called off',
+    taken:
+      'reading errors of crest, height and flat, the fill a person stops within, 2.5 standard deviations',
+    mark: 'judgement',
+  },
+  'check-after': {
+    title: 'What a finished part says',
+    taken:
+      'growth factor from crest and fill, effective pitch from the count, what is left to feed, cleaned-up diameter = crest less twice the tooth height',
+    mark: 'derived',
+  },
+  'fade-along': {
+    title: 'A pattern that fades along its length',
+    taken: 'x = 1 − w/p at two places gives z1 and z2; (z2 − z1)/l is the angle to swivel',
+    mark: 'derived',
+  },
+  'normal-spread': {
+    title: 'The normal distribution',
+    taken: 'its series, its tail as a continued fraction, its integral by parts',
+    mark: 'from memory',
+  },
   'plan-chances': {
     title: 'Chances of a plan',
     taken: "normal spread of the tooth error, growth from the shop's own results",
     mark: 'derived',
+  },
+  'seam-reading': {
+    title: 'How well the gap of a seam is read',
+    taken: 'standard deviation 0.05 of a pitch; labels off by up to 2 %',
+    mark: 'judgement',
+  },
+  'trouble-numbers': {
+    title: 'What a number of the set-up says about a cause',
+    taken: 'how much likelier a cause becomes as its number passes its limit',
+    mark: 'judgement',
   },
   'trouble-priors': {
     title: 'Causes of trouble',
