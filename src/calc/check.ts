@@ -29,6 +29,12 @@ export type CheckReasons = {
   material: 'forms' | 'marginal' | 'doesNotForm' | 'cuts';
   speed: 'within' | 'overLimit' | 'farOverLimit' | 'none';
   finish: 'inside' | 'spread' | 'over' | 'under';
+  // Of a trial turn and of a finished part.
+  seam: 'whole' | 'centres' | 'closes';
+  count: 'asExpected' | 'wheelDiffers' | 'notThisWheel' | 'doubled';
+  filled: 'asPlanned' | 'short' | 'over';
+  growth: 'asExpected' | 'less' | 'more';
+  taper: 'even' | 'bends' | 'outOfLine' | 'uneven';
 };
 export type CheckName = keyof CheckReasons;
 
