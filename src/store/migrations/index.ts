@@ -1,0 +1,26 @@
+import type { Kysely, Migration } from 'kysely';
+import { shopAndPeople } from './0001-shop-and-people.ts';
+import { registers } from './0002-registers.ts';
+import { cardsAndEffects } from './0003-cards-and-effects.ts';
+import { type Columns, columnsOf, type Engine } from './columns.ts';
+
+type Step = (db: Kysely<unknown>, columns: Columns) => Promise<void>;
+
+/** What happened to the form of the records, in order. A step that was released never changes. */
+const STEPS: Readonly<Record<string, Step>> = {
+  '0001-shop-and-people': shopAndPeople,
+  '0002-registers': registers,
+  '0003-cards-and-effects': cardsAndEffects,
+};
+
+export const stepNames: readonly string[] = Object.keys(STEPS).sort();
+
+export const stepsFor = (engine: Engine): Record<string, Migration> => {
+  const columns = columnsOf(engine);
+  return Object.fromEntries(
+    Object.entries(STEPS).map(([name, step]) => [
+      name,
+      { up: (db: Kysely<unknown>) => step(db, columns) },
+    ]),
+  );
+};

@@ -1,0 +1,217 @@
+/**
+ * The records as they lie in the tables. Every value is text, a number or null, so that both
+ * engines hand back the same: lengths in mm and angles in rad as double precision, moments as
+ * milliseconds since 1970, flags as 0 and 1, structured content as JSON text.
+ */
+type Moment = number;
+type Json = string;
+
+/** What stands in every table that belongs to a shop. */
+type OfShop = { shop: string };
+
+export type ShopTable = {
+  id: string;
+  /** discord, slack, terminal …: where the shop talks. */
+  platform: string;
+  /** The shop's own id there. */
+  outside: string;
+  name: string;
+  made_at: Moment;
+};
+
+export type SettingTable = OfShop & {
+  name: string;
+  value: Json;
+  changed_at: Moment;
+  changed_by: string;
+};
+
+export type PersonTable = OfShop & {
+  id: string;
+  /** The person's own id on the platform. */
+  outside: string;
+  name: string;
+  name_key: string;
+  role: string;
+  version: number;
+  met_at: Moment;
+  removed_at: Moment | null;
+};
+
+/** A platform's role or group whose members have a role in the shop. */
+export type GroupTable = OfShop & {
+  id: string;
+  outside: string;
+  name: string;
+  name_key: string;
+  role: string;
+  version: number;
+  made_at: Moment;
+  removed_at: Moment | null;
+};
+
+/** What everything has that a shop keeps a list of. */
+export type RegisterColumns = OfShop & {
+  id: string;
+  name: string;
+  /** The name as it is compared: two of one shop never share one, unless one was removed. */
+  name_key: string;
+  /** Counts changes; a change names the one it was made from. */
+  version: number;
+  made_at: Moment;
+  made_by: string;
+  changed_at: Moment;
+  changed_by: string;
+  removed_at: Moment | null;
+  removed_by: string | null;
+};
+
+export type WheelTable = RegisterColumns & {
+  kind: string;
+  pitch_system: string | null;
+  pitch_value: number | null;
+  teeth: number | null;
+  diameter: number | null;
+  face: number | null;
+  bore: number | null;
+  bevel: number | null;
+  included: number | null;
+  helix: number | null;
+  tooth_depth: number | null;
+  edge: string | null;
+  pin_diameter: number | null;
+  pin_material: string | null;
+  place: string | null;
+  parts_run: number;
+  state: string;
+};
+
+export type MachineTable = RegisterColumns & {
+  speeds: Json | null;
+  feeds: Json | null;
+  dial: string;
+  units: string | null;
+  largest_diameter: number | null;
+  turning_spread: number | null;
+  top_speed: number | null;
+  power: number | null;
+};
+
+export type MaterialTable = RegisterColumns & {
+  /** The id in the table of materials that this one is a case of. */
+  base: string;
+  hardness: number | null;
+  elongation: number | null;
+  note: string | null;
+};
+
+export type RuleTable = RegisterColumns & {
+  text: string;
+  machine: string | null;
+  /** The shop's own material … */
+  material: string | null;
+  /** … or one of the table of materials. */
+  base: string | null;
+};
+
+export type CardTable = OfShop & {
+  id: string;
+  code: string;
+  /** What kind of card: setup, plan … */
+  kind: string;
+  made_at: Moment;
+  made_by: string;
+  /** The person's own words. */
+  words: string;
+  request: Json;
+  figures: Json;
+  card: Json;
+  program: string;
+  wheel: string | null;
+  machine: string | null;
+  material: string | null;
+};
+
+export type InteractionTable = OfShop & {
+  id: string;
+  at: Moment;
+  answer: Json | null;
+};
+
+export type EffectTable = OfShop & {
+  id: string;
+  key: string;
+  effect: Json;
+  /** held: waits for the one before it; waiting; delivered; givenUp. */
+  state: string;
+  /** The key of the effect that must have taken place before. */
+  after: string | null;
+  made_at: Moment;
+  /** Not before then. While a process is at it: when its lease ends. */
+  due_at: Moment;
+  attempts: number;
+  worker: string | null;
+  delivered_at: Moment | null;
+  given_up_at: Moment | null;
+  /** When a person was shown that it was given up. */
+  seen_at: Moment | null;
+  last_fault: string | null;
+  /** What the platform gave back: the id of the message, say. */
+  outcome: Json | null;
+};
+
+export type HistoryTable = OfShop & {
+  id: string;
+  at: Moment;
+  by: string;
+  /** wheel, machine …: the table. */
+  subject: string;
+  subject_id: string;
+  verb: string;
+  before: Json | null;
+  after: Json | null;
+};
+
+export type Tables = {
+  shop: ShopTable;
+  setting: SettingTable;
+  person: PersonTable;
+  person_group: GroupTable;
+  wheel: WheelTable;
+  machine: MachineTable;
+  material: MaterialTable;
+  rule: RuleTable;
+  card: CardTable;
+  interaction: InteractionTable;
+  effect: EffectTable;
+  history: HistoryTable;
+};
+
+export type TableName = keyof Tables;
+export type RegisterName = 'wheel' | 'machine' | 'material' | 'rule';
+
+export type TableFacts = {
+  readonly name: TableName;
+  /** The column that says whose row it is. */
+  readonly shop: 'id' | 'shop';
+  /** What tells two rows of one shop apart. */
+  readonly key: string;
+  /** Columns that hold JSON. */
+  readonly json: readonly string[];
+};
+
+/** Every table, each after the ones it refers to: the order in which a backup is read back. */
+export const TABLES: readonly TableFacts[] = [
+  { name: 'shop', shop: 'id', key: 'id', json: [] },
+  { name: 'setting', shop: 'shop', key: 'name', json: ['value'] },
+  { name: 'person', shop: 'shop', key: 'id', json: [] },
+  { name: 'person_group', shop: 'shop', key: 'id', json: [] },
+  { name: 'wheel', shop: 'shop', key: 'id', json: [] },
+  { name: 'machine', shop: 'shop', key: 'id', json: ['speeds', 'feeds'] },
+  { name: 'material', shop: 'shop', key: 'id', json: [] },
+  { name: 'rule', shop: 'shop', key: 'id', json: [] },
+  { name: 'card', shop: 'shop', key: 'id', json: ['request', 'figures', 'card'] },
+  { name: 'interaction', shop: 'shop', key: 'id', json: ['answer'] },
+  { name: 'effect', shop: 'shop', key: 'id', json: ['effect', 'outcome'] },
+  { name: 'history', shop: 'shop', key: 'id', json: ['before', 'after'] },
+];
