@@ -12,7 +12,7 @@ export type State = 'fine' | 'watch' | 'stop';
 /** Every reason a check can give; the phrase book has a sentence for each. */
 export type CheckReasons = {
   tracking: 'whole' | 'inWindow' | 'nearEdge' | 'offWhole' | 'fewTeeth';
-  wheel: 'certain' | 'ownBlank' | 'proven' | 'label' | 'counted';
+  wheel: 'ownBlank' | 'proven' | 'label' | 'counted';
   runout: 'within' | 'close' | 'over';
   fill: 'within' | 'shallow' | 'deep' | 'overMaterial' | 'overFull';
   feed: 'within' | 'asked' | 'noWindow' | 'cut';
@@ -27,8 +27,9 @@ export type CheckReasons = {
     | 'squareCut'
     | 'notSquareCut';
   material: 'forms' | 'marginal' | 'doesNotForm' | 'cuts';
-  speed: 'within' | 'overLimit' | 'farOverLimit' | 'none';
+  speed: 'within' | 'overLimit' | 'farOverLimit';
   finish: 'inside' | 'spread' | 'over' | 'under';
+  fit: 'grips' | 'tight' | 'over' | 'loose';
   // Of a trial turn and of a finished part.
   seam: 'whole' | 'centres' | 'closes';
   count: 'asExpected' | 'wheelDiffers' | 'notThisWheel' | 'doubled';

@@ -86,6 +86,12 @@ const STANDARDS = {
     taken: '"DIN 82-RAA 0,8" and "DIN 82 - RGE 0,8"',
     mark: 'from memory',
   },
+  'callout-spellings': {
+    title: 'Callouts of ANSI, JIS and GOST drawings',
+    taken:
+      'order of the words, "P96" for 96 DP, kinds and modules beside the number of the standard',
+    mark: 'from memory',
+  },
   'gost-21474': {
     title: 'GOST 21474-75, knurls (opening)',
     taken: 'pitches 0.5 0.6 0.8 1.0 1.2 1.6 mm, for diamonds also 2.0 mm',
@@ -119,6 +125,21 @@ const GEOMETRY = {
     title: 'Wheels with flat or rounded tips and roots',
     taken: 'tooth height left, rise and infeed with the tip recess and the lost area taken off',
     mark: 'derived',
+  },
+  'pitch-conversion': {
+    title: 'One pitch in several systems',
+    taken: 'compared square to the tooth, the error a share of the pitch asked for',
+    mark: 'derived',
+  },
+  plating: {
+    title: 'Plating on a diameter',
+    taken: 'twice the thickness',
+    mark: 'derived',
+  },
+  'press-fit': {
+    title: 'Pressing a knurl into a bore',
+    taken: 'interference on a side up to 0.6 of the tooth height fine, up to all of it watched',
+    mark: 'judgement',
   },
   'fewest-teeth': {
     title: 'Fewest teeth that roll',
@@ -276,6 +297,11 @@ const STRENGTH = {
     title: 'Limits of what gives way',
     taken: 'stress to yield/1.5, deflection and ring closing 10 and 30 %, overhang of 3 diameters',
     mark: 'judgement',
+  },
+  'hardness-conversion': {
+    title: 'Rockwell C against Brinell for non-austenitic steel, ASTM A370 and E140',
+    taken: 'pairs from HRC 20 to 64, as two steel houses reproduce the tables',
+    mark: 'reported',
   },
   'hardness-as-yield': {
     title: 'Brinell hardness as yield pressure',

@@ -1,0 +1,115 @@
+import type { CribWheel } from '../crib.ts';
+import type { Pattern } from '../pattern.ts';
+import type { StandardDp } from '../pitch.ts';
+import { DEFAULT_INCLUDED } from '../setup/index.ts';
+import { type Mm, mm } from '../units.ts';
+import { DP_BY_PREFERENCE, DP_WHEEL_SIZES, type DpWheelSize } from './ansi.ts';
+import { DIN_82, DIN_FORMS, DIN_INCLUDED, DIN_PITCHES, type DinWheelForm } from './din82.ts';
+import { DIN_403, type DinWheelSize, dinWheelCode, dinWheelTeeth } from './din403.ts';
+
+type Tool = {
+  readonly pattern: Pattern;
+  readonly onePiece: boolean;
+  readonly wheels: readonly [DinWheelForm, ...DinWheelForm[]];
+};
+
+/** Every way the standard has of making its forms without swivelling a wheel. */
+const TOOLS: readonly Tool[] = DIN_FORMS.flatMap((form) =>
+  DIN_82[form].tools.flatMap(({ wheels: [first, ...rest], setOver }) => {
+    if (first === undefined || setOver) return [];
+    const { pattern } = DIN_82[form];
+    const crossed = pattern.kind === 'diamond' || pattern.kind === 'square';
+    return [{ pattern, onePiece: crossed && rest.length === 0, wheels: [first, ...rest] as const }];
+  }),
+);
+
+const dinWheel = (tool: Tool, size: DinWheelSize, width: Mm, t: number): CribWheel => {
+  const { diameter, bore } = size;
+  const forms = tool.wheels.join(' + ');
+  return {
+    name: `${forms} ${dinWheelCode({ diameter, width, pitch: mm(t) })} DIN 403`,
+    pattern: tool.pattern,
+    onePiece: tool.onePiece,
+    pitch: { system: 'metric', value: t },
+    alongRim: false,
+    teeth: dinWheelTeeth(tool.wheels[0], diameter, mm(t)),
+    proven: null,
+    helix: null,
+    included: DIN_INCLUDED,
+    size: { diameter, face: width, bore, bevel: null },
+    edge: 'bevelled',
+  };
+};
+
+/**
+ * The crib of a shop that has entered no metric wheels: every wheel and pair of the standard.
+ *
+ *     forms × diameters × widths × pitches
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | → crib | the wheels | - | |
+ *
+ * Assumes the teeth the standard prints, the nominal diameter, chamfered edges and 90° teeth.
+ *
+ * @source din-403 (sizes and teeth)
+ * @source din-82 (which wheels make which form)
+ * @example dinCrib().length // 288
+ */
+export function dinCrib(): readonly CribWheel[] {
+  return TOOLS.flatMap((tool) =>
+    DIN_403.flatMap((size) =>
+      size.widths.flatMap((width) => DIN_PITCHES.map((t) => dinWheel(tool, size, width, t))),
+    ),
+  );
+}
+
+const DP_PATTERNS: readonly (readonly [name: string, pattern: Pattern])[] = [
+  ['straight', { kind: 'straight' }],
+  ['diagonal left', { kind: 'diagonal', hand: 'left' }],
+  ['diagonal right', { kind: 'diagonal', hand: 'right' }],
+  ['diamond pair', { kind: 'diamond', points: 'raised' }],
+];
+
+const dpWheel = (
+  dp: StandardDp,
+  size: DpWheelSize,
+  [name, pattern]: readonly [string, Pattern],
+): CribWheel => {
+  const { diameter, face, bore } = size;
+  return {
+    name: `${dp} DP ${name} ${size.name}`,
+    pattern,
+    onePiece: false,
+    // The label and not the count: a diametral wheel is corrected for its own blanks.
+    pitch: { system: 'dp', value: dp },
+    alongRim: false,
+    teeth: null,
+    proven: null,
+    helix: null,
+    included: DEFAULT_INCLUDED,
+    size: { diameter, face, bore, bevel: null },
+    edge: 'bevelled',
+  };
+};
+
+/**
+ * The crib of a shop that has entered no inch wheels: diametral-pitch wheels of the listed sizes.
+ *
+ *     pitches × sizes × straight, diagonal left and right, diamond pair
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | → crib | the wheels | - | |
+ *
+ * Assumes bevelled edges, 90° teeth as everywhere unless said, and wheels true on their own fractional blanks.
+ *
+ * @source asme-b94.6 (pitches)
+ * @source asme-b94.6-memory (sizes)
+ * @example dpCrib().length // 64
+ */
+export function dpCrib(): readonly CribWheel[] {
+  return DP_BY_PREFERENCE.flatMap((dp) =>
+    DP_WHEEL_SIZES.flatMap((size) => DP_PATTERNS.map((pattern) => dpWheel(dp, size, pattern))),
+  );
+}
