@@ -8,3 +8,18 @@ export const mulberry32 = (seed: number): (() => number) => {
     return ((mixed ^ (mixed >>> 14)) >>> 0) / 2 ** 32;
   };
 };
+
+/** A number from the normal spread about 0 with deviation 1, out of two even ones (Box and Muller). */
+export const normalFrom = (random: () => number): number =>
+  Math.sqrt(-2 * Math.log(1 - random())) * Math.cos(2 * Math.PI * random());
+
+/** An even number between two ends. */
+export const between = (random: () => number, low: number, high: number): number =>
+  low + (high - low) * random();
+
+/** One of a list, all alike. */
+export const oneOf = <T>(random: () => number, list: readonly T[]): T => {
+  const drawn = list[Math.floor(random() * list.length)];
+  if (drawn === undefined) throw new Error('nothing to draw from');
+  return drawn;
+};

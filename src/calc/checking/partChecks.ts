@@ -1,0 +1,100 @@
+import { type Check, type CheckOf, figure } from '../check.ts';
+import { fillCheck } from '../fill.ts';
+import type { SetupRequest } from '../setup/index.ts';
+import { toothCount } from '../teeth.ts';
+import type { Judged, Off } from './judge.ts';
+import { provenPitch } from './proven.ts';
+
+/** A figure this many standard deviations from what was expected is off. Judgement. */
+export const OFF_FROM = 2.5;
+/** A count this near to twice the expected one is a doubled pattern. Judgement. */
+const DOUBLED_WITHIN = 0.06;
+
+const isOff = (off: Off | null): boolean => off !== null && Math.abs(off.by) > OFF_FROM;
+
+const countReason = (judged: Judged, counted: number): CheckOf<'count'>['reason'] => {
+  const { countExpected, plan, part } = judged;
+  if (counted === countExpected) return 'asExpected';
+  if (Math.abs(counted / (2 * countExpected) - 1) <= DOUBLED_WITHIN) return 'doubled';
+  const real = toothCount(part.blank, plan.pitch.transverse);
+  const wheel = plan.checks.find((check) => check.name === 'wheel');
+  const doubt = (wheel?.figures['countDoubt']?.value ?? 0) + 0.5;
+  return Math.abs(counted - real) <= doubt + 1e-9 ? 'wheelDiffers' : 'notThisWheel';
+};
+
+const countCheck = (judged: Judged): CheckOf<'count'> | null => {
+  const { teeth } = judged.part;
+  if (teeth === null) return null;
+  const reason = countReason(judged, teeth);
+  const state = reason === 'asExpected' ? 'fine' : reason === 'wheelDiffers' ? 'watch' : 'stop';
+  return {
+    name: 'count',
+    state,
+    reason,
+    figures: {
+      countedTeeth: figure(teeth, '1'),
+      countExpected: figure(judged.countExpected, '1'),
+      effectivePitch: figure(provenPitch(judged.part.blank, teeth), 'mm'),
+    },
+  };
+};
+
+const filledCheck = (judged: Judged): CheckOf<'filled'> | null => {
+  const { filled, fillMeasured, fillPlanned } = judged;
+  if (filled === null || fillMeasured === null) return null;
+  const reason = !isOff(filled) ? 'asPlanned' : filled.by < 0 ? 'short' : 'over';
+  return {
+    name: 'filled',
+    state: reason === 'asPlanned' ? 'fine' : 'watch',
+    reason,
+    figures: { fillMeasured: figure(fillMeasured, '1'), fillExpected: figure(fillPlanned, '1') },
+  };
+};
+
+const growthCheck = (judged: Judged, expected: number): CheckOf<'growth'> | null => {
+  const { growth, growthFactor } = judged;
+  if (growth === null || growthFactor === null) return null;
+  const reason = !isOff(growth) ? 'asExpected' : growth.by < 0 ? 'less' : 'more';
+  return {
+    name: 'growth',
+    state: reason === 'asExpected' ? 'fine' : 'watch',
+    reason,
+    figures: {
+      growthFactor: figure(growthFactor, '1'),
+      growthFactorExpected: figure(expected, '1'),
+    },
+  };
+};
+
+const finishOf = (judged: Judged, request: SetupRequest): CheckOf<'finish'> | null => {
+  const { crest } = judged.part;
+  if (request.finish === null || crest === null) return null;
+  const over = Math.max(0, crest - request.finish.high);
+  const under = Math.max(0, request.finish.low - crest);
+  const outside = Math.max(over, under);
+  return {
+    name: 'finish',
+    state: outside > 1e-9 ? 'stop' : 'fine',
+    reason: outside <= 1e-9 ? 'inside' : over > 0 ? 'over' : 'under',
+    figures: {
+      crestDiameter: figure(crest, 'mm'),
+      finishLow: figure(request.finish.low, 'mm'),
+      finishHigh: figure(request.finish.high, 'mm'),
+      outsideBy: figure(outside, 'mm'),
+    },
+  };
+};
+
+/** The checks a finished part can be put to, as far as it was measured. */
+export const partChecks = (judged: Judged, request: SetupRequest): readonly Check[] => {
+  const materialFill = judged.plan.process === 'form' ? request.material.maxFill.value : null;
+  const checks: (Check | null)[] = [
+    countCheck(judged),
+    filledCheck(judged),
+    judged.fillMeasured === null ? null : fillCheck(judged.fillMeasured, materialFill),
+    growthCheck(judged, request.growth.mean),
+    finishOf(judged, request),
+    judged.fade?.check ?? null,
+  ];
+  return checks.filter((check) => check !== null);
+};

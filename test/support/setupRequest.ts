@@ -1,0 +1,46 @@
+import { materialById } from '../../src/calc/materials/index.ts';
+import { DEFAULT_INCLUDED, DEFAULT_WHEEL, type SetupRequest } from '../../src/calc/setup/index.ts';
+import { growthBeforeResults } from '../../src/calc/shopGrowth.ts';
+import { inch } from '../../src/calc/units.ts';
+
+/** A request with nothing said but a straight knurl of 21 TPI on a 1 in bar of cold-drawn steel. */
+export const requestOf = (said: Partial<SetupRequest> = {}): SetupRequest => ({
+  pattern: { kind: 'straight' },
+  pitch: { system: 'tpi', value: 21 },
+  alongRim: false,
+  counted: null,
+  proven: null,
+  helix: null,
+  tilt: null,
+  included: DEFAULT_INCLUDED,
+  stock: inch(1),
+  finish: null,
+  asIs: false,
+  wantedTeeth: null,
+  knurlClass: null,
+  fill: null,
+  material: materialById('steel-lowC-CD')!,
+  hardness: null,
+  process: null,
+  wheel: DEFAULT_WHEEL,
+  edge: null,
+  pin: 'hardened',
+  pinDiameter: null,
+  onePiece: false,
+  length: null,
+  stickout: null,
+  support: 'chuck',
+  layout: null,
+  stockLength: null,
+  bore: null,
+  plug: false,
+  feed: null,
+  speed: null,
+  rotation: null,
+  turns: null,
+  batch: 1,
+  runout: null,
+  machine: null,
+  growth: growthBeforeResults(),
+  ...said,
+});
