@@ -93,11 +93,9 @@ const nextForCount = (seen: Seen): PartMove<NextPartMoveId>[] => {
 };
 
 const nextForFill = (seen: Seen): PartMove<NextPartMoveId>[] => {
-  const { judged, checks } = seen;
-  const filled = found(checks, 'filled');
-  if (filled === null || filled.reason === 'asPlanned' || judged.fillMeasured === null) return [];
-  const more =
-    infeedAt(seen, judged.fillPlanned) - infeedAt(seen, Math.min(1, judged.fillMeasured));
+  const { fillMeasured, fillPlanned } = seen.judged;
+  if (fillMeasured === null || !seen.off.includes('fill')) return [];
+  const more = infeedAt(seen, fillPlanned) - infeedAt(seen, Math.min(1, fillMeasured));
   return [more > 0 ? move('feedMore', more) : move('feedLess', -more)];
 };
 

@@ -39,7 +39,9 @@ const notFine = (checks: readonly Check[], name: Check['name']): boolean => {
 const whatIsOff = (judged: Judged, checks: readonly Check[]): readonly OffFigure[] => {
   const offs: { readonly figure: OffFigure; readonly by: number }[] = [];
   if (notFine(checks, 'count')) offs.push({ figure: 'count', by: Number.POSITIVE_INFINITY });
-  if (notFine(checks, 'filled')) offs.push({ figure: 'fill', by: judged.filled?.by ?? 0 });
+  const packed = found(checks, 'fill')?.state === 'stop';
+  if (packed || notFine(checks, 'filled'))
+    offs.push({ figure: 'fill', by: judged.filled?.by ?? 0 });
   if (notFine(checks, 'growth'))
     offs.push({
       figure: judged.fillMeasured === null ? 'fillOrGrowth' : 'growth',
