@@ -23,7 +23,9 @@ const degreesOf = (angle: Rad): number => Math.round((angle * 180) / Math.PI);
 
 /** At most four decimals, none that is nothing. */
 const printed = (value: number): string => String(Number(value.toFixed(4)));
-const decimalComma = (value: number): string => printed(value).replace('.', ',');
+/** Metric pitches keep a decimal, so that 2,0 is never taken for a diameter. */
+const decimalComma = (value: number): string =>
+  (Number.isInteger(value) ? value.toFixed(1) : printed(value)).replace('.', ',');
 
 /** `08` for 0.8; a pitch of more than one decimal is written out. */
 const dinPitchText = (t: number): string => {
