@@ -37,7 +37,24 @@ export type Unclear = {
   readonly code: 'unclear';
   readonly what: string;
   readonly readings: readonly Suggestion[];
+  /** Why two things that were said do not go together. */
+  readonly because?: Contradiction;
 };
+
+/** Things people say together that exclude each other. */
+export type Contradiction =
+  | 'handNeedsDiagonal'
+  | 'pointsNeedCrossing'
+  | 'helixNeedsHelical'
+  | 'tiltAndHelix'
+  | 'tiltNotSquare'
+  | 'classNeedsDp'
+  | 'classStraightOnly'
+  | 'squareEdgeHasNoBevel'
+  | 'speedTwice'
+  | 'feedTwice'
+  | 'countAndAsIs'
+  | 'limitsReversed';
 
 export type NotAllowed = {
   readonly code: 'notAllowed';

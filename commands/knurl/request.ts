@@ -1,0 +1,334 @@
+import {
+  brinellFromRockwellC,
+  type Callout,
+  classSuits,
+  DEFAULT_INCLUDED,
+  DEFAULT_MATERIAL_ID,
+  DEFAULT_WHEEL,
+  finishLimits,
+  growthBeforeResults,
+  type Material,
+  type Mm,
+  materialById,
+  mm,
+  mmPerRev,
+  mPerMin,
+  type Pattern,
+  type PatternKind,
+  type Pitch,
+  rad,
+  revPerMin,
+  type SetupRequest,
+  standardDp,
+  type WheelSize,
+  type Window,
+} from '../../src/calc/index.ts';
+import type { Context } from '../../src/desk/index.ts';
+import type { Refusal, Suggestion } from '../../src/refusal.ts';
+import type { WheelWords } from '../../src/words/index.ts';
+import type { SetupWords } from './setup.ts';
+import { contradiction, keeping, reworded, typed } from './words.ts';
+
+/** Stops the building of a request with what is to be asked instead. */
+class Asks extends Error {
+  readonly refusal: Refusal;
+  readonly choices: readonly Suggestion[] | null;
+
+  constructor(refusal: Refusal, choices: readonly Suggestion[] | null = null) {
+    super(refusal.code);
+    this.refusal = refusal;
+    this.choices = choices;
+  }
+}
+
+export type Built =
+  | { readonly request: SetupRequest; readonly materialAssumed: boolean }
+  | { readonly refusal: Refusal; readonly choices: readonly Suggestion[] };
+
+const missing = (context: Context, parameter: string, examples: readonly string[]): Asks =>
+  new Asks(
+    { code: 'missing', parameter, examples },
+    examples.map((example) => ({ label: example, words: reworded(context, [], example) })),
+  );
+
+const length = (value: number | undefined): Mm | null => (value === undefined ? null : mm(value));
+
+/** What was said in words and what a callout says are one thing, or a question. */
+const agreed = <T>(
+  context: Context,
+  name: string,
+  words: T | undefined,
+  called: T | null,
+): T | null => {
+  if (words === undefined || called === null) return words ?? called;
+  if (JSON.stringify(words) === JSON.stringify(called)) return words;
+  throw new Asks({
+    code: 'unclear',
+    what: name,
+    readings: [keeping(context, 'callout', [name]), keeping(context, name, ['callout'])],
+  });
+};
+
+const PATTERN_EXAMPLES = ['straight', 'diamond', 'diagonal', 'square'] as const;
+
+const crossed = (kind: PatternKind): kind is 'diamond' | 'square' =>
+  kind === 'diamond' || kind === 'square';
+
+const patternOf = (kind: PatternKind, said: SetupWords): Pattern => {
+  switch (kind) {
+    case 'straight':
+      return { kind };
+    case 'diagonal':
+      return { kind, hand: said.hand ?? null };
+    case 'diamond':
+    case 'square':
+      return { kind, points: said.points ?? 'raised' };
+  }
+};
+
+const wordedPattern = (context: Context, said: SetupWords): Pattern => {
+  const kind = said.pattern ?? (said.hand === undefined ? undefined : 'diagonal');
+  if (kind === undefined) throw missing(context, 'pattern', PATTERN_EXAMPLES);
+  if (said.hand !== undefined && kind !== 'diagonal')
+    throw new Asks(
+      contradiction('pattern', 'handNeedsDiagonal', [
+        { label: 'diagonal', words: reworded(context, ['pattern'], 'diagonal') },
+        keeping(context, 'pattern', ['hand']),
+      ]),
+    );
+  if (said.points !== undefined && !crossed(kind))
+    throw new Asks(
+      contradiction('pattern', 'pointsNeedCrossing', [
+        { label: 'diamond', words: reworded(context, ['pattern'], 'diamond') },
+        keeping(context, 'pattern', ['points']),
+      ]),
+    );
+  return patternOf(kind, said);
+};
+
+const patternFor = (context: Context, said: SetupWords): Pattern => {
+  const called = said.callout?.pattern ?? null;
+  if (called === null) return wordedPattern(context, said);
+  const silent = said.pattern === undefined && said.hand === undefined && said.points === undefined;
+  if (silent) return called;
+  const worded = patternOf(said.pattern ?? called.kind, {
+    ...said,
+    points: said.points ?? ('points' in called ? called.points : undefined),
+    hand: said.hand ?? ('hand' in called ? (called.hand ?? undefined) : undefined),
+  });
+  if (JSON.stringify(worded) === JSON.stringify(called)) return called;
+  throw new Asks({
+    code: 'unclear',
+    what: 'pattern',
+    readings: [
+      keeping(context, 'callout', ['pattern', 'hand', 'points']),
+      {
+        label: [typed(context, 'pattern'), typed(context, 'hand'), typed(context, 'points')]
+          .join(' ')
+          .trim(),
+        words: reworded(context, ['callout'], ''),
+      },
+    ],
+  });
+};
+
+const PITCH_EXAMPLES = ['21tpi', '96dp', '1.0 pitch'] as const;
+
+const pitchFor = (context: Context, said: SetupWords): Pitch | null => {
+  const pitch = agreed(context, 'pitch', said.pitch, said.callout?.pitch ?? null);
+  const counted = said.wheel?.teeth !== undefined && said.wheel.teeth !== null;
+  if (pitch === null && !counted) throw missing(context, 'pitch', PITCH_EXAMPLES);
+  if (counted && said.wheel?.diameter === null)
+    throw missing(context, 'wheelDiameter', ['wheel 20mm 63 teeth', 'wheel 3/4 in 60 teeth']);
+  return pitch;
+};
+
+const checkAngles = (context: Context, said: SetupWords, pattern: Pattern): void => {
+  if (said.helix !== undefined && said.tilt !== undefined)
+    throw new Asks(
+      contradiction('helix', 'tiltAndHelix', [
+        keeping(context, 'helix', ['tilt']),
+        keeping(context, 'tilt', ['helix']),
+      ]),
+    );
+  if (said.helix !== undefined && (pattern.kind === 'straight' || pattern.kind === 'square'))
+    throw new Asks(
+      contradiction('helix', 'helixNeedsHelical', [
+        { label: 'diagonal', words: reworded(context, ['pattern'], 'diagonal') },
+        { label: 'diamond', words: reworded(context, ['pattern'], 'diamond') },
+        keeping(context, 'pattern', ['helix']),
+      ]),
+    );
+  if (said.tilt !== undefined && pattern.kind === 'square')
+    throw new Asks(
+      contradiction('tilt', 'tiltNotSquare', [
+        { label: 'diamond', words: reworded(context, ['pattern'], 'diamond') },
+        keeping(context, 'pattern', ['tilt']),
+      ]),
+    );
+};
+
+const classFor = (context: Context, said: SetupWords, pattern: Pattern, pitch: Pitch | null) => {
+  const own = agreed(context, 'class', said.class, said.callout?.knurlClass ?? null);
+  if (own === null) return null;
+  const without = { label: `no class`, words: reworded(context, ['class'], '') };
+  const dp = pitch?.system === 'dp' ? standardDp(pitch.value) : null;
+  if (dp === null)
+    throw new Asks(
+      contradiction('class', 'classNeedsDp', [
+        { label: '96dp', words: reworded(context, ['pitch'], '96dp') },
+        without,
+      ]),
+    );
+  if (classSuits(own, pattern)) return own;
+  throw new Asks(
+    contradiction('class', 'classStraightOnly', [
+      { label: 'straight', words: reworded(context, ['pattern', 'hand', 'points'], 'straight') },
+      { label: 'class I', words: reworded(context, ['class'], 'class I') },
+      without,
+    ]),
+  );
+};
+
+const BORE_SHARE = 0.3;
+
+/** A wheel said by its diameter alone gets a face and a bore that such a wheel can have. */
+const wheelSize = (said: SetupWords): WheelSize => {
+  const wheel: WheelWords | undefined = said.wheel;
+  const diameter = mm(wheel?.diameter ?? DEFAULT_WHEEL.diameter);
+  const usual = DEFAULT_WHEEL.bore < diameter / 2 ? DEFAULT_WHEEL.bore : diameter * BORE_SHARE;
+  return {
+    diameter,
+    face: mm(wheel?.face ?? DEFAULT_WHEEL.face),
+    bore: mm(wheel?.bore ?? usual),
+    bevel: length(said.bevel),
+  };
+};
+
+const checkEdge = (context: Context, said: SetupWords): void => {
+  if (said.edge !== 'square' || said.bevel === undefined || said.bevel === 0) return;
+  throw new Asks(
+    contradiction('edge', 'squareEdgeHasNoBevel', [
+      keeping(context, 'edge', ['bevel']),
+      keeping(context, 'bevel', ['edge']),
+    ]),
+  );
+};
+
+const checkTwice = (context: Context, said: SetupWords): void => {
+  const both = (a: string, b: string) => [keeping(context, a, [b]), keeping(context, b, [a])];
+  if (said.speed !== undefined && said.rotation !== undefined)
+    throw new Asks(contradiction('speed', 'speedTwice', both('speed', 'rotation')));
+  if (said.feed !== undefined && said.turns !== undefined)
+    throw new Asks(contradiction('feed', 'feedTwice', both('feed', 'turns')));
+  if (said.asIs === true && said.teeth !== undefined)
+    throw new Asks(contradiction('teeth', 'countAndAsIs', both('teeth', 'asIs')));
+};
+
+const finishFor = (
+  context: Context,
+  said: SetupWords,
+  request: { dp: ReturnType<typeof standardDp>; knurlClass: Callout['knurlClass'] },
+): Window | null => {
+  const { finish } = said;
+  if (finish === undefined) return null;
+  if (!finish.nominalOnly) return { low: mm(finish.low), high: mm(finish.high) };
+  if (request.dp !== null && request.knurlClass !== null)
+    return finishLimits({
+      dp: request.dp,
+      knurlClass: request.knurlClass,
+      nominal: mm(finish.low),
+    });
+  throw missing(context, 'finish', ['finish 0.995-1.005', 'finish 1.000 +0 -0.010']);
+};
+
+const materialFor = (said: SetupWords): { material: Material; assumed: boolean } => {
+  const id = said.material?.usual ?? DEFAULT_MATERIAL_ID;
+  const material = materialById(id);
+  if (material === undefined) throw new Error(`no material ${id}`);
+  return { material, assumed: said.material === undefined };
+};
+
+const brinell = (said: SetupWords): number | null => {
+  if (said.hardness === undefined) return null;
+  const { scale, value } = said.hardness;
+  return scale === 'HB' ? value : brinellFromRockwellC(value);
+};
+
+const assemble = (context: Context, said: SetupWords): Built => {
+  const pattern = patternFor(context, said);
+  const pitch = pitchFor(context, said);
+  checkAngles(context, said, pattern);
+  checkEdge(context, said);
+  checkTwice(context, said);
+  const knurlClass = classFor(context, said, pattern, pitch);
+  const dp = pitch?.system === 'dp' ? standardDp(pitch.value) : null;
+  const finish = finishFor(context, said, { dp, knurlClass });
+  if (said.diameter === undefined && finish === null)
+    throw missing(
+      context,
+      'diameter',
+      context.units === 'in' ? ['1.000', '7/8', '19mm'] : ['20', '25.4', '3/4 in'],
+    );
+  const { material, assumed } = materialFor(said);
+  const wheel = said.wheel;
+  const counted = wheel?.teeth != null && wheel.diameter !== null;
+  const request: SetupRequest = {
+    pattern,
+    pitch,
+    alongRim: said.rim === true,
+    counted: counted ? { diameter: mm(wheel.diameter), teeth: wheel.teeth } : null,
+    proven: null,
+    helix: said.helix === undefined ? null : rad(said.helix),
+    tilt: said.tilt === undefined ? null : rad(said.tilt),
+    included:
+      agreed(
+        context,
+        'angle',
+        said.angle === undefined ? undefined : rad(said.angle),
+        said.callout?.included ?? null,
+      ) ?? DEFAULT_INCLUDED,
+    stock: length(said.diameter),
+    finish,
+    asIs: said.asIs === true,
+    wantedTeeth: said.teeth ?? null,
+    knurlClass,
+    fill: said.fill ?? null,
+    material,
+    hardness: brinell(said),
+    process: said.process ?? null,
+    wheel: wheelSize(said),
+    edge: said.edge ?? null,
+    pin: said.pin?.material ?? 'hardened',
+    pinDiameter: said.pin?.diameter == null ? null : mm(said.pin.diameter),
+    onePiece: said.oneWheel === true,
+    length: length(said.length),
+    stickout: length(said.stickout),
+    support: said.support ?? 'chuck',
+    layout: said.layout ?? null,
+    stockLength: length(said.stockLength),
+    bore: length(said.bore),
+    plug: said.plug === true,
+    feed: said.feed === undefined ? null : mmPerRev(said.feed),
+    speed: said.speed === undefined ? null : mPerMin(said.speed),
+    rotation: said.rotation === undefined ? null : revPerMin(said.rotation),
+    turns: said.turns ?? null,
+    batch: said.batch ?? 1,
+    runout: length(said.runout),
+    machine: null,
+    growth: growthBeforeResults(),
+  };
+  return { request, materialAssumed: assumed };
+};
+
+/** What a line asks for, in calc's own terms, or what has to be asked back. */
+export const requestOf = (context: Context, said: SetupWords): Built => {
+  try {
+    return assemble(context, said);
+  } catch (error) {
+    if (!(error instanceof Asks)) throw error;
+    const { refusal } = error;
+    const choices = error.choices ?? (refusal.code === 'unclear' ? refusal.readings : []);
+    return { refusal, choices };
+  }
+};

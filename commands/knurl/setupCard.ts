@@ -1,0 +1,254 @@
+import {
+  CHOSEN_CAUTIONS,
+  type Check,
+  DWELL_TURNS,
+  MATERIALS,
+  materialById,
+  mm,
+  type SetupRequest,
+  type SetupResult,
+  USUAL_MATERIALS,
+} from '../../src/calc/index.ts';
+import {
+  type Card,
+  type Choice,
+  type Line,
+  label,
+  line,
+  type Part,
+  type Row,
+  row,
+} from '../../src/card/index.ts';
+import type { Context } from '../../src/desk/index.ts';
+import type { SetupWords } from './setup.ts';
+import { reworded } from './words.ts';
+
+/** What the card is made from. */
+export type Worked = {
+  readonly context: Context;
+  readonly said: SetupWords;
+  readonly request: SetupRequest;
+  readonly result: SetupResult;
+  readonly materialAssumed: boolean;
+};
+
+/** Cautions shown by name; the standing ones follow in short. */
+const SHOWN_CAUTIONS = 3;
+
+/** Words that a choice of another blank takes back. */
+const BLANK_WORDS = ['teeth', 'asIs'] as const;
+
+const worstStop = (checks: readonly Check[]): Check | null =>
+  checks.find((check) => check.state === 'stop') ?? null;
+
+const headline = ({ request, result }: Worked): Line => {
+  const stop = worstStop(result.checks);
+  if (stop !== null) return line('stopped', { check: stop });
+  const { diameter: blankDiameter, teeth: toothCount } = result.blank;
+  const left = request.stock !== null && Math.abs(request.stock - blankDiameter) < 1e-6;
+  return line(left ? 'leaveAt' : 'turnTo', { blankDiameter, toothCount });
+};
+
+const blankLines = (w: Worked): readonly Line[] => {
+  const { request, result } = w;
+  const { diameter: blankDiameter, teeth: toothCount } = result.blank;
+  const lines: Line[] = [];
+  if (worstStop(result.checks) !== null)
+    lines.push(line('wouldTurnTo', { blankDiameter, toothCount }));
+  lines.push(line('windowTracks', result.window));
+  if (request.knurlClass !== null)
+    lines.push(line('classWindow', { knurlClass: request.knurlClass }));
+  if (request.stock !== null && request.asIs)
+    lines.push(
+      line('asItIs', {
+        stock: request.stock,
+        toothError: result.figures.stockToothError?.value ?? 0,
+      }),
+    );
+  if (request.stock !== null && result.asIs !== null)
+    lines.push(line('leaveItOption', { stock: request.stock, ...result.asIs }));
+  if (request.finish !== null)
+    lines.push(
+      line('finishMet', {
+        limits: request.finish,
+        fillMoved: result.blank.fillMoved,
+        fill: result.blank.tooth.fill,
+      }),
+    );
+  return lines;
+};
+
+/** Whatever the bot chose by itself is said, in the first lines. */
+const choiceLines = (w: Worked): readonly Line[] => {
+  const { request, result, said } = w;
+  const lines: Line[] = [];
+  const { took } = result.pitch;
+  if (took !== null)
+    lines.push(
+      line('pitchTaken', {
+        took,
+        toothCount: result.blank.teeth,
+        otherCount: result.otherWayTeeth,
+      }),
+    );
+  const helical = request.pattern.kind === 'diagonal' || request.pattern.kind === 'diamond';
+  if (helical && said.helix === undefined && said.tilt === undefined)
+    lines.push(line('helixTaken', { helix: result.pitch.helix }));
+  if (said.callout !== undefined && request.stock !== null && request.finish === null)
+    lines.push(line('calloutBar', { stock: request.stock }));
+  if (w.materialAssumed) lines.push(line('materialTaken', request.material));
+  if (result.switchedToCut) lines.push(line('processSwitched', request.material));
+  return lines;
+};
+
+const motionRows = ({ request, result }: Worked): readonly Row[] => {
+  const { motion } = result;
+  const { time } = motion;
+  const { batch } = request;
+  if (motion.travel === 'plunge')
+    return [row('plunge', { turns: motion.turns ?? 0, dwell: DWELL_TURNS, time, batch })];
+  if (motion.feed === null || motion.feedLow === null || motion.feedHigh === null) return [];
+  return [
+    row('traverse', {
+      feed: motion.feed,
+      low: motion.feedLow,
+      high: motion.feedHigh,
+      turns: motion.turns,
+      time,
+      batch,
+    }),
+  ];
+};
+
+const toothRows = ({ result }: Worked): readonly Row[] => {
+  const { tooth } = result.blank;
+  const { firstBite, crestFlat, sharpHeight } = result.figures;
+  const cut = result.process === 'cut';
+  if (firstBite === null || crestFlat === null || sharpHeight === null) return [];
+  const { crest, crestLow: low, crestHigh: high, height, fill } = tooth;
+  return [
+    row('feedIn', { infeed: tooth.infeed, cut }),
+    row('firstTurn', { firstBite: mm(firstBite.value) }),
+    row('stopWhen', { crestFlat: mm(crestFlat.value), crest, low, high, cut }),
+    row('toothHeight', { height, fill, sharpHeight: mm(sharpHeight.value) }),
+  ];
+};
+
+const runRows = (w: Worked): readonly Row[] => {
+  const { running } = w.result;
+  if (running === null) return [];
+  const { rotation: spindleSpeed, surfaceSpeed } = running;
+  return [row('run', { spindleSpeed, surfaceSpeed }), ...motionRows(w)];
+};
+
+const rows = (w: Worked): readonly Row[] => {
+  const [feedIn, firstTurn, stopWhen, ...more] = toothRows(w);
+  const first = [feedIn, firstTurn, stopWhen].filter((each) => each !== undefined);
+  return [...first, ...runRows(w), ...more, row('material', w.request.material)];
+};
+
+const wheelLines = ({ request, result, said }: Worked): readonly Line[] => {
+  const lines: Line[] = [];
+  const { counted, pitch } = request;
+  if (counted !== null && pitch !== null)
+    lines.push(line('labelOverruled', { label: pitch, counted, normal: result.pitch.normal }));
+  lines.push(line('wheelNeeded', { wheel: result.wheel, pattern: request.pattern }));
+  if (said.wheel === undefined)
+    lines.push(line('wheelTaken', { wheel: request.wheel, edge: result.wheelInUse.edge }));
+  if (result.motion.travel === 'traverse')
+    lines.push(
+      line('startHalfOn', { chamfer: result.blank.tooth.height, clearance: request.wheel.face }),
+    );
+  if (said.feed !== undefined && result.motion.travel === 'plunge')
+    lines.push(line('feedNeedsLength', {}));
+  return lines;
+};
+
+const blankChoices = (w: Worked): readonly Choice[] => {
+  const { context, request, result } = w;
+  const [smaller] = result.alternatives;
+  const teeth = (count: number): string => reworded(context, BLANK_WORDS, `${String(count)} teeth`);
+  const choices: Choice[] = [];
+  if (request.stock !== null && result.asIs !== null)
+    choices.push({
+      label: label('asIs', { stock: request.stock }),
+      words: reworded(context, BLANK_WORDS, 'as-is'),
+    });
+  if (smaller !== undefined)
+    choices.push({ label: label('smaller', smaller), words: teeth(smaller.toothCount) });
+  if (result.larger !== null)
+    choices.push({ label: label('larger', result.larger), words: teeth(result.larger.toothCount) });
+  return choices;
+};
+
+/** The shortest name that reads as this row of the table. */
+const shortName = (id: string): string =>
+  MATERIALS.find((material) => material.id === id)?.aliases[0] ?? id;
+
+const materialChoices = ({ context, materialAssumed }: Worked): readonly Choice[] =>
+  materialAssumed
+    ? USUAL_MATERIALS.flatMap((id) => {
+        const material = materialById(id);
+        return material === undefined
+          ? []
+          : [{ label: label('material', material), words: reworded(context, [], shortName(id)) }];
+      })
+    : [];
+
+const choices = (w: Worked): readonly Choice[] => {
+  const { context, result } = w;
+  const { took } = result.pitch;
+  const others = context.units === 'in' ? 'mm' : 'in';
+  const shown = w.said.units ?? context.units;
+  const turned = shown === context.units ? others : context.units;
+  return [
+    ...blankChoices(w).slice(0, 1),
+    ...(took === null
+      ? []
+      : [
+          {
+            label: label('otherBasis', { took }),
+            words:
+              took === 'normal' ? reworded(context, [], 'rim') : reworded(context, ['rim'], ''),
+          },
+        ]),
+    ...blankChoices(w).slice(1),
+    {
+      label: label('otherUnits', { units: turned }),
+      words: reworded(context, ['units'], `show ${turned}`),
+    },
+    ...materialChoices(w),
+  ];
+};
+
+const parts = (w: Worked): readonly Part[] => {
+  const { cautions, checks } = w.result;
+  const chosen = CHOSEN_CAUTIONS.filter((id) => cautions.includes(id));
+  return [
+    { part: 'lines', lines: [...blankLines(w), ...choiceLines(w)] },
+    { part: 'rows', rows: rows(w) },
+    { part: 'checks', checks },
+    { part: 'lines', lines: wheelLines(w) },
+    {
+      part: 'cautions',
+      shown: chosen.slice(0, SHOWN_CAUTIONS),
+      rest: chosen.slice(SHOWN_CAUTIONS),
+      all: cautions,
+    },
+    { part: 'footing' },
+  ];
+};
+
+/** The set-up card: the line to act on, the numbers, the checks, the cautions, the next moves. */
+export const setupCard = (w: Worked): Card => ({
+  verb: 'setup',
+  headline: headline(w),
+  parts: parts(w),
+  choices: choices(w),
+  pictures: [],
+  figures: w.result.figures,
+  checks: w.result.checks,
+  cautions: w.result.cautions,
+  alternatives: w.result.alternatives,
+  units: w.said.units ?? w.context.units,
+});

@@ -1,0 +1,3 @@
+export { cardText } from '../common/text.ts';
+export { PHONE_WIDTH, runChannel, spoken, terminalCall, widthOf } from './channel.ts';
+export { answerJson } from './json.ts';

@@ -1,0 +1,44 @@
+import { parseArgs } from 'node:util';
+import { FLEET } from '../commands/index.ts';
+import { answerJson, cardText, spoken, terminalCall, widthOf } from './adapters/terminal/index.ts';
+import { type Answer, openDesk, plainShop } from './desk/index.ts';
+import { en } from './phrases/index.ts';
+
+/** Exit statuses of `ask`: a card, a refusal, a call that makes no sense. */
+const CARD = 0;
+const REFUSAL = 1;
+const MISUSE = 2;
+
+const misuse = (sentence: string): never => {
+  process.stderr.write(`${sentence}\n`);
+  process.exit(MISUSE);
+};
+
+const argumentsOf = () => {
+  try {
+    return parseArgs({
+      allowPositionals: true,
+      options: {
+        units: { type: 'string', default: 'in' },
+        json: { type: 'boolean', default: false },
+        phone: { type: 'boolean', default: false },
+      },
+    });
+  } catch {
+    return misuse(en.terminal.usage);
+  }
+};
+
+const printed = (answer: Answer, json: boolean, phone: boolean): string =>
+  json
+    ? JSON.stringify(answerJson(answer, en))
+    : cardText(spoken(answer, en), widthOf(process.stdout.columns, phone));
+
+const { values, positionals } = argumentsOf();
+const { units } = values;
+if (units !== 'in' && units !== 'mm') misuse(en.terminal.unitsArgument);
+const desk = openDesk(FLEET, plainShop(units === 'mm' ? 'mm' : 'in'));
+const answer = await desk.answer(terminalCall(positionals.join(' '), 1));
+process.stdout.write(`${printed(answer, values.json, values.phone)}\n`, () => {
+  process.exit(answer.kind === 'card' ? CARD : REFUSAL);
+});

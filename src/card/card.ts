@@ -1,0 +1,53 @@
+import type { Alternative, CautionId, Check, Figures } from '../calc/index.ts';
+import type { Label, Line, Row } from './lines.ts';
+
+/** A button: what it says and the line it sends. */
+export type Choice = { readonly label: Label; readonly words: string };
+
+/** A drawing that answers the card's question; its words are said by the phrase book. */
+export type Picture = {
+  readonly kind: 'toothForm' | 'trackingStrip';
+  readonly figures: Figures;
+};
+
+/**
+ * The parts of a reply in reading order. Semantic, not visual: no markup, no colour, no unit
+ * chosen. A new part is a compile error in every renderer until each has a form for it.
+ */
+export type Part =
+  | { readonly part: 'lines'; readonly lines: readonly Line[] }
+  | { readonly part: 'rows'; readonly rows: readonly Row[] }
+  | { readonly part: 'checks'; readonly checks: readonly Check[] }
+  | {
+      readonly part: 'cautions';
+      /** Those this set-up calls for, the one that matters most first. */
+      readonly shown: readonly CautionId[];
+      /** Called for too, but behind the others. */
+      readonly rest: readonly CautionId[];
+      readonly all: readonly CautionId[];
+    }
+  /** The shop's own words: rules, notes. Shown as typed, never as markup. */
+  | { readonly part: 'own'; readonly texts: readonly string[] }
+  /** Shop rules, the machine's manual and licensed practice go before this card. */
+  | { readonly part: 'footing' };
+
+/** The reply to a request. */
+export type Card = {
+  readonly verb: string;
+  /** One line that can be acted on alone. */
+  readonly headline: Line;
+  readonly parts: readonly Part[];
+  readonly choices: readonly Choice[];
+  readonly pictures: readonly Picture[];
+  readonly figures: Figures;
+  readonly checks: readonly Check[];
+  readonly cautions: readonly CautionId[];
+  readonly alternatives: readonly Alternative[];
+  /** The unit shown first. */
+  readonly units: 'in' | 'mm';
+};
+
+/** Fails to compile where a part of a closed union has no branch. */
+export const unreachable = (part: never): never => {
+  throw new Error(`no branch for ${JSON.stringify(part)}`);
+};

@@ -1,0 +1,26 @@
+/** A person as their platform knows them. */
+export type Person = { readonly id: string; readonly name: string };
+
+/** Where a request was made and where the reply belongs. */
+export type Place = {
+  readonly channel: string;
+  readonly thread: string | null;
+  /** Only the person who asked sees the reply. */
+  readonly isPrivate: boolean;
+};
+
+/** What an adapter hands the desk. */
+export type Call = {
+  readonly shop: string;
+  readonly person: Person;
+  readonly place: Place;
+  /** One interaction acts once, however often the platform sends it. */
+  readonly interactionId: string;
+  readonly given: /** A line of plain words, with or without its slash command. */
+    | { readonly words: string }
+    /** Named options of a form: each is read with the same words as a line. */
+    | {
+        readonly path: readonly string[];
+        readonly options: Readonly<Record<string, string | number | boolean>>;
+      };
+};

@@ -1,0 +1,70 @@
+import { z } from 'zod';
+import type { Card } from '../card/index.ts';
+import type { Refusal, Suggestion } from '../refusal.ts';
+import type { AnyParameter, Parameter, ReadLine, ShopUnits } from '../words/index.ts';
+import type { Effect } from './effect.ts';
+import type { Role } from './role.ts';
+
+/** What a command knows besides what was typed. */
+export type Context = {
+  /** The line as typed, for building the lines of buttons. */
+  readonly text: string;
+  readonly read: ReadLine;
+  /** The shop's unit: what bare numbers are in and what is shown first. */
+  readonly units: ShopUnits;
+  /** Every command, for the help. */
+  readonly fleet: readonly Command[];
+};
+
+export type Reply =
+  | { readonly card: Card; readonly effects: readonly Effect[] }
+  | { readonly refusal: Refusal; readonly choices: readonly Suggestion[] };
+
+/** What a person can ask for. One record feeds words, options, forms, help and manifest. */
+export type Command = {
+  /** `['knurl', 'setup']`. */
+  readonly path: readonly [root: string, ...verbs: string[]];
+  /** A line that shows it at work; parsed and run by a test. */
+  readonly examples: readonly string[];
+  readonly parameters: readonly AnyParameter[];
+  /** Everyone of this role and above may. */
+  readonly allowed: Role;
+  readonly run: (context: Context, given: unknown) => Reply | Promise<Reply>;
+};
+
+/** A field of a command's parameters: its type for the program, its words for people. */
+export const said = <T>(parameter: Parameter<T>) =>
+  z
+    .custom<T>((value) => value !== undefined)
+    .optional()
+    .meta({ parameter });
+
+const parameterOf = (field: z.core.$ZodType): AnyParameter => {
+  const parameter = z.globalRegistry.get(field)?.['parameter'];
+  if (parameter === undefined) throw new Error('a parameter without words');
+  return parameter as AnyParameter;
+};
+
+/** A command whose `run` gets its parameters typed. */
+export const defineCommand = <S extends z.ZodRawShape>(definition: {
+  readonly path: Command['path'];
+  readonly examples: readonly string[];
+  readonly parameters: z.ZodObject<S>;
+  readonly allowed: Role;
+  readonly run: (context: Context, given: z.infer<z.ZodObject<S>>) => Reply | Promise<Reply>;
+}): Command => ({
+  path: definition.path,
+  examples: definition.examples,
+  parameters: Object.values(definition.parameters.shape).map(parameterOf),
+  allowed: definition.allowed,
+  run: (context, given) => definition.run(context, definition.parameters.parse(given)),
+});
+
+export const cardReply = (card: Card, effects: readonly Effect[] = []): Reply => ({
+  card,
+  effects,
+});
+export const refuse = (refusal: Refusal, choices: readonly Suggestion[] = []): Reply => ({
+  refusal,
+  choices,
+});

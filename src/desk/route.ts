@@ -1,0 +1,83 @@
+import type { Refusal } from '../refusal.ts';
+import { nearestOf, tokensOf } from '../words/index.ts';
+import type { Command } from './command.ts';
+
+/** The root and verb that are meant where none is said. */
+const DEFAULT_ROOT = 'knurl';
+const DEFAULT_VERB = 'setup';
+const HELP: readonly string[] = [DEFAULT_ROOT, 'help'];
+
+export type Route =
+  /** The command, and how many words of the line were its name. */
+  { readonly command: Command; readonly skip: number } | { readonly refusal: Refusal };
+
+const startsWith = (words: readonly string[], path: readonly string[]): boolean =>
+  path.every((part, index) => words[index] === part);
+
+const find = (fleet: readonly Command[], path: readonly string[]): Command | undefined =>
+  fleet.find((command) => command.path.join(' ') === path.join(' '));
+
+/** The command with the longest name that these words begin with. */
+const named = (
+  fleet: readonly Command[],
+  root: string,
+  words: readonly string[],
+): { readonly command: Command; readonly skip: number } | null => {
+  const fits = fleet
+    .filter((command) => command.path[0] === root && startsWith(words, command.path.slice(1)))
+    .sort((a, b) => b.path.length - a.path.length)[0];
+  return fits === undefined ? null : { command: fits, skip: fits.path.length - 1 };
+};
+
+/**
+ * Which command a line is for. `/knurl` and the verb may both be left out: a missing verb means
+ * the set-up, an empty line the help.
+ */
+export const route = (text: string, fleet: readonly Command[]): Route => {
+  const tokens = tokensOf(text);
+  const words = tokens.map((token) => token.text);
+  const roots = [...new Set(fleet.map((command) => command.path[0]))];
+  const first = words[0] ?? '';
+  const slashed = first.startsWith('/');
+  const root = slashed ? first.slice(1) : first;
+  const isRoot = roots.includes(root);
+  if (slashed && !isRoot) {
+    const token = tokens[0] ?? { start: 0, end: 0 };
+    const nearest = nearestOf(root, roots).map((name) => `/${name}`);
+    return {
+      refusal: { code: 'unreadable', word: first, start: token.start, end: token.end, nearest },
+    };
+  }
+  const before = isRoot ? 1 : 0;
+  const rest = words.slice(before);
+  const asked = isRoot ? root : DEFAULT_ROOT;
+  const found = rest.length > 0 ? named(fleet, asked, rest) : null;
+  if (found !== null) return { command: found.command, skip: before + found.skip };
+  const fallback = rest.length === 0 ? HELP : [asked, DEFAULT_VERB];
+  const command = find(fleet, fallback) ?? find(fleet, HELP);
+  if (command === undefined) throw new Error('a fleet without a help');
+  return { command, skip: before };
+};
+
+/** The words of a form, as a line: one reader for everything that can be typed. */
+export const lineOf = (
+  command: Command,
+  options: Readonly<Record<string, string | number | boolean>>,
+): string => {
+  const parts = command.parameters.flatMap((parameter) => {
+    const given = options[parameter.name];
+    if (given === undefined || given === false) return [];
+    if (given === true) return [parameter.values?.[0]?.[0] ?? ''];
+    const keyword =
+      parameter.bare === true || parameter.free ? '' : (parameter.keywords?.[0] ?? '');
+    const typed = String(given).trim();
+    const announced = keyword !== '' && typed.toLowerCase().startsWith(`${keyword} `);
+    return [announced ? typed : `${keyword} ${typed}`.trim()];
+  });
+  const extra = options['words'];
+  return [
+    `/${command.path.join(' ')}`,
+    ...parts,
+    ...(extra === undefined ? [] : [String(extra)]),
+  ].join(' ');
+};

@@ -1,0 +1,40 @@
+import type { CautionId, CheckName, CheckOf, State } from '../calc/index.ts';
+import type { LabelId, Labels, LineId, Lines, RowId, Rows } from '../card/index.ts';
+import type { Contradiction, Refusal } from '../refusal.ts';
+import type { Show } from './show.ts';
+
+/** A figure with its name in front. */
+export type LabelledText = { readonly label: string; readonly text: string };
+
+/** One phrase for each thing that can be said; a missing one does not compile. */
+export type Book = {
+  readonly language: string;
+  readonly lines: { readonly [K in LineId]: (values: Lines[K], show: Show) => string };
+  readonly rows: { readonly [K in RowId]: (values: Rows[K], show: Show) => LabelledText };
+  readonly labels: { readonly [K in LabelId]: (values: Labels[K], show: Show) => string };
+  readonly checks: {
+    readonly [N in CheckName]: {
+      readonly label: string;
+      readonly say: (check: CheckOf<N>, show: Show) => string;
+    };
+  };
+  readonly states: { readonly [S in State]: string };
+  readonly cautions: { readonly [C in CautionId]: string };
+  /** The standing cautions in one breath, on every set-up card. */
+  readonly standing: string;
+  readonly footing: string;
+  readonly choices: string;
+  readonly contradictions: { readonly [C in Contradiction]: string };
+  readonly refusal: (refusal: Refusal, show: Show) => string;
+  readonly verbs: Readonly<Record<string, string>>;
+  readonly terminal: TerminalPhrases;
+};
+
+/** What the local channel says around the cards. */
+export type TerminalPhrases = {
+  readonly opening: readonly string[];
+  readonly prompt: string;
+  readonly usage: string;
+  readonly unitsArgument: string;
+  readonly fault: string;
+};

@@ -1,0 +1,48 @@
+import type { Book } from '../book.ts';
+import { cautions, standing } from './cautions.ts';
+import { checks } from './checks.ts';
+import { lines } from './lines.ts';
+import { materialName } from './names.ts';
+import { contradictions, refusal } from './refusals.ts';
+import { rows } from './rows.ts';
+
+export const en: Book = {
+  language: 'en',
+  lines,
+  rows,
+  checks,
+  cautions,
+  contradictions,
+  refusal,
+  states: { fine: 'fine', watch: 'watch', stop: 'stop' },
+  labels: {
+    asIs: ({ stock }, show) => `Leave it at ${show.length(stock)}`,
+    otherBasis: ({ took }) =>
+      took === 'normal' ? 'Pitch along the rim' : 'Pitch square to the teeth',
+    material: ({ name, condition }) => materialName(name, condition),
+    smaller: ({ toothCount, blankDiameter }, show) =>
+      `Smaller: ${show.length(blankDiameter)}, ${String(toothCount)} teeth`,
+    larger: ({ toothCount, blankDiameter }, show) =>
+      `Larger: ${show.length(blankDiameter)}, ${String(toothCount)} teeth`,
+    otherUnits: ({ units }) => (units === 'mm' ? 'Show mm first' : 'Show inches first'),
+    words: ({ words }) => words,
+  },
+  standing,
+  footing: "The shop's rules, the machine's manual and licensed practice go before this card.",
+  choices: 'Next',
+  verbs: {
+    setup: 'Set-up card',
+    help: 'Help',
+  },
+  terminal: {
+    opening: [
+      'Wholetooth, local channel: type a bar, a pattern and a pitch, such as 1.000 straight 21tpi 1018.',
+      'No chat platform is connected; the README says how to connect Slack or Discord.',
+    ],
+    prompt: '> ',
+    usage:
+      'Give one line in quotes, such as: npm run --silent ask -- "/knurl 1.000 straight 21tpi 1018"',
+    unitsArgument: '--units takes in or mm.',
+    fault: 'Something went wrong here, not in what you typed. Nothing was changed; send it again.',
+  },
+};

@@ -1,0 +1,62 @@
+import type { Check, CheckName, CheckOf } from '../../calc/index.ts';
+import type { Book } from '../book.ts';
+import type { Show } from '../show.ts';
+import { checks } from './checks.ts';
+import { patternName, pitchName, wheelName } from './names.ts';
+
+const teeth = (count: number): string => `${String(count)} ${count === 1 ? 'tooth' : 'teeth'}`;
+const under = (error: number): string => (error < 0 ? 'under' : 'over');
+
+/** The sentence of whatever check this is. */
+const sayCheck = <N extends CheckName>(check: CheckOf<N>, show: Show): string =>
+  checks[check.name].say(check, show);
+
+const stopText = (check: Check, show: Show): string =>
+  `${checks[check.name].label}: ${sayCheck(check, show)}`;
+
+export const lines: Book['lines'] = {
+  turnTo: ({ blankDiameter, toothCount }, show) =>
+    `Turn to ${show.length(blankDiameter)}: ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
+  leaveAt: ({ blankDiameter, toothCount }, show) =>
+    `Leave it at ${show.length(blankDiameter)}: ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
+  stopped: ({ check }, show) => `Do not run this. ${stopText(check, show)}`,
+  wouldTurnTo: ({ blankDiameter, toothCount }, show) =>
+    `Worked out for ${show.length(blankDiameter)}, ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
+  windowTracks: ({ low, high }, show) => `${show.span(low, high)} tracks.`,
+  leaveItOption: ({ stock, toothCount, toothError }, show) =>
+    `Or leave it at ${show.length(stock)}: ${teeth(toothCount)}, ${show.teeth(toothError)} of a tooth ${under(toothError)}. (as-is)`,
+  asItIs: ({ stock, toothError }, show) =>
+    `The bar as it is, ${show.length(stock)}: ${show.teeth(toothError)} of a tooth ${under(toothError)}.`,
+  finishMet: ({ limits, fillMoved, fill }, show) =>
+    fillMoved
+      ? `For a finished ${show.span(limits.low, limits.high)}: fill moved to ${show.percent(fill)}.`
+      : `For a finished ${show.span(limits.low, limits.high)}.`,
+  pitchTaken: ({ took, toothCount, otherCount }) => {
+    const here = took === 'normal' ? 'square to the teeth' : 'along the rim';
+    const there = took === 'normal' ? 'along the rim' : 'square to the teeth';
+    const other = otherCount === null ? '' : ` Meant ${there}: ${String(otherCount)}.`;
+    return `Pitch taken ${here}: ${teeth(toothCount)}.${other}`;
+  },
+  helixTaken: ({ helix }, show) => `Helix ${show.angle(helix)} taken.`,
+  wheelNeeded: ({ wheel, pattern }) => `Takes ${wheelName[wheel]} (${patternName(pattern)}).`,
+  calloutBar: ({ stock }, show) =>
+    `${show.length(stock)} taken as the bar; a drawing's size is the finished one: say finish and its limits.`,
+  materialTaken: ({ name, condition }) => `No material named: ${name}, ${condition}, taken.`,
+  processSwitched: ({ name }) => `${name} does not form: worked out as a cut knurl.`,
+  labelOverruled: ({ label, counted, normal }, show) =>
+    `Wheel as counted, ${teeth(counted.teeth)} on ${show.length(counted.diameter)}, goes before its label ${pitchName(label)}: pitch ${show.both(normal)}.`,
+  wheelTaken: ({ wheel, edge }) => {
+    const size = [wheel.diameter, wheel.face, wheel.bore]
+      .map((part) => String(Number(part.toFixed(2))))
+      .join(' x ');
+    return `Wheel ${size} mm, ${edge === 'square' ? 'square edges' : edge === 'convex' ? 'convex edges' : 'bevelled'}, taken; yours?`;
+  },
+  classWindow: ({ knurlClass }) => `The window is the blank tolerance of class ${knurlClass}.`,
+  feedNeedsLength: () =>
+    'The feed goes with a wheel that travels: add the length, such as long 1.5.',
+  startHalfOn: ({ chamfer, clearance }, show) =>
+    `Start with half the wheel on the work. Lead chamfer ${show.length(chamfer)} or more; leave ${show.length(clearance)} to a shoulder.`,
+  helpIntro: () => 'Say the bar, the pattern and the pitch; add the material. Words in any order.',
+  helpVerb: ({ verb, line: example }) => `${verb}: ${example}`,
+  helpExample: ({ line: example }) => example,
+};

@@ -1,0 +1,96 @@
+import type { Pattern, Pitch, WheelKind } from '../../calc/index.ts';
+
+/** A pitch as its label prints it. */
+export const pitchName = (pitch: Pitch): string => {
+  const value = String(pitch.value);
+  switch (pitch.system) {
+    case 'metric':
+      return `${value} mm pitch`;
+    case 'tpi':
+      return `${value} TPI`;
+    case 'dp':
+      return `${value} DP`;
+    case 'module':
+      return `module ${value}`;
+  }
+};
+
+/** Name and condition of a material on one line. */
+export const materialName = (name: string, condition: string): string => `${name}, ${condition}`;
+
+export const patternName = (pattern: Pattern): string => {
+  switch (pattern.kind) {
+    case 'straight':
+      return 'straight knurl';
+    case 'diagonal':
+      return pattern.hand === null ? 'diagonal knurl' : `${pattern.hand}-hand knurl`;
+    case 'diamond':
+      return `diamond, points ${pattern.points}`;
+    case 'square':
+      return `square pattern, points ${pattern.points}`;
+  }
+};
+
+export const wheelName: { readonly [K in WheelKind]: string } = {
+  straight: 'a straight wheel',
+  leftHelical: 'a left-hand wheel',
+  rightHelical: 'a right-hand wheel',
+  helical: 'a helical wheel of the other hand',
+  helicalPair: 'a left-hand and a right-hand wheel',
+  onePieceRaised: 'one crossed wheel with raised points',
+  onePieceSunk: 'one crossed wheel with sunk points',
+  straightSetOver: 'a straight wheel set over',
+  straightPairSetOver: 'a pair of straight wheels set over',
+};
+
+/** What a parameter or a limit is called in a sentence. */
+const THINGS: Readonly<Record<string, string>> = {
+  diameter: 'diameter',
+  pattern: 'pattern',
+  points: 'kind of points',
+  hand: 'hand of the knurl',
+  pitch: 'pitch',
+  tpi: 'teeth per inch',
+  dp: 'diametral pitch',
+  module: 'module',
+  material: 'material',
+  finish: 'finished size',
+  length: 'length of the knurl',
+  stickout: 'stickout',
+  stockLength: 'length of the bar',
+  helix: 'helix angle',
+  tilt: 'angle the wheel is set over',
+  angle: 'tooth angle',
+  teeth: 'tooth count',
+  fill: 'fill',
+  feed: 'feed',
+  speed: 'surface speed',
+  rotation: 'spindle speed',
+  turns: 'turns',
+  batch: 'number of parts',
+  bevel: 'bevel',
+  edge: 'edge of the wheel',
+  wheel: 'wheel',
+  wheelDiameter: 'diameter of the wheel',
+  wheelFace: 'face of the wheel',
+  wheelBore: 'bore of the wheel',
+  wheelTeeth: 'teeth on the wheel',
+  face: 'face of the wheel',
+  pin: 'pin',
+  pinDiameter: 'diameter of the pin',
+  hardness: 'hardness',
+  class: 'class',
+  runout: 'run-out',
+  bore: 'bore',
+  plate: 'plating',
+  fit: 'bore of the fit',
+  process: 'process',
+  support: 'support',
+  layout: 'wheels',
+  machine: 'machine',
+  textLength: 'length of the line',
+  toothHeight: 'tooth height',
+  units: 'units shown',
+};
+
+export const thing = (what: string): string => THINGS[what] ?? what;

@@ -1,0 +1,13 @@
+export type { Book, LabelledText } from './book.ts';
+export { en } from './en/index.ts';
+export { type ShopUnits, type Show, showIn } from './show.ts';
+export {
+  type SpokenCard,
+  type SpokenCheck,
+  type SpokenChoice,
+  type SpokenPart,
+  speakCard,
+  speakLabel,
+  speakLine,
+  speakRefusal,
+} from './speak.ts';

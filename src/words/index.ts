@@ -1,0 +1,55 @@
+export { freeCallout } from './callout.ts';
+export { plainText } from './characters.ts';
+export {
+  type Cursor,
+  moved,
+  type Quantity,
+  quantityAt,
+  type ShopUnits,
+  spanOf,
+  tokenAt,
+} from './cursor.ts';
+export { partOf, readAs, replaced, withMore, without } from './edit.ts';
+export * from './kinds.ts';
+export { type Limits, limitsOf } from './limits.ts';
+export {
+  freeMaterial,
+  MATERIAL_PHRASES,
+  type MaterialWords,
+  narrowed,
+  withShopAliases,
+} from './material.ts';
+export { nearestOf } from './nearest.ts';
+export { freePitch, readPitch, samePitch } from './pitch.ts';
+export {
+  type AnyParameter,
+  choicesOf,
+  type LineResult,
+  LONGEST_LINE,
+  type ReadLine,
+  readLine,
+  type Vocabulary,
+  vocabularyOf,
+} from './reader.ts';
+export {
+  type Names,
+  NO_NAMES,
+  type Parameter,
+  type Reader,
+  type Reading,
+  refused,
+  took,
+} from './reading.ts';
+export { type Span, tokensOf } from './tokens.ts';
+export {
+  BEVEL,
+  BEVEL_SIZES,
+  type HardnessWords,
+  onePin,
+  oneWheel,
+  type PinWords,
+  readHardness,
+  readPin,
+  readWheel,
+  type WheelWords,
+} from './tooling.ts';
