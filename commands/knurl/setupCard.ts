@@ -5,6 +5,8 @@ import {
   MATERIALS,
   materialById,
   mm,
+  type PitchBasis,
+  type RemedyKind,
   type SetupRequest,
   type SetupResult,
   USUAL_MATERIALS,
@@ -37,6 +39,18 @@ const SHOWN_CAUTIONS = 3;
 
 /** Words that a choice of another blank takes back. */
 const BLANK_WORDS = ['teeth', 'asIs'] as const;
+
+/** What a remedy's words take the place of. */
+const REMEDY_REPLACES: { readonly [K in RemedyKind]: readonly string[] } = {
+  stickout: ['stickout'],
+  tailstock: ['support'],
+  moreTurns: ['turns', 'feed'],
+  slower: ['speed', 'rotation'],
+  narrowerWheel: ['wheel'],
+  plug: ['plug'],
+  opposed: ['layout'],
+  cut: ['process'],
+};
 
 const worstStop = (checks: readonly Check[]): Check | null =>
   checks.find((check) => check.state === 'stop') ?? null;
@@ -78,11 +92,15 @@ const blankLines = (w: Worked): readonly Line[] => {
   return lines;
 };
 
+/** How a helical label was taken, unless a standard's own callout says what its pitch measures. */
+const unclearBasis = ({ said, result }: Worked): PitchBasis | null =>
+  said.callout === undefined ? result.pitch.took : null;
+
 /** Whatever the bot chose by itself is said, in the first lines. */
 const choiceLines = (w: Worked): readonly Line[] => {
   const { request, result, said } = w;
   const lines: Line[] = [];
-  const { took } = result.pitch;
+  const took = unclearBasis(w);
   if (took !== null)
     lines.push(
       line('pitchTaken', {
@@ -181,6 +199,13 @@ const blankChoices = (w: Worked): readonly Choice[] => {
   return choices;
 };
 
+/** A stop comes with the smallest changes that pass, as lines to send. */
+const remedyChoices = ({ context, result }: Worked): readonly Choice[] =>
+  result.remedies.map(({ kind, number, words }) => ({
+    label: label('remedy', { kind, number }),
+    words: reworded(context, REMEDY_REPLACES[kind], words),
+  }));
+
 /** The shortest name that reads as this row of the table. */
 const shortName = (id: string): string =>
   MATERIALS.find((material) => material.id === id)?.aliases[0] ?? id;
@@ -196,12 +221,13 @@ const materialChoices = ({ context, materialAssumed }: Worked): readonly Choice[
     : [];
 
 const choices = (w: Worked): readonly Choice[] => {
-  const { context, result } = w;
-  const { took } = result.pitch;
+  const { context } = w;
+  const took = unclearBasis(w);
   const others = context.units === 'in' ? 'mm' : 'in';
   const shown = w.said.units ?? context.units;
   const turned = shown === context.units ? others : context.units;
   return [
+    ...remedyChoices(w),
     ...blankChoices(w).slice(0, 1),
     ...(took === null
       ? []

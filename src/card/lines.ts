@@ -2,6 +2,7 @@ import type {
   Check,
   CountedWheel,
   Edge,
+  Figure,
   KnurlClass,
   Mm,
   MmPerRev,
@@ -10,6 +11,7 @@ import type {
   Pitch,
   PitchBasis,
   Rad,
+  RemedyKind,
   RevPerMin,
   Seconds,
   WheelKind,
@@ -95,6 +97,7 @@ export type Labels = {
   material: { readonly name: string; readonly condition: string };
   smaller: { readonly toothCount: number; readonly blankDiameter: Mm };
   larger: { readonly toothCount: number; readonly blankDiameter: Mm };
+  remedy: { readonly kind: RemedyKind; readonly number: Figure | null };
   otherUnits: { readonly units: 'in' | 'mm' };
   words: { readonly words: string };
 };

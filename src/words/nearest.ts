@@ -23,8 +23,10 @@ export const nearestOf = (word: string, known: Iterable<string>): readonly strin
     const off = distance(word, plain);
     if (off <= allowance(word.length)) scored.push({ word: candidate, off });
   }
+  const best = Math.min(...scored.map((entry) => entry.off));
   return scored
-    .sort((a, b) => a.off - b.off || a.word.localeCompare(b.word))
+    .filter((entry) => entry.off === best)
+    .sort((a, b) => a.word.localeCompare(b.word))
     .slice(0, MOST)
     .map((entry) => entry.word);
 };

@@ -168,4 +168,199 @@ export const checks: Book['checks'] = {
       }
     },
   },
+  pinHeat: {
+    label: 'Pin heat',
+    say: (check, show) => {
+      const index = show.number(value(check.figures, 'pinHeatIndex'));
+      const warm = check.figures['wheelWarmUp'];
+      const rise = warm ? `, wheel ${warm.value.toFixed(0)} K warmer` : '';
+      switch (check.reason) {
+        case 'cool':
+          return `${index} of the trade's limit${rise}`;
+        case 'warm':
+          return `${index} times the trade's limit${rise}: oil well, let it cool`;
+        case 'hotButShort':
+          return `${index} times the trade's limit, but over quickly${rise}`;
+        case 'hot':
+          return `${index} times the trade's limit${rise}: the pin seizes; slow down`;
+      }
+    },
+  },
+  pinPressure: {
+    label: 'Pin load',
+    say: (check) => {
+      const pressure = `${value(check.figures, 'pinPressure').toFixed(0)} MPa`;
+      const limit = `${value(check.figures, 'pressureFineTo').toFixed(0)} MPa`;
+      return check.reason === 'within' ? pressure : `${pressure}, over ${limit}: pin and bore wear`;
+    },
+  },
+  bending: {
+    label: 'Bending',
+    say: (check, show) => {
+      const stress = `${value(check.figures, 'bendingStress').toFixed(0)} MPa`;
+      const fine = `${value(check.figures, 'stressFineTo').toFixed(0)} MPa`;
+      const gives = show.length(value(check.figures, 'depthDifference'));
+      switch (check.reason) {
+        case 'opposed':
+          return 'opposed wheels do not push the bar away';
+        case 'holds':
+          return `holds: about ${stress}, fine to ${fine}`;
+        case 'pushedAway':
+          return `pushed away: the depth changes by about ${gives} along the knurl, fine to ${show.length(value(check.figures, 'differenceFineTo'))}`;
+        case 'staysBent':
+          return `about ${stress}, fine to ${fine}: the bar may stay bent`;
+      }
+    },
+  },
+  ring: {
+    label: 'Wall',
+    say: (check, show) => {
+      const stress = `${value(check.figures, 'ringStress').toFixed(0)} MPa`;
+      const closes = show.length(value(check.figures, 'ringClosing'));
+      const outside = check.figures['thinBelow'] ? ' (wall thicker than the formula is good for)' : '';
+      switch (check.reason) {
+        case 'plugged':
+          return 'carried by the plug';
+        case 'holds':
+          return `holds: about ${stress}, closes ${closes}`;
+        case 'thickWall':
+          return `holds: about ${stress}, closes ${closes}${outside}`;
+        case 'outOfRound':
+          return `closes by about ${closes}, fine to ${show.length(value(check.figures, 'closingFineTo'))}${outside}: out of round`;
+        case 'crushed':
+          return `about ${stress}, fine to ${value(check.figures, 'stressFineTo').toFixed(0)} MPa${outside}: the wheels crush it`;
+      }
+    },
+  },
+  stickout: {
+    label: 'Stickout',
+    say: (check) => {
+      switch (check.reason) {
+        case 'short':
+          return 'at or under 3 diameters';
+        case 'supported':
+          return 'supported at the end';
+        case 'opposed':
+          return 'opposed wheels';
+        case 'long':
+          return 'over 3 diameters: bring up the tailstock';
+      }
+    },
+  },
+  width: {
+    label: 'Width',
+    say: (check, show) => {
+      const width = show.length(value(check.figures, 'knurlWidth'));
+      return check.reason === 'within'
+        ? `${width}, no wider than the blank`
+        : `${width} is wider than the blank's diameter`;
+    },
+  },
+  capacity: {
+    label: 'Machine',
+    say: (check) => {
+      switch (check.reason) {
+        case 'within':
+          return 'within its torque and power';
+        case 'overTorque':
+          return 'more torque than it has';
+        case 'overPower':
+          return 'more power than it has';
+      }
+    },
+  },
+  fit: {
+    label: 'Fit',
+    say: (check, show) => {
+      const each = show.length(value(check.figures, 'interference'));
+      const share = show.percent(value(check.figures, 'interferenceShare'));
+      switch (check.reason) {
+        case 'grips':
+          return `${each} a side, ${share} of the tooth: grips`;
+        case 'tight':
+          return `${each} a side, ${share} of the tooth: hard to press`;
+        case 'over':
+          return `${each} a side is more than the tooth is high: it will not go in`;
+        case 'loose':
+          return 'the crest is no larger than the bore: it will not grip';
+      }
+    },
+  },
+  seam: {
+    label: 'Seam',
+    say: (check, show) => {
+      const chance = show.percent(value(check.figures, 'chanceTracks'));
+      switch (check.reason) {
+        case 'whole':
+          return `whole as it is; tracks ${chance} of the time`;
+        case 'centres':
+          return `tracks as it is, this centres it; tracks ${chance} of the time`;
+        case 'closes':
+          return `closes the seam; tracks ${chance} of the time`;
+      }
+    },
+  },
+  count: {
+    label: 'Count',
+    say: (check, show) => {
+      const counted = show.count(value(check.figures, 'countedTeeth'));
+      const expected = show.count(value(check.figures, 'countExpected'));
+      switch (check.reason) {
+        case 'asExpected':
+          return `${counted} counted, as worked out`;
+        case 'wheelDiffers':
+          return `${counted} counted, ${expected} worked out: the wheel's pitch differs from its label`;
+        case 'notThisWheel':
+          return `${counted} counted, ${expected} worked out: too far apart for this wheel; count again`;
+        case 'doubled':
+          return `${counted} counted, ${expected} worked out: the pattern doubled`;
+      }
+    },
+  },
+  filled: {
+    label: 'Fill',
+    say: (check, show) => {
+      const measured = show.percent(value(check.figures, 'fillMeasured'));
+      const planned = show.percent(value(check.figures, 'fillExpected'));
+      switch (check.reason) {
+        case 'asPlanned':
+          return `${measured}, as planned`;
+        case 'short':
+          return `${measured}, planned ${planned}: feed in further`;
+        case 'over':
+          return `${measured}, planned ${planned}: feed in less`;
+      }
+    },
+  },
+  growth: {
+    label: 'Growth',
+    say: (check, show) => {
+      const measured = show.percent(value(check.figures, 'growthFactor'));
+      const expected = show.percent(value(check.figures, 'growthFactorExpected'));
+      switch (check.reason) {
+        case 'asExpected':
+          return `${measured} of the static growth, as expected`;
+        case 'less':
+          return `${measured} of the static growth, expected ${expected}: grows less`;
+        case 'more':
+          return `${measured} of the static growth, expected ${expected}: grows more`;
+      }
+    },
+  },
+  taper: {
+    label: 'Taper',
+    say: (check, show) => {
+      const taper = show.length(value(check.figures, 'taper'));
+      switch (check.reason) {
+        case 'even':
+          return 'even along the length';
+        case 'bends':
+          return `the infeed falls off by ${taper}: the part bends away`;
+        case 'outOfLine':
+          return `the infeed falls off by ${taper}: the tool is out of line`;
+        case 'uneven':
+          return `the infeed falls off by ${taper} along the knurl`;
+      }
+    },
+  },
 };

@@ -3,6 +3,7 @@ import { cautions, standing } from './cautions.ts';
 import { checks } from './checks.ts';
 import { lines } from './lines.ts';
 import { materialName } from './names.ts';
+import { remedyLabel } from './remedies.ts';
 import { contradictions, refusal } from './refusals.ts';
 import { rows } from './rows.ts';
 
@@ -24,6 +25,7 @@ export const en: Book = {
       `Smaller: ${show.length(blankDiameter)}, ${String(toothCount)} teeth`,
     larger: ({ toothCount, blankDiameter }, show) =>
       `Larger: ${show.length(blankDiameter)}, ${String(toothCount)} teeth`,
+    remedy: ({ kind, number }, show) => remedyLabel(kind, number, show),
     otherUnits: ({ units }) => (units === 'mm' ? 'Show mm first' : 'Show inches first'),
     words: ({ words }) => words,
   },

@@ -1,5 +1,5 @@
 import { mPerMin } from '../../calc/units.ts';
-import type { OutOfRangeRefusal, Refusal } from '../../refusal.ts';
+import type { OutOfRangeRefusal, Refusal, Suggestion } from '../../refusal.ts';
 import type { Book } from '../book.ts';
 import type { Show } from '../show.ts';
 import { thing } from './names.ts';
@@ -64,6 +64,11 @@ export const contradictions: Book['contradictions'] = {
   limitsReversed: 'The limits are the wrong way round.',
 };
 
+const asked = (readings: readonly Suggestion[]): string => {
+  const labels = readings.map((reading) => reading.label);
+  return labels.length === 1 ? `Did you mean ${list(labels)}?` : `Which one: ${list(labels)}?`;
+};
+
 export const refusal = (fault: Refusal, show: Show): string => {
   switch (fault.code) {
     case 'unreadable':
@@ -76,7 +81,7 @@ export const refusal = (fault: Refusal, show: Show): string => {
       return outOfRange(fault, show);
     case 'unclear':
       if (fault.because !== undefined)
-        return `${contradictions[fault.because]} Which one: ${list(fault.readings.map((reading) => reading.label))}?`;
+        return `${contradictions[fault.because]} ${asked(fault.readings)}`;
       return fault.readings.length > 0
         ? `The ${thing(fault.what)} could mean more than one thing: ${list(fault.readings.map((reading) => reading.label))}. Which one?`
         : `The ${thing(fault.what)} is unclear. Say it another way.`;
