@@ -151,6 +151,12 @@ const GEOMETRY = {
     taken: '|δ| < H1/(2 Hf), and the first infeed that makes a wanted window true',
     mark: 'derived',
   },
+  'growth-learned': {
+    title: "The shop's own growth from its results",
+    taken:
+      'posterior of shop and family effects, jointly normal; a result more than three standard deviations off waits until it is confirmed',
+    mark: 'derived',
+  },
   'growth-prior': {
     title: 'Growth over the static figure before any result',
     taken: 'mean 0.95, spread between shops 0.08, between families 0.04, between parts 0.05',
@@ -333,6 +339,11 @@ const STRENGTH = {
     title: 'Handbook formulas for thin rings, constants derived again',
     taken: 'closing and moments of a ring pinched between two wheels, t/R under 0.2',
     mark: 'derived',
+  },
+  'work-hardening': {
+    title: 'Hardening under a rolled tooth',
+    taken: '2.5ⁿ: the tooth strains the metal about 2.5 times as far as a Brinell ball does',
+    mark: 'from memory',
   },
   'ring-width': {
     title: 'Length of tube that shares the load',
