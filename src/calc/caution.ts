@@ -82,7 +82,21 @@ const applies: Record<ChosenCaution, (facts: CautionFacts) => boolean> = {
  *
  * | symbol | meaning | unit | range |
  * | --- | --- | --- | --- |
- * | facts | what is known of the set-up | - | |
+ * | D (blankDiameter) | diameter of the blank | mm | > 0 |
+ * | out (stickout) | from the chuck to the end of the knurl, or null | mm | > 0 |
+ * | supported | tailstock or centres | - | |
+ * | stockLength | length of the bar, or null | mm | > 0 |
+ * | bore | bore of the work, or null | mm | > 0 |
+ * | x (fill) | tooth height over sharp height, or null | - | 0 to 1 |
+ * | materialFill | deepest fill advised for the material, or null | - | 0 to 1 |
+ * | materialGroup | family of the material, or null | - | |
+ * | n (rotation) | spindle speed, or null | rev/min | > 0 |
+ * | machineTopSpeed | fastest the machine or its chuck may run, or null | rev/min | > 0 |
+ * | seamTest | the work is turned by hand for a seam test | - | |
+ * | ΔT (warmUp) | how much warmer the wheel gets, or null | K | ≥ 0 |
+ * | bending | how the check on bending ends, or null | - | |
+ * | ring | how the check on the wall ends, or null | - | |
+ * | pinHeat | how the check on the pin ends, or null | - | |
  * | → ids | cautions, standing ones first, then the one that matters most | - | |
  *
  * Assumes what was not said is not the case; the standing ones hold regardless.

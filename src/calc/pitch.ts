@@ -143,9 +143,25 @@ const BLANK_STEP_IN: Record<StandardDp, number> = {
   160: 1 / 32,
 };
 
-/** The standard pitch a label's number is, or null. */
-export const standardDp = (value: number): StandardDp | null =>
-  STANDARD_DP.find((dp) => dp === value) ?? null;
+/**
+ * The diametral pitch of the standard that a label's number is.
+ *
+ *     64, 96, 128, 160; any other: null
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | value | diametral pitch on the label | - | |
+ * | → dp | the same pitch, or null | - | |
+ *
+ * Assumes a label prints the number as the standard lists it.
+ *
+ * @source asme-b94.6 (64, 96, 128 and 160 DP)
+ * @example standardDp(96) // 96
+ * @example standardDp(100) // null
+ */
+export function standardDp(value: number): StandardDp | null {
+  return STANDARD_DP.find((dp) => dp === value) ?? null;
+}
 
 /**
  * Whether a blank is one of the fractional sizes a diametral pitch is made for.

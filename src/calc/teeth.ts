@@ -108,7 +108,7 @@ export function toothError(diameter: Mm, transversePitch: Mm): number {
  * Assumes N p ≤ π D.
  *
  * @source asme-b94.6 (160 DP straight wheel on 1.000 in, 138 teeth: about 30½°)
- * @example swivelForCount(138, inch(1), inch(Math.PI / 160)) // 0.530606 rad
+ * @example swivelForCount(138, inch(1), inch(Math.PI / 160)) // 0.530607 rad
  */
 export function swivelForCount(teeth: number, diameter: Mm, normalPitch: Mm): Rad {
   const cos = teeth / toothCount(diameter, normalPitch);
