@@ -1,6 +1,9 @@
+export type { Support, ToolLayout } from '../bending/index.ts';
 export { LARGEST_DIAMETER } from './blank.ts';
+export { LONGEST_STICKOUT, type Load, type PinLoad, type WallLoad } from './load.ts';
 export type { Motion, Running, WheelInUse } from './motion.ts';
 export { type ResolvedPitch, resolvePitch } from './pitch.ts';
+export { NARROWEST_FACE, REMEDY_KINDS, type Remedy, type RemedyKind } from './remedy.ts';
 export {
   type CountedWheel,
   DEFAULT_BEVEL,
@@ -9,8 +12,6 @@ export {
   type MachineLimits,
   type SetupRequest,
   type Steps,
-  type Support,
-  type ToolLayout,
   type WheelSize,
 } from './request.ts';
 export {

@@ -48,7 +48,13 @@ const inRange = (pitch: WorkPitch): WorkPitch => {
  *
  * | symbol | meaning | unit | range |
  * | --- | --- | --- | --- |
- * | of | the parts of the request that speak of pitch, pattern, helix and tilt | - | |
+ * | pattern | pattern on the work | - | |
+ * | pitch | label of the wheel, or null | - | |
+ * | alongRim | the label is meant along the rim | - | |
+ * | counted | wheel counted and measured, or null | - | |
+ * | proven | pitch round the rim that a pair has proven, or null | mm | > 0 |
+ * | helix | helix of the teeth, or null | rad | |
+ * | tilt | swivel of straight wheels, or null | rad | |
  * | → normal, transverse | pitch square to the tooth and round the rim | mm | 0.2 to 3.2 |
  * | → took, otherWay | how an unclear helical label was taken, and the other reading | - | |
  *
@@ -74,11 +80,18 @@ export function resolvePitch(of: Source): ResolvedPitch {
     throw new OutOfRange('pitch', Number.NaN, FINEST_PITCH, COARSEST_PITCH, 'mm');
   const pitch = labelledPitch(of.pitch);
   const basis = of.alongRim ? 'rim' : basisOf(of.pitch.system);
-  const work = inRange(workPitch({ pitch, basis, helix, setOver }));
+  const { normal, transverse } = inRange(workPitch({ pitch, basis, helix, setOver }));
   // Only TPI and plain metric labels are printed both ways on helical wheels.
   const bothWays = of.pitch.system === 'tpi' || of.pitch.system === 'metric';
-  if (!bothWays || setOver || helix === rad(0))
-    return { ...work, helix, setOver, knowledge: 'label', ...none };
-  const other = workPitch({ pitch, basis: basis === 'rim' ? 'normal' : 'rim', helix, setOver });
-  return { ...work, helix, setOver, knowledge: 'label', took: basis, otherWay: other };
+  const unclear = bothWays && !setOver && helix !== rad(0);
+  const other = basis === 'rim' ? 'normal' : 'rim';
+  return {
+    normal,
+    transverse,
+    helix,
+    setOver,
+    knowledge: 'label',
+    took: unclear ? basis : null,
+    otherWay: unclear ? workPitch({ pitch, basis: other, helix, setOver }) : null,
+  };
 }

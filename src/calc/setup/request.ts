@@ -1,3 +1,4 @@
+import type { Support, ToolLayout } from '../bending/index.ts';
 import type { Edge } from '../edge.ts';
 import type { Material } from '../materials/index.ts';
 import type { Pattern } from '../pattern.ts';
@@ -11,8 +12,10 @@ import {
   type MmPerRev,
   type MPerMin,
   mm,
+  type NewtonMm,
   type Rad,
   type RevPerMin,
+  type Watt,
 } from '../units.ts';
 
 /** A wheel whose teeth were counted and whose diameter was measured. */
@@ -44,12 +47,10 @@ export type MachineLimits = {
   /** Feeds of the gearbox, or null where any can be had. */
   readonly feeds: Steps<MmPerRev> | null;
   readonly topSpeed: RevPerMin | null;
+  /** What it can turn against at the spindle, or null where not known. */
+  readonly torque: NewtonMm | null;
+  readonly power: Watt | null;
 };
-
-/** How the bar is held. */
-export type Support = 'chuck' | 'tailstock' | 'centres';
-/** Wheels on one side push the bar away; opposed ones pinch it. */
-export type ToolLayout = 'oneSided' | 'opposed';
 
 /** Everything a set-up is worked out from. Null: not said. */
 export type SetupRequest = {

@@ -1,5 +1,5 @@
 import { type CautionId, cautionsFor } from '../caution.ts';
-import type { Check, Figure } from '../check.ts';
+import type { Check, CheckName, Figure, State } from '../check.ts';
 import { figure } from '../check.ts';
 import { edgeCheck } from '../edge.ts';
 import { infeedPerTurn } from '../feed.ts';
@@ -28,6 +28,8 @@ import {
 import { type Mm, mm, type UnitName } from '../units.ts';
 import { type ChosenBlank, chooseBlank } from './blank.ts';
 import { finishCheck } from './finish.ts';
+import { type Load, loadOf, type Pressing } from './load.ts';
+import { loadChecks, loadFigures } from './loadChecks.ts';
 import {
   type Motion,
   motion,
@@ -37,6 +39,7 @@ import {
   wheelInUse,
 } from './motion.ts';
 import { type ResolvedPitch, resolvePitch } from './pitch.ts';
+import { type Remedy, remediesFor, withRemedies } from './remedy.ts';
 import type { SetupRequest } from './request.ts';
 import { startingFill, type ToothPlan, toothPlan } from './tooth.ts';
 
@@ -71,6 +74,19 @@ export const SETUP_FIGURES = {
   turns: '1',
   passes: '1',
   time: 's',
+  radialForce: 'N',
+  radialForceLow: 'N',
+  radialForceHigh: 'N',
+  torque: 'N·mm',
+  power: 'W',
+  deflection: 'mm',
+  bendingStress: 'MPa',
+  ringStress: 'MPa',
+  ringClosing: 'mm',
+  pinHeatIndex: '1',
+  pinPressure: 'MPa',
+  wheelSpeed: 'rev/min',
+  wheelWarmUp: 'K',
 } as const satisfies Record<string, UnitName>;
 export type SetupFigureName = keyof typeof SETUP_FIGURES;
 export type SetupFigures = Readonly<Record<SetupFigureName, Figure | null>>;
@@ -95,6 +111,9 @@ export type SetupResult = {
   readonly wheelInUse: WheelInUse;
   readonly motion: Motion;
   readonly running: Running | null;
+  readonly load: Load;
+  /** Changes that would lift a stop, each tried. */
+  readonly remedies: readonly Remedy[];
   /** The bar as it is, where it tracks without being turned. */
   readonly asIs: { readonly toothCount: number; readonly toothError: number } | null;
   /** Largest whole count under the bar, or nearest to the print, read the other way. */
@@ -163,6 +182,8 @@ type Worked = {
   readonly wheel: WheelInUse;
   readonly running: Running | null;
   readonly motion: Motion;
+  readonly pressing: Pressing;
+  readonly load: Load;
 };
 
 const runningOf = (request: SetupRequest, process: Process, diameter: Mm): Running | null => {
@@ -170,7 +191,8 @@ const runningOf = (request: SetupRequest, process: Process, diameter: Mm): Runni
   const band = process === 'cut' ? material.cutSpeed.value : material.formSpeed.value;
   const stopped = process === 'form' && formRating(material, request.hardness) === 'no';
   if (band === null || stopped) return null;
-  return running({ ...request, band, process, diameter });
+  const { pin, speed, rotation, machine } = request;
+  return running({ band, process, pin, diameter, speed, rotation, machine });
 };
 
 const windowOf = (request: SetupRequest, teeth: number, transverse: Mm): Window => {
@@ -183,15 +205,44 @@ const workOut = (request: SetupRequest): Worked => {
   const { process } = processOf(request);
   const plan = toothPlan(request, pitch.normal, process);
   const materialFill = process === 'form' ? request.material.maxFill.value : null;
+  const { stock, finish, asIs, wantedTeeth } = request;
   const blank = chooseBlank(plan, {
-    ...request,
+    stock,
+    finish,
+    asIs,
+    wantedTeeth,
     transverse: pitch.transverse,
     fill: startingFill(plan, request.fill, materialFill),
     deepestFill: request.fill === null ? (materialFill ?? 1) : null,
   });
   const wheel = wheelInUse(request, process);
   const run = runningOf(request, process, blank.diameter);
-  const hardening = request.material.hardeningClass ?? 'low';
+  const moves = motion(
+    {
+      request,
+      width: wheel.width,
+      normal: pitch.normal,
+      hardening: request.material.hardeningClass ?? 'low',
+      rotation: run?.rotation ?? null,
+    },
+    process,
+  );
+  const { diameter, tooth } = blank;
+  const { normal, setOver } = pitch;
+  const bite = biteOf(plan);
+  // Written out, not spread: remedies and plans work this out thousands of times.
+  const pressing: Pressing = {
+    request,
+    process,
+    normal,
+    setOver,
+    diameter,
+    tooth,
+    bite,
+    wheel,
+    running: run,
+    motion: moves,
+  };
   return {
     request,
     process,
@@ -199,19 +250,12 @@ const workOut = (request: SetupRequest): Worked => {
     plan,
     blank,
     window: windowOf(request, blank.teeth, pitch.transverse),
-    bite: biteOf(plan),
+    bite,
     wheel,
     running: run,
-    motion: motion(
-      {
-        request,
-        width: wheel.width,
-        normal: pitch.normal,
-        hardening,
-        rotation: run?.rotation ?? null,
-      },
-      process,
-    ),
+    motion: moves,
+    pressing,
+    load: loadOf(pressing),
   };
 };
 
@@ -248,6 +292,7 @@ const checksOf = (w: Worked): readonly Check[] => {
     }),
     materialCheck(request.material, request.hardness, w.process),
     w.running?.check ?? null,
+    ...loadChecks(w.pressing, w.load),
   ];
   return checks.filter((check) => check !== null);
 };
@@ -309,6 +354,7 @@ const figuresOf = (w: Worked): SetupFigures => {
     ...stockFigures(w),
     ...toothFigures(w),
     ...motionFigures(w),
+    ...loadFigures(w.load),
   };
   const named = Object.entries(SETUP_FIGURES).map(([name, unit]) => {
     const value = values[name as SetupFigureName];
@@ -326,7 +372,10 @@ const otherWayTeeth = (w: Worked): number | null => {
   return largestWholeCount(stock, otherWay.transverse);
 };
 
-const cautionsOf = (w: Worked): readonly CautionId[] => {
+const stateOf = (checks: readonly Check[], name: CheckName): State | null =>
+  checks.find((check) => check.name === name)?.state ?? null;
+
+const cautionsOf = (w: Worked, checks: readonly Check[]): readonly CautionId[] => {
   const { request } = w;
   return cautionsFor({
     blankDiameter: w.blank.diameter,
@@ -340,12 +389,25 @@ const cautionsOf = (w: Worked): readonly CautionId[] => {
     rotation: w.running?.rotation ?? null,
     machineTopSpeed: request.machine?.topSpeed ?? null,
     seamTest: false,
-    warmUp: null,
-    bending: null,
-    ring: null,
-    pinHeat: null,
+    warmUp: w.load.pin.warmUp,
+    bending: stateOf(checks, 'bending'),
+    ring: stateOf(checks, 'ring'),
+    pinHeat: stateOf(checks, 'pinHeat'),
   });
 };
+
+const remediesOf = (w: Worked, checks: readonly Check[]): readonly Remedy[] =>
+  remediesFor(
+    {
+      request: w.request,
+      checks,
+      travel: w.motion.travel,
+      knurlWidth: w.load.knurlWidth,
+      turns: w.motion.turns,
+      surfaceSpeed: w.running?.surfaceSpeed ?? null,
+    },
+    (request) => checksOf(workOut(request)),
+  );
 
 /**
  * The whole set-up from what an operator knows: blank, tooth, motion, checks and cautions.
@@ -354,9 +416,47 @@ const cautionsOf = (w: Worked): readonly CautionId[] => {
  *
  * | symbol | meaning | unit | range |
  * | --- | --- | --- | --- |
- * | request | what was said, lengths in mm; null where not said | - | |
+ * | pattern | pattern on the work | - | |
+ * | pitch | label of the wheel, or null | - | |
+ * | alongRim | the label is meant along the rim | - | |
+ * | counted | wheel counted and measured, or null | - | |
+ * | proven | pitch round the rim that a pair has proven, or null | mm | > 0 |
+ * | helix | helix of the teeth, or null | rad | |
+ * | tilt | swivel of straight wheels, or null | rad | |
+ * | 2a (included) | included tooth angle | rad | 0.01745 to 3.124 |
+ * | stock | diameter of the bar, or null | mm | > 0 |
+ * | finish | limits of the print over the crests, or null | - | |
+ * | asIs | the bar is left as it is | - | |
+ * | wantedTeeth | count asked for, or null | - | ≥ 3 |
+ * | knurlClass | class called out, or null | - | |
+ * | fill | tooth height over sharp height asked for, or null | - | 0 to 1 |
+ * | material | row of the materials table | - | |
+ * | HB (hardness) | hardness measured on the bar, or null | HB | > 0 |
+ * | process | form or cut, or null | - | |
+ * | wheel | size of the wheel | - | |
+ * | edge | edge of the wheel, or null | - | |
+ * | pin | hardened or carbide | - | |
+ * | pinDiameter | diameter of the pin, or null for the wheel's bore | mm | > 0 |
+ * | onePiece | one crossed wheel instead of a pair | - | |
+ * | length | length of the knurl, or null | mm | > 0 |
+ * | stickout | from the chuck to the end of the knurl, or null | mm | ≥ length |
+ * | support | chuck, tailstock or centres | - | |
+ * | layout | one-sided or opposed, or null | - | |
+ * | stockLength | length of the bar, or null | mm | ≥ stickout |
+ * | bore | bore of the work, or null | mm | leaves a wall of a tooth |
+ * | plug | a plug carries the wall | - | |
+ * | feed | feed asked for, or null | mm/rev | > 0 |
+ * | speed | surface speed asked for, or null | m/min | > 0 |
+ * | rotation | spindle speed asked for, or null | rev/min | > 0 |
+ * | turns | turns asked for, or null | - | ≥ 5 |
+ * | batch | parts | - | ≥ 1 |
+ * | runout | reading of the indicator, or null | mm | ≥ 0 |
+ * | machine | what the machine can do, or null | - | |
+ * | growth | what is known of the shop's growth | - | |
  * | → figures | every figure of the card, null where it does not apply | - | |
+ * | → figures.blankDiameter | what to turn to | mm | |
  * | → checks | each fine, watch or stop, with its numbers | - | |
+ * | → remedies | changes that lift a stop, each worked out again | - | |
  *
  * Assumes the defaults named in this folder where nothing was said.
  *
@@ -364,16 +464,21 @@ const cautionsOf = (w: Worked): readonly CautionId[] => {
  * @source round-work (infeed and crest)
  * @source feed-window (feed and turns)
  * @source speed-band (speed)
+ * @source force-model (force, torque)
+ * @source give-limits (bending, ring)
+ * @source pin-index (pin)
  * @example setUp({ pattern: { kind: 'straight' }, pitch: { system: 'tpi', value: 21 }, alongRim: false, counted: null, proven: null, helix: null, tilt: null, included: DEFAULT_INCLUDED, stock: inch(1), finish: null, asIs: false, wantedTeeth: null, knurlClass: null, fill: null, material: materialById('steel-lowC-CD'), hardness: null, process: null, wheel: DEFAULT_WHEEL, edge: null, pin: 'hardened', pinDiameter: null, onePiece: false, length: null, stickout: null, support: 'chuck', layout: null, stockLength: null, bore: null, plug: false, feed: null, speed: null, rotation: null, turns: null, batch: 1, runout: null, machine: null, growth: growthBeforeResults() }).figures.blankDiameter.value // 25.0252 mm
  */
 export function setUp(request: SetupRequest): SetupResult {
   const w = workOut(request);
   const { teeth, diameter } = w.blank;
   const { transverse } = w.pitch;
+  const checks = checksOf(w);
+  const remedies = remediesOf(w, checks);
   return {
     figures: figuresOf(w),
-    checks: checksOf(w),
-    cautions: cautionsOf(w),
+    checks: withRemedies(checks, remedies),
+    cautions: cautionsOf(w, checks),
     alternatives: smallerBlanks(teeth, transverse, diameter),
     larger: largerBlank(request, teeth, transverse),
     pitch: w.pitch,
@@ -385,6 +490,8 @@ export function setUp(request: SetupRequest): SetupResult {
     wheelInUse: w.wheel,
     motion: w.motion,
     running: w.running,
+    load: w.load,
+    remedies,
     asIs: asIsOffer(request, transverse, w.blank),
     otherWayTeeth: otherWayTeeth(w),
   };
