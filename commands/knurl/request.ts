@@ -16,6 +16,7 @@ import {
   type Pattern,
   type PatternKind,
   type Pitch,
+  provenPitch,
   rad,
   revPerMin,
   type SetupRequest,
@@ -137,7 +138,8 @@ const PITCH_EXAMPLES = ['21tpi', '96dp', '1.0 pitch'] as const;
 const pitchFor = (context: Context, said: SetupWords): Pitch | null => {
   const pitch = agreed(context, 'pitch', said.pitch, said.callout?.pitch ?? null);
   const counted = said.wheel?.teeth !== undefined && said.wheel.teeth !== null;
-  if (pitch === null && !counted) throw missing(context, 'pitch', PITCH_EXAMPLES);
+  if (pitch === null && !counted && said.proven === undefined)
+    throw missing(context, 'pitch', PITCH_EXAMPLES);
   if (counted && said.wheel?.diameter === null)
     throw missing(context, 'wheelDiameter', ['wheel 20mm 63 teeth', 'wheel 3/4 in 60 teeth']);
   return pitch;
@@ -278,7 +280,8 @@ const assemble = (context: Context, said: SetupWords): Built => {
     pitch,
     alongRim: said.rim === true,
     counted: counted ? { diameter: mm(wheel.diameter), teeth: wheel.teeth } : null,
-    proven: null,
+    proven:
+      said.proven === undefined ? null : provenPitch(mm(said.proven.diameter), said.proven.teeth),
     helix: said.helix === undefined ? null : rad(said.helix),
     tilt: said.tilt === undefined ? null : rad(said.tilt),
     included:

@@ -1,11 +1,12 @@
 import { z } from 'zod';
 import { setUp } from '../../src/calc/index.ts';
 import { cardReply, defineCommand, refuse } from '../../src/desk/index.ts';
+import { proven } from './checkParameters.ts';
 import * as words from './parameters.ts';
 import { requestOf } from './request.ts';
 import { setupCard } from './setupCard.ts';
 
-const parameters = z.object({
+export const setupParameters = z.object({
   diameter: words.diameter,
   pattern: words.pattern,
   pitch: words.pitch,
@@ -42,9 +43,10 @@ const parameters = z.object({
   plug: words.plug,
   hardness: words.hardness,
   runout: words.runout,
+  proven,
   units: words.shown,
 });
-export type SetupWords = z.infer<typeof parameters>;
+export type SetupWords = z.infer<typeof setupParameters>;
 
 /** What an operator asks for at the machine. */
 export const setup = defineCommand({
@@ -54,7 +56,7 @@ export const setup = defineCommand({
     '/knurl 19mm diamond 1.0 pitch 304 long 30mm',
     '/knurl 7/8 diagonal left 96dp brass',
   ],
-  parameters,
+  parameters: setupParameters,
   allowed: 'operator',
   run: (context, said) => {
     const built = requestOf(context, said);

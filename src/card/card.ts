@@ -1,4 +1,4 @@
-import type { Alternative, CautionId, Check, Figures } from '../calc/index.ts';
+import type { CautionId, Check, CheckAlternative, Figures } from '../calc/index.ts';
 import type { Label, Line, Row } from './lines.ts';
 
 /** A button: what it says and the line it sends. */
@@ -42,7 +42,7 @@ export type Card = {
   readonly figures: Figures;
   readonly checks: readonly Check[];
   readonly cautions: readonly CautionId[];
-  readonly alternatives: readonly Alternative[];
+  readonly alternatives: readonly CheckAlternative[];
   /** The unit shown first. */
   readonly units: 'in' | 'mm';
 };

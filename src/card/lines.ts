@@ -18,12 +18,13 @@ import type {
   WheelSize,
   Window,
 } from '../calc/index.ts';
+import type { CheckLines, CheckRows } from './checkLines.ts';
 
 /**
  * Every sentence a card can say, and the numbers it says it with. The phrase book of a language
  * has one entry for each; a new line here is a compile error there until it has words.
  */
-export type Lines = {
+export type Lines = CheckLines & {
   turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
   leaveAt: { readonly blankDiameter: Mm; readonly toothCount: number };
   stopped: { readonly check: Check };
@@ -59,7 +60,7 @@ export type LineId = keyof Lines;
 export type Line = { [K in LineId]: { readonly line: K; readonly values: Lines[K] } }[LineId];
 
 /** Label and value rows: the numbers of the card in reading order. */
-export type Rows = {
+export type Rows = CheckRows & {
   material: { readonly name: string; readonly condition: string };
   feedIn: { readonly infeed: Mm; readonly cut: boolean };
   firstTurn: { readonly firstBite: Mm };

@@ -72,6 +72,10 @@ const feedIn = (units: ShopUnits, value: number): string =>
 const rotation = (value: number): string =>
   `${value >= 100 ? value.toFixed(0) : significant(value, 3)} rev/min`;
 
+/** Tenths of a degree, and finer where a swivel is that small. */
+const degreesText = (value: number): string =>
+  `${String(Number(value.toFixed(Math.abs(value) < 1 ? 2 : 1)))}°`;
+
 const time = (value: number): string => {
   if (value < 10) return `${significant(value, 1)} s`;
   if (value < 90) return `${value.toFixed(0)} s`;
@@ -99,7 +103,7 @@ export const showIn = (units: ShopUnits): Show => {
     feed: (value) => `${feedIn(units, value)} ${units}/rev`,
     feedSpan: (low, high) => `${feedIn(units, low)} to ${feedIn(units, high)}`,
     otherFeed: (value) => `${feedIn(other, value)} ${other}/rev`,
-    angle: (value) => `${String(Number(((value * 180) / Math.PI).toFixed(1)))}°`,
+    angle: (value) => degreesText((value * 180) / Math.PI),
     percent: (value) => `${String(Number((value * 100).toFixed(1)))} %`,
     teeth: (value) => Math.abs(value).toFixed(2),
     count: (value) => String(Number(value.toFixed(1))),

@@ -217,7 +217,9 @@ export const checks: Book['checks'] = {
     say: (check, show) => {
       const stress = `${value(check.figures, 'ringStress').toFixed(0)} MPa`;
       const closes = show.length(value(check.figures, 'ringClosing'));
-      const outside = check.figures['thinBelow'] ? ' (wall thicker than the formula is good for)' : '';
+      const outside = check.figures['thinBelow']
+        ? ' (wall thicker than the formula is good for)'
+        : '';
       switch (check.reason) {
         case 'plugged':
           return 'carried by the plug';
@@ -350,7 +352,7 @@ export const checks: Book['checks'] = {
   taper: {
     label: 'Taper',
     say: (check, show) => {
-      const taper = show.length(value(check.figures, 'taper'));
+      const taper = show.length(Math.abs(value(check.figures, 'taper')));
       switch (check.reason) {
         case 'even':
           return 'even along the length';

@@ -3,8 +3,8 @@ import { cautions, standing } from './cautions.ts';
 import { checks } from './checks.ts';
 import { lines } from './lines.ts';
 import { materialName } from './names.ts';
-import { remedyLabel } from './remedies.ts';
 import { contradictions, refusal } from './refusals.ts';
+import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
 
 export const en: Book = {

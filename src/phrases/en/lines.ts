@@ -1,6 +1,7 @@
 import type { Check, CheckName, CheckOf } from '../../calc/index.ts';
 import type { Book } from '../book.ts';
 import type { Show } from '../show.ts';
+import { checkLines } from './checkLines.ts';
 import { checks } from './checks.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 
@@ -15,6 +16,7 @@ const stopText = (check: Check, show: Show): string =>
   `${checks[check.name].label}: ${sayCheck(check, show)}`;
 
 export const lines: Book['lines'] = {
+  ...checkLines,
   turnTo: ({ blankDiameter, toothCount }, show) =>
     `Turn to ${show.length(blankDiameter)}: ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
   leaveAt: ({ blankDiameter, toothCount }, show) =>

@@ -90,6 +90,14 @@ const THINGS: Readonly<Record<string, string>> = {
   machine: 'machine',
   textLength: 'length of the line',
   toothHeight: 'tooth height',
+  crestDiameter: 'diameter over the crests',
+  count: 'counted teeth',
+  counted: 'counted teeth',
+  flat: 'flat on the crests',
+  seam: 'gap at the seam',
+  wall: 'wall under the teeth',
+  width: 'contact width of the wheel',
+  proven: 'proven pair',
   units: 'units shown',
 };
 

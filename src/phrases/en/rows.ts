@@ -1,8 +1,10 @@
 import type { Book } from '../book.ts';
+import { checkRows } from './checkLines.ts';
 
 const parts = (batch: number): string => (batch === 1 ? '' : ` for ${String(batch)} parts`);
 
 export const rows: Book['rows'] = {
+  ...checkRows,
   material: ({ name, condition }) => ({ label: 'Material', text: `${name}, ${condition}` }),
   feedIn: ({ infeed, cut }, show) => ({
     label: 'Feed in',

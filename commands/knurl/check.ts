@@ -1,0 +1,90 @@
+import type { z } from 'zod';
+import { checkAfter, checkBlank, mm, type SetupRequest, seamTest } from '../../src/calc/index.ts';
+import {
+  type Context,
+  cardReply,
+  defineCommand,
+  type Reply,
+  refuse,
+} from '../../src/desk/index.ts';
+import { afterCard, blankCard, seamCard } from './checkCards.ts';
+import * as words from './checkParameters.ts';
+import { requestOf } from './request.ts';
+import { setupParameters } from './setup.ts';
+
+const parameters = setupParameters.extend({
+  seam: words.seam,
+  count: words.count,
+  scrap: words.scrap,
+  crest: words.crest,
+  height: words.height,
+  flat: words.flat,
+  flats: words.flats,
+});
+export type CheckWords = z.infer<typeof parameters>;
+
+const isAfter = (said: CheckWords): boolean =>
+  [said.crest, said.height, said.flat, said.flats, said.count].some((each) => each !== undefined);
+
+const seamReply = (
+  context: Context,
+  said: CheckWords,
+  request: SetupRequest,
+  gap: number,
+): Reply => {
+  if (request.stock === null) return missingDiameter();
+  const result = seamTest(request, request.stock, {
+    gap,
+    scrap: said.scrap === true,
+    count: said.count ?? null,
+  });
+  return cardReply(seamCard({ context, said, diameter: request.stock, result }));
+};
+
+const afterReply = (context: Context, said: CheckWords, request: SetupRequest): Reply => {
+  if (request.stock === null) return missingDiameter();
+  const { flats } = said;
+  const result = checkAfter(
+    { ...request, asIs: true },
+    {
+      blank: request.stock,
+      teeth: said.count ?? null,
+      crest: said.crest === undefined ? null : mm(said.crest),
+      toothHeight: said.height === undefined ? null : mm(said.height),
+      flat: said.flat === undefined ? null : mm(said.flat),
+      ends:
+        flats === undefined
+          ? null
+          : { near: mm(flats.near), far: mm(flats.far), distance: mm(flats.distance) },
+    },
+  );
+  return cardReply(afterCard({ context, said, diameter: request.stock, result }));
+};
+
+const missingDiameter = (): Reply =>
+  refuse({ code: 'missing', parameter: 'diameter', examples: ['1.000', '7/8', '19mm'] });
+
+const checked = (context: Context, said: CheckWords, request: SetupRequest): Reply => {
+  if (said.seam !== undefined) return seamReply(context, said, request, said.seam);
+  if (isAfter(said)) return afterReply(context, said, request);
+  if (request.stock === null) return missingDiameter();
+  const result = checkBlank(request, request.stock);
+  return cardReply(blankCard({ context, said, diameter: request.stock, result }));
+};
+
+/** Before, at the seam, and after: is this right, and what now. */
+export const check = defineCommand({
+  path: ['knurl', 'check'],
+  examples: [
+    '/knurl check 0.995 straight 21tpi',
+    '/knurl check 0.995 21tpi straight seam 0.3',
+    '/knurl check 0.9852 straight 21tpi 1018 count 65 crest 1.0040',
+  ],
+  parameters,
+  allowed: 'operator',
+  run: (context, said) => {
+    const built = requestOf(context, said);
+    if ('refusal' in built) return refuse(built.refusal, built.choices);
+    return checked(context, said, built.request);
+  },
+});
