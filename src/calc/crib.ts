@@ -1,8 +1,8 @@
 import type { Edge } from './edge.ts';
-import type { Pattern } from './pattern.ts';
+import { formOf, type Pattern } from './pattern.ts';
 import { type Pitch, type WorkPitch } from './pitch.ts';
 import { type ResolvedPitch, resolvePitch, type WheelSize } from './setup/index.ts';
-import { type Mm, type Rad, within } from './units.ts';
+import { type Mm, mm, type Rad, within } from './units.ts';
 
 /** A wheel, or a pair of them, that lies in the crib. */
 export type CribWheel = {
@@ -84,7 +84,7 @@ const HAIR = 1e-9;
  * Assumes pitches are compared square to the tooth, where they set the tooth height.
  *
  * @source pitch-conversion (share of the pitch asked for)
- * @example wheelsWithin({ normal: mm(0.8), tolerance: 0.01, crib: dinCrib() }).length // 48
+ * @example wheelsWithin({ normal: mm(0.8), tolerance: 0.01, crib: dinCrib() }).length // 42
  */
 export function wheelsWithin(of: {
   readonly normal: Mm;
@@ -100,4 +100,78 @@ export function wheelsWithin(of: {
     })
     .filter(({ error }) => Math.abs(error) <= of.tolerance + HAIR)
     .sort((a, b) => Math.abs(a.error) - Math.abs(b.error));
+}
+
+/**
+ * Whether a wheel leaves the pattern that is asked for.
+ *
+ *     same kind and same points; a diagonal of the same hand, where both hands are known
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | made | pattern the wheel leaves | - | |
+ * | asked | pattern asked for | - | |
+ * | → suits | true where they agree | - | |
+ *
+ * Assumes a hand that is not known may be either.
+ *
+ * @source din-82 (forms, hands, points)
+ * @example suitsPattern({ kind: 'diagonal', hand: 'left' }, { kind: 'diagonal', hand: null }) // true
+ * @example suitsPattern({ kind: 'diamond', points: 'sunk' }, { kind: 'diamond', points: 'raised' }) // false
+ */
+export function suitsPattern(made: Pattern, asked: Pattern): boolean {
+  if (made.kind === 'diagonal' && asked.kind === 'diagonal')
+    return made.hand === null || asked.hand === null || made.hand === asked.hand;
+  return made.kind === asked.kind && formOf(made) === formOf(asked);
+}
+
+/** Wheels of both hands make a pair when nothing else about their teeth differs. */
+const teethOf = (wheel: CribWheel): string =>
+  JSON.stringify([
+    wheel.pitch?.system,
+    wheel.pitch?.value,
+    wheel.alongRim,
+    wheel.teeth,
+    wheel.proven,
+    wheel.helix,
+    wheel.included,
+    wheel.size.diameter,
+  ]);
+
+const pairOf = (left: CribWheel, right: CribWheel): CribWheel => ({
+  ...left,
+  name: `${left.name} + ${right.name}`,
+  pattern: { kind: 'diamond', points: 'raised' },
+  size: { ...left.size, face: mm(Math.min(left.size.face, right.size.face)) },
+});
+
+const handed = (wheel: CribWheel, hand: 'left' | 'right'): boolean =>
+  wheel.pattern.kind === 'diagonal' && wheel.pattern.hand === hand;
+
+/**
+ * The crib with a diamond pair for every left-hand wheel that has a right-hand fellow.
+ *
+ *     left + right of one pitch, count, diameter and tooth angle → diamond, raised points
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | crib | the wheels | - | |
+ * | → crib | the same wheels, then the pairs | - | |
+ *
+ * Assumes the narrower face of a pair is the one that counts; a wheel is offered with one fellow only.
+ *
+ * @source din-82 (crossed helices, points raised, from a pair of wheels)
+ * @example withPairs(dinCrib()).length // 288
+ */
+export function withPairs(crib: readonly CribWheel[]): readonly CribWheel[] {
+  const fellows = new Map<string, CribWheel[]>();
+  for (const wheel of crib) {
+    const key = teethOf(wheel);
+    if (handed(wheel, 'right')) fellows.set(key, [...(fellows.get(key) ?? []), wheel]);
+  }
+  const pairs = crib.flatMap((wheel) => {
+    const fellow = handed(wheel, 'left') ? fellows.get(teethOf(wheel))?.shift() : undefined;
+    return fellow === undefined ? [] : [pairOf(wheel, fellow)];
+  });
+  return [...crib, ...pairs];
 }

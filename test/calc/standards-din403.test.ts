@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { cribPitch } from '../../src/calc/crib.ts';
+import { cribPitch, withPairs } from '../../src/calc/crib.ts';
 import {
   DIN_403,
   DIN_PITCHES,
@@ -54,13 +54,24 @@ describe('DIN 403', () => {
     expect(coarse).toBe('1504 F 16');
   });
 
-  it('is a crib of every form, diamonds from one wheel or from a pair', () => {
-    const diamonds = dinCrib().filter(
-      ({ pattern }) => pattern.kind === 'diamond' && pattern.points === 'raised',
-    );
-    expect(diamonds.filter(({ onePiece }) => onePiece)).toHaveLength(36);
-    expect(diamonds.filter(({ onePiece }) => !onePiece)).toHaveLength(36);
-    expect(new Set(dinCrib().map(({ name }) => name)).size).toBe(dinCrib().length);
+  it('is a crib of every form, whose left and right wheels make pairs', () => {
+    const crib = dinCrib();
+    expect(new Set(crib.map(({ name }) => name)).size).toBe(7 * 6 * 6);
+    const pairs = withPairs(crib).slice(crib.length);
+    expect(pairs).toHaveLength(6 * 6);
+    for (const pair of pairs) {
+      expect(pair).toMatchObject({
+        pattern: { kind: 'diamond', points: 'raised' },
+        onePiece: false,
+      });
+      const [left, right] = pair.name.split(' + ').map((name) => crib.find((w) => w.name === name));
+      expect([left?.pattern, right?.pattern]).toEqual([
+        { kind: 'diagonal', hand: 'left' },
+        { kind: 'diagonal', hand: 'right' },
+      ]);
+      expect(left?.teeth).toBe(right?.teeth);
+      expect(left?.size).toEqual(right?.size);
+    }
   });
 
   it('refuses a size or a pitch it does not list', () => {

@@ -16,6 +16,7 @@ export {
 } from './request.ts';
 export {
   type Alternative,
+  checksWith,
   SETUP_FIGURES,
   type SetupFigureName,
   type SetupFigures,

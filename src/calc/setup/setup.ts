@@ -405,9 +405,31 @@ const remediesOf = (w: Worked, checks: readonly Check[]): readonly Remedy[] =>
       knurlWidth: w.load.knurlWidth,
       turns: w.motion.turns,
       surfaceSpeed: w.running?.surfaceSpeed ?? null,
+      speedLimit: w.running?.check.figures['speedLimit']?.value ?? null,
     },
     (request) => checksOf(workOut(request)),
   );
+
+/**
+ * Only the checks of a set-up, for those who try many.
+ *
+ *     checks of setUp({ …request, …change }), without remedies
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | request | what was said, as for setUp | - | |
+ * | change | what is tried instead of it | - | |
+ * | → checks | each fine, watch or stop, with its numbers | - | |
+ *
+ * Assumes what setUp assumes.
+ *
+ * @source whole-tooth (blank)
+ * @source force-model (what the wheels press on)
+ * @example checksWith({ pattern: { kind: 'straight' }, pitch: { system: 'tpi', value: 21 }, alongRim: false, counted: null, proven: null, helix: null, tilt: null, included: DEFAULT_INCLUDED, stock: inch(1), finish: null, asIs: false, wantedTeeth: null, knurlClass: null, fill: null, material: materialById('steel-lowC-CD'), hardness: null, process: null, wheel: DEFAULT_WHEEL, edge: null, pin: 'hardened', pinDiameter: null, onePiece: false, length: null, stickout: null, support: 'chuck', layout: null, stockLength: null, bore: null, plug: false, feed: null, speed: null, rotation: null, turns: null, batch: 1, runout: null, machine: null, growth: growthBeforeResults() }, { fill: 0.99 }).filter((check) => check.state === 'stop').map((check) => check.name) // ["fill"]
+ */
+export function checksWith(request: SetupRequest, change: Partial<SetupRequest>): readonly Check[] {
+  return checksOf(workOut({ ...request, ...change }));
+}
 
 /**
  * The whole set-up from what an operator knows: blank, tooth, motion, checks and cautions.

@@ -7,32 +7,27 @@ import { DP_BY_PREFERENCE, DP_WHEEL_SIZES, type DpWheelSize } from './ansi.ts';
 import { DIN_82, DIN_FORMS, DIN_INCLUDED, DIN_PITCHES, type DinWheelForm } from './din82.ts';
 import { DIN_403, type DinWheelSize, dinWheelCode, dinWheelTeeth } from './din403.ts';
 
-type Tool = {
-  readonly pattern: Pattern;
-  readonly onePiece: boolean;
-  readonly wheels: readonly [DinWheelForm, ...DinWheelForm[]];
-};
+type Tool = { readonly pattern: Pattern; readonly wheel: DinWheelForm };
 
-/** Every way the standard has of making its forms without swivelling a wheel. */
-const TOOLS: readonly Tool[] = DIN_FORMS.flatMap((form) =>
-  DIN_82[form].tools.flatMap(({ wheels: [first, ...rest], setOver }) => {
-    if (first === undefined || setOver) return [];
-    const { pattern } = DIN_82[form];
-    const crossed = pattern.kind === 'diamond' || pattern.kind === 'square';
-    return [{ pattern, onePiece: crossed && rest.length === 0, wheels: [first, ...rest] as const }];
-  }),
-);
+/** Every wheel that makes a form by itself, unswivelled. */
+const TOOLS: readonly Tool[] = DIN_FORMS.flatMap((form) => {
+  const { pattern, tools } = DIN_82[form];
+  return tools.flatMap(({ wheels: [wheel, fellow], setOver }) =>
+    wheel === undefined || fellow !== undefined || setOver ? [] : [{ pattern, wheel }],
+  );
+});
+
+const isCrossed = ({ kind }: Pattern): boolean => kind === 'diamond' || kind === 'square';
 
 const dinWheel = (tool: Tool, size: DinWheelSize, width: Mm, t: number): CribWheel => {
   const { diameter, bore } = size;
-  const forms = tool.wheels.join(' + ');
   return {
-    name: `${forms} ${dinWheelCode({ diameter, width, pitch: mm(t) })} DIN 403`,
+    name: `${tool.wheel} ${dinWheelCode({ diameter, width, pitch: mm(t) })} DIN 403`,
     pattern: tool.pattern,
-    onePiece: tool.onePiece,
+    onePiece: isCrossed(tool.pattern),
     pitch: { system: 'metric', value: t },
     alongRim: false,
-    teeth: dinWheelTeeth(tool.wheels[0], diameter, mm(t)),
+    teeth: dinWheelTeeth(tool.wheel, diameter, mm(t)),
     proven: null,
     helix: null,
     included: DIN_INCLUDED,
@@ -42,7 +37,7 @@ const dinWheel = (tool: Tool, size: DinWheelSize, width: Mm, t: number): CribWhe
 };
 
 /**
- * The crib of a shop that has entered no metric wheels: every wheel and pair of the standard.
+ * The crib of a shop that has entered no metric wheels: every wheel of the standard.
  *
  *     forms × diameters × widths × pitches
  *
@@ -50,11 +45,11 @@ const dinWheel = (tool: Tool, size: DinWheelSize, width: Mm, t: number): CribWhe
  * | --- | --- | --- | --- |
  * | → crib | the wheels | - | |
  *
- * Assumes the teeth the standard prints, the nominal diameter, chamfered edges and 90° teeth.
+ * Assumes the teeth the standard prints, the nominal diameter, chamfered edges and 90° teeth; pairs come from withPairs.
  *
  * @source din-403 (sizes and teeth)
  * @source din-82 (which wheels make which form)
- * @example dinCrib().length // 288
+ * @example dinCrib().length // 252
  */
 export function dinCrib(): readonly CribWheel[] {
   return TOOLS.flatMap((tool) =>
@@ -68,7 +63,6 @@ const DP_PATTERNS: readonly (readonly [name: string, pattern: Pattern])[] = [
   ['straight', { kind: 'straight' }],
   ['diagonal left', { kind: 'diagonal', hand: 'left' }],
   ['diagonal right', { kind: 'diagonal', hand: 'right' }],
-  ['diamond pair', { kind: 'diamond', points: 'raised' }],
 ];
 
 const dpWheel = (
@@ -96,7 +90,7 @@ const dpWheel = (
 /**
  * The crib of a shop that has entered no inch wheels: diametral-pitch wheels of the listed sizes.
  *
- *     pitches × sizes × straight, diagonal left and right, diamond pair
+ *     pitches × sizes × straight, diagonal left and right
  *
  * | symbol | meaning | unit | range |
  * | --- | --- | --- | --- |
@@ -106,7 +100,7 @@ const dpWheel = (
  *
  * @source asme-b94.6 (pitches)
  * @source asme-b94.6-memory (sizes)
- * @example dpCrib().length // 64
+ * @example dpCrib().length // 48
  */
 export function dpCrib(): readonly CribWheel[] {
   return DP_BY_PREFERENCE.flatMap((dp) =>
