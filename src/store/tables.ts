@@ -70,6 +70,10 @@ export type WheelTable = RegisterColumns & {
   kind: string;
   pitch_system: string | null;
   pitch_value: number | null;
+  /** 1: the label's pitch is meant along the rim. */
+  along_rim: number;
+  /** Pitch round the rim that a diameter and its count have proven. */
+  proven: number | null;
   teeth: number | null;
   diameter: number | null;
   face: number | null;
@@ -150,6 +154,8 @@ export type EffectTable = OfShop & {
   /** Not before then. While a process is at it: when its lease ends. */
   due_at: Moment;
   attempts: number;
+  /** When it was first tried: after a day of trying it is given up. */
+  first_at: Moment | null;
   worker: string | null;
   delivered_at: Moment | null;
   given_up_at: Moment | null;

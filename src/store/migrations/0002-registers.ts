@@ -47,6 +47,8 @@ const wheels = async (db: Kysely<unknown>, c: Columns): Promise<void> => {
     .addColumn('kind', c.text, (col) => col.notNull())
     .addColumn('pitch_system', c.text)
     .addColumn('pitch_value', c.real)
+    .addColumn('along_rim', c.whole, (col) => col.notNull())
+    .addColumn('proven', c.real)
     .addColumn('teeth', c.whole)
     .addColumn('diameter', c.real)
     .addColumn('face', c.real)

@@ -71,6 +71,7 @@ const effects = async (db: Kysely<unknown>, c: Columns): Promise<void> => {
     .addColumn('made_at', c.whole, (col) => col.notNull())
     .addColumn('due_at', c.whole, (col) => col.notNull())
     .addColumn('attempts', c.whole, (col) => col.notNull())
+    .addColumn('first_at', c.whole)
     .addColumn('worker', c.text)
     .addColumn('delivered_at', c.whole)
     .addColumn('given_up_at', c.whole)

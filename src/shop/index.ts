@@ -1,0 +1,89 @@
+/** What a shop remembers: asked of one shop, changed whole or not at all. */
+export {
+  type CardDraft,
+  type CardsWanted,
+  findCard,
+  type KeptCard,
+  keepCard,
+  latestCards,
+} from './cards.ts';
+export { type Claimed, claimEffects, type NoteOf } from './claims.ts';
+export { CODE_SIGNS, readCode } from './codes.ts';
+export type { CellFault } from './csv/cells.ts';
+export {
+  type Imported,
+  type ImportOptions,
+  type ImportReport,
+  importSheet,
+  type RowReport,
+} from './csv/import.ts';
+export { MACHINE_SHEET } from './csv/machineSheet.ts';
+export { type FileFault, MOST_ROWS } from './csv/readTable.ts';
+export { WHEEL_SHEET } from './csv/wheelSheet.ts';
+export { type GivenUp, givenUp, givenUpSeen, type QueuedEffect, queueEffects } from './effects.ts';
+export {
+  type Entered,
+  enterShop,
+  type PersonOutside,
+  type ShopOutside,
+  shopOf,
+} from './enter.ts';
+export { type ExportFile, exportCsv, exportJson, machinesCsv, wheelsCsv } from './export.ts';
+export {
+  listGroups,
+  nameGroupRole,
+  type RoleGroup,
+  removeGroup,
+  rolesOfGroups,
+} from './groups.ts';
+export { type HistoryLine, historyOf, type Subject, type Verb } from './history.ts';
+export { type Acted, forgetAnswers, once } from './interactions.ts';
+export { BARE_MACHINE, DIALS, type Dial, MACHINES, type Machine } from './machines.ts';
+export { MATERIALS_OF_SHOP, type ShopMaterial } from './materials.ts';
+export {
+  type Attempt,
+  type Deliver,
+  type Outbox,
+  type OutboxOptions,
+  openOutbox,
+} from './outbox.ts';
+export {
+  findPerson,
+  listPeople,
+  nameRole,
+  personById,
+  removePerson,
+  type ShopPerson,
+  whoMay,
+} from './people.ts';
+export {
+  addTo,
+  changeIn,
+  findIn,
+  type Kept,
+  listOf,
+  type Register,
+  removeFrom,
+} from './register.ts';
+export type { Done, ShopRefusal, Use } from './result.ts';
+export { atLeast, ROLES, type Role } from './roles.ts';
+export { addRule, RULES, type Rule, type RuleScope, rulesOnCard } from './rules.ts';
+export {
+  changeSetting,
+  SETTING_NAMES,
+  type SettingName,
+  type Settings,
+  settingsOf,
+} from './settings.ts';
+export { type ShopChange, type ShopView, type ShopWords, viewShop } from './view.ts';
+export {
+  BARE_WHEEL,
+  EDGES,
+  PIN_MATERIALS,
+  WHEEL_FORMS,
+  WHEEL_STATES,
+  WHEELS,
+  type Wheel,
+  type WheelForm,
+  type WheelState,
+} from './wheels.ts';

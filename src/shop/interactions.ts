@@ -1,0 +1,59 @@
+import type { Store } from '../store/index.ts';
+import type { ShopChange } from './view.ts';
+
+export type Acted<A> = {
+  /** False: it was done before, and this is the answer of then. */
+  readonly first: boolean;
+  readonly answer: A;
+};
+
+/**
+ * Acts on an interaction once, however often the platform sends it and whichever process gets it.
+ * The answer is kept in the same change as what was done, and given again to whoever comes later;
+ * who comes at the same moment waits until the first is through.
+ */
+export const once = async <A>(
+  change: ShopChange,
+  interaction: string,
+  act: () => Promise<A>,
+): Promise<Acted<A>> => {
+  const mine = await change.db
+    .insertInto('interaction')
+    .values({ shop: change.id, id: interaction, at: change.at, answer: null })
+    .onConflict((oc) => oc.columns(['shop', 'id']).doNothing())
+    .returning('id')
+    .executeTakeFirst();
+  if (mine === undefined) return { first: false, answer: await answerOf<A>(change, interaction) };
+  const answer = await act();
+  await change.db
+    .updateTable('interaction')
+    .set({ answer: JSON.stringify(answer) })
+    .where('shop', '=', change.id)
+    .where('id', '=', interaction)
+    .execute();
+  return { first: true, answer };
+};
+
+const answerOf = async <A>(change: ShopChange, interaction: string): Promise<A> => {
+  const { answer } = await change.db
+    .selectFrom('interaction')
+    .select('answer')
+    .where('shop', '=', change.id)
+    .where('id', '=', interaction)
+    .executeTakeFirstOrThrow();
+  if (answer === null) throw new Error('an interaction was kept without its answer');
+  return JSON.parse(answer) as A;
+};
+
+/** How long an answer is given again. Judgement: platforms repeat within the hour, not the week. */
+export const REPEATS_MS = 7 * 24 * 3_600_000;
+
+/** Forgets answers that nobody will ask for again. What was done stays. */
+export const forgetAnswers = async (store: Store, at: number): Promise<void> => {
+  await store.transact(async (tx) => {
+    await tx
+      .deleteFrom('interaction')
+      .where('at', '<', at - REPEATS_MS)
+      .execute();
+  });
+};
