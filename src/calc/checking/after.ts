@@ -19,6 +19,8 @@ export type AfterCheck = {
   readonly right: boolean;
   /** What is off, the clearest first. */
   readonly off: readonly OffFigure[];
+  /** How far the growth factor is off what was expected, in standard deviations. */
+  readonly growthOffBy: number | null;
   readonly spoiled: boolean;
   readonly rescue: Rescue | null;
   readonly thisPart: readonly PartMove<ThisPartMoveId>[];
@@ -114,6 +116,7 @@ export function checkAfter(request: SetupRequest, part: MeasuredPart): AfterChec
       .map(({ teeth, diameter }) => ({ toothCount: teeth, blankDiameter: diameter })),
     right: seen.off.length === 0 && !bad,
     off: seen.off,
+    growthOffBy: seen.judged.growth === null ? null : Math.abs(seen.judged.growth.by),
     spoiled,
     rescue,
     thisPart: thisPartMoves(seen, rescue),

@@ -1,4 +1,5 @@
 import { type CheckOf, figure } from '../check.ts';
+import { FORCE_FACTOR } from '../force/index.ts';
 import { type Form, formedRound, sharpHeight, solidShare } from '../growth/index.ts';
 import { type Mm, mm, type Rad, rad, within } from '../units.ts';
 
@@ -6,8 +7,6 @@ import { type Mm, mm, type Rad, rad, within } from '../units.ts';
 export const FLAT_READING: Mm = mm(0.02);
 /** A difference under so many standard deviations of the reading is none. Judgement. */
 const NO_DIFFERENCE = 2;
-/** The force is known to this factor, so the deflection is too. */
-const FORCE_FACTOR = 2;
 
 /** Flats on the crests at two places along the knurl: towards the chuck and away from it. */
 export type FlatsAlong = { readonly near: Mm; readonly far: Mm; readonly distance: Mm };

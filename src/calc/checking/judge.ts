@@ -138,8 +138,8 @@ const growthOff = (seen: GrowthSeen): { readonly factor: number; readonly off: O
 
 const fadeOf = (part: MeasuredPart, request: SetupRequest, plan: SetupResult): Fade | null => {
   if (part.ends === null) return null;
-  const all: Readonly<Record<string, { readonly value: number } | null>> = plan.figures;
-  const deflection = all['deflection']?.value ?? null;
+  const bending = plan.checks.find(({ name }) => name === 'bending');
+  const deflection = bending?.figures['depthDifference']?.value ?? null;
   return fadeAlong({
     form: formOf(request.pattern),
     blank: part.blank,
