@@ -53,6 +53,8 @@ export type Stopped = {
   readonly knurlWidth: Mm | null;
   readonly turns: number | null;
   readonly surfaceSpeed: number | null;
+  /** Surface speed that the check of the speed calls fine. */
+  readonly speedLimit: number | null;
 };
 
 /** Largest value under `most` that passes, in whole steps; null where not even `least` does. */
@@ -108,7 +110,9 @@ const moreTurns = (of: Stopped, passes: Passes): Try | null => {
 const slower = (of: Stopped, passes: Passes): Try | null => {
   if (of.surfaceSpeed === null) return null;
   const at = (speed: number) => ({ speed: mPerMin(speed), rotation: null });
-  const speed = largest(SLOWEST_SPEED, of.surfaceSpeed, (value) => passes(at(value)));
+  // What stops a pin is no advice while the speed itself is too high.
+  const most = Math.min(of.surfaceSpeed, of.speedLimit ?? of.surfaceSpeed);
+  const speed = largest(SLOWEST_SPEED, most, (value) => passes(at(value)));
   return speed === null
     ? null
     : { number: figure(speed, 'm/min'), words: `speed ${speed} m/min`, change: at(speed) };
@@ -116,13 +120,14 @@ const slower = (of: Stopped, passes: Passes): Try | null => {
 
 const narrowerWheel = (of: Stopped, passes: Passes): Try | null => {
   const { wheel } = of.request;
+  const bevel = wheel.bevel === null ? '' : ` bevel ${wheel.bevel} mm`;
   const start = (Math.ceil(wheel.face / FACE_STEP) - 1) * FACE_STEP;
   for (let face = start; face >= NARROWEST_FACE; face -= FACE_STEP) {
     const change = { wheel: { ...wheel, face: mm(face) } };
     if (passes(change))
       return {
         number: figure(face, 'mm'),
-        words: `wheel ${wheel.diameter}x${face}x${wheel.bore} mm`,
+        words: `wheel ${wheel.diameter}x${face}x${wheel.bore} mm${bevel}`,
         change,
       };
   }
