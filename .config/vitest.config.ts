@@ -5,6 +5,7 @@ export default defineConfig({
   root: fileURLToPath(new URL('..', import.meta.url)),
   test: {
     include: ['test/**/*.test.ts'],
+    globalSetup: ['test/support/globalSetup.ts'],
     pool: 'forks',
     testTimeout: 30_000,
     hookTimeout: 30_000,

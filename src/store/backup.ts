@@ -45,13 +45,11 @@ const linesOfServer = async (url: string, draft: string): Promise<void> => {
 
 const linesOfFile = async (file: string, draft: string): Promise<void> => {
   if (!fs.existsSync(file)) throw new BackupFault('absent', file);
-  const { write, view, close } = await openSqlite(file);
-  const own = view();
+  const { write, snapshot, close } = await openSqlite(file);
   try {
     const form = (await stepsDone(write)).at(-1) ?? KNOWN_FORM;
-    await own.transaction().execute((rows: Reader) => writeLines(rows, form, draft));
+    await snapshot((view: Reader) => writeLines(view, form, draft));
   } finally {
-    await own.destroy();
     await close();
   }
 };

@@ -39,7 +39,14 @@ export const openPostgres = (url: string, options: PostgresOptions = {}): Postgr
   const pool = newPool(url, options);
   const guards: Guards = { translate: fromPostgres, watch: options.watch };
   const db = new Kysely<Tables>({ dialect: postgresDialect(pool, guards) });
-  return { db, close: () => db.destroy() };
+  return {
+    db,
+    close: async () => {
+      await db.destroy();
+      // What was never used the query builder does not close.
+      if (!pool.ended) await pool.end();
+    },
+  };
 };
 
 const newPool = (url: string, options: PostgresOptions): pg.Pool => {

@@ -23,8 +23,8 @@ export type SqliteOptions = {
 export type SqliteStore = {
   readonly write: Kysely<Tables>;
   readonly read: Kysely<Tables>;
-  /** A view of its own, for as long as it is used: what is written meanwhile does not show in it. */
-  readonly view: () => Kysely<Tables>;
+  /** A view of one moment: what is written meanwhile does not show in it. */
+  readonly snapshot: <T>(work: (view: Kysely<Tables>) => Promise<T>) => Promise<T>;
   readonly close: () => Promise<void>;
 };
 
@@ -35,28 +35,30 @@ export const openSqlite = async (
 ): Promise<SqliteStore> => {
   const guards: Guards = { translate: fromSqlite, watch: options.watch };
   const writer = await openFile(file);
+  const reader = openReader(file);
   const stillThere = sameFile(file);
-  const use = (db: Database.Database, begin: SqliteUse['begin']): Kysely<Tables> => {
-    const waitMs = options.waitMs ?? WAIT_MS;
-    return new Kysely({ dialect: sqliteDialect({ db, begin, waitMs, stillThere }, guards) });
-  };
+  const waitMs = options.waitMs ?? WAIT_MS;
+  const use = (db: Database.Database, begin: SqliteUse['begin']): Kysely<Tables> =>
+    new Kysely({ dialect: sqliteDialect({ db, begin, waitMs, stillThere }, guards) });
   const write = use(writer, 'begin immediate');
-  const read = use(
-    ours(() => openReader(file)),
-    'begin',
-  );
+  const read = use(reader, 'begin');
   return {
     write,
     read,
-    view: () =>
-      use(
-        ours(() => openReader(file)),
-        'begin',
-      ),
+    snapshot: async (work) => {
+      const own = openReader(file);
+      try {
+        return await use(own, 'begin').transaction().execute(work);
+      } finally {
+        own.close();
+      }
+    },
     close: async () => {
-      // The writer last: it is the one that folds the log back into the file.
-      await read.destroy();
-      await write.destroy();
+      // Waits for what is under way. Then the files, which the query builder leaves open; the
+      // writer last, since it folds the log back into the file.
+      await Promise.all([read.destroy(), write.destroy()]);
+      reader.close();
+      writer.close();
     },
   };
 };
@@ -96,11 +98,12 @@ const noLog = (file: string, mode: string): StoreUnavailable =>
     new Error(`${file} lies where no write-ahead log can be kept (it stays ${mode}).`),
   );
 
-const openReader = (file: string): Database.Database => {
-  const db = new Database(file, { timeout: BLOCKING_WAIT_MS, fileMustExist: true });
-  db.pragma('query_only = on');
-  return db;
-};
+const openReader = (file: string): Database.Database =>
+  ours(() => {
+    const db = new Database(file, { timeout: BLOCKING_WAIT_MS, fileMustExist: true });
+    db.pragma('query_only = on');
+    return db;
+  });
 
 const makeFolder = (folder: string): void => {
   try {

@@ -89,8 +89,8 @@ class SqliteDriver implements Driver {
     return Promise.resolve();
   }
 
+  /** Who opened the file closes it. */
   destroy(): Promise<void> {
-    this.#use.db.close();
     return Promise.resolve();
   }
 }

@@ -59,19 +59,13 @@ export const migrate = async (place: StorePlace): Promise<readonly string[]> => 
 };
 
 const sqliteStore = async (file: string, options: StoreOptions): Promise<Store> => {
-  const { write, read, view, close } = await openSqlite(file, options);
+  const { write, read, snapshot, close } = await openSqlite(file, options);
   const run = changeRunner();
   return {
     engine: 'sqlite',
     read,
     transact: (work, how) => run(() => write.transaction().execute(work), how),
-    snapshot: async (work) => {
-      const own = view();
-      return await own
-        .transaction()
-        .execute(work)
-        .finally(() => own.destroy());
-    },
+    snapshot,
     close,
   };
 };

@@ -1,0 +1,3 @@
+import { storeContract } from './contract.ts';
+
+storeContract('sqlite');
