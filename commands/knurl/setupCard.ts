@@ -1,6 +1,7 @@
 import {
   CHOSEN_CAUTIONS,
   type Check,
+  type CheckName,
   DWELL_TURNS,
   MATERIALS,
   materialById,
@@ -68,7 +69,10 @@ const blankLines = (w: Worked): readonly Line[] => {
   const { diameter: blankDiameter, teeth: toothCount } = result.blank;
   const lines: Line[] = [];
   if (worstStop(result.checks) !== null)
-    lines.push(line('wouldTurnTo', { blankDiameter, toothCount }));
+    lines.push(
+      ...(result.remedies.length > 0 ? [line('passesWith', { remedies: result.remedies })] : []),
+      line('wouldTurnTo', { blankDiameter, toothCount }),
+    );
   lines.push(line('windowTracks', result.window));
   if (request.knurlClass !== null)
     lines.push(line('classWindow', { knurlClass: request.knurlClass }));
@@ -206,6 +210,27 @@ const remedyChoices = ({ context, result }: Worked): readonly Choice[] =>
     words: reworded(context, REMEDY_REPLACES[kind], words),
   }));
 
+const isStopped = (checks: readonly Check[], name: CheckName): boolean =>
+  checks.some((check) => check.name === name && check.state === 'stop');
+
+/** A stop that something said brought about: the line without it. */
+const wayBackChoices = ({ context, result, said }: Worked): readonly Choice[] => {
+  const stopped = (name: CheckName): boolean => isStopped(result.checks, name);
+  const choices: Choice[] = [];
+  if (stopped('speed') && (said.speed !== undefined || said.rotation !== undefined))
+    choices.push({
+      label: label('ownSpeed', {}),
+      words: reworded(context, ['speed', 'rotation'], ''),
+    });
+  if (stopped('material'))
+    choices.push({ label: label('cutInstead', {}), words: reworded(context, ['process'], 'cut') });
+  if (stopped('edge') && said.edge !== undefined)
+    choices.push({ label: label('bevelled', {}), words: reworded(context, ['edge'], 'beveled') });
+  if (stopped('fill') && said.fill !== undefined)
+    choices.push({ label: label('ownFill', {}), words: reworded(context, ['fill'], '') });
+  return choices;
+};
+
 /** The shortest name that reads as this row of the table. */
 const shortName = (id: string): string =>
   MATERIALS.find((material) => material.id === id)?.aliases[0] ?? id;
@@ -228,6 +253,7 @@ const choices = (w: Worked): readonly Choice[] => {
   const turned = shown === context.units ? others : context.units;
   return [
     ...remedyChoices(w),
+    ...wayBackChoices(w),
     ...blankChoices(w).slice(0, 1),
     ...(took === null
       ? []

@@ -28,6 +28,10 @@ export type Lines = CheckLines & {
   turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
   leaveAt: { readonly blankDiameter: Mm; readonly toothCount: number };
   stopped: { readonly check: Check };
+  /** The smallest changes that lift a stop. */
+  passesWith: {
+    readonly remedies: readonly { readonly kind: RemedyKind; readonly number: Figure | null }[];
+  };
   wouldTurnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
   windowTracks: Window;
   leaveItOption: {
@@ -99,6 +103,10 @@ export type Labels = {
   smaller: { readonly toothCount: number; readonly blankDiameter: Mm };
   larger: { readonly toothCount: number; readonly blankDiameter: Mm };
   remedy: { readonly kind: RemedyKind; readonly number: Figure | null };
+  ownSpeed: Record<never, never>;
+  cutInstead: Record<never, never>;
+  bevelled: Record<never, never>;
+  ownFill: Record<never, never>;
   otherUnits: { readonly units: 'in' | 'mm' };
   words: { readonly words: string };
 };

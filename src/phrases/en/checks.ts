@@ -170,19 +170,19 @@ export const checks: Book['checks'] = {
   },
   pinHeat: {
     label: 'Pin heat',
-    say: (check, show) => {
-      const index = show.number(value(check.figures, 'pinHeatIndex'));
+    say: (check) => {
+      const index = value(check.figures, 'pinHeatIndex').toFixed(2);
       const warm = check.figures['wheelWarmUp'];
       const rise = warm ? `, wheel ${warm.value.toFixed(0)} K warmer` : '';
       switch (check.reason) {
         case 'cool':
           return `${index} of the trade's limit${rise}`;
         case 'warm':
-          return `${index} times the trade's limit${rise}: oil well, let it cool`;
+          return `${index} of the trade's limit${rise}: oil well, let it cool`;
         case 'hotButShort':
-          return `${index} times the trade's limit, but over quickly${rise}`;
+          return `${index} of the trade's limit, but over quickly${rise}`;
         case 'hot':
-          return `${index} times the trade's limit${rise}: the pin seizes; slow down`;
+          return `${index} of the trade's limit${rise}: the pin seizes; slow down`;
       }
     },
   },

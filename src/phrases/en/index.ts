@@ -26,6 +26,10 @@ export const en: Book = {
     larger: ({ toothCount, blankDiameter }, show) =>
       `Larger: ${show.length(blankDiameter)}, ${String(toothCount)} teeth`,
     remedy: ({ kind, number }, show) => remedyLabel(kind, number, show),
+    ownSpeed: () => 'Run at the usual speed',
+    cutInstead: () => 'Cut it instead',
+    bevelled: () => 'Bevelled wheel',
+    ownFill: () => 'The usual fill',
     otherUnits: ({ units }) => (units === 'mm' ? 'Show mm first' : 'Show inches first'),
     words: ({ words }) => words,
   },

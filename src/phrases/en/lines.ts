@@ -3,9 +3,11 @@ import type { Book } from '../book.ts';
 import type { Show } from '../show.ts';
 import { checkLines } from './checkLines.ts';
 import { checks } from './checks.ts';
+import { remedyLabel } from './remedies.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 
 const teeth = (count: number): string => `${String(count)} ${count === 1 ? 'tooth' : 'teeth'}`;
+const inSentence = (label: string): string => label.charAt(0).toLowerCase() + label.slice(1);
 const under = (error: number): string => (error < 0 ? 'under' : 'over');
 
 /** The sentence of whatever check this is. */
@@ -22,6 +24,8 @@ export const lines: Book['lines'] = {
   leaveAt: ({ blankDiameter, toothCount }, show) =>
     `Leave it at ${show.length(blankDiameter)}: ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
   stopped: ({ check }, show) => `Do not run this. ${stopText(check, show)}`,
+  passesWith: ({ remedies }, show) =>
+    `Would pass: ${remedies.map(({ kind, number }) => inSentence(remedyLabel(kind, number, show))).join('; or ')}.`,
   wouldTurnTo: ({ blankDiameter, toothCount }, show) =>
     `Worked out for ${show.length(blankDiameter)}, ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
   windowTracks: ({ low, high }, show) => `${show.span(low, high)} tracks.`,

@@ -33,6 +33,24 @@ const amount = (value: number, unit: string, show: Show): string => {
   }
 };
 
+type Because = (refusal: OutOfRangeRefusal, print: (value: number) => string) => string;
+
+/** Where both values come from the person, the sentence names both. */
+const BECAUSE: Readonly<Record<string, Because>> = {
+  bore: ({ value, max }, print) =>
+    `The bore, ${print(value)}, does not fit into the blank, ${print(max)}. Type a smaller bore, or the right diameter.`,
+  wall: ({ value, min }, print) =>
+    `The wall left under the teeth, ${print(value)}, is thinner than the tooth is high, ${print(min)}. Take a finer pitch, less fill or a smaller bore.`,
+  stickout: ({ value, min, max }, print) =>
+    value < min
+      ? `The stickout, ${print(value)}, is shorter than the knurl, ${print(min)}. Type a longer stickout or a shorter knurl.`
+      : `The stickout, ${print(value)}, is longer than the bar can be, ${print(max)}. Type a shorter one.`,
+  crestDiameter: ({ value, min, max }, print) =>
+    value < min
+      ? `The crest, ${print(value)}, is smaller than the blank it grew from, ${print(min)}. Measure over several crests and type it again.`
+      : `The crest, ${print(value)}, is larger than this tooth can raise it, ${print(max)}. Measure it again, or check the blank.`,
+};
+
 const outOfRange = (refusal: OutOfRangeRefusal, show: Show): string => {
   const { what, value, min, max, unit } = refusal;
   if (what === 'textLength')
@@ -40,6 +58,8 @@ const outOfRange = (refusal: OutOfRangeRefusal, show: Show): string => {
   if (Number.isNaN(value)) return `The ${thing(what)} is missing.`;
   if (what === 'fill')
     return `The ${thing(what)} of ${show.percent(value)} is outside ${show.percent(min)} to ${show.percent(max)}. Type one between them, such as fill 85%.`;
+  const because = BECAUSE[what];
+  if (because !== undefined) return because(refusal, (each) => amount(each, unit, show));
   const limits = isOpen(max)
     ? `at least ${amount(min, unit, show)}`
     : `${amount(min, unit, show)} to ${amount(max, unit, show)}`;
