@@ -5,8 +5,8 @@ import {
   type Engine,
   migrate,
   openStore,
-  StoreUnavailable,
   type Store,
+  StoreUnavailable,
   TABLES,
   type Tables,
 } from '../../src/store/index.ts';
@@ -22,7 +22,12 @@ const SHOP: Tables['shop'] = {
 };
 
 const addShop = (store: Store, id = 's1') =>
-  store.transact((tx) => tx.insertInto('shop').values({ ...SHOP, id, outside: id }).execute());
+  store.transact((tx) =>
+    tx
+      .insertInto('shop')
+      .values({ ...SHOP, id, outside: id })
+      .execute(),
+  );
 
 const shopIds = async (store: Store): Promise<string[]> =>
   (await store.read.selectFrom('shop').select('id').orderBy('id').execute()).map(({ id }) => id);
@@ -46,7 +51,12 @@ const values = (engine: Engine): void => {
     const text = fc.string({ unit: 'grapheme' }).map((said) => said.replaceAll('\0', ''));
     const property = fc.asyncProperty(real, whole, text, async (face, parts, place) => {
       count += 1;
-      const row = { ...wheelRow(`w${count}`), face: face === 0 ? 0 : face, parts_run: parts, place };
+      const row = {
+        ...wheelRow(`w${count}`),
+        face: face === 0 ? 0 : face,
+        parts_run: parts,
+        place,
+      };
       await store.transact((tx) => tx.insertInto('wheel').values(row).execute());
       const back = await store.read
         .selectFrom('wheel')
@@ -78,7 +88,11 @@ const values = (engine: Engine): void => {
         .values(names.map((name, at) => ({ ...wheelRow(`w${at}`), name, name_key: name })))
         .execute(),
     );
-    const sorted = await store.read.selectFrom('wheel').select('name').orderBy('name_key').execute();
+    const sorted = await store.read
+      .selectFrom('wheel')
+      .select('name')
+      .orderBy('name_key')
+      .execute();
     const byBytes = [...names].sort((a, b) => Buffer.compare(Buffer.from(a), Buffer.from(b)));
     expect(sorted.map(({ name }) => name)).toEqual(byBytes);
   });
@@ -146,7 +160,10 @@ const changes = (engine: Engine): void => {
     const id = await store.transact(async (tx) => {
       runs += 1;
       const wanted = runs === 1 ? 's1' : 's2';
-      await tx.insertInto('shop').values({ ...SHOP, id: wanted, outside: wanted }).execute();
+      await tx
+        .insertInto('shop')
+        .values({ ...SHOP, id: wanted, outside: wanted })
+        .execute();
       return wanted;
     });
     expect([id, runs]).toEqual(['s2', 2]);
@@ -208,7 +225,12 @@ const form = (engine: Engine): void => {
     const { store, place } = await newRecords(engine, { fresh: true });
     await addShop(store);
     const newer = { name: '9999-from-the-future', timestamp: '2031-01-01T00:00:00.000Z' };
-    await store.transact((tx) => tx.insertInto('form_step' as never).values(newer as never).execute());
+    await store.transact((tx) =>
+      tx
+        .insertInto('form_step' as never)
+        .values(newer as never)
+        .execute(),
+    );
     await expect(openStore(place)).rejects.toThrow(
       /newer Wholetooth.*9999-from-the-future.*Start the newer program/su,
     );
