@@ -32,7 +32,7 @@ const dinWheel = (tool: Tool, size: DinWheelSize, width: Mm, t: number): CribWhe
     helix: null,
     included: DIN_INCLUDED,
     size: { diameter, face: width, bore, bevel: null },
-    edge: 'bevelled',
+    edge: null,
   };
 };
 
@@ -45,7 +45,7 @@ const dinWheel = (tool: Tool, size: DinWheelSize, width: Mm, t: number): CribWhe
  * | --- | --- | --- | --- |
  * | → crib | the wheels | - | |
  *
- * Assumes the teeth the standard prints, the nominal diameter, chamfered edges and 90° teeth; pairs come from withPairs.
+ * Assumes the teeth the standard prints, the nominal diameter and 90° teeth; the edges are to be had either way, and pairs come from withPairs.
  *
  * @source din-403 (sizes and teeth)
  * @source din-82 (which wheels make which form)
@@ -83,7 +83,7 @@ const dpWheel = (
     helix: null,
     included: DEFAULT_INCLUDED,
     size: { diameter, face, bore, bevel: null },
-    edge: 'bevelled',
+    edge: null,
   };
 };
 
@@ -96,7 +96,7 @@ const dpWheel = (
  * | --- | --- | --- | --- |
  * | → crib | the wheels | - | |
  *
- * Assumes bevelled edges, 90° teeth as everywhere unless said, and wheels true on their own fractional blanks.
+ * Assumes 90° teeth as everywhere unless said, edges to be had either way, and wheels true on their own fractional blanks.
  *
  * @source asme-b94.6 (pitches)
  * @source asme-b94.6-memory (sizes)
