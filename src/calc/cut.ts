@@ -7,7 +7,9 @@ import {
   mm,
   mpa,
   type Newton,
+  type NewtonMm,
   newton,
+  newtonMm,
   type Rad,
   within,
 } from './units.ts';
@@ -97,4 +99,25 @@ export function cutKnurl(of: {
     tangentialForce: newton(tangential),
     radialForce: newton(CUT_RADIAL_SHARE * tangential),
   };
+}
+
+/**
+ * Torque on the work from a cut knurl's chip.
+ *
+ *     T = Ft D/2
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | Ft (tangentialForce) | cutting force round the work | N | ≥ 0 |
+ * | D (blankDiameter) | diameter of the blank | mm | > 0 |
+ * | → T | torque on the work | N·mm | |
+ *
+ * Assumes the chip is cut from the whole pattern, however many wheels share it.
+ *
+ * @source cut-force (tangential force)
+ * @example cutTorque(newton(59), mm(20)) // 590 N·mm
+ */
+export function cutTorque(tangentialForce: Newton, blankDiameter: Mm): NewtonMm {
+  within('force', tangentialForce, 0, 1e9, 'N');
+  return newtonMm((tangentialForce * blankDiameter) / 2);
 }

@@ -124,6 +124,27 @@ export function feedWindow(width: Mm, pitch: Mm, hardening: HardeningClass): Fee
 }
 
 /**
+ * Turns that each spot gets from a wheel that travels along.
+ *
+ *     N = b/f
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | b (width) | contact width | mm | > 0 |
+ * | f (feed) | feed | mm/rev | > 0 |
+ * | → N | turns | - | |
+ *
+ * Assumes one pass.
+ *
+ * @source feed-window (turns on a spot)
+ * @example turnsOnSpot(mm(6), mmPerRev(0.4)) // 15
+ */
+export function turnsOnSpot(width: Mm, feed: MmPerRev): number {
+  within('feed', feed, Number.MIN_VALUE, 1000, 'mm/rev');
+  return width / feed;
+}
+
+/**
  * Turns of a plunge: the middle of the class's range.
  *
  *     N = ⌈(fewest + most)/2⌉
@@ -257,7 +278,7 @@ export function formedFeedCheck(feed: MmPerRev, window: FeedWindow): CheckOf<'fe
 /**
  * Whether the feed of a cut knurl lies in its range.
  *
- *     0.05 to 0.30 mm/rev fine, else watch
+ *     0.15 mm/rev unless said;  0.05 to 0.30 mm/rev fine, else watch
  *
  * | symbol | meaning | unit | range |
  * | --- | --- | --- | --- |

@@ -113,6 +113,27 @@ export function firstBite(sharpHeight: Mm, share: number): Mm {
 }
 
 /**
+ * Infeed of the first turn of a knurl that is cut, as deep as the groove it has to fall back into.
+ *
+ *     z1 = H1 = 2 δ Hf
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | Hf (sharpHeight) | sharp height | mm | > 0 |
+ * | δ (share) | share of a tooth to be caught | - | 0 to 0.5 |
+ * | → z1 | infeed of the first turn | mm | |
+ *
+ * Assumes a cut takes away what a form pushes up, so nothing rises beside the groove.
+ *
+ * @source first-bite (capture geometry of one flank)
+ * @example firstCutBite(mm(0.6), 0.1) // 0.12 mm
+ */
+export function firstCutBite(sharpHeight: Mm, share: number): Mm {
+  within('share', share, 0, 0.5);
+  return mm(2 * share * sharpHeight);
+}
+
+/**
  * Share of a tooth that a first turn of a given infeed still catches.
  *
  *     δ < H1/(2 Hf),  H1 = Hf (1 − √(1 − 2 z1/Hf))

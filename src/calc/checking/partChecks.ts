@@ -1,6 +1,6 @@
 import { type Check, type CheckOf, figure } from '../check.ts';
 import { fillCheck } from '../fill.ts';
-import type { SetupRequest } from '../setup/index.ts';
+import { finishCheck, type SetupRequest } from '../setup/index.ts';
 import { toothCount } from '../teeth.ts';
 import type { Judged, Off } from './judge.ts';
 import { provenPitch } from './proven.ts';
@@ -69,24 +69,30 @@ const growthCheck = (judged: Judged, expected: number): CheckOf<'growth'> | null
 const finishOf = (judged: Judged, request: SetupRequest): CheckOf<'finish'> | null => {
   const { crest } = judged.part;
   if (request.finish === null || crest === null) return null;
-  const over = Math.max(0, crest - request.finish.high);
-  const under = Math.max(0, request.finish.low - crest);
-  const outside = Math.max(over, under);
-  return {
-    name: 'finish',
-    state: outside > 1e-9 ? 'stop' : 'fine',
-    reason: outside <= 1e-9 ? 'inside' : over > 0 ? 'over' : 'under',
-    figures: {
-      crestDiameter: figure(crest, 'mm'),
-      finishLow: figure(request.finish.low, 'mm'),
-      finishHigh: figure(request.finish.high, 'mm'),
-      outsideBy: figure(outside, 'mm'),
-    },
-  };
+  return finishCheck({ crest, crestLow: crest, crestHigh: crest }, request.finish);
 };
 
-/** The checks a finished part can be put to, as far as it was measured. */
-export const partChecks = (judged: Judged, request: SetupRequest): readonly Check[] => {
+/**
+ * The checks a finished part can be put to, as far as it was measured.
+ *
+ *     count: N as worked out fine;  within Δ + 0.5 of π D/p_t watch;  else, or within 6 % of twice N, stop
+ *     fill, growth: up to 2.5 standard deviations off fine, else watch
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | judged | what was measured against what was planned, with the doubt Δ about the count | - | |
+ * | request | the set-up the part was made by | - | |
+ * | → checks | count, filled, fill, growth, finish and taper, those that were measured | - | |
+ *
+ * Assumes a pattern with nearly twice its teeth has doubled.
+ *
+ * @source wheel-truth (how far the count may be out)
+ * @source check-limits (2.5 standard deviations, how well a part is read)
+ * @source growth-prior (what growth to expect, and its spread)
+ * @source judgement (6 % of twice the count)
+ * @example partChecks(judge({ pattern: { kind: 'straight' }, pitch: { system: 'tpi', value: 21 }, alongRim: false, counted: null, proven: null, helix: null, tilt: null, included: DEFAULT_INCLUDED, stock: inch(1), finish: null, asIs: false, wantedTeeth: null, knurlClass: null, fill: null, material: materialById('steel-lowC-CD'), hardness: null, process: null, wheel: DEFAULT_WHEEL, edge: null, pin: 'hardened', pinDiameter: null, onePiece: false, length: null, stickout: null, support: 'chuck', layout: null, stockLength: null, bore: null, plug: false, feed: null, speed: null, rotation: null, turns: null, batch: 1, runout: null, machine: null, growth: growthBeforeResults() }, { blank: inch(0.9852), teeth: 65, crest: inch(1.004), toothHeight: null, flat: null, ends: null }), { finish: null, growth: growthBeforeResults(), material: materialById('steel-lowC-CD') }).map((check) => check.state) // ["fine", "fine"]
+ */
+export function partChecks(judged: Judged, request: SetupRequest): readonly Check[] {
   const materialFill = judged.plan.process === 'form' ? request.material.maxFill.value : null;
   const checks: (Check | null)[] = [
     countCheck(judged),
@@ -97,4 +103,4 @@ export const partChecks = (judged: Judged, request: SetupRequest): readonly Chec
     judged.fade?.check ?? null,
   ];
   return checks.filter((check) => check !== null);
-};
+}

@@ -203,6 +203,7 @@ const cautions = (diameter: Mm): readonly CautionId[] =>
  *
  *     whole from s = 0.95: nothing;  s ≤ 0.10: s p_t/π;  else (s + k) p_t/π ≥ 2 z1, scrap: k = 0
  *     marks counted: p_eff = π D/(n − 1 + s)
+ *     chance that it tracks ≥ 90 % fine, else watch
  *
  * | symbol | meaning | unit | range |
  * | --- | --- | --- | --- |
@@ -220,6 +221,7 @@ const cautions = (diameter: Mm): readonly CautionId[] =>
  * @source seam-test (take-off and effective pitch)
  * @source seam-reading (how well the gap is read)
  * @source first-bite (depth of the marks)
+ * @source judgement (whole from 0.95, watch under 90 %)
  * @example seamTest({ pattern: { kind: 'straight' }, pitch: { system: 'tpi', value: 21 }, alongRim: false, counted: null, proven: null, helix: null, tilt: null, knurlClass: null, included: degrees(90) }, inch(0.995), { gap: 0.3, scrap: false, count: null }).figures.seamTakeOff.value // 0.500504 mm
  * @example seamTest({ pattern: { kind: 'straight' }, pitch: { system: 'tpi', value: 21 }, alongRim: false, counted: null, proven: null, helix: null, tilt: null, knurlClass: null, included: degrees(90) }, inch(0.995), { gap: 0.3, scrap: true, count: 66 }).figures.effectivePitch.value // 1.21589 mm
  */

@@ -87,8 +87,29 @@ const wholeCount = (plan: ToothPlan, wish: BlankWish): number => {
   return nearestCount(plan, transverse, wish.fill, middle(finish), most);
 };
 
-/** The blank to turn: the bar as it is, the largest whole count under it, or what the print needs. */
-export const chooseBlank = (plan: ToothPlan, wish: BlankWish): ChosenBlank => {
+/**
+ * The blank to turn: the bar as it is, the largest whole count under it, or what the print needs.
+ *
+ *     as it is: N = round(π D/p_t);  under a bar: N = ⌊π D/p_t⌋
+ *     for a print: N whose crest comes nearest the middle of the limits, N ≤ ⌊π D/p_t⌋
+ *     crest outside them: x from 0.70 to 0.92 at which it comes nearest their middle
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | plan | the tooth to be made | - | |
+ * | wish | bar D (stock), pitch p_t (transverse), limits of the print, count and fill asked for | - | |
+ * | → teeth | whole count N | - | ≥ 3 |
+ * | → diameter | what to turn to | mm | |
+ *
+ * Assumes a turned bar cannot be made larger, and that a fill which was asked for stays.
+ *
+ * @source whole-tooth (counts round the bar)
+ * @source round-work (crest of each count)
+ * @source growth-prior (how much of the static growth shows)
+ * @source fill-limits (0.70 and 0.92)
+ * @example chooseBlank({ pattern: { kind: 'straight' }, process: 'form', sharpHeight: mm(0.4), wheelFill: 1, growth: growthBeforeResults() }, { transverse: mm(0.8), stock: null, finish: { low: mm(19.9), high: mm(20.1) }, asIs: false, wantedTeeth: null, fill: 0.9, deepestFill: 1 }).teeth // 77
+ */
+export function chooseBlank(plan: ToothPlan, wish: BlankWish): ChosenBlank {
   const { stock, finish, transverse } = wish;
   const asItIs = wish.asIs && stock !== null;
   if (asItIs && toothCount(stock, transverse) < FEWEST_TEETH - 0.5)
@@ -101,4 +122,4 @@ export const chooseBlank = (plan: ToothPlan, wish: BlankWish): ChosenBlank => {
   const deepest = Math.min(wish.deepestFill, FULL_ENOUGH, plan.wheelFill);
   const fill = fillTowards(plan, diameter, middle(finish), deepest);
   return { diameter, teeth, tooth: makeTooth(plan, diameter, fill), fillMoved: true };
-};
+}

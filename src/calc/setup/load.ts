@@ -1,5 +1,5 @@
 import { type BentWork, bentWork } from '../bending/index.ts';
-import { CUTTING_STIFFNESS, cutKnurl } from '../cut.ts';
+import { CUTTING_STIFFNESS, cutKnurl, cutTorque } from '../cut.ts';
 import { CUT_FEED, FEWEST_TURNS, infeedPerTurn } from '../feed.ts';
 import {
   drivePower,
@@ -134,7 +134,6 @@ const refuseSenseless = (p: Pressing): void => {
 
 type Forces = { readonly radial: Newton; readonly torque: NewtonMm };
 
-/** The chip is cut from the whole pattern, however many wheels share it. */
 const cutForces = (p: Pressing): Forces => {
   const { request } = p;
   const cut = cutKnurl({
@@ -146,10 +145,7 @@ const cutForces = (p: Pressing): Forces => {
     feed: p.motion.feed ?? CUT_FEED.usual,
     cuttingStiffness: CUTTING_STIFFNESS.value[request.material.group],
   });
-  return {
-    radial: cut.radialForce,
-    torque: newtonMm((cut.tangentialForce * p.diameter) / 2),
-  };
+  return { radial: cut.radialForce, torque: cutTorque(cut.tangentialForce, p.diameter) };
 };
 
 const formedForce = (p: Pressing): WheelForce => {

@@ -11,6 +11,7 @@ import {
   plungeTime,
   plungeTurns,
   traverseTime,
+  turnsOnSpot,
 } from '../feed.ts';
 import {
   type Band,
@@ -143,7 +144,7 @@ const formedTraverse = (of: MotionOf): Motion => {
     feedLow: window.low,
     feedHigh: window.high,
     window,
-    turns: width / feed,
+    turns: turnsOnSpot(width, feed),
     passes: 1,
     time: traverseFor(feed, of),
     check: formedFeedCheck(feed, window),

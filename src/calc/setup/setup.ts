@@ -18,6 +18,7 @@ import {
 } from '../teeth.ts';
 import {
   firstBite,
+  firstCutBite,
   runoutCheck,
   TRACKS_WITHIN,
   trackingCheck,
@@ -25,7 +26,7 @@ import {
   type Window,
   wheelCheck,
 } from '../tracking.ts';
-import { type Mm, mm, type UnitName } from '../units.ts';
+import { type Mm, type UnitName } from '../units.ts';
 import { type ChosenBlank, chooseBlank } from './blank.ts';
 import { finishCheck } from './finish.ts';
 import { type Load, loadOf, type Pressing } from './load.ts';
@@ -140,10 +141,9 @@ const fullInfeed = (plan: ToothPlan, blank: Mm): Mm | null => {
   }).infeed;
 };
 
-/** A cut removes what a form pushes up, so its first turn is as deep as its first groove. */
 const biteOf = (plan: ToothPlan): Mm =>
   plan.process === 'cut'
-    ? mm(2 * TRACKS_WITHIN * plan.sharpHeight)
+    ? firstCutBite(plan.sharpHeight, TRACKS_WITHIN)
     : firstBite(plan.sharpHeight, TRACKS_WITHIN);
 
 const smallerBlanks = (teeth: number, transverse: Mm, below: Mm): readonly Alternative[] => {

@@ -31,13 +31,32 @@ export const toothPlan = (request: SetupRequest, normal: Mm, process: Process): 
   };
 };
 
-/** The fill to start with: what was asked, else 90 % or the material's own, never over the wheel's. */
-export const startingFill = (
+/**
+ * The fill to start with, as a share of the sharp height.
+ *
+ *     x = what was asked, else min(0.90, the material's own);  never over the wheel's own tooth
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | plan | the tooth to be made, with the highest tooth of the wheel | - | |
+ * | asked | fill asked for, or null | - | 0 to 1 |
+ * | own (materialFill) | deepest fill advised for the material, or null | - | 0 to 1 |
+ * | → x | fill | - | |
+ *
+ * Assumes a counted wheel has sharp teeth on its outside diameter.
+ *
+ * @source fill-default (90 %)
+ * @source materials-practice (the material's own)
+ * @source tooth-geometry (the tooth of a round wheel)
+ * @example startingFill({ pattern: { kind: 'straight' }, process: 'form', sharpHeight: mm(0.6), wheelFill: 1, growth: growthBeforeResults() }, null, 0.85) // 0.85
+ */
+export function startingFill(
   plan: ToothPlan,
   asked: number | null,
   materialFill: number | null,
-): number =>
-  Math.min(asked ?? Math.min(DEFAULT_FILL, materialFill ?? DEFAULT_FILL), plan.wheelFill);
+): number {
+  return Math.min(asked ?? Math.min(DEFAULT_FILL, materialFill ?? DEFAULT_FILL), plan.wheelFill);
+}
 
 /** What a tooth of a given fill does to a given blank. */
 export type MadeTooth = {
@@ -51,8 +70,27 @@ export type MadeTooth = {
   readonly crestHigh: Mm;
 };
 
-/** Infeed and crest on a real blank: exact on round work when formed, the tooth itself when cut. */
-export const makeTooth = (plan: ToothPlan, blank: Mm, fill: number): MadeTooth => {
+/**
+ * Height, infeed and crest of a tooth on a real blank: exact on round work when formed, the tooth itself when cut.
+ *
+ *     H = x Hf
+ *     formed: Do = D + ḡ growth(H), its 80 % spread D + (ḡ ± 1.2816 sd) growth(H);  cut: Do = D
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | plan | pattern, process, sharp height Hf and expected growth ḡ, sd of the tooth | - | |
+ * | D (blank) | diameter of the blank | mm | > 2H |
+ * | x (fill) | tooth height over sharp height | - | 0 to 1 |
+ * | → H | tooth height | mm | |
+ * | → crest, crestLow, crestHigh | diameter over the crests and its 80 % spread | mm | |
+ *
+ * Assumes the shop's own share of the static growth, or what is expected before it has results.
+ *
+ * @source round-work (static growth)
+ * @source growth-prior (how much of it shows)
+ * @example makeTooth({ pattern: { kind: 'straight' }, process: 'form', sharpHeight: mm(0.4), wheelFill: 1, growth: growthBeforeResults() }, mm(6), 1).crest // 6.37578 mm
+ */
+export function makeTooth(plan: ToothPlan, blank: Mm, fill: number): MadeTooth {
   const height = mm(fill * plan.sharpHeight);
   // A tooth taller than the bar's radius has nothing left to stand on.
   if (height >= blank / 2) throw new OutOfRange('diameter', blank, 2 * height, 500, 'mm');
@@ -77,4 +115,4 @@ export const makeTooth = (plan: ToothPlan, blank: Mm, fill: number): MadeTooth =
     crestLow: crest(low),
     crestHigh: crest(high),
   };
-};
+}
