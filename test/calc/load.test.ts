@@ -99,6 +99,30 @@ describe('wheels and sides', () => {
   });
 });
 
+describe('the limits of give', () => {
+  it('are a tenth of the infeed for a bar and of the tooth for a tube', () => {
+    const said = { stock: mm(40), bore: mm(34), stickout: mm(50) };
+    const { infeed, toothHeight } = work(said).figures;
+    const bending = checkOf(said, 'bending')!.figures;
+    near(bending['differenceFineTo']!.value, 0.1 * infeed!.value, 1e-12);
+    const ring = checkOf(said, 'ring')!.figures;
+    near(ring['closingFineTo']!.value, 0.1 * toothHeight!.value, 1e-12);
+  });
+
+  // evidence: by hand, a ring as wide as 6 + 3 √(R t) between bore and groove root
+  it('hold for the wall that is left under the groove root', () => {
+    const { figures, checks } = work({ stock: mm(40), bore: mm(34) });
+    const root = figures.blankDiameter!.value / 2 - figures.infeed!.value;
+    const [t, R] = [root - 17, (root + 17) / 2];
+    const width = 6 + 3 * Math.sqrt(R * t);
+    const I = (width * t ** 3) / 12;
+    const closing = (0.148779 * figures.radialForce!.value * R ** 3) / (205000 * I);
+    near(figures.ringClosing!.value, closing, 1e-5);
+    const ring = checks.find(({ name }) => name === 'ring')!;
+    near(ring.figures['wallOverRadius']!.value, t / R, 1e-12);
+  });
+});
+
 describe('a cut knurl', () => {
   const said = { process: 'cut', length: mm(20), stickout: mm(40) } as const;
 
