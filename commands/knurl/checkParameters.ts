@@ -43,6 +43,7 @@ export const scrap = said<true>({
     ['scrap', true],
     ['on scrap', true],
   ],
+  closed: true,
   examples: ['scrap'],
 });
 

@@ -38,7 +38,7 @@ import {
 
 /** Only the listed words say it. */
 const wordsOnly = <T>(parameter: Omit<Parameter<T>, 'read'>) =>
-  said<T>({ ...parameter, read: () => null });
+  said<T>({ ...parameter, read: () => null, closed: true });
 
 /** Smallest bar that is answered. Judgement. */
 const SMALLEST_DIAMETER = 1;
@@ -127,6 +127,7 @@ export const material = said({
   read: freeMaterial,
   free: freeMaterial,
   merge: narrowed,
+  suggests: 'materials',
   examples: ['1018', '304', '6061', 'brass'],
 });
 
@@ -282,6 +283,7 @@ export const wheel = said({
   read: readWheel,
   keywords: ['wheel', 'wheels'],
   merge: oneWheel,
+  suggests: 'wheels',
   examples: ['wheel 20x8x6', 'wheel 20mm 63 teeth'],
 });
 

@@ -2,7 +2,12 @@ import type { CautionId, Check, CheckAlternative, Figures } from '../calc/index.
 import type { Label, Line, Row } from './lines.ts';
 
 /** A button: what it says and the line it sends. */
-export type Choice = { readonly label: Label; readonly words: string };
+export type Choice = {
+  readonly label: Label;
+  readonly words: string;
+  /** Parameters of that line that have to be said first; a platform asks for them in a form. */
+  readonly ask?: readonly string[];
+};
 
 /** A drawing that answers the card's question; its words are said by the phrase book. */
 export type Picture = {
@@ -43,6 +48,8 @@ export type Card = {
   readonly checks: readonly Check[];
   readonly cautions: readonly CautionId[];
   readonly alternatives: readonly CheckAlternative[];
+  /** Tables of a verb's own, for programs: the candidates of a plan, the causes of a trouble. */
+  readonly lists?: Readonly<Record<string, readonly unknown[]>>;
   /** The unit shown first. */
   readonly units: 'in' | 'mm';
 };

@@ -21,6 +21,19 @@ export type Call = {
     /** Named options of a form: each is read with the same words as a line. */
     | {
         readonly path: readonly string[];
-        readonly options: Readonly<Record<string, string | number | boolean>>;
-      };
+        readonly options: Options;
+      }
+    /** A button of an earlier answer. */
+    | { readonly pressed: Pressed };
+};
+
+export type Options = Readonly<Record<string, string | number | boolean>>;
+
+export type Pressed = {
+  /** The interaction whose answer carries the button. */
+  readonly of: string;
+  /** Which of its choices. */
+  readonly choice: number;
+  /** What a form asked for besides. */
+  readonly added?: Options;
 };

@@ -1,5 +1,4 @@
 import { OutOfRange } from '../calc/index.ts';
-import type { Card } from '../card/index.ts';
 import type { Refusal, Suggestion } from '../refusal.ts';
 import {
   type LineResult,
@@ -11,24 +10,24 @@ import {
   type Vocabulary,
   vocabularyOf,
 } from '../words/index.ts';
+import { type Answer, choicesIn } from './answer.ts';
 import type { Call } from './call.ts';
 import type { Command, Context, Reply } from './command.ts';
-import type { Effect } from './effect.ts';
-import { lineOf, route } from './route.ts';
+import { type KeptAnswers, keptInProcess } from './kept.ts';
+import { lineOf, route, wordsOf } from './route.ts';
+import { suggestionsFor } from './suggest.ts';
 
-/** What goes back to the adapter. */
-export type Answer =
-  | { readonly kind: 'card'; readonly card: Card; readonly effects: readonly Effect[] }
-  | {
-      readonly kind: 'refusal';
-      readonly refusal: Refusal;
-      readonly choices: readonly Suggestion[];
-      readonly units: ShopUnits;
-      /** What was typed, so that it can be corrected and sent again. */
-      readonly text: string;
-    };
-
-export type Desk = { readonly answer: (call: Call) => Promise<Answer> };
+export type Desk = {
+  readonly answer: (call: Call) => Promise<Answer>;
+  /** The answer an earlier interaction got, for whatever stands behind its buttons. */
+  readonly recall: (call: Pick<Call, 'shop'>, of: string) => Promise<Answer | null>;
+  /** What may be meant by the letters typed so far for a parameter, the likeliest first. */
+  readonly suggest: (
+    call: Call,
+    asked: { readonly parameter: string; readonly typed: string },
+  ) => Promise<readonly Suggestion[]>;
+  readonly fleet: readonly Command[];
+};
 
 /** What the desk needs to know of a shop before it reads a line. */
 export type ShopFacts = { readonly units: ShopUnits; readonly names: Names };
@@ -50,7 +49,28 @@ const asRefusal = (error: unknown): Refusal => {
 
 type Asked = { readonly text: string; readonly command: Command; readonly read: LineResult };
 
-export const openDesk = (fleet: readonly Command[], facts: FactsOf): Desk => {
+/** The line that a call stands for. */
+const lineFor = (call: Call, fleet: readonly Command[], pressed: Answer | null): string | null => {
+  const { given } = call;
+  if ('words' in given) return given.words;
+  if ('path' in given) {
+    const named = fleet.find((c) => c.path.join(' ') === given.path.join(' '));
+    return named === undefined ? '' : lineOf(named, given.options);
+  }
+  const line = choicesIn(pressed)[given.pressed.choice]?.words;
+  if (line === undefined) return null;
+  const { added } = given.pressed;
+  const way = route(line, fleet);
+  return added === undefined || !('command' in way)
+    ? line
+    : [line, ...wordsOf(way.command, added)].join(' ');
+};
+
+export const openDesk = (
+  fleet: readonly Command[],
+  facts: FactsOf,
+  kept: KeptAnswers = keptInProcess(),
+): Desk => {
   const vocabularies = new Map<Command, Vocabulary>(
     fleet.map((command) => [command, vocabularyOf(command.parameters, MATERIAL_PHRASES)]),
   );
@@ -58,12 +78,12 @@ export const openDesk = (fleet: readonly Command[], facts: FactsOf): Desk => {
   const asked = (
     call: Call,
     shop: ShopFacts,
+    pressed: Answer | null,
   ): Asked | { readonly text: string; readonly refusal: Refusal } => {
-    const { given } = call;
-    const named =
-      'path' in given ? fleet.find((c) => c.path.join(' ') === given.path.join(' ')) : undefined;
-    const text =
-      'words' in given ? given.words : named === undefined ? '' : lineOf(named, given.options);
+    const text = lineFor(call, fleet, pressed);
+    // The answer behind the button is gone: nothing is guessed in its place.
+    if (text === null)
+      return { text: '', refusal: { code: 'notFound', what: 'card', nearest: [] } };
     const way = route(text, fleet);
     if ('refusal' in way) return { text, refusal: way.refusal };
     const vocabulary = vocabularies.get(way.command) ?? vocabularyOf([]);
@@ -79,9 +99,21 @@ export const openDesk = (fleet: readonly Command[], facts: FactsOf): Desk => {
     }
   };
 
-  const answer = async (call: Call): Promise<Answer> => {
+  const recall: Desk['recall'] = async (call, of) => await kept.recall(call, of);
+
+  const suggest: Desk['suggest'] = async (call, { parameter: name, typed }) => {
+    const { given } = call;
+    if (!('path' in given)) return [];
+    const command = fleet.find((c) => c.path.join(' ') === given.path.join(' '));
+    const parameter = command?.parameters.find((each) => each.name === name);
+    if (parameter === undefined) return [];
+    return suggestionsFor(parameter, typed, (await facts(call)).names);
+  };
+
+  const answerTo = async (call: Call): Promise<Answer> => {
     const shop = await facts(call);
-    const request = asked(call, shop);
+    const pressed = 'pressed' in call.given ? await recall(call, call.given.pressed.of) : null;
+    const request = asked(call, shop, pressed);
     const refused = (refusal: Refusal, choices: readonly Suggestion[]): Answer => ({
       kind: 'refusal',
       refusal:
@@ -100,7 +132,13 @@ export const openDesk = (fleet: readonly Command[], facts: FactsOf): Desk => {
     return { kind: 'card', card, effects: reply.effects };
   };
 
-  return { answer };
+  const answer = async (call: Call): Promise<Answer> => {
+    const given = await answerTo(call);
+    await kept.keep(call, given);
+    return given;
+  };
+
+  return { answer, recall, suggest, fleet };
 };
 
 /** A shop that has said nothing about itself. */

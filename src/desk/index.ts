@@ -1,4 +1,5 @@
-export type { Call, Person, Place } from './call.ts';
+export { type Answer, choicesIn } from './answer.ts';
+export type { Call, Options, Person, Place, Pressed } from './call.ts';
 export {
   type Command,
   type Context,
@@ -9,7 +10,6 @@ export {
   said,
 } from './command.ts';
 export {
-  type Answer,
   type Desk,
   type FactsOf,
   openDesk,
@@ -17,4 +17,5 @@ export {
   type ShopFacts,
 } from './desk.ts';
 export type { Effect, MessageAddress } from './effect.ts';
+export { type KeptAnswers, keptInProcess } from './kept.ts';
 export { atLeast, ROLES, type Role } from './role.ts';

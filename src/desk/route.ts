@@ -1,5 +1,6 @@
 import type { Refusal } from '../refusal.ts';
 import { nearestOf, tokensOf } from '../words/index.ts';
+import type { Options } from './call.ts';
 import type { Command } from './command.ts';
 
 /** The root and verb that are meant where none is said. */
@@ -59,11 +60,8 @@ export const route = (text: string, fleet: readonly Command[]): Route => {
   return { command, skip: before };
 };
 
-/** The words of a form, as a line: one reader for everything that can be typed. */
-export const lineOf = (
-  command: Command,
-  options: Readonly<Record<string, string | number | boolean>>,
-): string => {
+/** The fields of a form, as words. */
+export const wordsOf = (command: Command, options: Options): readonly string[] => {
   const parts = command.parameters.flatMap((parameter) => {
     const given = options[parameter.name];
     if (given === undefined || given === false) return [];
@@ -75,9 +73,9 @@ export const lineOf = (
     return [announced ? typed : `${keyword} ${typed}`.trim()];
   });
   const extra = options['words'];
-  return [
-    `/${command.path.join(' ')}`,
-    ...parts,
-    ...(extra === undefined ? [] : [String(extra)]),
-  ].join(' ');
+  return [...parts, ...(extra === undefined ? [] : [String(extra)])];
 };
+
+/** The words of a form, as a line: one reader for everything that can be typed. */
+export const lineOf = (command: Command, options: Options): string =>
+  [`/${command.path.join(' ')}`, ...wordsOf(command, options)].join(' ');

@@ -14,6 +14,7 @@ export * from './kinds.ts';
 export { type Limits, limitsOf } from './limits.ts';
 export {
   freeMaterial,
+  MATERIAL_OFFERS,
   MATERIAL_PHRASES,
   type MaterialWords,
   narrowed,
@@ -38,6 +39,7 @@ export {
   type Reader,
   type Reading,
   refused,
+  type Suggested,
   took,
 } from './reading.ts';
 export { type Span, tokensOf } from './tokens.ts';

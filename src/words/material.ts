@@ -1,4 +1,5 @@
 import { DEFAULT_MATERIAL_ID, MATERIALS, type Material } from '../calc/materials/index.ts';
+import type { Suggestion } from '../refusal.ts';
 import { type Cursor, tokenAt } from './cursor.ts';
 import { type Reader, took } from './reading.ts';
 import { unitOf } from './unit.ts';
@@ -101,6 +102,18 @@ const BY_FIRST_WORD: ReadonlyMap<string, readonly Entry[]> = ENTRIES.reduce(
 
 /** Every word of a material's names, for offering the nearest. */
 export const MATERIAL_PHRASES: readonly string[] = ENTRIES.map((known) => known.phrase.join(' '));
+
+const ROW_OF = new Map(
+  MATERIALS.flatMap((row) => row.aliases.map((alias) => [alias, row] as const)),
+);
+
+/** A material by each of its names, with the row of the table it stands for. */
+export const MATERIAL_OFFERS: readonly Suggestion[] = [...new Set(MATERIAL_PHRASES)].map(
+  (words) => {
+    const row = ROW_OF.get(words);
+    return { label: row === undefined ? words : `${words}: ${row.name}, ${row.condition}`, words };
+  },
+);
 
 /** `416 rpm` is a speed, not a stainless steel. */
 const isQuantity = (cursor: Cursor, used: number): boolean => {

@@ -17,6 +17,9 @@ export type Names = {
 };
 export const NO_NAMES: Names = { wheels: [], machines: [] };
 
+/** Kinds of names that can be offered while somebody types. */
+export type Suggested = 'materials' | 'wheels' | 'machines' | 'cards' | 'standards' | 'people';
+
 /** Reads a value at a place; null where nothing of its kind stands there. */
 export type Reader<T> = (cursor: Cursor, names: Names) => Reading<T> | null;
 
@@ -44,6 +47,10 @@ export type Parameter<T> = {
   readonly bare?: boolean;
   /** Puts together what was said in two places; null where the two disagree. */
   readonly merge?: (a: T, b: T) => T | null;
+  /** Nothing but `values` says it: a platform may list them all. */
+  readonly closed?: boolean;
+  /** Where names to offer while somebody types come from. */
+  readonly suggests?: Suggested;
   /** Things to type, shown where it is missing and in the help. */
   readonly examples: readonly string[];
 };
