@@ -12,7 +12,7 @@ export const YIELD_MARGIN = 1.5;
 /** Share of a depth that may give way at the expected force. Judgement. */
 export const GIVE_FINE = 0.1;
 /** Share of a depth that must not give way even at the low force. Judgement. */
-export const GIVE_STOP = 0.3;
+const GIVE_STOP = 0.3;
 
 /**
  * Verdict on a stress that follows from a force known to a factor of 2.

@@ -1,10 +1,10 @@
 import { type Mm, type MPa, mm, mpa, within } from '../units.ts';
 
 /** Poisson's ratio of the work. From memory: metals lie between 0.28 and 0.35. */
-export const WORK_POISSON = 0.29;
+const WORK_POISSON = 0.29;
 /** Modulus and Poisson's ratio of a hardened wheel. From memory. */
-export const WHEEL_MODULUS: MPa = mpa(220_000);
-export const WHEEL_POISSON = 0.28;
+const WHEEL_MODULUS: MPa = mpa(220_000);
+const WHEEL_POISSON = 0.28;
 
 /**
  * Radius of the roller that would press a flat as a wheel presses a bar.

@@ -2,11 +2,11 @@ import { isPolymer, type Material } from '../materials/index.ts';
 import { type MPa, mpa, within } from '../units.ts';
 
 /** One Brinell is one kgf/mm²; exact by definition of the kilogram-force. */
-export const MPA_PER_BRINELL = 9.80665;
+const MPA_PER_BRINELL = 9.80665;
 /** How many times further than under a Brinell ball the metal is strained. From memory. */
-export const STRAIN_RATIO = 2.5;
+const STRAIN_RATIO = 2.5;
 /** Pressure over yield on plastics, which have no Brinell hardness. Judgement. */
-export const PLASTIC_PRESSURE = 3;
+const PLASTIC_PRESSURE = 3;
 
 /**
  * Pressure under a tooth that is rolled into metal.

@@ -6,9 +6,9 @@ import { type Kelvin, type MPa, within } from '../units.ts';
 import { ordinaryPinHeat, PIN_FRICTION } from './pin.ts';
 
 /** Index up to which a pin stands it. Judgement: what is called an ordinary plunge. */
-export const PIN_INDEX_FINE = 1;
+const PIN_INDEX_FINE = 1;
 /** Index that a pin does not stand even at the low force. Judgement. */
-export const PIN_INDEX_STOP = 2;
+const PIN_INDEX_STOP = 2;
 /** Pressure on the pin from which it is watched. Judgement. */
 export const PIN_PRESSURE_FINE = 100 as MPa;
 

@@ -19,9 +19,9 @@ import {
 /** Rubbing of an oiled wheel on its pin. Judgement. */
 export const PIN_FRICTION = 0.12;
 /** Density of a wheel, kg/mm³. From memory: steel. */
-export const WHEEL_DENSITY = 7.85e-6;
+const WHEEL_DENSITY = 7.85e-6;
 /** Heat a wheel takes up, J/(kg K). From memory: steel. */
-export const WHEEL_HEAT_CAPACITY = 470;
+const WHEEL_HEAT_CAPACITY = 470;
 
 /**
  * Rotation of the wheel on its pin.

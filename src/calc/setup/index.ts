@@ -1,7 +1,6 @@
 export type { Support, ToolLayout } from '../bending/index.ts';
 export { LARGEST_DIAMETER } from './blank.ts';
 export { type Crest, finishCheck } from './finish.ts';
-export { LONGEST_STICKOUT, type Load, type PinLoad, type WallLoad } from './load.ts';
 export type { Motion, Running, WheelInUse } from './motion.ts';
 export { type ResolvedPitch, resolvePitch } from './pitch.ts';
 export { NARROWEST_FACE, REMEDY_KINDS, type Remedy, type RemedyKind } from './remedy.ts';

@@ -42,7 +42,7 @@ import type { SetupRequest } from './request.ts';
 import type { MadeTooth } from './tooth.ts';
 
 /** Longest stickout that is answered: bars come in 6 m. Judgement. */
-export const LONGEST_STICKOUT: Mm = mm(6000);
+const LONGEST_STICKOUT: Mm = mm(6000);
 /** A length printed in inches comes back short by less than this. */
 const PRINTED = 0.002;
 
