@@ -9,6 +9,13 @@ export type Suggestion = {
   readonly words: string;
 };
 
+/** Where in what was typed the fault lies, so that the reply can point at it and quote it. */
+export type Place = {
+  readonly word?: string;
+  readonly start?: number;
+  readonly end?: number;
+};
+
 export type Unreadable = {
   readonly code: 'unreadable';
   readonly word: string;
@@ -18,13 +25,13 @@ export type Unreadable = {
   readonly nearest: readonly string[];
 };
 
-export type Missing = {
+export type Missing = Place & {
   readonly code: 'missing';
   readonly parameter: string;
   readonly examples: readonly string[];
 };
 
-export type OutOfRangeRefusal = {
+export type OutOfRangeRefusal = Place & {
   readonly code: 'outOfRange';
   readonly what: string;
   readonly value: number;
@@ -33,13 +40,31 @@ export type OutOfRangeRefusal = {
   readonly unit: string;
 };
 
-export type Unclear = {
+export type Unclear = Place & {
   readonly code: 'unclear';
   readonly what: string;
   readonly readings: readonly Suggestion[];
-  /** Why two things that were said do not go together. */
-  readonly because?: Contradiction;
+  /** Why it has to be asked. */
+  readonly because?: Contradiction | Doubt;
 };
+
+/** What makes words that a person typed mean more than one thing. */
+export type Doubt =
+  | 'saidTwice'
+  | 'noUnit'
+  | 'unitOrWord'
+  | 'unitOfTwo'
+  | 'commaOrThousands'
+  | 'commaOrTwo'
+  | 'keywordBetween'
+  | 'sizeByWhat'
+  | 'limitsOfWhat'
+  | 'whichSpeed'
+  | 'whichAngle'
+  | 'wholeNumber'
+  | 'oneOfRange'
+  | 'gradeOnly'
+  | 'calloutAgainst';
 
 /** Things people say together that exclude each other. */
 export type Contradiction =
@@ -62,7 +87,7 @@ export type NotAllowed = {
   readonly people: readonly string[];
 };
 
-export type NotFound = {
+export type NotFound = Place & {
   readonly code: 'notFound';
   readonly what: string;
   readonly nearest: readonly string[];

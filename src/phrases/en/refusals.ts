@@ -1,7 +1,14 @@
 import { mPerMin } from '../../calc/units.ts';
-import type { OutOfRangeRefusal, Refusal, Suggestion } from '../../refusal.ts';
+import type {
+  Doubt,
+  NotFound,
+  OutOfRangeRefusal,
+  Refusal,
+  Suggestion,
+  Unclear,
+} from '../../refusal.ts';
 import type { Book } from '../book.ts';
-import type { Show } from '../show.ts';
+import type { Rounding, Show } from '../show.ts';
 import { thing } from './names.ts';
 
 /** Words of a refusal are shown, never obeyed; a very long one is shortened. */
@@ -15,11 +22,24 @@ const list = (items: readonly string[]): string =>
 /** A limit so large that it only says that there is one. */
 const isOpen = (value: number): boolean => Math.abs(value) > 1e5;
 
-const amount = (value: number, unit: string, show: Show): string => {
+/** A number of at most four figures, rounded so that a limit typed back is inside it. */
+const figures = (value: number, rounding: Rounding, show: Show): string => {
+  if (rounding === 'nearest' || Number.isInteger(value)) return show.number(value);
+  const scale = 10 ** (3 - Math.floor(Math.log10(Math.abs(value))));
+  const steps = value * scale;
+  return String((rounding === 'up' ? Math.ceil(steps) : Math.floor(steps)) / scale);
+};
+
+const amount = (
+  value: number,
+  unit: string,
+  show: Show,
+  rounding: Rounding = 'nearest',
+): string => {
   if (isOpen(value)) return 'far too much';
   switch (unit) {
     case 'mm':
-      return show.length(value);
+      return show.length(value, rounding);
     case 'rad':
       return show.angle(value);
     case 'm/min':
@@ -29,7 +49,7 @@ const amount = (value: number, unit: string, show: Show): string => {
     case 'rev/min':
       return show.rotation(value);
     default:
-      return show.number(value);
+      return figures(value, rounding, show);
   }
 };
 
@@ -58,13 +78,17 @@ const outOfRange = (refusal: OutOfRangeRefusal, show: Show): string => {
   if (Number.isNaN(value)) return `The ${thing(what)} is missing.`;
   if (what === 'fill')
     return `The ${thing(what)} of ${show.percent(value)} is outside ${show.percent(min)} to ${show.percent(max)}. Type one between them, such as fill 85%.`;
-  const because = BECAUSE[what];
+  // What was read and stands alone is judged by itself, not against something else that was said.
+  const because = refusal.start === undefined ? BECAUSE[what] : undefined;
   if (because !== undefined) return because(refusal, (each) => amount(each, unit, show));
+  const low = amount(min, unit, show, 'up');
   const limits = isOpen(max)
-    ? `at least ${amount(min, unit, show)}`
-    : `${amount(min, unit, show)} to ${amount(max, unit, show)}`;
+    ? `of ${low} or more`
+    : `from ${low} to ${amount(max, unit, show, 'down')}`;
   const problem = value < min ? 'too small' : 'too large';
-  return `The ${thing(what)}, ${amount(value, unit, show)}, is ${problem}: it has to be ${limits}. Type one that is.`;
+  const typed = refusal.word === undefined ? '' : `${quoted(refusal.word)}: `;
+  const subject = typed === '' ? 'The' : 'the';
+  return `${typed}${subject} ${thing(what)}, ${amount(value, unit, show)}, is ${problem}. Type one ${limits}.`;
 };
 
 /** Why two things that were said exclude each other. */
@@ -84,9 +108,54 @@ export const contradictions: Book['contradictions'] = {
   limitsReversed: 'The limits are the wrong way round.',
 };
 
+/** What makes it a question, before the question itself. */
+const doubts: { readonly [D in Doubt]: (word: string, fault: Unclear) => string } = {
+  saidTwice: (_, { what }) => `The ${thing(what)} was said twice, and differently.`,
+  noUnit: (word, { what, readings }) =>
+    readings.length > 1
+      ? `${word} has no unit, and more than one makes sense.`
+      : `${word} without a unit is no likely ${thing(what)} here.`,
+  unitOrWord: (word) => `${word}: inches, or a number and the word in?`,
+  unitOfTwo: (word) => `${word} means different things in different shops.`,
+  commaOrThousands: (word) => `${word} can be a decimal or thousands.`,
+  commaOrTwo: (word) => `${word} can be one number or two.`,
+  keywordBetween: (word) => `${word} can be read from either end.`,
+  sizeByWhat: (word) => `${word}: it does not say what the sizes are of.`,
+  limitsOfWhat: (word) => `${word} has limits, but not what they are of.`,
+  whichSpeed: (word) => `${word}: of the surface, or of the spindle?`,
+  whichAngle: (word) => `${word} does not say which angle it is.`,
+  wholeNumber: (word, { what }) => `${word}: the ${thing(what)} is a whole number.`,
+  oneOfRange: (word) => `${word} is a range; the card is worked out for one value.`,
+  gradeOnly: (word) => `${word} is not the same pitch in every shop.`,
+  calloutAgainst: (_, { what }) =>
+    `The callout and the words beside it disagree about the ${thing(what)}.`,
+};
+
+const isDoubt = (because: NonNullable<Unclear['because']>): because is Doubt => because in doubts;
+
+const whyUnclear = (fault: Unclear): string => {
+  const { because, word } = fault;
+  if (because === undefined) return `The ${thing(fault.what)} is not clear.`;
+  return isDoubt(because)
+    ? doubts[because](word === undefined ? 'That' : quoted(word), fault)
+    : contradictions[because];
+};
+
 const asked = (readings: readonly Suggestion[]): string => {
   const labels = readings.map((reading) => reading.label);
+  if (labels.length === 0) return 'Say it another way.';
   return labels.length === 1 ? `Did you mean ${list(labels)}?` : `Which one: ${list(labels)}?`;
+};
+
+const notFound = ({ what, word, nearest }: NotFound): string => {
+  const name = word === undefined ? '' : ` ${quoted(word)}`;
+  if (nearest.length > 0)
+    return `There is no ${thing(what)}${name} here. Did you mean ${list(nearest)}?`;
+  if (what === 'material')
+    return `There is no material${name} in the table, and it is no likely size. Name the nearest one there is, such as 4140, and its hardness, such as HB 210.`;
+  if (what === 'wheel')
+    return `There is no wheel${name} here. Give its size, such as wheel 20x8x6, or leave it out.`;
+  return `There is no ${thing(what)}${name} here. Check the name, or leave it out.`;
 };
 
 export const refusal = (fault: Refusal, show: Show): string => {
@@ -94,25 +163,21 @@ export const refusal = (fault: Refusal, show: Show): string => {
     case 'unreadable':
       return fault.nearest.length > 0
         ? `${quoted(fault.word)} is not a word I know. Did you mean ${list(fault.nearest)}?`
-        : `${quoted(fault.word)} is not a word I know. Leave it out, or type help for what I read.`;
+        : `${quoted(fault.word)} is not a word I know. Say it another way or leave it out; help shows what I read.`;
     case 'missing':
+      if (fault.word !== undefined)
+        return `${quoted(fault.word)} has nothing behind it that I can read. Type it like this: ${list(fault.examples)}.`;
       return `The ${thing(fault.parameter)} is missing. Add one, such as ${list(fault.examples)}.`;
     case 'outOfRange':
       return outOfRange(fault, show);
     case 'unclear':
-      if (fault.because !== undefined)
-        return `${contradictions[fault.because]} ${asked(fault.readings)}`;
-      return fault.readings.length > 0
-        ? `The ${thing(fault.what)} could mean more than one thing: ${list(fault.readings.map((reading) => reading.label))}. Which one?`
-        : `The ${thing(fault.what)} is unclear. Say it another way.`;
+      return `${whyUnclear(fault)} ${asked(fault.readings)}`;
     case 'notAllowed':
       return fault.people.length > 0
         ? `That needs the role ${fault.role}. Ask ${list(fault.people)}.`
         : `That needs the role ${fault.role}, which nobody has yet.`;
     case 'notFound':
-      return fault.nearest.length > 0
-        ? `There is no such ${thing(fault.what)} here. Did you mean ${list(fault.nearest)}?`
-        : `There is no such ${thing(fault.what)} here. Check the name, or leave it out.`;
+      return notFound(fault);
     case 'stale':
       return `The ${thing(fault.what)} was changed by ${fault.by} at ${fault.when}. Look at it again, then repeat your change.`;
     case 'unavailable':
