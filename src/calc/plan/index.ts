@@ -8,6 +8,7 @@ export {
 } from './chances.ts';
 export { plan } from './plan.ts';
 export {
+  type Aid,
   type Candidate,
   type LimitedBy,
   PITCH_TOLERANCE,

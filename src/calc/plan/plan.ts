@@ -41,6 +41,6 @@ export function plan(request: PlanRequest): Plan {
   refuseSenseless(request);
   const fittings = fittingsOf(request);
   const candidates = judged(prospectsOf(fittings, request), request);
-  const changes = candidates.some(passes) ? [] : changesFor(candidates, request);
+  const changes = candidates.some(passes) ? [] : changesFor(candidates, { request, fittings });
   return { candidates, fittingWheels: fittings.length, changes };
 }

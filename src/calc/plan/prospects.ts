@@ -188,7 +188,7 @@ export const formedProspect = (
 };
 
 /** A cut knurl's crest is its blank, so the whole count itself must lie inside the limits. */
-const cutProspects = (fitting: Fitting, request: PlanRequest): readonly Prospect[] => {
+export const cutProspects = (fitting: Fitting, request: PlanRequest): readonly Prospect[] => {
   const { limits, turningSpread, job } = request;
   const step = wholeToothDiameter(1, fitting.pitch.transverse);
   const most = Math.min(limits.high, job.stock ?? limits.high);

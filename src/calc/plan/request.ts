@@ -64,22 +64,31 @@ export type Candidate = {
   readonly request: SetupRequest;
 };
 
-/** A change to the job under which a set-up passes. */
-export type PlanChange =
+/** What holds the work better while it is knurled. */
+export type Aid = 'tailstock' | 'plug' | 'opposed';
+
+type Change =
   /** The crest inside the limits all the same, but not in the middle; landing is anywhere inside. */
-  | { readonly kind: 'offMiddle'; readonly candidate: Candidate }
+  | { readonly kind: 'offMiddle' }
   /** Another way of doing it: support, tool, turns. */
-  | { readonly kind: 'remedy'; readonly remedy: Remedy; readonly candidate: Candidate }
+  | { readonly kind: 'remedy'; readonly remedy: Remedy }
   /** One limit moved outward by so much. */
   | {
       readonly kind: 'widerLimits';
       readonly side: 'above' | 'below';
       readonly by: Mm;
       readonly limits: Window;
-      readonly candidate: Candidate;
     }
-  | { readonly kind: 'otherPitch'; readonly candidate: Candidate }
-  | { readonly kind: 'cut'; readonly candidate: Candidate };
+  | { readonly kind: 'otherPitch' }
+  | { readonly kind: 'cut' };
+
+/** A change to the job under which a set-up passes. */
+export type PlanChange = Change & {
+  /** The set-up that passes; under a remedy, the one it is to be applied to. */
+  readonly candidate: Candidate;
+  /** What has to hold the work as well, where the change alone is not enough. */
+  readonly aid: Aid | null;
+};
 
 export type Plan = {
   /** The best first, those that a check stops last. */
