@@ -1,7 +1,8 @@
 import type { Command } from '../src/desk/index.ts';
 import { check } from './knurl/check.ts';
 import { help } from './knurl/help.ts';
+import { plan } from './knurl/plan.ts';
 import { setup } from './knurl/setup.ts';
 
 /** Everything a person can ask for. A new command is one new file and one line here. */
-export const FLEET: readonly Command[] = [setup, check, help];
+export const FLEET: readonly Command[] = [setup, check, plan, help];

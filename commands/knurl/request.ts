@@ -135,7 +135,7 @@ const patternFor = (context: Context, said: SetupWords): Pattern => {
 
 const PITCH_EXAMPLES = ['21tpi', '96dp', '1.0 pitch'] as const;
 
-const pitchFor = (context: Context, said: SetupWords): Pitch | null => {
+const pitchFor = (context: Context, said: SetupWords, needed: boolean): Pitch | null => {
   const pitch = agreed(context, 'pitch', said.pitch, said.callout?.pitch ?? null);
   const counted = said.wheel?.teeth !== undefined && said.wheel.teeth !== null;
   if (pitch === null && !counted && said.proven === undefined)
@@ -257,9 +257,9 @@ const brinell = (said: SetupWords): number | null => {
   return scale === 'HB' ? value : brinellFromRockwellC(value);
 };
 
-const assemble = (context: Context, said: SetupWords): Built => {
+const assemble = (context: Context, said: SetupWords, pitchNeeded: boolean): Built => {
   const pattern = patternFor(context, said);
-  const pitch = pitchFor(context, said);
+  const pitch = pitchFor(context, said, pitchNeeded);
   checkAngles(context, said, pattern);
   checkEdge(context, said);
   checkTwice(context, said);
@@ -325,9 +325,9 @@ const assemble = (context: Context, said: SetupWords): Built => {
 };
 
 /** What a line asks for, in calc's own terms, or what has to be asked back. */
-export const requestOf = (context: Context, said: SetupWords): Built => {
+export const requestOf = (context: Context, said: SetupWords, pitchNeeded = true): Built => {
   try {
-    return assemble(context, said);
+    return assemble(context, said, pitchNeeded);
   } catch (error) {
     if (!(error instanceof Asks)) throw error;
     const { refusal } = error;

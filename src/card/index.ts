@@ -1,2 +1,3 @@
 export * from './card.ts';
 export * from './lines.ts';
+export type { CandidateSaid } from './planLines.ts';

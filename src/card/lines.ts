@@ -19,79 +19,82 @@ import type {
   Window,
 } from '../calc/index.ts';
 import type { CheckLines, CheckRows } from './checkLines.ts';
+import type { PlanLines, PlanRows } from './planLines.ts';
 
 /**
  * Every sentence a card can say, and the numbers it says it with. The phrase book of a language
  * has one entry for each; a new line here is a compile error there until it has words.
  */
-export type Lines = CheckLines & {
-  turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
-  leaveAt: { readonly blankDiameter: Mm; readonly toothCount: number };
-  stopped: { readonly check: Check };
-  /** The smallest changes that lift a stop. */
-  passesWith: {
-    readonly remedies: readonly { readonly kind: RemedyKind; readonly number: Figure | null }[];
+export type Lines = CheckLines &
+  PlanLines & {
+    turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
+    leaveAt: { readonly blankDiameter: Mm; readonly toothCount: number };
+    stopped: { readonly check: Check };
+    /** The smallest changes that lift a stop. */
+    passesWith: {
+      readonly remedies: readonly { readonly kind: RemedyKind; readonly number: Figure | null }[];
+    };
+    wouldTurnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
+    windowTracks: Window;
+    leaveItOption: {
+      readonly stock: Mm;
+      readonly toothCount: number;
+      readonly toothError: number;
+    };
+    asItIs: { readonly stock: Mm; readonly toothError: number };
+    finishMet: { readonly limits: Window; readonly fillMoved: boolean; readonly fill: number };
+    pitchTaken: {
+      readonly took: PitchBasis;
+      readonly toothCount: number;
+      readonly otherCount: number | null;
+    };
+    calloutBar: { readonly stock: Mm };
+    helixTaken: { readonly helix: Rad };
+    wheelNeeded: { readonly wheel: WheelKind; readonly pattern: Pattern };
+    materialTaken: { readonly name: string; readonly condition: string };
+    processSwitched: { readonly name: string };
+    labelOverruled: { readonly label: Pitch; readonly counted: CountedWheel; readonly normal: Mm };
+    wheelTaken: { readonly wheel: WheelSize; readonly edge: Edge };
+    classWindow: { readonly knurlClass: KnurlClass };
+    feedNeedsLength: Record<never, never>;
+    startHalfOn: { readonly chamfer: Mm; readonly clearance: Mm };
+    helpIntro: Record<never, never>;
+    helpVerb: { readonly verb: string; readonly line: string };
+    helpExample: { readonly line: string };
   };
-  wouldTurnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
-  windowTracks: Window;
-  leaveItOption: {
-    readonly stock: Mm;
-    readonly toothCount: number;
-    readonly toothError: number;
-  };
-  asItIs: { readonly stock: Mm; readonly toothError: number };
-  finishMet: { readonly limits: Window; readonly fillMoved: boolean; readonly fill: number };
-  pitchTaken: {
-    readonly took: PitchBasis;
-    readonly toothCount: number;
-    readonly otherCount: number | null;
-  };
-  calloutBar: { readonly stock: Mm };
-  helixTaken: { readonly helix: Rad };
-  wheelNeeded: { readonly wheel: WheelKind; readonly pattern: Pattern };
-  materialTaken: { readonly name: string; readonly condition: string };
-  processSwitched: { readonly name: string };
-  labelOverruled: { readonly label: Pitch; readonly counted: CountedWheel; readonly normal: Mm };
-  wheelTaken: { readonly wheel: WheelSize; readonly edge: Edge };
-  classWindow: { readonly knurlClass: KnurlClass };
-  feedNeedsLength: Record<never, never>;
-  startHalfOn: { readonly chamfer: Mm; readonly clearance: Mm };
-  helpIntro: Record<never, never>;
-  helpVerb: { readonly verb: string; readonly line: string };
-  helpExample: { readonly line: string };
-};
 export type LineId = keyof Lines;
 export type Line = { [K in LineId]: { readonly line: K; readonly values: Lines[K] } }[LineId];
 
 /** Label and value rows: the numbers of the card in reading order. */
-export type Rows = CheckRows & {
-  material: { readonly name: string; readonly condition: string };
-  feedIn: { readonly infeed: Mm; readonly cut: boolean };
-  firstTurn: { readonly firstBite: Mm };
-  stopWhen: {
-    readonly crestFlat: Mm;
-    readonly crest: Mm;
-    readonly low: Mm;
-    readonly high: Mm;
-    readonly cut: boolean;
+export type Rows = CheckRows &
+  PlanRows & {
+    material: { readonly name: string; readonly condition: string };
+    feedIn: { readonly infeed: Mm; readonly cut: boolean };
+    firstTurn: { readonly firstBite: Mm };
+    stopWhen: {
+      readonly crestFlat: Mm;
+      readonly crest: Mm;
+      readonly low: Mm;
+      readonly high: Mm;
+      readonly cut: boolean;
+    };
+    toothHeight: { readonly height: Mm; readonly fill: number; readonly sharpHeight: Mm };
+    run: { readonly spindleSpeed: RevPerMin; readonly surfaceSpeed: MPerMin };
+    plunge: {
+      readonly turns: number;
+      readonly dwell: number;
+      readonly time: Seconds | null;
+      readonly batch: number;
+    };
+    traverse: {
+      readonly feed: MmPerRev;
+      readonly low: MmPerRev;
+      readonly high: MmPerRev;
+      readonly turns: number | null;
+      readonly time: Seconds | null;
+      readonly batch: number;
+    };
   };
-  toothHeight: { readonly height: Mm; readonly fill: number; readonly sharpHeight: Mm };
-  run: { readonly spindleSpeed: RevPerMin; readonly surfaceSpeed: MPerMin };
-  plunge: {
-    readonly turns: number;
-    readonly dwell: number;
-    readonly time: Seconds | null;
-    readonly batch: number;
-  };
-  traverse: {
-    readonly feed: MmPerRev;
-    readonly low: MmPerRev;
-    readonly high: MmPerRev;
-    readonly turns: number | null;
-    readonly time: Seconds | null;
-    readonly batch: number;
-  };
-};
 export type RowId = keyof Rows;
 export type Row = { [K in RowId]: { readonly row: K; readonly values: Rows[K] } }[RowId];
 
@@ -103,6 +106,7 @@ export type Labels = {
   smaller: { readonly toothCount: number; readonly blankDiameter: Mm };
   larger: { readonly toothCount: number; readonly blankDiameter: Mm };
   remedy: { readonly kind: RemedyKind; readonly number: Figure | null };
+  candidate: { readonly place: number; readonly wheel: string; readonly toothCount: number };
   ownSpeed: Record<never, never>;
   cutInstead: Record<never, never>;
   bevelled: Record<never, never>;

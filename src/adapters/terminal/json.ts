@@ -24,5 +24,6 @@ export const answerJson = (answer: Answer, book: Book): Readonly<Record<string, 
     cautions: card.cautions,
     alternatives: card.alternatives,
     choices: spoken.choices,
+    ...card.lists,
   };
 };

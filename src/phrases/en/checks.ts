@@ -1,12 +1,13 @@
 import type { Figures } from '../../calc/index.ts';
 import type { Book } from '../book.ts';
+import { checkNames } from './checkNames.ts';
 
 /** A check's number; its checks always carry the ones they speak of. */
 const value = (figures: Figures, name: string): number => figures[name]?.value ?? 0;
 
 export const checks: Book['checks'] = {
   tracking: {
-    label: 'Tracking',
+    label: checkNames.tracking,
     say: (check, show) => {
       const off = `${show.teeth(value(check.figures, 'toothError'))} of a tooth off`;
       switch (check.reason) {
@@ -24,7 +25,7 @@ export const checks: Book['checks'] = {
     },
   },
   wheel: {
-    label: 'Wheel',
+    label: checkNames.wheel,
     say: (check, show) => {
       const doubt = value(check.figures, 'countDoubt');
       const out = `could be ${doubt >= 0.95 ? show.count(doubt) : doubt.toFixed(2)} teeth out`;
@@ -43,7 +44,7 @@ export const checks: Book['checks'] = {
     },
   },
   runout: {
-    label: 'Run-out',
+    label: checkNames.runout,
     say: (check, show) => {
       const off = show.length(value(check.figures, 'eccentricity'));
       const bite = show.length(value(check.figures, 'firstBite'));
@@ -58,7 +59,7 @@ export const checks: Book['checks'] = {
     },
   },
   finish: {
-    label: 'Print',
+    label: checkNames.finish,
     say: (check, show) => {
       const by = show.length(value(check.figures, 'outsideBy'));
       switch (check.reason) {
@@ -74,7 +75,7 @@ export const checks: Book['checks'] = {
     },
   },
   fill: {
-    label: 'Fill',
+    label: checkNames.fill,
     say: (check, show) => {
       const fill = show.percent(value(check.figures, 'fill'));
       const most = show.percent(value(check.figures, 'fillHigh'));
@@ -93,7 +94,7 @@ export const checks: Book['checks'] = {
     },
   },
   feed: {
-    label: 'Feed',
+    label: checkNames.feed,
     say: (check, show) => {
       const low = value(check.figures, 'feedLow');
       const high = value(check.figures, 'feedHigh');
@@ -115,7 +116,7 @@ export const checks: Book['checks'] = {
     },
   },
   edge: {
-    label: 'Edge',
+    label: checkNames.edge,
     say: (check) => {
       switch (check.reason) {
         case 'bevelledPlunge':
@@ -140,7 +141,7 @@ export const checks: Book['checks'] = {
     },
   },
   material: {
-    label: 'Material',
+    label: checkNames.material,
     say: (check) => {
       switch (check.reason) {
         case 'forms':
@@ -155,7 +156,7 @@ export const checks: Book['checks'] = {
     },
   },
   speed: {
-    label: 'Speed',
+    label: checkNames.speed,
     say: (check, show) => {
       const limit = show.speed(value(check.figures, 'speedLimit'));
       switch (check.reason) {
@@ -169,7 +170,7 @@ export const checks: Book['checks'] = {
     },
   },
   pinHeat: {
-    label: 'Pin heat',
+    label: checkNames.pinHeat,
     say: (check) => {
       const index = value(check.figures, 'pinHeatIndex').toFixed(2);
       const warm = check.figures['wheelWarmUp'];
@@ -187,7 +188,7 @@ export const checks: Book['checks'] = {
     },
   },
   pinPressure: {
-    label: 'Pin load',
+    label: checkNames.pinPressure,
     say: (check) => {
       const pressure = `${value(check.figures, 'pinPressure').toFixed(0)} MPa`;
       const limit = `${value(check.figures, 'pressureFineTo').toFixed(0)} MPa`;
@@ -195,7 +196,7 @@ export const checks: Book['checks'] = {
     },
   },
   bending: {
-    label: 'Bending',
+    label: checkNames.bending,
     say: (check, show) => {
       const stress = `${value(check.figures, 'bendingStress').toFixed(0)} MPa`;
       const fine = `${value(check.figures, 'stressFineTo').toFixed(0)} MPa`;
@@ -213,7 +214,7 @@ export const checks: Book['checks'] = {
     },
   },
   ring: {
-    label: 'Wall',
+    label: checkNames.ring,
     say: (check, show) => {
       const stress = `${value(check.figures, 'ringStress').toFixed(0)} MPa`;
       const closes = show.length(value(check.figures, 'ringClosing'));
@@ -235,7 +236,7 @@ export const checks: Book['checks'] = {
     },
   },
   stickout: {
-    label: 'Stickout',
+    label: checkNames.stickout,
     say: (check) => {
       switch (check.reason) {
         case 'short':
@@ -250,7 +251,7 @@ export const checks: Book['checks'] = {
     },
   },
   width: {
-    label: 'Width',
+    label: checkNames.width,
     say: (check, show) => {
       const width = show.length(value(check.figures, 'knurlWidth'));
       return check.reason === 'within'
@@ -259,7 +260,7 @@ export const checks: Book['checks'] = {
     },
   },
   capacity: {
-    label: 'Machine',
+    label: checkNames.capacity,
     say: (check) => {
       switch (check.reason) {
         case 'within':
@@ -272,7 +273,7 @@ export const checks: Book['checks'] = {
     },
   },
   fit: {
-    label: 'Fit',
+    label: checkNames.fit,
     say: (check, show) => {
       const each = show.length(value(check.figures, 'interference'));
       const share = show.percent(value(check.figures, 'interferenceShare'));
@@ -289,7 +290,7 @@ export const checks: Book['checks'] = {
     },
   },
   seam: {
-    label: 'Seam',
+    label: checkNames.seam,
     say: (check, show) => {
       const chance = show.percent(value(check.figures, 'chanceTracks'));
       switch (check.reason) {
@@ -303,7 +304,7 @@ export const checks: Book['checks'] = {
     },
   },
   count: {
-    label: 'Count',
+    label: checkNames.count,
     say: (check, show) => {
       const counted = show.count(value(check.figures, 'countedTeeth'));
       const expected = show.count(value(check.figures, 'countExpected'));
@@ -320,7 +321,7 @@ export const checks: Book['checks'] = {
     },
   },
   filled: {
-    label: 'Fill',
+    label: checkNames.filled,
     say: (check, show) => {
       const measured = show.percent(value(check.figures, 'fillMeasured'));
       const planned = show.percent(value(check.figures, 'fillExpected'));
@@ -335,7 +336,7 @@ export const checks: Book['checks'] = {
     },
   },
   growth: {
-    label: 'Growth',
+    label: checkNames.growth,
     say: (check, show) => {
       const measured = show.percent(value(check.figures, 'growthFactor'));
       const expected = show.percent(value(check.figures, 'growthFactorExpected'));
@@ -350,7 +351,7 @@ export const checks: Book['checks'] = {
     },
   },
   taper: {
-    label: 'Taper',
+    label: checkNames.taper,
     say: (check, show) => {
       const taper = show.length(Math.abs(value(check.figures, 'taper')));
       switch (check.reason) {

@@ -26,6 +26,8 @@ export const en: Book = {
     larger: ({ toothCount, blankDiameter }, show) =>
       `Larger: ${show.length(blankDiameter)}, ${String(toothCount)} teeth`,
     remedy: ({ kind, number }, show) => remedyLabel(kind, number, show),
+    candidate: ({ place, wheel, toothCount }) =>
+      `Set up ${String(place)}: ${String(toothCount)} teeth, ${wheel}`,
     ownSpeed: () => 'Run at the usual speed',
     cutInstead: () => 'Cut it instead',
     bevelled: () => 'Bevelled wheel',

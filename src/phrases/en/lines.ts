@@ -3,8 +3,9 @@ import type { Book } from '../book.ts';
 import type { Show } from '../show.ts';
 import { checkLines } from './checkLines.ts';
 import { checks } from './checks.ts';
-import { remedyLabel } from './remedies.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
+import { planLines } from './planLines.ts';
+import { remedyLabel } from './remedies.ts';
 
 const teeth = (count: number): string => `${String(count)} ${count === 1 ? 'tooth' : 'teeth'}`;
 const inSentence = (label: string): string => label.charAt(0).toLowerCase() + label.slice(1);
@@ -19,6 +20,7 @@ const stopText = (check: Check, show: Show): string =>
 
 export const lines: Book['lines'] = {
   ...checkLines,
+  ...planLines,
   turnTo: ({ blankDiameter, toothCount }, show) =>
     `Turn to ${show.length(blankDiameter)}: ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
   leaveAt: ({ blankDiameter, toothCount }, show) =>

@@ -1,0 +1,203 @@
+import {
+  type Candidate,
+  cribPitch,
+  DEFAULT_INCLUDED,
+  type Figures,
+  figure,
+  type Pitch,
+  type Plan,
+  type PlanChange,
+  type SetupRequest,
+  STANDING_CAUTIONS,
+  type Window,
+} from '../../src/calc/index.ts';
+import {
+  type CandidateSaid,
+  type Card,
+  type Choice,
+  type Line,
+  label,
+  line,
+  type Row,
+  row,
+} from '../../src/card/index.ts';
+import type { Context } from '../../src/desk/index.ts';
+import type { CribKind, PlanWords } from './plan.ts';
+import { reworded } from './words.ts';
+
+type Planned = {
+  readonly context: Context;
+  readonly given: PlanWords;
+  readonly request: SetupRequest;
+  readonly limits: Window;
+  readonly kind: CribKind;
+  readonly plan: Plan;
+};
+
+/** Candidates told on the card; programs get all of them. */
+const SHOWN = 5;
+
+const asSaid = (candidate: Candidate): CandidateSaid => {
+  const { wheel, toothCount, blankDiameter, fill, process } = candidate;
+  const { chanceTracks, chanceLands, limitedBy, state } = candidate;
+  return {
+    wheel: wheel.name,
+    toothCount,
+    blankDiameter,
+    fill,
+    process,
+    chanceTracks,
+    chanceLands,
+    limitedBy,
+    state,
+  };
+};
+
+const changeLine = (change: PlanChange): Line => {
+  const candidate = asSaid(change.candidate);
+  switch (change.kind) {
+    case 'offMiddle':
+      return line('planOffMiddle', {});
+    case 'remedy':
+      return line('planRemedy', { ...change.remedy, candidate });
+    case 'widerLimits':
+      return line('planWider', { ...change, candidate });
+    case 'otherPitch':
+      return line('planOtherPitch', { pitch: cribPitch(change.candidate.wheel).normal, candidate });
+    case 'cut':
+      return line('planCut', candidate);
+  }
+};
+
+const pitchWords = (pitch: Pitch): string => {
+  switch (pitch.system) {
+    case 'metric':
+      return `${String(pitch.value)} pitch`;
+    case 'tpi':
+      return `${String(pitch.value)}tpi`;
+    case 'dp':
+      return `${String(pitch.value)}dp`;
+    case 'module':
+      return `module ${String(pitch.value)}`;
+  }
+};
+
+/** Words that the candidate's own take the place of. */
+const REPLACED = ['pitch', 'wheel', 'bevel', 'edge', 'oneWheel', 'angle', 'process', 'tolerance'];
+
+const wheelWords = ({ wheel }: Candidate): string => {
+  const { diameter, face, bore, bevel } = wheel.size;
+  const size = [diameter, face, bore].map((each) => String(Number(each.toFixed(4)))).join('x');
+  return [
+    wheel.pitch === null ? '' : pitchWords(wheel.pitch),
+    `wheel ${size} mm`,
+    wheel.teeth === null ? '' : `${String(wheel.teeth)} teeth`,
+    bevel === null ? '' : `bevel ${String(Number(bevel.toFixed(4)))} mm`,
+  ]
+    .filter((part) => part !== '')
+    .join(' ');
+};
+
+const degreesOf = (angle: number): string => String(Math.round((angle * 180) / Math.PI));
+
+/** The line that works this candidate out in full. */
+const setupWords = (p: Planned, candidate: Candidate): string => {
+  const { wheel, process, toothCount, fill } = candidate;
+  const more = [
+    wheelWords(candidate),
+    `teeth ${String(toothCount)}`,
+    `fill ${String(Number((fill * 100).toFixed(2)))}%`,
+    wheel.onePiece && p.request.pattern.kind === 'diamond' ? 'one wheel' : '',
+    wheel.included === DEFAULT_INCLUDED ? '' : `angle ${degreesOf(wheel.included)}`,
+    process === 'cut' ? 'cut' : '',
+  ].filter((part) => part !== '');
+  return reworded(p.context, REPLACED, more.join(' ')).replace(
+    /^(?:\/?knurl\s+)?plan\b/iu,
+    '/knurl',
+  );
+};
+
+const passes = (candidate: Candidate): boolean => candidate.state !== 'stop';
+
+/**
+ * What the card lists. A crest inside the limits but off their middle is still a part that passes:
+ * where nothing meets the middle, it is the answer, and says so.
+ */
+const listed = ({ plan }: Planned): readonly Candidate[] => {
+  if (plan.candidates.some(passes)) return plan.candidates;
+  const offMiddle = plan.changes.flatMap((change) =>
+    change.kind === 'offMiddle' ? [change.candidate] : [],
+  );
+  return [...offMiddle, ...plan.candidates];
+};
+
+const bestOf = (p: Planned): Candidate | undefined => listed(p).find(passes);
+const isOffMiddle = (p: Planned): boolean =>
+  p.plan.changes.some((change) => change.kind === 'offMiddle' && change.candidate === bestOf(p));
+
+const headline = (p: Planned): Line => {
+  const best = bestOf(p);
+  return best === undefined
+    ? line('planNone', { limits: p.limits })
+    : line('planBest', asSaid(best));
+};
+
+const firstLines = (p: Planned): readonly Line[] => [
+  line('planFor', { limits: p.limits, wheels: p.plan.fittingWheels }),
+  ...(isOffMiddle(p) ? [line('planOffMiddle', {})] : []),
+  p.kind === 'byStandard' ? line('planCribByStandard', {}) : line('planCribOneWheel', {}),
+];
+
+const otherChanges = ({ plan }: Planned): readonly PlanChange[] =>
+  plan.changes.filter((change) => change.kind !== 'offMiddle');
+
+const candidateRows = (p: Planned): readonly Row[] =>
+  listed(p)
+    .slice(0, SHOWN)
+    .map((candidate, index) => row('candidate', { ...asSaid(candidate), place: index + 1 }));
+
+const choices = (p: Planned): readonly Choice[] =>
+  listed(p)
+    .slice(0, SHOWN)
+    .map((candidate, index) => ({
+      label: label('candidate', {
+        place: index + 1,
+        wheel: candidate.wheel.name,
+        toothCount: candidate.toothCount,
+      }),
+      words: setupWords(p, candidate),
+    }));
+
+const figuresOf = (best: Candidate | undefined): Figures => ({
+  toothCount: best === undefined ? null : figure(best.toothCount, '1'),
+  blankDiameter: best === undefined ? null : figure(best.blankDiameter, 'mm'),
+  fill: best === undefined ? null : figure(best.fill, '1'),
+  crestDiameter: best === undefined ? null : figure(best.crestDiameter, 'mm'),
+  chanceTracks: best === undefined ? null : figure(best.chanceTracks, '1'),
+  chanceLands: best === undefined ? null : figure(best.chanceLands, '1'),
+});
+
+/** The plan: the best first, what limits each, and what would pass where nothing does. */
+export const planCard = (p: Planned): Card => {
+  const best = bestOf(p);
+  return {
+    verb: 'plan',
+    headline: headline(p),
+    parts: [
+      { part: 'lines', lines: firstLines(p) },
+      { part: 'lines', lines: otherChanges(p).map(changeLine) },
+      { part: 'rows', rows: candidateRows(p) },
+      { part: 'checks', checks: best?.checks ?? [] },
+      { part: 'cautions', shown: [], rest: [], all: STANDING_CAUTIONS },
+      { part: 'footing' },
+    ],
+    choices: choices(p),
+    pictures: [],
+    figures: figuresOf(best),
+    checks: best?.checks ?? [],
+    cautions: STANDING_CAUTIONS,
+    alternatives: [],
+    lists: { candidates: listed(p).map(asSaid) },
+    units: p.given.units ?? p.context.units,
+  };
+};
