@@ -1,4 +1,4 @@
-import { type CardTable, newId } from '../store/index.ts';
+import { type CardTable } from '../store/index.ts';
 import { CODE_LENGTHS, misheard, newCode, readCode } from './codes.ts';
 import { type Done, done, refused } from './result.ts';
 import type { ShopChange, ShopView } from './view.ts';
@@ -49,7 +49,7 @@ export const keepCard = async (
 
 const rowOf = (change: ShopChange, draft: CardDraft): Omit<CardTable, 'code'> => ({
   shop: change.id,
-  id: newId(change.at),
+  id: change.db.newId(change.at),
   kind: draft.kind,
   made_at: change.at,
   made_by: change.by,

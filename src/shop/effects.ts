@@ -1,4 +1,4 @@
-import { literally, newId } from '../store/index.ts';
+import { literally } from '../store/index.ts';
 import type { ShopChange, ShopView } from './view.ts';
 
 /** What queueing needs of a change: whose and when. */
@@ -25,13 +25,13 @@ export const queueEffects = async (
   effects: readonly QueuedEffect[],
 ): Promise<readonly string[]> => {
   const queued: string[] = [];
-  for (const [place, effect] of effects.entries()) {
+  for (const effect of effects) {
     const state = await startingState(change, effect.after);
     const row = await change.db
       .insertInto('effect')
       .values({
         shop: change.id,
-        id: newId(change.at, place),
+        id: change.db.newId(change.at),
         key: effect.key,
         effect: JSON.stringify(effect.effect),
         state,

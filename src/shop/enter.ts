@@ -1,4 +1,4 @@
-import { newId, type PersonTable, type Tx } from '../store/index.ts';
+import { type PersonTable, type Tx } from '../store/index.ts';
 import { rolesOfGroups } from './groups.ts';
 import { remember } from './history.ts';
 import { cleaned, keyOf } from './names.ts';
@@ -77,7 +77,7 @@ const makeShop = async (tx: Tx, shop: ShopOutside, at: number): Promise<string |
   const { platform, id: outside } = shop;
   const row = await tx
     .insertInto('shop')
-    .values({ id: newId(at), platform, outside, name: cleaned(shop.name), made_at: at })
+    .values({ id: tx.newId(at), platform, outside, name: cleaned(shop.name), made_at: at })
     .onConflict((oc) => oc.columns(['platform', 'outside']).doNothing())
     .returning('id')
     .executeTakeFirst();
@@ -100,7 +100,7 @@ const meet = async (
     .insertInto('person')
     .values({
       shop: view.id,
-      id: newId(at),
+      id: tx.newId(at),
       outside: person.id,
       name,
       name_key,

@@ -1,4 +1,3 @@
-import { newId } from '../store/index.ts';
 import { remember } from './history.ts';
 import { cleaned, keyOf } from './names.ts';
 import { type Done, done, refused } from './result.ts';
@@ -50,7 +49,7 @@ export const nameGroupRole = async (
   const before = (await listGroups(change)).find(({ outside }) => outside === group.outside);
   const fresh = {
     shop: change.id,
-    id: newId(change.at),
+    id: change.db.newId(change.at),
     outside: group.outside,
     name,
     name_key: keyOf(change.words, name),

@@ -1,4 +1,4 @@
-import { newId, type Reader } from '../store/index.ts';
+import { type Reader } from '../store/index.ts';
 import type { ShopChange, ShopView } from './view.ts';
 
 export type Subject =
@@ -35,9 +35,9 @@ export const remember = async (
   subject: Subject,
   lines: readonly Remembered[],
 ): Promise<void> => {
-  const rows = lines.map((line, place) => ({
+  const rows = lines.map((line) => ({
     shop: change.id,
-    id: newId(change.at, place),
+    id: change.db.newId(change.at),
     at: change.at,
     by: change.by,
     subject,

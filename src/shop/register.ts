@@ -1,5 +1,4 @@
 import {
-  newId,
   type RegisterName,
   readRegister,
   type Tables,
@@ -76,7 +75,7 @@ export const addTo = async <N extends RegisterName, T extends { readonly name: s
   const content = { ...given, name: cleaned(given.name) };
   const fault = faultOf(register, content);
   if (fault !== null) return refused(fault);
-  const id = newId(change.at);
+  const id = change.db.newId(change.at);
   const added = await addRows(change, register, [{ id, content }]);
   if (!added.has(id)) {
     return refused({ code: 'taken', what: register.subject, name: content.name });

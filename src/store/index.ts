@@ -2,7 +2,6 @@
 export { backup } from './backup.ts';
 export { BackupFault, type BackupFaultCode } from './backupFaults.ts';
 export { RecordsTooNew, StoreUnavailable, type UnavailableReason } from './faults.ts';
-export { newId } from './ids.ts';
 export { literally } from './literally.ts';
 export type { Engine } from './migrations/columns.ts';
 export { type StorePlace, type StoreSettings, storePlace } from './place.ts';

@@ -1,6 +1,7 @@
 import type { Kysely, Transaction } from 'kysely';
 import { bringUp } from './form.ts';
 import type { Watch } from './guard.ts';
+import { idMaker, type NewId } from './ids.ts';
 import type { Engine } from './migrations/columns.ts';
 import type { StorePlace } from './place.ts';
 import { openPostgres } from './postgres.ts';
@@ -11,7 +12,11 @@ import { changeRunner, type TransactOptions } from './transact.ts';
 /** What can be asked of the records. */
 export type Reader = Pick<Kysely<Tables>, 'selectFrom' | 'with'>;
 /** What can be asked and changed while a change is open. */
-export type Tx = Reader & Pick<Transaction<Tables>, 'insertInto' | 'updateTable' | 'deleteFrom'>;
+export type Tx = Reader &
+  Pick<Transaction<Tables>, 'insertInto' | 'updateTable' | 'deleteFrom'> & {
+    /** An id for a new row, of the moment it is made. */
+    readonly newId: NewId;
+  };
 
 export type Store = {
   readonly engine: Engine;
@@ -61,10 +66,12 @@ export const migrate = async (place: StorePlace): Promise<readonly string[]> => 
 const sqliteStore = async (file: string, options: StoreOptions): Promise<Store> => {
   const { write, read, snapshot, close } = await openSqlite(file, options);
   const run = changeRunner();
+  const newId = idMaker();
   return {
     engine: 'sqlite',
     read,
-    transact: (work, how) => run(() => write.transaction().execute(work), how),
+    transact: (work, how) =>
+      run(() => write.transaction().execute((trx) => work(changing(trx, newId))), how),
     snapshot,
     close,
   };
@@ -73,10 +80,12 @@ const sqliteStore = async (file: string, options: StoreOptions): Promise<Store> 
 const postgresStore = (url: string, options: StoreOptions): Store => {
   const { db, close } = openPostgres(url, options);
   const run = changeRunner();
+  const newId = idMaker();
   return {
     engine: 'postgres',
     read: db,
-    transact: (work, how) => run(() => db.transaction().execute(work), how),
+    transact: (work, how) =>
+      run(() => db.transaction().execute((trx) => work(changing(trx, newId))), how),
     snapshot: (work) =>
       db
         .transaction()
@@ -86,3 +95,13 @@ const postgresStore = (url: string, options: StoreOptions): Store => {
     close,
   };
 };
+
+/** No more of the query builder than a change may use. */
+const changing = (trx: Transaction<Tables>, newId: NewId): Tx => ({
+  selectFrom: trx.selectFrom.bind(trx),
+  with: trx.with.bind(trx),
+  insertInto: trx.insertInto.bind(trx),
+  updateTable: trx.updateTable.bind(trx),
+  deleteFrom: trx.deleteFrom.bind(trx),
+  newId,
+});

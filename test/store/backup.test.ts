@@ -88,10 +88,10 @@ describe.each(ENGINES)('a backup of %s', (engine) => {
     const { store, place } = await newRecords(engine);
     await fill(store, 300);
     const folder = newFolder();
-    let running = true;
+    const until = new AbortController();
     const writer = (async () => {
       // Each change adds one wheel and counts it on another: a torn backup would show a difference.
-      for (let at = 300; running; at += 1) {
+      for (let at = 300; !until.signal.aborted; at += 1) {
         await store.transact(async (tx) => {
           await tx
             .insertInto('wheel')
@@ -110,7 +110,7 @@ describe.each(ENGINES)('a backup of %s', (engine) => {
       await backup(place, path.join(folder, `${round}.jsonl`));
       if (engine === 'sqlite') await backup(place, path.join(folder, `${round}.db`));
     }
-    running = false;
+    until.abort();
     await writer;
     for (const name of fs.readdirSync(folder)) {
       const target = await freshPlace(name.endsWith('.db') ? 'sqlite' : engine);

@@ -1,4 +1,4 @@
-import { newId, type RegisterName } from '../../store/index.ts';
+import { type RegisterName } from '../../store/index.ts';
 import { cleaned, keyOf } from '../names.ts';
 import { addRows, changeIn, faultOf, type Kept, listOf, type Register } from '../register.ts';
 import type { ShopRefusal } from '../result.ts';
@@ -212,7 +212,7 @@ const settle = async <N extends RegisterName, T extends Thing>(
     if (fault !== null) {
       report(row, 'refused', [cellFault(sheet, placed, content, fault)]);
     } else if (old === undefined) {
-      fresh.push({ id: newId(change.at, fresh.length), content, row });
+      fresh.push({ id: change.db.newId(change.at), content, row });
     } else {
       report(row, ...(await meetOld(change, register, placed, old, row.said, replace)));
     }

@@ -1,0 +1,3 @@
+import { codes } from './contract/cards.ts';
+
+codes();

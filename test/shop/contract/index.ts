@@ -1,0 +1,16 @@
+/** What a shop remembers, whichever engine keeps it. */
+import { describe } from 'vitest';
+import type { Engine } from '../../../src/store/index.ts';
+import { cards } from './cards.ts';
+import { lists } from './lists.ts';
+import { people } from './people.ts';
+import { settings } from './settings.ts';
+
+export const shopContract = (engine: Engine): void => {
+  describe(`a shop in ${engine}`, () => {
+    lists(engine);
+    people(engine);
+    settings(engine);
+    cards(engine);
+  });
+};

@@ -1,0 +1,3 @@
+import { shopContract } from './contract/index.ts';
+
+shopContract('sqlite');
