@@ -1,6 +1,12 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { chanceByLabel, checkBlank, provenPitch } from '../../src/calc/checking/index.ts';
+import {
+  CHECK_FIGURES,
+  chanceByLabel,
+  checkBlank,
+  provenPitch,
+  proveWheel,
+} from '../../src/calc/checking/index.ts';
 import { degrees, inch, type Mm, mm, OutOfRange } from '../../src/calc/units.ts';
 import { sixDigits } from '../support/digits.ts';
 import { mulberry32 } from '../support/random.ts';
@@ -140,6 +146,26 @@ describe('a proven pair', () => {
     expect(Math.abs(valueOf(found, 'toothError'))).toBeLessThan(1e-9);
     expect(found.checks[1]).toMatchObject({ state: 'fine', reason: 'proven' });
     expect(valueOf(found, 'chanceTracks')).toBe(1);
+  });
+
+  it('from a scrap roll replaces the label, and moves the next diameter with it', () => {
+    // By hand: π × 25.273/65 = 1.221500; 64 × 1.221500/π = 24.884185
+    const found = proveWheel(requestOf(), inch(0.995), 65);
+    expect(valueOf(found, 'effectivePitch')).toBeCloseTo(1.2215, 5);
+    expect(Math.abs(valueOf(found, 'toothError'))).toBeLessThan(1e-9);
+    expect(valueOf(found, 'nextDiameter')).toBeCloseTo(24.884185, 5);
+    expect(found.checks[1]).toMatchObject({ state: 'fine', reason: 'proven' });
+  });
+
+  it.each([0, 10_000, 65.5])('of %f teeth on 0.995 in is refused, with both limits', (count) => {
+    expect(() => proveWheel(requestOf(), inch(0.995), count)).toThrow(/outside 21 to 197/);
+  });
+
+  it('has every figure of a check, those that do not apply as null', () => {
+    const found = proveWheel(requestOf(), inch(0.995), 65);
+    expect(Object.keys(found.figures)).toEqual(Object.keys(CHECK_FIGURES));
+    expect(found.figures.seamTakeOff).toBeNull();
+    expect(found.figures.growthFactor).toBeNull();
   });
 
   it.each([0, 2, 10_000])('of %f teeth is refused', (count) => {

@@ -2,15 +2,15 @@ import { formedRound, heightFromCrest } from '../growth/index.ts';
 import { formOf } from '../pattern.ts';
 import { type SetupRequest, type SetupResult, setUp } from '../setup/index.ts';
 import { toothCount } from '../teeth.ts';
-import { type Mm, mm, OutOfRange, within } from '../units.ts';
+import { type Mm, mm, within } from '../units.ts';
 import { type Fade, FLAT_READING, type FlatsAlong, fadeAlong } from './fade.ts';
-import { countLimits } from './proven.ts';
+import { wholeCount } from './proven.ts';
 
 /** How well a diameter over crests and a tooth height are read, standard deviations. Judgement. */
-export const CREST_READING: Mm = mm(0.01);
-export const HEIGHT_READING: Mm = mm(0.01);
+const CREST_READING: Mm = mm(0.01);
+const HEIGHT_READING: Mm = mm(0.01);
 /** Fill that a person stops within, standard deviation. Judgement. */
-export const STOPS_WITHIN = 0.03;
+const STOPS_WITHIN = 0.03;
 
 /** What was measured on a finished part; null where it was not. */
 export type MeasuredPart = {
@@ -90,13 +90,6 @@ const crestSaid = (part: MeasuredPart, plan: SetupResult, sharp: Mm): Mm | null 
   return within('crestDiameter', part.crest, mm(least), mm(part.blank + 2 * sharp), 'mm');
 };
 
-const countSaid = (part: MeasuredPart, expected: number): void => {
-  if (part.teeth === null) return;
-  const { fewest, most } = countLimits(expected);
-  within('counted', part.teeth, fewest, most);
-  if (!Number.isInteger(part.teeth)) throw new OutOfRange('counted', part.teeth, fewest, most, '1');
-};
-
 /** Fill that the crest speaks for, the expected growth being right. */
 const crestFill = (
   request: SetupRequest,
@@ -155,7 +148,7 @@ export const judge = (request: SetupRequest, part: MeasuredPart): Judged => {
   const plan = setUp({ ...request, stock: part.blank, asIs: true, wantedTeeth: null });
   const sharp = mm(figureOf(plan, 'sharpHeight'));
   const countExpected = Math.round(toothCount(part.blank, plan.pitch.transverse));
-  countSaid(part, countExpected);
+  if (part.teeth !== null) wholeCount(part.teeth, countExpected);
   const crest = crestSaid(part, plan, sharp);
   const reading = fillReading(part, sharp, plan.pitch.normal);
   const fillPlanned = plan.blank.tooth.fill;

@@ -6,7 +6,7 @@ import type { Judged, Off } from './judge.ts';
 import { provenPitch } from './proven.ts';
 
 /** A figure this many standard deviations from what was expected is off. Judgement. */
-export const OFF_FROM = 2.5;
+const OFF_FROM = 2.5;
 /** A count this near to twice the expected one is a doubled pattern. Judgement. */
 const DOUBLED_WITHIN = 0.06;
 

@@ -22,7 +22,7 @@ export type CrestMaker = {
   readonly growth: GrowthBelief;
 };
 
-export const crestAt = (maker: CrestMaker, blank: Mm, fill: number): Mm =>
+const crestAt = (maker: CrestMaker, blank: Mm, fill: number): Mm =>
   mm(
     blank +
       maker.growth.mean *
@@ -35,7 +35,7 @@ export const crestAt = (maker: CrestMaker, blank: Mm, fill: number): Mm =>
   );
 
 /** Fill nearest the wanted one whose crest lies inside the limits; null where there is none. */
-export const fillInside = (
+const fillInside = (
   maker: CrestMaker,
   blank: Mm,
   limits: Window,

@@ -19,14 +19,14 @@ import { type Mm, mm, within } from '../units.ts';
 import { blankFigures, knurlable, type WheelOnWork } from './blank.ts';
 import { chanceByLabel, seamChance } from './chance.ts';
 import { type CheckAlternative, type CheckFigures, checkFigures } from './figures.ts';
-import { countLimits } from './proven.ts';
+import { wholeCount } from './proven.ts';
 
 /** From this gap on the seam is whole as it is. Judgement. */
-export const SEAM_WHOLE_FROM = 0.95;
+const SEAM_WHOLE_FROM = 0.95;
 /** A gap this small tracks too and is only centred: the window of every count. */
-export const SEAM_CENTRED_TO = TRACKS_WITHIN;
+const SEAM_CENTRED_TO = TRACKS_WITHIN;
 /** How far a label is off at the worst, the rolling circle left out. Derived from DIN 403. */
-export const LABEL_OFF = 0.02;
+const LABEL_OFF = 0.02;
 /** Below this the chance that the told diameter tracks is watched. Judgement. */
 const CHANCE_FINE = 0.9;
 const ALTERNATIVES = 3;
@@ -99,8 +99,8 @@ const readSeam = (of: {
   const { diameter, reading, label } = of;
   const read = within('seam', reading.gap, 0, 1);
   const gap = read === 0 ? 1 : read;
-  const { fewest, most } = countLimits(toothCount(diameter, label.transverse));
-  const count = reading.count === null ? null : within('counted', reading.count, fewest, most);
+  const expected = toothCount(diameter, label.transverse);
+  const count = reading.count === null ? null : wholeCount(reading.count, expected);
   const pitch = count === null ? label.transverse : mm((Math.PI * diameter) / (count - 1 + gap));
   const marksOff = reading.scrap ? null : untilMarksAreGone(gap, pitch, of.bite);
   const kind = kindOf(gap);

@@ -4,15 +4,13 @@ export { type CheckSays, LEAST_FACTOR, type NumberSays, numberFactor } from './f
 export {
   MOVE_NUMBERS,
   type MoveNumber,
-  NEED_THERE,
   type Need,
   NO_FACTS,
-  TROUBLE_NUMBERS,
   type TroubleFacts,
   type TroubleNumber,
 } from './facts.ts';
-export { type CauseCounts, type CauseShare, learnedPrior, PRIOR_RESULTS } from './learned.ts';
+export { type CauseCounts, type CauseShare, learnedPrior } from './learned.ts';
 export { PRIORS } from './priors.ts';
 export { type Evidence, type NextMove, type RankedCause, rankCauses } from './rank.ts';
-export { NOTHING_SEEN, ORDINARY_FORCE, type TroubleSeen, troubleFacts } from './setupFacts.ts';
+export { NOTHING_SEEN, type TroubleSeen, troubleFacts } from './setupFacts.ts';
 export { CAUSE_IDS, type CauseId, SYMPTOMS, type SymptomId } from './symptoms.ts';

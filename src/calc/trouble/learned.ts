@@ -3,7 +3,7 @@ import { PRIORS } from './priors.ts';
 import { CAUSE_IDS, type CauseId, type SymptomId } from './symptoms.ts';
 
 /** How many logged results the first guess counts for. Judgement. */
-export const PRIOR_RESULTS = 12;
+const PRIOR_RESULTS = 12;
 /** More results than anybody logs. */
 const MOST_RESULTS = 1e6;
 

@@ -46,7 +46,7 @@ export type RankedCause = {
   readonly cause: CauseId;
   /** Share of all the causes that can stand behind the symptom. */
   readonly chance: number;
-  /** What the prior alone, the shop's own results in it, made of it. */
+  /** Its share before a number spoke, the shop's own results counted in. */
   readonly prior: number;
   /** What spoke for or against it, the loudest first. */
   readonly evidence: readonly Evidence[];

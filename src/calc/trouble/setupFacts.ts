@@ -37,7 +37,7 @@ export const NOTHING_SEEN: TroubleSeen = {
 };
 
 /** Radial force of a wheel in an ordinary plunge, N. Judgement, as for the pin. */
-export const ORDINARY_FORCE = 4000;
+const ORDINARY_FORCE = 4000;
 /** Share of the infeed that may give way before it is seen: between watch and stop. Judgement. */
 const GIVE_SEEN = 2 * GIVE_FINE;
 /** Hardness and elongation past which forming ends, between marginal and no. */
