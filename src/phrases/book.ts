@@ -1,6 +1,7 @@
 import type { CautionId, CheckName, CheckOf, State } from '../calc/index.ts';
 import type { LabelId, Labels, LineId, Lines, RowId, Rows } from '../card/index.ts';
 import type { Contradiction, Refusal } from '../refusal.ts';
+import type { ChatPhrases, ConfigPhrases } from './chat.ts';
 import type { Show } from './show.ts';
 
 /** A figure with its name in front. */
@@ -26,7 +27,12 @@ export type Book = {
   readonly choices: string;
   readonly contradictions: { readonly [C in Contradiction]: string };
   readonly refusal: (refusal: Refusal, show: Show) => string;
+  /** What a verb does, by its path: `knurl setup`. */
   readonly verbs: Readonly<Record<string, string>>;
+  /** What a parameter is called, by its name. */
+  readonly parameters: Readonly<Record<string, string>>;
+  readonly chat: ChatPhrases;
+  readonly config: ConfigPhrases;
   readonly terminal: TerminalPhrases;
 };
 

@@ -1,4 +1,5 @@
 export type { Book, LabelledText } from './book.ts';
+export type { ChatPhrases, ConfigPhrases, RegistrationPhrases } from './chat.ts';
 export { en } from './en/index.ts';
 export { type ShopUnits, type Show, showIn } from './show.ts';
 export {

@@ -1,18 +1,14 @@
 import { createInterface } from 'node:readline';
 import type { Readable, Writable } from 'node:stream';
-import type { Answer, Call, Desk } from '../../desk/index.ts';
-import { type Book, type SpokenCard, speakCard, speakRefusal } from '../../phrases/index.ts';
+import type { Call, Desk } from '../../desk/index.ts';
+import type { Book } from '../../phrases/index.ts';
+import { spoken } from '../common/spoken.ts';
 import { cardText } from '../common/text.ts';
 
 /** Widest card that is still read at a glance, where the terminal would allow more. */
 const READABLE_WIDTH = 100;
 /** A phone held upright. */
 export const PHONE_WIDTH = 48;
-
-export const spoken = (answer: Answer, book: Book): SpokenCard =>
-  answer.kind === 'card'
-    ? speakCard(book, answer.card)
-    : speakRefusal(book, answer.units, answer.refusal, answer.choices);
 
 export const widthOf = (columns: number | undefined, phone: boolean): number =>
   phone ? PHONE_WIDTH : Math.min(columns ?? READABLE_WIDTH, READABLE_WIDTH);

@@ -1,11 +1,13 @@
 import type { Book } from '../book.ts';
 import { cautions, standing } from './cautions.ts';
+import { chat, config } from './chat.ts';
 import { checks } from './checks.ts';
 import { lines } from './lines.ts';
-import { materialName } from './names.ts';
+import { materialName, THINGS } from './names.ts';
 import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
+import { verbs } from './verbs.ts';
 
 export const en: Book = {
   language: 'en',
@@ -38,10 +40,10 @@ export const en: Book = {
   standing,
   footing: "The shop's rules, the machine's manual and licensed practice go before this card.",
   choices: 'Next',
-  verbs: {
-    setup: 'Set-up card',
-    help: 'Help',
-  },
+  verbs,
+  parameters: THINGS,
+  chat,
+  config,
   terminal: {
     opening: [
       'Wholetooth, local channel: type a bar, a pattern and a pitch, such as 1.000 straight 21tpi 1018.',

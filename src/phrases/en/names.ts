@@ -44,7 +44,7 @@ export const wheelName: { readonly [K in WheelKind]: string } = {
 };
 
 /** What a parameter or a limit is called in a sentence. */
-const THINGS: Readonly<Record<string, string>> = {
+export const THINGS: Readonly<Record<string, string>> = {
   diameter: 'diameter',
   pattern: 'pattern',
   points: 'kind of points',
