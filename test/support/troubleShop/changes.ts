@@ -7,6 +7,7 @@ import {
   figureOf,
   type Hidden,
   inCheck,
+  isGrooves,
   isPair,
   type Job,
   knurlWidth,
@@ -62,9 +63,9 @@ const ABOUT_THE_COUNT = {
     return told(job, { runout: mm(2 * bite * between(random, 1, 2.5)) });
   },
   opposedOutOfStep: (random, job) =>
-    isPair(job)
-      ? null
-      : truth(told(job, { layout: 'opposed' }), { outOfStep: between(random, 0.1, 0.5) }),
+    isGrooves(job)
+      ? truth(told(job, { layout: 'opposed' }), { outOfStep: between(random, 0.1, 0.5) })
+      : null,
   secondPass: (random, job) => truth(job, { secondPass: between(random, 0.05, 0.5) }),
   blankOffSize: (random, job) => {
     // A tooth more or less tracks as well, and so does what lies inside the window.

@@ -102,7 +102,11 @@ const hiddenOf = (random: Random): Hidden => {
   };
 };
 
-export const isPair = ({ request }: Job): boolean => request.pattern.kind === 'diamond';
+/** Two wheels cross to raise points; sunk ones come from one wheel, grooves from one each side. */
+export const isPair = ({ request: { pattern } }: Job): boolean =>
+  pattern.kind === 'diamond' && pattern.points === 'raised';
+export const isGrooves = ({ request: { pattern } }: Job): boolean =>
+  pattern.kind === 'straight' || pattern.kind === 'diagonal';
 export const travels = ({ request }: Job): boolean => (request.length ?? 0) > 6;
 export const knurlWidth = ({ request }: Job): number => Math.min(request.length ?? 6, 35);
 
