@@ -3,6 +3,7 @@ import { check } from './knurl/check.ts';
 import { help } from './knurl/help.ts';
 import { plan } from './knurl/plan.ts';
 import { setup } from './knurl/setup.ts';
+import { trouble } from './knurl/trouble.ts';
 
 /** Everything a person can ask for. A new command is one new file and one line here. */
-export const FLEET: readonly Command[] = [setup, check, plan, help];
+export const FLEET: readonly Command[] = [setup, check, plan, trouble, help];

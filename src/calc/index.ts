@@ -25,4 +25,5 @@ export * from './speed.ts';
 export * from './standards/index.ts';
 export * from './teeth.ts';
 export * from './tracking.ts';
+export * from './trouble/index.ts';
 export * from './units.ts';

@@ -20,13 +20,15 @@ import type {
 } from '../calc/index.ts';
 import type { CheckLines, CheckRows } from './checkLines.ts';
 import type { PlanLines, PlanRows } from './planLines.ts';
+import type { TroubleLines, TroubleRows } from './troubleLines.ts';
 
 /**
  * Every sentence a card can say, and the numbers it says it with. The phrase book of a language
  * has one entry for each; a new line here is a compile error there until it has words.
  */
 export type Lines = CheckLines &
-  PlanLines & {
+  PlanLines &
+  TroubleLines & {
     turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
     leaveAt: { readonly blankDiameter: Mm; readonly toothCount: number };
     stopped: { readonly check: Check };
@@ -67,7 +69,8 @@ export type Line = { [K in LineId]: { readonly line: K; readonly values: Lines[K
 
 /** Label and value rows: the numbers of the card in reading order. */
 export type Rows = CheckRows &
-  PlanRows & {
+  PlanRows &
+  TroubleRows & {
     material: { readonly name: string; readonly condition: string };
     feedIn: { readonly infeed: Mm; readonly cut: boolean };
     firstTurn: { readonly firstBite: Mm };

@@ -6,6 +6,7 @@ import { checks } from './checks.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 import { planLines } from './planLines.ts';
 import { remedyLabel } from './remedies.ts';
+import { troubleLines } from './troubleLines.ts';
 
 const teeth = (count: number): string => `${String(count)} ${count === 1 ? 'tooth' : 'teeth'}`;
 const inSentence = (label: string): string => label.charAt(0).toLowerCase() + label.slice(1);
@@ -21,6 +22,7 @@ const stopText = (check: Check, show: Show): string =>
 export const lines: Book['lines'] = {
   ...checkLines,
   ...planLines,
+  ...troubleLines,
   turnTo: ({ blankDiameter, toothCount }, show) =>
     `Turn to ${show.length(blankDiameter)}: ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
   leaveAt: ({ blankDiameter, toothCount }, show) =>

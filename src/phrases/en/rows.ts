@@ -1,12 +1,14 @@
 import type { Book } from '../book.ts';
 import { checkRows } from './checkLines.ts';
 import { planRows } from './planLines.ts';
+import { troubleRows } from './troubleLines.ts';
 
 const parts = (batch: number): string => (batch === 1 ? '' : ` for ${String(batch)} parts`);
 
 export const rows: Book['rows'] = {
   ...checkRows,
   ...planRows,
+  ...troubleRows,
   material: ({ name, condition }) => ({ label: 'Material', text: `${name}, ${condition}` }),
   feedIn: ({ infeed, cut }, show) => ({
     label: 'Feed in',

@@ -1,0 +1,106 @@
+import type { z } from 'zod';
+import {
+  checkAfter,
+  type MeasuredPart,
+  mm,
+  NO_FACTS,
+  rankCauses,
+  type SetupRequest,
+  type SymptomId,
+  setUp,
+  type TroubleFacts,
+  troubleFacts,
+} from '../../src/calc/index.ts';
+import {
+  type Context,
+  cardReply,
+  defineCommand,
+  type Reply,
+  refuse,
+} from '../../src/desk/index.ts';
+import * as measured from './checkParameters.ts';
+import { requestOf } from './request.ts';
+import { setupParameters } from './setup.ts';
+import { troubleCard } from './troubleCard.ts';
+import * as words from './troubleParameters.ts';
+
+const parameters = setupParameters.extend({
+  symptom: words.symptom,
+  partsOnWheel: words.partsOnWheel,
+  bite: words.biteTaken,
+  count: measured.count,
+  crest: measured.crest,
+  height: measured.height,
+  flat: measured.flat,
+  flats: measured.flats,
+});
+export type TroubleWords = z.infer<typeof parameters>;
+
+/** Nothing of the set-up was said: only the words of the symptom speak. */
+const wordsAlone = (said: TroubleWords): boolean =>
+  [said.diameter, said.finish, said.pattern, said.pitch, said.callout, said.wheel].every(
+    (each) => each === undefined,
+  );
+
+const length = (value: number | undefined) => (value === undefined ? null : mm(value));
+
+const partOf = (said: TroubleWords, blank: number): MeasuredPart | null => {
+  const { flats, count, crest, height, flat } = said;
+  if ([flats, count, crest, height, flat].every((each) => each === undefined)) return null;
+  return {
+    blank: mm(blank),
+    teeth: count ?? null,
+    crest: length(crest),
+    toothHeight: length(height),
+    flat: length(flat),
+    ends:
+      flats === undefined
+        ? null
+        : { near: mm(flats.near), far: mm(flats.far), distance: mm(flats.distance) },
+  };
+};
+
+const factsOf = (said: TroubleWords, request: SetupRequest): TroubleFacts => {
+  const result = setUp(request);
+  const part = partOf(said, result.blank.diameter);
+  return troubleFacts(request, result, {
+    partsOnWheel: said.partsOnWheel ?? null,
+    firstBite: length(said.bite),
+    blank: null,
+    blankTaper: null,
+    after: part === null ? null : checkAfter(request, part),
+  });
+};
+
+const ranked = (
+  context: Context,
+  said: TroubleWords,
+  symptom: SymptomId,
+  facts: TroubleFacts,
+): Reply =>
+  cardReply(troubleCard({ context, said, symptom, facts, causes: rankCauses(symptom, facts, {}) }));
+
+/** From what is seen on the part to its likeliest causes, each with one next move. */
+export const trouble = defineCommand({
+  path: ['knurl', 'trouble'],
+  examples: [
+    '/knurl trouble double 1.000 straight 21tpi 1018',
+    '/knurl trouble flaking 20mm diamond 0.8 pitch brass fill 95%',
+    '/knurl trouble pin seized',
+  ],
+  parameters,
+  allowed: 'operator',
+  run: (context, said) => {
+    if (said.symptom === undefined)
+      return refuse({
+        code: 'missing',
+        parameter: 'symptom',
+        examples: ['double', 'flaking', 'shallow', 'pin seized'],
+      });
+    if (wordsAlone(said)) return ranked(context, said, said.symptom, NO_FACTS);
+    const built = requestOf(context, said);
+    return 'refusal' in built
+      ? refuse(built.refusal, built.choices)
+      : ranked(context, said, said.symptom, factsOf(said, built.request));
+  },
+});
