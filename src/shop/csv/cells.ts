@@ -45,9 +45,10 @@ export type ReadCell<T> = (text: string, context: CellContext) => Cell<T>;
 const took = <T>(value: T): Cell<T> => ({ value });
 const wrong = (fault: Fault): { readonly fault: Fault } => ({ fault });
 
-/** A spreadsheet's formula is data like any other: it is no number, and as a name it is a name. */
+/** A number with a point, as programs write it. A formula is no number, whatever it would give. */
+const PLAIN_NUMBER = /^[-+]?\d+(?:\.\d+)?(?:e[-+]?\d+)?$/u;
 const NUMBER_AND_UNIT =
-  /^(?<number>[-+]?[\d.,/½¼¾⅓⅔⅕⅛⅜⅝⅞-]*[\d.½¼¾⅓⅔⅕⅛⅜⅝⅞])\s*(?<unit>[^\d\s].*)?$/u;
+  /^(?<number>[-+]?\d+(?:\.\d+)?e[-+]?\d+|[-+]?[\d.,/½¼¾⅓⅔⅕⅛⅜⅝⅞-]*[\d.½¼¾⅓⅔⅕⅛⅜⅝⅞])\s*(?<unit>[^\d\s].*)?$/u;
 
 export type Measured = { readonly measure: string; readonly factor: number };
 
@@ -67,7 +68,8 @@ type Spoken = { readonly value: number; readonly unit: string | null };
 
 const spoken = (text: string, { words }: CellContext): Spoken | null => {
   const parts = NUMBER_AND_UNIT.exec(words.plainText(text.trim()))?.groups;
-  const value = parts === undefined ? null : words.numberOf(parts['number'] ?? '');
+  const number = parts?.['number'] ?? '';
+  const value = PLAIN_NUMBER.test(number) ? Number(number) : words.numberOf(number);
   return value === null ? null : { value, unit: parts?.['unit']?.trim() ?? null };
 };
 

@@ -1,8 +1,13 @@
 /** What a shop remembers, whichever engine keeps it. */
 import { describe } from 'vitest';
 import type { Engine } from '../../../src/store/index.ts';
+import { breaking } from './breaking.ts';
 import { cards } from './cards.ts';
+import { csv } from './csv.ts';
+import { interactions } from './interactions.ts';
+import { isolation } from './isolation.ts';
 import { lists } from './lists.ts';
+import { outbox } from './outbox.ts';
 import { people } from './people.ts';
 import { settings } from './settings.ts';
 
@@ -12,5 +17,10 @@ export const shopContract = (engine: Engine): void => {
     people(engine);
     settings(engine);
     cards(engine);
+    interactions(engine);
+    outbox(engine);
+    csv(engine);
+    breaking(engine);
+    isolation(engine);
   });
 };

@@ -1,0 +1,160 @@
+/**
+ * Every change is broken at every step: its first call to the records fails, then its second, and
+ * so on until none failed. Each time everything is as it was, to the row; then, whole, it is done.
+ */
+import { describe, expect, it } from 'vitest';
+import {
+  addRule,
+  addTo,
+  changeIn,
+  changeSetting,
+  importSheet,
+  keepCard,
+  MACHINES,
+  nameGroupRole,
+  nameRole,
+  once,
+  queueEffects,
+  removeFrom,
+  removePerson,
+  type ShopChange,
+  WHEEL_SHEET,
+  WHEELS,
+} from '../../../src/shop/index.ts';
+import { type Engine, type Store, StoreUnavailable, TABLES } from '../../../src/store/index.ts';
+import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
+import { CARD } from './cards.ts';
+import { LEFT, STRAIGHT, TURRET } from './samples.ts';
+
+type Prepared = { readonly wheel: string; readonly ben: string };
+type Work = (change: ShopChange, prepared: Prepared) => Promise<unknown>;
+
+const FILE = `name,form,pitch,parts run
+Old Faithful,straight,21 tpi,7
+New one,straight,25 tpi,
+Not good,straight,,
+Another,left helical,0.8 mm,3
+`;
+
+/** Each does several things, so that there is something to leave half done. */
+const WORKS: Readonly<Record<string, Work>> = {
+  add: async (change) => {
+    good(await addTo(change, WHEELS, LEFT));
+    good(await addTo(change, MACHINES, TURRET));
+    good(await addRule(change, { text: 'Slowly', machine: null, material: null, base: null }));
+  },
+  change: async (change, { wheel }) => good(await changeIn(change, WHEELS, wheel, { partsRun: 1 })),
+  remove: async (change, { wheel }) => {
+    expect((await removeFrom(change, WHEELS, wheel)).ok).toBe(false);
+    good(await removeFrom(change, WHEELS, wheel, { evenInUse: true }));
+  },
+  import: (change) =>
+    importSheet(change, WHEELS, WHEEL_SHEET, FILE, { units: 'mm', replace: true }),
+  card: (change, { wheel }) =>
+    once(change, 'i1', async () => {
+      const { code } = await keepCard(change, { ...CARD, wheel });
+      await queueEffects(change, [
+        { key: 'i1:post', effect: { post: code } },
+        { key: 'i1:pin', effect: { pin: code }, after: 'i1:post' },
+      ]);
+      return { code };
+    }),
+  settings: async (change) => {
+    good(await changeSetting(change, 'units', 'mm'));
+    good(await changeSetting(change, 'questionHours', 8));
+  },
+  people: async (change, { ben }) => {
+    good(await nameGroupRole(change, { outside: 'g', name: 'Leads' }, 'supervisor'));
+    good(await nameRole(change, ben, 'owner'));
+    good(await removePerson(change, change.by));
+  },
+};
+
+export const breaking = (engine: Engine): void => {
+  describe('broken at every step', () => {
+    it.each(Object.entries(WORKS))('%s is done whole or not at all', async (_, work) => {
+      const fuse = newFuse(engine);
+      const { store } = await newRecords(engine, { watch: fuse.watch });
+      const shop = await newShop(store);
+      const prepared = await prepare(shop);
+      const before = await everything(store);
+      const calls = await breakAll(fuse, store, before, () =>
+        shop.change((change) => work(change, prepared)),
+      );
+      expect(await everything(store)).not.toEqual(before);
+      // A change that makes fewer calls than this would not have been broken anywhere.
+      expect(calls).toBeGreaterThan(5);
+    });
+  });
+};
+
+const prepare = async (shop: TestShop): Promise<Prepared> => {
+  const ben = await shop.changeBy(person('Ben'), (_, entered) =>
+    Promise.resolve(entered.person.id),
+  );
+  return await shop.change(async (change) => {
+    const { id: wheel } = good(await addTo(change, WHEELS, STRAIGHT));
+    await keepCard(change, { ...CARD, wheel });
+    return { wheel, ben };
+  });
+};
+
+const breakAll = async (
+  fuse: Fuse,
+  store: Store,
+  before: unknown,
+  change: () => Promise<unknown>,
+): Promise<number> => {
+  for (let n = 1; ; n += 1) {
+    fuse.blowAt(n);
+    const fault = await change().then(
+      () => null,
+      (error: unknown) => error,
+    );
+    if (!fuse.hasBlown()) {
+      expect(fault).toBe(null);
+      return n - 1;
+    }
+    expect(fault).toBeInstanceOf(StoreUnavailable);
+    expect(await everything(store)).toEqual(before);
+  }
+};
+
+type Fuse = {
+  readonly watch: (statement: string) => void;
+  readonly blowAt: (call: number) => void;
+  readonly hasBlown: () => boolean;
+};
+
+/** Lets so many calls through and fails the next, as each engine's driver would. */
+const newFuse = (engine: Engine): Fuse => {
+  let left = Number.POSITIVE_INFINITY;
+  const code = engine === 'sqlite' ? 'SQLITE_IOERR_WRITE' : 'ECONNRESET';
+  return {
+    watch: () => {
+      left -= 1;
+      if (left === 0) throw Object.assign(new Error('disk I/O error'), { code });
+    },
+    blowAt: (call) => {
+      left = call;
+    },
+    hasBlown: () => {
+      const blown = left <= 0;
+      left = Number.POSITIVE_INFINITY;
+      return blown;
+    },
+  };
+};
+
+/** Every row of every table. */
+const everything = async (store: Store): Promise<unknown> => {
+  const tables: Record<string, unknown> = {};
+  for (const { name, key } of TABLES) {
+    tables[name] = await store.read
+      .selectFrom(name)
+      .selectAll()
+      .orderBy(key as never)
+      .execute();
+  }
+  return tables;
+};

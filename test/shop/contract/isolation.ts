@@ -1,0 +1,249 @@
+/** Shops: nothing of one is ever seen from another, not even that it is there. */
+import { describe, expect, it } from 'vitest';
+import {
+  addRule,
+  addTo,
+  changeIn,
+  changeSetting,
+  exportJson,
+  findCard,
+  findIn,
+  findPerson,
+  givenUp,
+  givenUpSeen,
+  historyOf,
+  importSheet,
+  keepCard,
+  latestCards,
+  listGroups,
+  listOf,
+  listPeople,
+  MACHINES,
+  MATERIALS_OF_SHOP,
+  nameGroupRole,
+  nameRole,
+  once,
+  personById,
+  queueEffects,
+  RULES,
+  removeFrom,
+  removeGroup,
+  removePerson,
+  rolesOfGroups,
+  rulesOnCard,
+  type ShopChange,
+  settingsOf,
+  WHEEL_SHEET,
+  WHEELS,
+  whoMay,
+} from '../../../src/shop/index.ts';
+import { type Engine, TABLES } from '../../../src/store/index.ts';
+import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
+import { CARD } from './cards.ts';
+import { STRAIGHT, TURRET } from './samples.ts';
+
+/** Everything of a shop that has an id or a name. */
+type Things = Readonly<Record<(typeof THINGS)[number], string>>;
+const THINGS = [
+  ...['wheel', 'wheelName', 'machine', 'machineName', 'material', 'rule', 'ruleName'],
+  ...['person', 'personName', 'personOutside', 'group', 'card', 'code', 'effect'],
+] as const;
+
+const ALL = { machine: null, material: null, base: null };
+const BAR = { base: 'steel-medC-CD', hardness: 210, elongation: null, note: null };
+
+const furnish = async (shop: TestShop, mark: string): Promise<Things> => {
+  const kim = person(`Kim ${mark}`, { id: `kim-${mark}` });
+  const met = await shop.changeBy(kim, (_, entered) => Promise.resolve(entered.person));
+  return await shop.change(async (change) => {
+    const wheel = good(await addTo(change, WHEELS, { ...STRAIGHT, name: `wheel ${mark}` }));
+    const machine = good(await addTo(change, MACHINES, { ...TURRET, name: `lathe ${mark}` }));
+    const bar = { ...BAR, name: `bar ${mark}` };
+    const material = good(await addTo(change, MATERIALS_OF_SHOP, bar));
+    const rule = good(await addRule(change, { ...ALL, text: `rule ${mark}` }));
+    const group = { outside: `group-${mark}`, name: `Group ${mark}` };
+    good(await nameGroupRole(change, group, 'supervisor'));
+    const card = await keepCard(change, { ...CARD, wheel: wheel.id, machine: machine.id });
+    await queueEffects(change, [{ key: `post ${mark}`, effect: { post: mark } }]);
+    return {
+      wheel: wheel.id,
+      wheelName: wheel.name,
+      machine: machine.id,
+      machineName: machine.name,
+      material: material.id,
+      rule: rule.id,
+      ruleName: rule.name,
+      person: met.id,
+      personName: met.name,
+      personOutside: met.outside,
+      group: group.outside,
+      card: card.id,
+      code: card.code,
+      effect: `post ${mark}`,
+    };
+  });
+};
+
+/** Everything that can be asked or changed, with an id or name that may be somebody else's. */
+const ASKED: Readonly<Record<string, (change: ShopChange, id: string) => Promise<unknown>>> = {
+  findWheel: (change, id) => findIn(change, WHEELS, id),
+  findMachine: (change, id) => findIn(change, MACHINES, id),
+  findMaterial: (change, id) => findIn(change, MATERIALS_OF_SHOP, id),
+  findRule: (change, id) => findIn(change, RULES, id),
+  changeWheel: (change, id) => changeIn(change, WHEELS, id, { partsRun: 5 }),
+  changeMachine: (change, id) => changeIn(change, MACHINES, id, { dial: 'radius' }),
+  changeMaterial: (change, id) => changeIn(change, MATERIALS_OF_SHOP, id, { hardness: 300 }),
+  changeRule: (change, id) => changeIn(change, RULES, id, { text: 'mine now' }),
+  removeWheel: (change, id) => removeFrom(change, WHEELS, id, { evenInUse: true }),
+  removeMachine: (change, id) => removeFrom(change, MACHINES, id),
+  removeMaterial: (change, id) => removeFrom(change, MATERIALS_OF_SHOP, id),
+  removeRule: (change, id) => removeFrom(change, RULES, id),
+  ruleForMachine: (change, id) => addRule(change, { ...ALL, text: 'x', machine: id }),
+  ruleForMaterial: (change, id) => addRule(change, { ...ALL, text: 'x', material: id }),
+  rulesOnCard: (change, id) => rulesOnCard(change, { machine: id, material: id, base: null }),
+  findPerson: (change, id) => findPerson(change, id),
+  personById: (change, id) => personById(change, id),
+  nameRole: (change, id) => nameRole(change, id, 'engineer'),
+  removePerson: (change, id) => removePerson(change, id),
+  removeGroup: (change, id) => removeGroup(change, id),
+  rolesOfGroups: (change, id) => rolesOfGroups(change, [id]),
+  findCard: (change, id) => findCard(change, id),
+  cardsBefore: (change, id) => latestCards(change, { limit: 50, before: id }),
+  cardsOf: (change, id) => latestCards(change, { limit: 50, madeBy: id }),
+  historyOfWheel: (change, id) => historyOf(change, 'wheel', { id }),
+  historyOfPerson: (change, id) => historyOf(change, 'person', { id }),
+  givenUpSeen: (change, id) => givenUpSeen(change, [id]),
+  once: (change, id) => once(change, id, () => Promise.resolve('mine')),
+};
+
+/** Everything that is asked without naming anything. */
+const OVERVIEWS: Readonly<Record<string, (change: ShopChange) => Promise<unknown>>> = {
+  wheels: (change) => listOf(change, WHEELS),
+  machines: (change) => listOf(change, MACHINES),
+  materials: (change) => listOf(change, MATERIALS_OF_SHOP),
+  rules: (change) => listOf(change, RULES),
+  people: (change) => listPeople(change),
+  groups: (change) => listGroups(change),
+  whoMay: (change) => whoMay(change, 'operator'),
+  cards: (change) => latestCards(change, { limit: 50 }),
+  settings: (change) => settingsOf(change),
+  givenUp: (change) => givenUp(change),
+  history: (change) => historyOf(change, 'wheel'),
+  export: async (change) => {
+    const pieces: string[] = [];
+    for await (const piece of exportJson(change)) pieces.push(piece);
+    return pieces;
+  },
+};
+
+/** What a stranger is told of something that nobody has at all. */
+const NOBODYS = 'nobody has this';
+
+/** The words that a question itself brought along are no hint. */
+const without = (answer: unknown, id: string): string =>
+  JSON.stringify(answer ?? null).replaceAll(JSON.stringify(id).slice(1, -1), NOBODYS);
+
+export const isolation = (engine: Engine): void => {
+  describe('one shop among others', () => {
+    it.each(Object.entries(ASKED))(
+      '%s says of another shop’s things what it says of things that nobody has',
+      async (_, ask) => {
+        const { store } = await newRecords(engine);
+        const mine = await newShop(store, 'Mine');
+        const other = await newShop(store, 'Other');
+        await furnish(mine, 'one');
+        const theirs = await furnish(other, 'two');
+        const asked = (id: string) => tried(mine, (change) => ask(change, id));
+        const nothing = without(await asked(NOBODYS), NOBODYS);
+        const before = await rowsOf(other);
+        for (const id of Object.values(theirs).filter((value) => value !== theirs.ruleName)) {
+          expect([id, without(await asked(id), id)]).toEqual([id, nothing]);
+        }
+        expect(await rowsOf(other)).toBe(before);
+      },
+    );
+
+    it('never shows a row of another in any overview, and fills none of its lists', async () => {
+      const { store } = await newRecords(engine);
+      const mine = await newShop(store, 'Mine');
+      const other = await newShop(store, 'Other');
+      const blank: Record<string, string> = {};
+      for (const [name, look] of Object.entries(OVERVIEWS)) {
+        blank[name] = JSON.stringify(await mine.change(look));
+      }
+      await furnish(other, 'two');
+      for (const [name, look] of Object.entries(OVERVIEWS)) {
+        expect([name, JSON.stringify(await mine.change(look))]).toEqual([name, blank[name]]);
+      }
+    });
+
+    it('lets two shops have the same names, the same codes of groups, the same keys', async () => {
+      const { store } = await newRecords(engine);
+      const shops = [await newShop(store, 'Mine'), await newShop(store, 'Other')];
+      for (const shop of shops) await furnish(shop, 'same');
+      for (const shop of shops) {
+        expect(await listOf(shop.view, WHEELS)).toHaveLength(1);
+        expect(await latestCards(shop.view, { limit: 9 })).toHaveLength(1);
+      }
+    });
+
+    it('names its shop in every statement that it sends', async () => {
+      const said = new Set<string>();
+      const { store } = await newRecords(engine, { watch: (statement) => said.add(statement) });
+      const shop = await newShop(store, 'Mine');
+      const things = await furnish(shop, 'one');
+      for (const ask of Object.values(ASKED)) {
+        for (const id of [things.wheel, things.machine, things.person, things.code, NOBODYS]) {
+          await tried(shop, (change) => ask(change, id));
+        }
+      }
+      for (const look of Object.values(OVERVIEWS)) await shop.change(look);
+      await shop.change((change) => changeSetting(change, 'units', 'mm'));
+      const file = 'name,form,pitch\nA,straight,21 tpi\n';
+      await shop.change((change) =>
+        importSheet(change, WHEELS, WHEEL_SHEET, file, { units: 'mm', replace: true }),
+      );
+      const ofShops = [...said].filter((statement) => tableIn(statement) !== undefined);
+      const unnamed = ofShops.filter((statement) => !namesShop(statement));
+      expect(unnamed).toEqual([]);
+      // As many kinds of statement as there are things to ask.
+      expect(ofShops.length).toBeGreaterThan(40);
+    });
+  });
+};
+
+const tried = async (
+  shop: TestShop,
+  ask: (change: ShopChange) => Promise<unknown>,
+): Promise<unknown> => {
+  const stop = Symbol('taken back');
+  let answer: unknown;
+  // Taken back each time, so that every question meets the same shop.
+  await shop
+    .change(async (change) => {
+      answer = await ask(change);
+      throw stop;
+    })
+    .catch((error: unknown) => {
+      if (error !== stop) throw error;
+    });
+  return answer;
+};
+
+const rowsOf = async (shop: TestShop): Promise<string> => {
+  const pieces: string[] = [];
+  for await (const piece of exportJson(shop.view)) pieces.push(piece);
+  return pieces.join('');
+};
+
+const OF_SHOPS = TABLES.filter(({ shop }) => shop === 'shop').map(({ name }) => name as string);
+
+const tableIn = (statement: string): string | undefined => {
+  const name = /(?:from|into|update) "(?<name>\w+)"/u.exec(statement)?.groups?.['name'];
+  return OF_SHOPS.find((table) => table === name);
+};
+
+const namesShop = (statement: string): boolean =>
+  statement.startsWith('insert into')
+    ? /insert into "\w+" \([^)]*"shop"/u.test(statement)
+    : /where .*"shop" = /u.test(statement);
