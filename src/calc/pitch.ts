@@ -183,5 +183,6 @@ export function standardDp(value: number): StandardDp | null {
  */
 export function onOwnBlank(dp: StandardDp, diameter: Mm, tolerance: Mm): boolean {
   const step = inch(BLANK_STEP_IN[dp]);
-  return Math.abs(diameter - Math.round(diameter / step) * step) <= tolerance;
+  // A hair of slack: a blank that is off by just the tolerance is on it in inches and millimetres.
+  return Math.abs(diameter - Math.round(diameter / step) * step) <= tolerance + 1e-9;
 }

@@ -171,6 +171,13 @@ describe('blanks of a diametral pitch', () => {
     }
   });
 
+  it('off by just the tolerance is on it, whichever unit it was typed in', () => {
+    // 3.751 in was, 95.2754 mm was not.
+    for (const blank of [inch(3.751), mm(95.2754), inch(3.749), mm(95.2246)])
+      expect(onOwnBlank(96, blank, inch(0.001))).toBe(true);
+    expect(onOwnBlank(96, inch(3.7511), inch(0.001))).toBe(false);
+  });
+
   it('other numbers are no pitch of the standard', () => {
     expect([64, 96, 128, 160].map(standardDp)).toEqual([...STANDARD_DP]);
     expect([63, 100, 21, 0].map(standardDp)).toEqual([null, null, null, null]);
