@@ -27,3 +27,4 @@ export * from './teeth.ts';
 export * from './tracking.ts';
 export * from './trouble/index.ts';
 export * from './units.ts';
+export * from './why/index.ts';

@@ -6,12 +6,13 @@ import type { CalcFunction } from './calcFunctions.ts';
  * Reads the formula card above a function: a sentence, the formula, a table of symbols, what is
  * assumed, sources and worked examples.
  */
-interface FormulaCard {
+export interface FormulaCard {
   readonly sentence: string;
   readonly formula: readonly string[];
   /** Cells of each table line, the heading first and without the line under it. */
   readonly table: readonly (readonly string[])[];
-  readonly assumes: boolean;
+  /** The line beginning with "Assumes" and what it runs on to, or nothing. */
+  readonly assumption: string;
   readonly sources: readonly string[];
   readonly examples: readonly string[];
 }
@@ -24,7 +25,7 @@ export interface Known {
 const HEADING = ['symbol', 'meaning', 'unit', 'range'];
 const NO_UNIT = '-';
 
-function readCard(comment: string): FormulaCard {
+export function readCard(comment: string): FormulaCard {
   const lines = comment
     .replace(/^\s*\/\*\*/, '')
     .replace(/\*\/\s*$/, '')
@@ -42,10 +43,18 @@ function readCard(comment: string): FormulaCard {
       .filter((line) => line.startsWith('|'))
       .map(cellsOf)
       .filter(isNotRule),
-    assumes: body.some((line) => /^Assumes\s+\S/.test(line)),
+    assumption: assumptionIn(body),
     sources: tagged('@source'),
     examples: tagged('@example'),
   };
+}
+
+function assumptionIn(lines: readonly string[]): string {
+  const start = lines.findIndex((line) => /^Assumes\s+\S/.test(line));
+  if (start < 0) return '';
+  const text = lines.slice(start);
+  const end = text.indexOf('');
+  return (end < 0 ? text : text.slice(0, end)).join(' ');
 }
 
 /** A tag may run on over the next lines. */
@@ -91,7 +100,7 @@ export function defectsOf(
     ...(isDeepStrictEqual(heading, HEADING) ? [] : [`table is not headed ${HEADING.join(' | ')}`]),
     ...rows.flatMap((row) => rowDefects(row, known)),
     ...argumentDefects(fn, rows),
-    ...(card.assumes ? [] : ['has no line beginning with "Assumes"']),
+    ...(card.assumption !== '' ? [] : ['has no line beginning with "Assumes"']),
     ...sourceDefects(card.sources, known),
     ...(card.examples.length > 0 ? [] : ['has no @example']),
     ...card.examples.flatMap((example) => exampleDefects(example, resultUnits(rows), scope)),
@@ -137,6 +146,18 @@ function argumentDefects(fn: CalcFunction, rows: readonly (readonly string[])[])
     ...(rows.some(isResult) ? [] : ['has no result row (its symbol begins with →)']),
   ];
 }
+
+/** Ids of the sources a card names, each once. */
+export const sourceIds = (card: FormulaCard): readonly string[] => [
+  ...new Set(card.sources.map((source) => source.split(/\s/)[0] ?? '')),
+];
+
+/** Symbols that a card's table explains, results apart, as its formula writes them. */
+export const symbolsOf = (card: FormulaCard): readonly string[] =>
+  card.table
+    .slice(1)
+    .filter((row) => !isResult(row))
+    .map(([symbol = '']) => symbol.replace(/\s*\(.*$/, ''));
 
 function sourceDefects(sources: readonly string[], known: Known): string[] {
   if (sources.length === 0) return ['has no @source'];
