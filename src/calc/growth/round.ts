@@ -84,9 +84,9 @@ const roundFrom = (of: Profile, blankDiameter: Mm): FormedRound => {
 /**
  * Infeed, crest diameter and growth of a formed knurl on round work, exact.
  *
- *     Rr = √(Rb² − s²) − z;  infeed = Rb − Rr;  Do = 2 (Rr + H);  growth = Do − 2Rb
+ *     Rr = √(Db²/4 − s²) − z;  infeed = Db/2 − Rr;  Do = 2 (Rr + H);  growth = Do − Db
  *
- * The same as Rr = −I₀ + √(Rb² + I₀² − 2I₁) with I₀ = ∫₀ᴴ share du = z, I₁ = ∫₀ᴴ u·share du and
+ * The same as Rr = −I₀ + √(Db²/4 + I₀² − 2I₁) with I₀ = ∫₀ᴴ share du = z, I₁ = ∫₀ᴴ u·share du and
  * s² = 2I₁ − I₀².
  *
  * | symbol | meaning | unit | range |
