@@ -81,6 +81,19 @@ export const check = defineCommand({
     '/knurl check 0.9852 straight 21tpi 1018 count 65 crest 1.0040',
   ],
   parameters,
+  foremost: [
+    'diameter',
+    'pattern',
+    'pitch',
+    'material',
+    'count',
+    'crest',
+    'seam',
+    'height',
+    'flat',
+    'flats',
+    'scrap',
+  ],
   allowed: 'operator',
   run: (context, said) => {
     const built = requestOf(context, said);

@@ -89,6 +89,20 @@ export const trouble = defineCommand({
     '/knurl trouble pin seized',
   ],
   parameters,
+  foremost: [
+    'symptom',
+    'diameter',
+    'pattern',
+    'pitch',
+    'material',
+    'bite',
+    'partsOnWheel',
+    'count',
+    'crest',
+    'height',
+    'flat',
+    'flats',
+  ],
   allowed: 'operator',
   run: (context, said) => {
     if (said.symptom === undefined)

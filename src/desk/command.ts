@@ -27,6 +27,8 @@ export type Command = {
   /** A line that shows it at work; parsed and run by a test. */
   readonly examples: readonly string[];
   readonly parameters: readonly AnyParameter[];
+  /** Names of those to show first where a platform cannot show them all. */
+  readonly foremost: readonly string[];
   /** Everyone of this role and above may. */
   readonly allowed: Role;
   readonly run: (context: Context, given: unknown) => Reply | Promise<Reply>;
@@ -50,12 +52,14 @@ export const defineCommand = <S extends z.ZodRawShape>(definition: {
   readonly path: Command['path'];
   readonly examples: readonly string[];
   readonly parameters: z.ZodObject<S>;
+  readonly foremost?: readonly (keyof S & string)[];
   readonly allowed: Role;
   readonly run: (context: Context, given: z.infer<z.ZodObject<S>>) => Reply | Promise<Reply>;
 }): Command => ({
   path: definition.path,
   examples: definition.examples,
   parameters: Object.values(definition.parameters.shape).map(parameterOf),
+  foremost: definition.foremost ?? [],
   allowed: definition.allowed,
   run: (context, given) => definition.run(context, definition.parameters.parse(given)),
 });

@@ -19,3 +19,4 @@ export {
 export type { Effect, MessageAddress } from './effect.ts';
 export { type KeptAnswers, keptInProcess } from './kept.ts';
 export { atLeast, ROLES, type Role } from './role.ts';
+export { type Route, route } from './route.ts';
