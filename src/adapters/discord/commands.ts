@@ -1,0 +1,187 @@
+import {
+  type APIApplicationCommandOption,
+  type APIApplicationCommandSubcommandOption,
+  ApplicationCommandOptionType,
+  ApplicationCommandType,
+  ApplicationIntegrationType,
+  InteractionContextType,
+} from 'discord.js';
+import type { Command } from '../../desk/index.ts';
+import type { Book } from '../../phrases/index.ts';
+import { parameterName, verbSummary } from '../common/spoken.ts';
+import { LIMITS } from './limits.ts';
+import { ONLY_ME_OPTION, optionName, WORDS_OPTION } from './receive.ts';
+
+type Parameter = Command['parameters'][number];
+type Choice = { readonly name: string; readonly value: string };
+
+/** A command as Discord keeps it, as far as it is ours to say. */
+export type Registered = {
+  readonly type: number;
+  readonly name: string;
+  readonly description?: string;
+  readonly options?: readonly APIApplicationCommandOption[];
+  readonly contexts: readonly number[];
+  readonly integration_types: readonly number[];
+};
+
+const grouped = <T>(items: readonly T[], keyOf: (item: T) => string): Map<string, T[]> => {
+  const groups = new Map<string, T[]>();
+  for (const item of items) {
+    const key = keyOf(item);
+    groups.set(key, [...(groups.get(key) ?? []), item]);
+  }
+  return groups;
+};
+
+const shortened = (text: string, most: number): string =>
+  text.length <= most ? text : `${text.slice(0, most - 1)}…`;
+
+/** Counts are typed as numbers; everything else may carry a unit and is typed as text. */
+const WHOLE: ReadonlySet<string> = new Set(['teeth', 'turns', 'pieces']);
+const isWhole = (parameter: Parameter): boolean =>
+  parameter.measures?.some((measure) => WHOLE.has(measure)) === true;
+
+/** One phrase for each thing that can be said, or null where that is no short, closed list. */
+const choicesOf = (parameter: Parameter): readonly Choice[] | null => {
+  if (parameter.closed !== true) return null;
+  const phrases = new Map<string, string>();
+  for (const [phrase, value] of parameter.values ?? []) {
+    const key = JSON.stringify(value);
+    if (!phrases.has(key)) phrases.set(key, phrase);
+  }
+  const choices = [...phrases.values()].map((phrase) => ({ name: phrase, value: phrase }));
+  return choices.length <= LIMITS.choices ? choices : null;
+};
+
+const isSwitch = (parameter: Parameter): boolean =>
+  parameter.closed === true && (parameter.values ?? []).every(([, value]) => value === true);
+
+const optionOf = (book: Book, parameter: Parameter): APIApplicationCommandOption => {
+  const name = optionName(parameter.name);
+  const called = parameterName(book, parameter.name);
+  const plain = shortened(book.chat.option(called, []), LIMITS.description);
+  if (isSwitch(parameter))
+    return { type: ApplicationCommandOptionType.Boolean, name, description: plain };
+  const choices = choicesOf(parameter);
+  if (choices !== null)
+    return {
+      type: ApplicationCommandOptionType.String,
+      name,
+      description: plain,
+      choices: [...choices],
+    };
+  const description = shortened(
+    book.chat.option(called, parameter.examples.slice(0, 2)),
+    LIMITS.description,
+  );
+  if (isWhole(parameter))
+    return { type: ApplicationCommandOptionType.Integer, name, description, min_value: 0 };
+  const suggests = parameter.suggests !== undefined || parameter.closed === true;
+  return {
+    type: ApplicationCommandOptionType.String,
+    name,
+    description,
+    ...(suggests ? { autocomplete: true } : {}),
+  };
+};
+
+const ownOptions = (book: Book): readonly APIApplicationCommandOption[] => [
+  {
+    type: ApplicationCommandOptionType.String,
+    name: WORDS_OPTION,
+    description: book.chat.words,
+  },
+  {
+    type: ApplicationCommandOptionType.Boolean,
+    name: ONLY_ME_OPTION,
+    description: book.chat.onlyMe,
+  },
+];
+
+/**
+ * A verb as a sub-command. The parameters of a record stand in the order of their weight: what does
+ * not fit among the options is said in the words.
+ */
+const subcommandOf = (
+  book: Book,
+  command: Command,
+  most: number,
+): APIApplicationCommandSubcommandOption => {
+  const own = ownOptions(book);
+  const { foremost, parameters } = command;
+  const first = foremost.flatMap((name) => parameters.filter((each) => each.name === name));
+  const ordered = [...first, ...parameters.filter((each) => !foremost.includes(each.name))];
+  const room = Math.min(most, LIMITS.options - own.length);
+  return {
+    type: ApplicationCommandOptionType.Subcommand,
+    name: command.path.at(-1) ?? '',
+    description: shortened(verbSummary(book, command), LIMITS.description),
+    options: [...ordered.slice(0, room).map((each) => optionOf(book, each)), ...own] as NonNullable<
+      APIApplicationCommandSubcommandOption['options']
+    >,
+  };
+};
+
+/** Verbs of two words stand in a group named by the first. */
+const optionsOf = (
+  book: Book,
+  commands: readonly Command[],
+  most: number,
+): readonly APIApplicationCommandOption[] => {
+  const groups = grouped(commands, ({ path }) => (path.length > 2 ? (path[1] ?? '') : ''));
+  return [...groups].flatMap(([group, members]): readonly APIApplicationCommandOption[] => {
+    const below = members.map((command) => subcommandOf(book, command, most));
+    if (group === '') return below;
+    return [
+      {
+        type: ApplicationCommandOptionType.SubcommandGroup,
+        name: group,
+        description: shortened(group, LIMITS.description),
+        options: below,
+      },
+    ];
+  });
+};
+
+/** Characters that Discord counts: names, descriptions and values of a command and all below it. */
+export const commandText = (command: unknown): number => {
+  if (Array.isArray(command))
+    return command.reduce<number>((sum, each) => sum + commandText(each), 0);
+  if (typeof command !== 'object' || command === null) return 0;
+  return Object.entries(command).reduce(
+    (sum, [key, value]: [string, unknown]) =>
+      sum +
+      (['name', 'description', 'value'].includes(key) ? String(value).length : commandText(value)),
+    0,
+  );
+};
+
+const rootOf = (book: Book, root: string, commands: readonly Command[]): Registered => {
+  const made = (most: number): Registered => ({
+    type: ApplicationCommandType.ChatInput,
+    name: root,
+    description: shortened(book.verbs[root] ?? root, LIMITS.description),
+    options: optionsOf(book, commands, most),
+    contexts: [InteractionContextType.Guild],
+    integration_types: [ApplicationIntegrationType.GuildInstall],
+  });
+  // All verbs together have a limit too: the options of least weight go first.
+  let most: number = LIMITS.options;
+  while (most > 0 && commandText(made(most)) > LIMITS.commandText) most -= 1;
+  return made(most);
+};
+
+/** Everything a person can ask for, as Discord lists it: made from the records alone. */
+export const commandsFor = (book: Book, fleet: readonly Command[]): readonly Registered[] => {
+  const roots = grouped(fleet, ({ path }) => path[0]);
+  return [
+    ...[...roots].map(([root, commands]) => rootOf(book, root, commands)),
+    {
+      type: ApplicationCommandType.Message,
+      name: shortened(book.chat.fromMessage, LIMITS.name),
+      contexts: [InteractionContextType.Guild],
+      integration_types: [ApplicationIntegrationType.GuildInstall],
+    },
+  ];
+};

@@ -1,0 +1,45 @@
+import { DiscordAPIError, HTTPError, RateLimitError } from 'discord.js';
+import { REFUSALS } from './limits.ts';
+
+export type Refused = keyof typeof REFUSALS;
+
+/** Discord's own code of an error, or null where it is none of Discord's. */
+export const codeOf = (error: unknown): number | null =>
+  error instanceof DiscordAPIError ? Number(error.code) : null;
+
+export const isRefused = (error: unknown, ...kinds: readonly Refused[]): boolean => {
+  const code = codeOf(error);
+  return code !== null && kinds.some((kind) => REFUSALS[kind] === code);
+};
+
+/** Errors of a connection, as Node and its HTTP client name them. */
+const CONNECTION = new Set([
+  'ECONNRESET',
+  'ECONNREFUSED',
+  'EPIPE',
+  'ETIMEDOUT',
+  'ENOTFOUND',
+  'EAI_AGAIN',
+  'UND_ERR_SOCKET',
+  'UND_ERR_CONNECT_TIMEOUT',
+  'UND_ERR_HEADERS_TIMEOUT',
+  'UND_ERR_BODY_TIMEOUT',
+]);
+
+/** It may go well the next time: the platform's own fault, or the line's. */
+export const isPassing = (error: unknown): boolean => {
+  if (error instanceof DiscordAPIError || error instanceof HTTPError) return error.status >= 500;
+  if (error instanceof RateLimitError) return true;
+  if (!(error instanceof Error)) return false;
+  if (error.name === 'AbortError' || error.name === 'TimeoutError') return true;
+  const { code } = error as NodeJS.ErrnoException;
+  if (code !== undefined && CONNECTION.has(code)) return true;
+  return error.cause !== undefined && isPassing(error.cause);
+};
+
+/** What the platform said, without address, body or token of the call. */
+export const faultText = (error: unknown): string => {
+  if (error instanceof DiscordAPIError) return `${String(error.code)} ${error.message}`;
+  if (error instanceof HTTPError) return `HTTP ${String(error.status)}`;
+  return error instanceof Error ? error.name : 'unknown fault';
+};

@@ -1,0 +1,54 @@
+/**
+ * What Discord takes. Documented at discord.com/developers/docs (resources/message, components
+ * reference, interactions/application-commands); checked 2026-12-01. Where the platform refuses
+ * all the same, believe the platform.
+ */
+export const LIMITS = {
+  /** Characters of all texts of a message of components together. */
+  messageText: 4000,
+  /** Components of a message, those inside others counted too. */
+  components: 40,
+  buttonsInRow: 5,
+  buttonLabel: 80,
+  customId: 100,
+  galleryItems: 10,
+  altText: 1024,
+  /** Options of a command; choices of an option; suggestions. */
+  options: 25,
+  choices: 25,
+  name: 32,
+  description: 100,
+  choiceName: 100,
+  choiceValue: 100,
+  /** Name, description, option names and choices of one command with all below it. */
+  commandText: 8000,
+  subcommands: 25,
+  modalFields: 5,
+  modalTitle: 45,
+  modalLabel: 45,
+  modalText: 4000,
+  nonce: 25,
+  threadName: 100,
+  /** Pins a channel holds. */
+  pins: 250,
+  /** A file of a message, in bytes. */
+  file: 10 * 1024 * 1024,
+} as const;
+
+/** Codes with which Discord refuses (topics/opcodes-and-status-codes), by what they mean here. */
+export const REFUSALS = {
+  unknownChannel: 10003,
+  unknownGuild: 10004,
+  unknownMessage: 10008,
+  unknownWebhook: 10015,
+  /** The time to acknowledge is over. */
+  unknownInteraction: 10062,
+  pinsFull: 30003,
+  alreadyAcknowledged: 40060,
+  missingAccess: 50001,
+  cannotSendToPerson: 50007,
+  missingPermission: 50013,
+  /** The fifteen minutes of an interaction are over. */
+  expiredToken: 50027,
+  threadExists: 160004,
+} as const;
