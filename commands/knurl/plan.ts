@@ -19,6 +19,7 @@ import {
   said,
 } from '../../src/desk/index.ts';
 import { shareOf } from '../../src/words/index.ts';
+import { fit, plate } from './finishParameters.ts';
 import * as words from './parameters.ts';
 import { planCard } from './planCard.ts';
 import { requestOf } from './request.ts';
@@ -64,6 +65,8 @@ const parameters = z.object({
   turns: words.turns,
   batch: words.batch,
   runout: words.runout,
+  plate,
+  fit,
   units: words.shown,
 });
 export type PlanWords = z.infer<typeof parameters>;
@@ -102,7 +105,7 @@ const missingFinish = ({ units }: Context): Reply =>
 
 const planned = (context: Context, given: PlanWords, request: SetupRequest): Reply => {
   const { finish } = request;
-  if (finish === null) return missingFinish(context);
+  if (finish === null || request.aimOnly === true) return missingFinish(context);
   const { crib, kind } = cribFor(given, request);
   const wanted: PlanRequest = {
     job: request,

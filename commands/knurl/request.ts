@@ -5,6 +5,7 @@ import {
   DEFAULT_INCLUDED,
   DEFAULT_MATERIAL_ID,
   DEFAULT_WHEEL,
+  finishedSizeMinusPlate,
   finishLimits,
   growthBeforeResults,
   type Material,
@@ -17,6 +18,7 @@ import {
   type PatternKind,
   type Pitch,
   provenPitch,
+  type Rad,
   rad,
   revPerMin,
   type SetupRequest,
@@ -227,21 +229,33 @@ const checkTwice = (context: Context, said: SetupWords): void => {
     throw new Asks(contradiction('teeth', 'countAndAsIs', both('teeth', 'asIs')));
 };
 
-const finishFor = (
-  context: Context,
+type Finish = { readonly limits: Window | null; readonly aimOnly: boolean };
+
+/** The limits of the print: said, or those of the class; one size alone is aimed at. */
+const printLimits = (
   said: SetupWords,
-  request: { dp: ReturnType<typeof standardDp>; knurlClass: Callout['knurlClass'] },
-): Window | null => {
+  dp: ReturnType<typeof standardDp>,
+  knurlClass: Callout['knurlClass'],
+): Finish => {
   const { finish } = said;
-  if (finish === undefined) return null;
-  if (!finish.nominalOnly) return { low: mm(finish.low), high: mm(finish.high) };
-  if (request.dp !== null && request.knurlClass !== null)
-    return finishLimits({
-      dp: request.dp,
-      knurlClass: request.knurlClass,
-      nominal: mm(finish.low),
-    });
-  throw missing(context, 'finish', ['finish 0.995-1.005', 'finish 1.000 +0 -0.010']);
+  if (finish === undefined) return { limits: null, aimOnly: false };
+  const low = mm(finish.low);
+  if (!finish.nominalOnly) return { limits: { low, high: mm(finish.high) }, aimOnly: false };
+  return dp !== null && knurlClass !== null
+    ? { limits: finishLimits({ dp, knurlClass, nominal: low }), aimOnly: false }
+    : { limits: { low, high: low }, aimOnly: true };
+};
+
+/** Plating to come takes its thickness off both sides of the target. */
+const finishFor = (
+  said: SetupWords,
+  dp: ReturnType<typeof standardDp>,
+  knurlClass: Callout['knurlClass'],
+): Finish => {
+  const print = printLimits(said, dp, knurlClass);
+  return print.limits === null || said.plate === undefined
+    ? print
+    : { ...print, limits: finishedSizeMinusPlate(print.limits, mm(said.plate)) };
 };
 
 const materialFor = (said: SetupWords): { material: Material; assumed: boolean } => {
@@ -257,6 +271,59 @@ const brinell = (said: SetupWords): number | null => {
   return scale === 'HB' ? value : brinellFromRockwellC(value);
 };
 
+const diameterExamples = ({ units }: Context): readonly string[] =>
+  units === 'in' ? ['1.000', '7/8', '19mm'] : ['20', '25.4', '3/4 in'];
+
+/** What was said of the wheel and of what it turns on. */
+const wheelParts = (said: SetupWords) => {
+  const { wheel, pin } = said;
+  const counted = wheel?.teeth != null && wheel.diameter !== null;
+  return {
+    counted: counted ? { diameter: mm(wheel.diameter), teeth: wheel.teeth } : null,
+    proven:
+      said.proven === undefined ? null : provenPitch(mm(said.proven.diameter), said.proven.teeth),
+    wheel: wheelSize(said),
+    edge: said.edge ?? null,
+    pin: pin?.material ?? 'hardened',
+    pinDiameter: pin?.diameter == null ? null : mm(pin.diameter),
+    onePiece: said.oneWheel === true,
+    layout: said.layout ?? null,
+  } as const;
+};
+
+/** What was said of the bar and how it is held. */
+const barParts = (said: SetupWords) =>
+  ({
+    stock: length(said.diameter),
+    asIs: said.asIs === true,
+    wantedTeeth: said.teeth ?? null,
+    hardness: brinell(said),
+    length: length(said.length),
+    stickout: length(said.stickout),
+    support: said.support ?? 'chuck',
+    stockLength: length(said.stockLength),
+    bore: length(said.bore),
+    plug: said.plug === true,
+    runout: length(said.runout),
+    fitBore: length(said.fit),
+    plate: length(said.plate),
+  }) as const;
+
+/** What was said of how it runs. */
+const runParts = (said: SetupWords) => ({
+  process: said.process ?? null,
+  feed: said.feed === undefined ? null : mmPerRev(said.feed),
+  speed: said.speed === undefined ? null : mPerMin(said.speed),
+  rotation: said.rotation === undefined ? null : revPerMin(said.rotation),
+  turns: said.turns ?? null,
+  batch: said.batch ?? 1,
+});
+
+const includedOf = (context: Context, said: SetupWords): Rad => {
+  const worded = said.angle === undefined ? undefined : rad(said.angle);
+  return agreed(context, 'angle', worded, said.callout?.included ?? null) ?? DEFAULT_INCLUDED;
+};
+
 const assemble = (context: Context, said: SetupWords, pitchNeeded: boolean): Built => {
   const pattern = patternFor(context, said);
   const pitch = pitchFor(context, said, pitchNeeded);
@@ -265,59 +332,25 @@ const assemble = (context: Context, said: SetupWords, pitchNeeded: boolean): Bui
   checkTwice(context, said);
   const knurlClass = classFor(context, said, pattern, pitch);
   const dp = pitch?.system === 'dp' ? standardDp(pitch.value) : null;
-  const finish = finishFor(context, said, { dp, knurlClass });
-  if (said.diameter === undefined && finish === null)
-    throw missing(
-      context,
-      'diameter',
-      context.units === 'in' ? ['1.000', '7/8', '19mm'] : ['20', '25.4', '3/4 in'],
-    );
+  const { limits, aimOnly } = finishFor(said, dp, knurlClass);
+  if (said.diameter === undefined && limits === null)
+    throw missing(context, 'diameter', diameterExamples(context));
   const { material, assumed } = materialFor(said);
-  const wheel = said.wheel;
-  const counted = wheel?.teeth != null && wheel.diameter !== null;
   const request: SetupRequest = {
     pattern,
     pitch,
     alongRim: said.rim === true,
-    counted: counted ? { diameter: mm(wheel.diameter), teeth: wheel.teeth } : null,
-    proven:
-      said.proven === undefined ? null : provenPitch(mm(said.proven.diameter), said.proven.teeth),
     helix: said.helix === undefined ? null : rad(said.helix),
     tilt: said.tilt === undefined ? null : rad(said.tilt),
-    included:
-      agreed(
-        context,
-        'angle',
-        said.angle === undefined ? undefined : rad(said.angle),
-        said.callout?.included ?? null,
-      ) ?? DEFAULT_INCLUDED,
-    stock: length(said.diameter),
-    finish,
-    asIs: said.asIs === true,
-    wantedTeeth: said.teeth ?? null,
+    included: includedOf(context, said),
+    finish: limits,
+    aimOnly,
     knurlClass,
     fill: said.fill ?? null,
     material,
-    hardness: brinell(said),
-    process: said.process ?? null,
-    wheel: wheelSize(said),
-    edge: said.edge ?? null,
-    pin: said.pin?.material ?? 'hardened',
-    pinDiameter: said.pin?.diameter == null ? null : mm(said.pin.diameter),
-    onePiece: said.oneWheel === true,
-    length: length(said.length),
-    stickout: length(said.stickout),
-    support: said.support ?? 'chuck',
-    layout: said.layout ?? null,
-    stockLength: length(said.stockLength),
-    bore: length(said.bore),
-    plug: said.plug === true,
-    feed: said.feed === undefined ? null : mmPerRev(said.feed),
-    speed: said.speed === undefined ? null : mPerMin(said.speed),
-    rotation: said.rotation === undefined ? null : revPerMin(said.rotation),
-    turns: said.turns ?? null,
-    batch: said.batch ?? 1,
-    runout: length(said.runout),
+    ...wheelParts(said),
+    ...barParts(said),
+    ...runParts(said),
     machine: null,
     growth: growthBeforeResults(),
   };

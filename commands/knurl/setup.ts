@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { setUp } from '../../src/calc/index.ts';
 import { cardReply, defineCommand, refuse } from '../../src/desk/index.ts';
 import { proven } from './checkParameters.ts';
+import { fit, plate } from './finishParameters.ts';
 import * as words from './parameters.ts';
 import { requestOf } from './request.ts';
 import { setupCard } from './setupCard.ts';
@@ -43,6 +44,8 @@ export const setupParameters = z.object({
   plug: words.plug,
   hardness: words.hardness,
   runout: words.runout,
+  plate,
+  fit,
   proven,
   units: words.shown,
 });

@@ -4,6 +4,7 @@ import {
   type CheckName,
   DWELL_TURNS,
   MATERIALS,
+  type Mm,
   materialById,
   mm,
   type PitchBasis,
@@ -23,6 +24,7 @@ import {
   row,
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
+import { partOf } from '../../src/words/index.ts';
 import type { SetupWords } from './setup.ts';
 import { reworded } from './words.ts';
 
@@ -85,7 +87,9 @@ const blankLines = (w: Worked): readonly Line[] => {
     );
   if (request.stock !== null && result.asIs !== null)
     lines.push(line('leaveItOption', { stock: request.stock, ...result.asIs }));
-  if (request.finish !== null)
+  if (request.finish !== null && request.aimOnly === true)
+    lines.push(line('finishAimed', { size: request.finish.low }));
+  else if (request.finish !== null)
     lines.push(
       line('finishMet', {
         limits: request.finish,
@@ -99,6 +103,12 @@ const blankLines = (w: Worked): readonly Line[] => {
 /** How a helical label was taken, unless a standard's own callout says what its pitch measures. */
 const unclearBasis = ({ said, result }: Worked): PitchBasis | null =>
   said.callout === undefined ? result.pitch.took : null;
+
+/** The one diameter beside a callout or a class, whose own nominal is the finished size. */
+const calledOutBar = ({ request, said }: Worked): Mm | null =>
+  request.finish === null && (said.callout !== undefined || request.knurlClass !== null)
+    ? request.stock
+    : null;
 
 /** Whatever the bot chose by itself is said, in the first lines. */
 const choiceLines = (w: Worked): readonly Line[] => {
@@ -116,8 +126,15 @@ const choiceLines = (w: Worked): readonly Line[] => {
   const helical = request.pattern.kind === 'diagonal' || request.pattern.kind === 'diamond';
   if (helical && said.helix === undefined && said.tilt === undefined)
     lines.push(line('helixTaken', { helix: result.pitch.helix }));
-  if (said.callout !== undefined && request.stock !== null && request.finish === null)
-    lines.push(line('calloutBar', { stock: request.stock }));
+  const bar = calledOutBar(w);
+  if (bar !== null) lines.push(line('calloutBar', { stock: bar }));
+  if (request.plate !== undefined && request.plate !== null)
+    lines.push(
+      line('plateTaken', {
+        thickness: request.plate,
+        crest: mm(result.blank.tooth.crest + 2 * request.plate),
+      }),
+    );
   if (w.materialAssumed) lines.push(line('materialTaken', request.material));
   if (result.switchedToCut) lines.push(line('processSwitched', request.material));
   return lines;
@@ -245,6 +262,19 @@ const materialChoices = ({ context, materialAssumed }: Worked): readonly Choice[
       })
     : [];
 
+const finishedSizeChoices = (w: Worked): readonly Choice[] => {
+  const size = calledOutBar(w);
+  const [span] = w.context.read.spans.get('diameter') ?? [];
+  if (size === null || span === undefined) return [];
+  const typedSize = partOf(w.context.text, span);
+  return [
+    {
+      label: label('finishedSize', { size }),
+      words: reworded(w.context, ['diameter', 'asIs', 'teeth'], `finish ${typedSize}`),
+    },
+  ];
+};
+
 const choices = (w: Worked): readonly Choice[] => {
   const { context } = w;
   const took = unclearBasis(w);
@@ -254,6 +284,7 @@ const choices = (w: Worked): readonly Choice[] => {
   return [
     ...remedyChoices(w),
     ...wayBackChoices(w),
+    ...finishedSizeChoices(w),
     ...blankChoices(w).slice(0, 1),
     ...(took === null
       ? []

@@ -8,6 +8,7 @@ export * from './cut.ts';
 export * from './edge.ts';
 export * from './feed.ts';
 export * from './fill.ts';
+export * from './fits.ts';
 export * from './force/index.ts';
 export * from './formOrCut.ts';
 export * from './growth/index.ts';

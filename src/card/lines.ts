@@ -45,6 +45,8 @@ export type Lines = CheckLines &
     };
     asItIs: { readonly stock: Mm; readonly toothError: number };
     finishMet: { readonly limits: Window; readonly fillMoved: boolean; readonly fill: number };
+    finishAimed: { readonly size: Mm };
+    plateTaken: { readonly thickness: Mm; readonly crest: Mm };
     pitchTaken: {
       readonly took: PitchBasis;
       readonly toothCount: number;
@@ -104,6 +106,7 @@ export type Row = { [K in RowId]: { readonly row: K; readonly values: Rows[K] } 
 /** What a button says. */
 export type Labels = {
   asIs: { readonly stock: Mm };
+  finishedSize: { readonly size: Mm };
   otherBasis: { readonly took: PitchBasis };
   material: { readonly name: string; readonly condition: string };
   smaller: { readonly toothCount: number; readonly blankDiameter: Mm };

@@ -67,6 +67,12 @@ export type SetupRequest = {
   readonly included: Rad;
   readonly stock: Mm | null;
   readonly finish: Window | null;
+  /** The finish is one size to aim at, without limits of its own. */
+  readonly aimOnly?: boolean;
+  /** Bore the knurl is pressed into. */
+  readonly fitBore?: Mm | null;
+  /** Thickness of the plating to come, which the finish has been made smaller for. */
+  readonly plate?: Mm | null;
   readonly asIs: boolean;
   readonly wantedTeeth: number | null;
   readonly knurlClass: KnurlClass | null;

@@ -4,6 +4,7 @@ import { figure } from '../check.ts';
 import { edgeCheck } from '../edge.ts';
 import { infeedPerTurn } from '../feed.ts';
 import { fillCheck } from '../fill.ts';
+import { pressFit } from '../fits.ts';
 import { formRating, materialCheck } from '../formOrCut.ts';
 import { crestFlat, formedRound } from '../growth/index.ts';
 import { formOf, isOnePiece, type WheelKind, wheelFor } from '../pattern.ts';
@@ -26,7 +27,7 @@ import {
   type Window,
   wheelCheck,
 } from '../tracking.ts';
-import { type Mm, type UnitName } from '../units.ts';
+import { type Mm, mm, type UnitName } from '../units.ts';
 import { type ChosenBlank, chooseBlank } from './blank.ts';
 import { finishCheck } from './finish.ts';
 import { type Load, loadOf, type Pressing } from './load.ts';
@@ -213,7 +214,7 @@ const workOut = (request: SetupRequest): Worked => {
     wantedTeeth,
     transverse: pitch.transverse,
     fill: startingFill(plan, request.fill, materialFill),
-    deepestFill: request.fill === null ? (materialFill ?? 1) : null,
+    deepestFill: request.fill === null && request.aimOnly !== true ? (materialFill ?? 1) : null,
   });
   const wheel = wheelInUse(request, process);
   const run = runningOf(request, process, blank.diameter);
@@ -259,6 +260,16 @@ const workOut = (request: SetupRequest): Worked => {
   };
 };
 
+/** The plated crest in the bore it is pressed into. */
+const fitCheck = ({ request, blank }: Worked): Check | null =>
+  request.fitBore === undefined || request.fitBore === null
+    ? null
+    : pressFit({
+        bore: request.fitBore,
+        crest: mm(blank.tooth.crest + 2 * (request.plate ?? 0)),
+        toothHeight: blank.tooth.height,
+      });
+
 const checksOf = (w: Worked): readonly Check[] => {
   const { request, blank, pitch } = w;
   const dp = request.pitch?.system === 'dp' ? standardDp(request.pitch.value) : null;
@@ -278,7 +289,10 @@ const checksOf = (w: Worked): readonly Check[] => {
       setOver: pitch.setOver,
     }),
     request.runout === null ? null : runoutCheck(request.runout, w.bite),
-    request.finish === null ? null : finishCheck(blank.tooth, request.finish),
+    request.finish === null || request.aimOnly === true
+      ? null
+      : finishCheck(blank.tooth, request.finish),
+    fitCheck(w),
     fillCheck(blank.tooth.fill, materialFill),
     w.motion.check,
     edgeCheck({
@@ -445,6 +459,9 @@ export function checksWith(request: SetupRequest, change: Partial<SetupRequest>)
  * | 2a (included) | included tooth angle | rad | 0.01745 to 3.124 |
  * | stock | diameter of the bar, or null | mm | > 0 |
  * | finish | limits of the print over the crests, or null | - | |
+ * | aimOnly | the finish is one size to aim at, without limits | - | |
+ * | fitBore | bore the knurl is pressed into, or null | mm | > 0 |
+ * | plate | thickness of the plating to come, or null | mm | ≥ 0 |
  * | asIs | the bar is left as it is | - | |
  * | wantedTeeth | count asked for, or null | - | ≥ 3 |
  * | knurlClass | class called out, or null | - | |

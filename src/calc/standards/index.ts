@@ -11,7 +11,6 @@ export {
   dinWheelCode,
   dinWheelTeeth,
 } from './din403.ts';
-export * from './fits.ts';
 export { GOST_PITCHES, type GostKind } from './gost.ts';
 export { JIS_MODULES, type JisKind, jisBlank } from './jis.ts';
 export { type ReadCallout, readCallout, type UnknownForm } from './readCallout.ts';

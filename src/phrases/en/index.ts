@@ -20,6 +20,7 @@ export const en: Book = {
   states: { fine: 'fine', watch: 'watch', stop: 'stop' },
   labels: {
     asIs: ({ stock }, show) => `Leave it at ${show.length(stock)}`,
+    finishedSize: ({ size }, show) => `${show.length(size)} is the finished size`,
     otherBasis: ({ took }) =>
       took === 'normal' ? 'Pitch along the rim' : 'Pitch square to the teeth',
     material: ({ name, condition }) => materialName(name, condition),

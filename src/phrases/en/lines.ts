@@ -41,6 +41,10 @@ export const lines: Book['lines'] = {
     fillMoved
       ? `For a finished ${show.span(limits.low, limits.high)}: fill moved to ${show.percent(fill)}.`
       : `For a finished ${show.span(limits.low, limits.high)}.`,
+  finishAimed: ({ size }, show) =>
+    `Aimed at ${show.both(size)} over the crests; no limits were said, so none were checked.`,
+  plateTaken: ({ thickness, crest }, show) =>
+    `Plating of ${show.both(thickness)} to come: ${show.both(crest)} over the crests then.`,
   pitchTaken: ({ took, toothCount, otherCount }) => {
     const here = took === 'normal' ? 'square to the teeth' : 'along the rim';
     const there = took === 'normal' ? 'along the rim' : 'square to the teeth';

@@ -1,6 +1,6 @@
-import { type CheckOf, figure, type State } from '../check.ts';
-import type { Window } from '../tracking.ts';
-import { type Mm, mm, within } from '../units.ts';
+import { type CheckOf, figure, type State } from './check.ts';
+import type { Window } from './tracking.ts';
+import { type Mm, mm, within } from './units.ts';
 
 /**
  * Limits to knurl to so that the part is right after plating.

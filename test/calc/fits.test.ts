@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { FIT_BITES_TO, finishedSizeMinusPlate, pressFit } from '../../src/calc/standards/index.ts';
+import { FIT_BITES_TO, finishedSizeMinusPlate, pressFit } from '../../src/calc/fits.ts';
 import { mm, OutOfRange } from '../../src/calc/units.ts';
 
 const limits = { low: mm(19.987), high: mm(20) };
