@@ -6,16 +6,13 @@ import {
   type PersonOutside,
   type ShopChange,
   type ShopView,
-  type ShopWords,
   viewShop,
 } from '../../src/shop/index.ts';
 import { type Engine, openStore, type Store, type StoreOptions } from '../../src/store/index.ts';
-import { nearestOf, plainText } from '../../src/words/index.ts';
-import { numberOf } from '../../src/words/numbers.ts';
-import { unitOf } from '../../src/words/unit.ts';
 import { emptyPlace, newPlace, type TestPlace } from './places.ts';
+import { WORDS } from './words.ts';
 
-export const WORDS: ShopWords = { plainText, nearestOf, numberOf, unitOf };
+export { WORDS } from './words.ts';
 
 /** A Monday morning. */
 export const START = Date.UTC(2025, 0, 6, 7, 0);

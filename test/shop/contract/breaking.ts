@@ -23,8 +23,7 @@ import {
 } from '../../../src/shop/index.ts';
 import { type Engine, type Store, StoreUnavailable, TABLES } from '../../../src/store/index.ts';
 import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
-import { CARD } from './cards.ts';
-import { LEFT, STRAIGHT, TURRET } from './samples.ts';
+import { CARD, LEFT, STRAIGHT, TURRET } from './samples.ts';
 
 type Prepared = { readonly wheel: string; readonly ben: string };
 type Work = (change: ShopChange, prepared: Prepared) => Promise<unknown>;

@@ -5,18 +5,7 @@ import { misheard, newCode } from '../../../src/shop/codes.ts';
 import { CODE_SIGNS, findCard, keepCard, latestCards, readCode } from '../../../src/shop/index.ts';
 import type { Engine } from '../../../src/store/index.ts';
 import { good, newRecords, newShop, person, refusalOf, START } from '../../support/records.ts';
-
-export const CARD = {
-  kind: 'setup',
-  words: '1 in 1018 straight 21 tpi',
-  request: { stock: 25.4, pitch: { system: 'tpi', value: 21 } },
-  figures: { blankDiameter: { value: 25.02522, unit: 'mm' } },
-  card: { headline: 'turnTo', parts: [{ part: 'own', texts: ['Ümlaut \u0000 "quoted" \\'] }] },
-  program: '0.1.0',
-  wheel: null,
-  machine: null,
-  material: null,
-};
+import { CARD } from './samples.ts';
 
 export const cards = (engine: Engine): void => {
   describe('cards', () => {

@@ -2,7 +2,7 @@
 import { parse } from 'csv-parse/sync';
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { degrees, mm, mmPerRev, revPerMin } from '../../../src/calc/index.ts';
+import { degrees, mm } from '../../../src/calc/index.ts';
 import { escaped, unescaped } from '../../../src/shop/csv/escape.ts';
 import {
   addTo,
@@ -31,8 +31,7 @@ import {
 } from '../../../src/shop/index.ts';
 import { type Engine, TABLES } from '../../../src/store/index.ts';
 import { good, newRecords, newShop, type TestShop } from '../../support/records.ts';
-import { CARD } from './cards.ts';
-import { ENGINE_LATHE, LEFT, STRAIGHT, TURRET } from './samples.ts';
+import { CARD, ENGINE_LATHE, LEFT, STRAIGHT, TURRET } from './samples.ts';
 
 const shopOn = async (engine: Engine): Promise<TestShop> =>
   newShop((await newRecords(engine)).store);
@@ -126,28 +125,23 @@ Odd,"60,90",,,,,
       importSheet(change, MACHINES, MACHINE_SHEET, file, { units: 'mm' }),
     );
     const report = reportOf(imported);
-    expect(await listOf(shop.view, MACHINES)).toMatchObject(
-      [
-        {
-          name: 'Big',
-          speeds: { list: [60, 90, 140] },
-          feeds: { list: [0.0508, 0.1016] },
-          dial: 'radius',
-          units: 'in',
-          largestDiameter: 254,
-          // 7.5 mechanical horsepower.
-          power: 5592.749,
-        },
-        {
-          name: 'Small',
-          speeds: { slowest: revPerMin(40), fastest: revPerMin(2500) },
-          feeds: { slowest: mmPerRev(0.05), fastest: mmPerRev(0.4) },
-          power: 1500,
-        },
-      ].map((machine) =>
-        expect.objectContaining({ ...machine, power: expect.closeTo(machine.power, 2) }),
-      ),
-    );
+    const [big, small] = await listOf(shop.view, MACHINES);
+    expect(big).toMatchObject({
+      name: 'Big',
+      speeds: { list: [60, 90, 140] },
+      feeds: { list: [0.0508, 0.1016] },
+      dial: 'radius',
+      units: 'in',
+      largestDiameter: 254,
+    });
+    // 7.5 mechanical horsepower of 550 ft·lbf/s.
+    expect(big?.power).toBeCloseTo(5592.749, 2);
+    expect(small).toMatchObject({
+      name: 'Small',
+      speeds: { slowest: 40, fastest: 2500 },
+      feeds: { slowest: 0.05, fastest: 0.4 },
+      power: 1500,
+    });
     expect(report.rows[2]).toMatchObject({
       line: 4,
       outcome: 'refused',
@@ -267,7 +261,7 @@ pin,straight,21 tpi,,,,,wood,,
       faults: [{ column: 'face mm', cell: '=4+4', why: 'unreadable' }],
     });
     expect(await listOf(shop.view, WHEELS)).toMatchObject([{ name: formula, place: '+1+1' }]);
-    const out = parse(await wheelsCsv(shop.view)) as string[][];
+    const out = rowsIn(await wheelsCsv(shop.view));
     expect(out[1]?.[0]).toBe(`'${formula}`);
     expect(reportOf(await takeIn(shop, await wheelsCsv(shop.view)))).toMatchObject({ same: 1 });
   });
@@ -367,7 +361,7 @@ const goingOut = (engine: Engine): void => {
     for (const { name, pieces } of files) {
       const file = await text(pieces);
       expect(file).not.toContain(other.id);
-      const rows = parse(file) as string[][];
+      const rows = rowsIn(file);
       const kept = read[name.replace('.csv', '')] ?? [];
       expect([name, Math.max(0, rows.length - 1)]).toEqual([name, kept.length]);
     }
@@ -383,3 +377,6 @@ const text = async (pieces: AsyncIterable<string>): Promise<string> => {
   for await (const piece of pieces) all += piece;
   return all;
 };
+
+/** Read by the other library, not by ours. */
+const rowsIn = (file: string): string[][] => parse(file, { columns: false });

@@ -39,15 +39,25 @@ import {
 } from '../../../src/shop/index.ts';
 import { type Engine, TABLES } from '../../../src/store/index.ts';
 import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
-import { CARD } from './cards.ts';
-import { STRAIGHT, TURRET } from './samples.ts';
+import { CARD, STRAIGHT, TURRET } from './samples.ts';
 
 /** Everything of a shop that has an id or a name. */
-type Things = Readonly<Record<(typeof THINGS)[number], string>>;
-const THINGS = [
-  ...['wheel', 'wheelName', 'machine', 'machineName', 'material', 'rule', 'ruleName'],
-  ...['person', 'personName', 'personOutside', 'group', 'card', 'code', 'effect'],
-] as const;
+type Things = Readonly<Record<Thing, string>>;
+type Thing =
+  | 'wheel'
+  | 'wheelName'
+  | 'machine'
+  | 'machineName'
+  | 'material'
+  | 'rule'
+  | 'ruleName'
+  | 'person'
+  | 'personName'
+  | 'personOutside'
+  | 'group'
+  | 'card'
+  | 'code'
+  | 'effect';
 
 const ALL = { machine: null, material: null, base: null };
 const BAR = { base: 'steel-medC-CD', hardness: 210, elongation: null, note: null };
@@ -216,7 +226,7 @@ const tried = async (
   shop: TestShop,
   ask: (change: ShopChange) => Promise<unknown>,
 ): Promise<unknown> => {
-  const stop = Symbol('taken back');
+  const stop = new Error('taken back');
   let answer: unknown;
   // Taken back each time, so that every question meets the same shop.
   await shop

@@ -25,8 +25,7 @@ import {
   START,
   type TestShop,
 } from '../../support/records.ts';
-import { CARD } from './cards.ts';
-import { ENGINE_LATHE, LEFT, STRAIGHT, TURRET } from './samples.ts';
+import { CARD, ENGINE_LATHE, LEFT, STRAIGHT, TURRET } from './samples.ts';
 
 const shopOn = async (engine: Engine): Promise<TestShop> =>
   newShop((await newRecords(engine)).store);

@@ -1,4 +1,4 @@
-/** Invented wheels and machines. */
+/** Invented wheels, machines and a card. */
 import { degrees, mm, mmPerRev, revPerMin, watt } from '../../../src/calc/index.ts';
 import { BARE_MACHINE, BARE_WHEEL, type Machine, type Wheel } from '../../../src/shop/index.ts';
 
@@ -45,4 +45,16 @@ export const TURRET: Machine = {
   ...BARE_MACHINE,
   name: 'Turret 2',
   speeds: { slowest: revPerMin(40), fastest: revPerMin(2500) },
+};
+
+export const CARD = {
+  kind: 'setup',
+  words: '1 in 1018 straight 21 tpi',
+  request: { stock: 25.4, pitch: { system: 'tpi', value: 21 } },
+  figures: { blankDiameter: { value: 25.02522, unit: 'mm' } },
+  card: { headline: 'turnTo', parts: [{ part: 'own', texts: ['Ümlaut \u0000 "quoted" \\'] }] },
+  program: '0.1.0',
+  wheel: null,
+  machine: null,
+  material: null,
 };

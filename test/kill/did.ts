@@ -1,0 +1,14 @@
+/** What one interaction did, as it was acknowledged and as it was kept. */
+export type Did = {
+  readonly interaction: string;
+  /** Ids of wheels that were added, and of those that were removed. */
+  readonly wheels: readonly string[];
+  readonly removed: readonly string[];
+  /** Codes. */
+  readonly cards: readonly string[];
+  /** Keys. */
+  readonly effects: readonly string[];
+};
+
+/** The wheel on which every interaction counts itself. */
+export const TALLY = 'tally';

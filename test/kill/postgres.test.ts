@@ -1,0 +1,3 @@
+import { killContract } from './contract.ts';
+
+killContract('postgres');

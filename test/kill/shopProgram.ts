@@ -1,0 +1,109 @@
+/**
+ * A shop at work: changes its lists, keeps cards, has things posted, and says of each change that
+ * it was kept, once it was. It goes on until it is killed.
+ */
+import { writeSync } from 'node:fs';
+import {
+  addTo,
+  enterShop,
+  findIn,
+  importSheet,
+  keepCard,
+  listOf,
+  once,
+  openOutbox,
+  queueEffects,
+  removeFrom,
+  type ShopChange,
+  WHEEL_SHEET,
+  WHEELS,
+} from '../../src/shop/index.ts';
+import { openStore, type StorePlace } from '../../src/store/index.ts';
+import { CARD, STRAIGHT } from '../shop/contract/samples.ts';
+import { WORDS } from '../support/words.ts';
+import { type Did, TALLY } from './did.ts';
+import { postTo } from './post.ts';
+
+type Told = { readonly place: StorePlace; readonly receiver: string; readonly run: string };
+const { place, receiver, run } = JSON.parse(process.argv[2] ?? '') as Told;
+
+const store = await openStore(place, { connections: 4 });
+const outbox = openOutbox(store, {
+  worker: run,
+  deliver: postTo(receiver),
+  now: Date.now,
+  leaseMs: 1500,
+  pollMs: 50,
+  concurrency: 3,
+});
+
+/** One of several kinds of change; what it did, and what is to happen because of it. */
+const doSomething = async (change: ShopChange, interaction: string, kind: number): Promise<Did> => {
+  const name = `wheel ${interaction}`;
+  const key = `${interaction} post`;
+  const did: Did = { interaction, wheels: [], removed: [], cards: [], effects: [key] };
+  switch (kind) {
+    case 0: {
+      const added = await addTo(change, WHEELS, { ...STRAIGHT, name });
+      return added.ok ? { ...did, wheels: [added.value.id] } : did;
+    }
+    case 1: {
+      const rows = [1, 2, 3].map((row) => `${name} ${row},straight,21 tpi`);
+      const file = ['name,form,pitch', ...rows].join('\n');
+      await importSheet(change, WHEELS, WHEEL_SHEET, file, { units: 'mm' });
+      const wheels: string[] = [];
+      for (const row of [1, 2, 3]) {
+        const wheel = await findIn(change, WHEELS, `${name} ${row}`);
+        if (wheel.ok) wheels.push(wheel.value.id);
+      }
+      return { ...did, wheels };
+    }
+    case 2: {
+      const [wheel] = (await listOf(change, WHEELS)).filter((one) => one.name !== TALLY);
+      if (wheel === undefined) return did;
+      const removed = await removeFrom(change, WHEELS, wheel.id, { evenInUse: true });
+      return removed.ok ? { ...did, removed: [wheel.id] } : did;
+    }
+    default: {
+      const { code } = await keepCard(change, CARD);
+      return { ...did, cards: [code], effects: [key, `${interaction} pin`] };
+    }
+  }
+};
+
+/** Everything in one change: the thing itself, one more on the tally, and what is to be posted. */
+const act = (interaction: string, kind: number): Promise<Did> =>
+  store.transact(async (tx) => {
+    const shop = { platform: 'terminal', id: 'killed', name: 'Killed' };
+    const who = { id: 'kim', name: 'Kim', groups: [], manages: null };
+    const { change } = await enterShop(tx, WORDS, shop, who, Date.now());
+    const { answer } = await once(change, interaction, async () => {
+      const did = await doSomething(change, interaction, kind);
+      const [post = '', pin] = did.effects;
+      await queueEffects(change, [
+        { key: post, effect: { post } },
+        ...(pin === undefined ? [] : [{ key: pin, effect: { pin: post }, after: post }]),
+      ]);
+      await tx
+        .updateTable('wheel')
+        .set((eb) => ({ parts_run: eb('parts_run', '+', 1) }))
+        .where('name', '=', TALLY)
+        .execute();
+      return did;
+    });
+    return answer;
+  });
+
+/** Straight to the pipe: what was said is said, whatever happens in the next moment. */
+const say = (line: string): void => {
+  writeSync(1, `${line}\n`);
+};
+
+outbox.start();
+say('ready');
+for (let at = 0; ; at += 1) {
+  const did = await act(`${run}.${at}`, Math.floor(Math.random() * 5));
+  outbox.nudge();
+  say(`kept ${JSON.stringify(did)}`);
+  await new Promise((resolve) => setTimeout(resolve, Math.random() * 6));
+}
