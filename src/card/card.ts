@@ -1,4 +1,4 @@
-import type { CautionId, Check, CheckAlternative, Figures } from '../calc/index.ts';
+import type { CautionId, Check, CheckAlternative, Figures, Way } from '../calc/index.ts';
 import type { Label, Line, Row } from './lines.ts';
 
 /** A button: what it says and the line it sends. */
@@ -50,6 +50,8 @@ export type Card = {
   readonly alternatives: readonly CheckAlternative[];
   /** Tables of a verb's own, for programs: the candidates of a plan, the causes of a trouble. */
   readonly lists?: Readonly<Record<string, readonly unknown[]>>;
+  /** In what ways its figures came about, for whoever asks why. */
+  readonly ways?: readonly Way[];
   /** The unit shown first. */
   readonly units: 'in' | 'mm';
 };

@@ -21,6 +21,7 @@ import type {
 import type { CheckLines, CheckRows } from './checkLines.ts';
 import type { PlanLines, PlanRows } from './planLines.ts';
 import type { TroubleLines, TroubleRows } from './troubleLines.ts';
+import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
 
 /**
  * Every sentence a card can say, and the numbers it says it with. The phrase book of a language
@@ -28,7 +29,8 @@ import type { TroubleLines, TroubleRows } from './troubleLines.ts';
  */
 export type Lines = CheckLines &
   PlanLines &
-  TroubleLines & {
+  TroubleLines &
+  WhyLines & {
     turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
     leaveAt: { readonly blankDiameter: Mm; readonly toothCount: number };
     stopped: { readonly check: Check };
@@ -72,7 +74,8 @@ export type Line = { [K in LineId]: { readonly line: K; readonly values: Lines[K
 /** Label and value rows: the numbers of the card in reading order. */
 export type Rows = CheckRows &
   PlanRows &
-  TroubleRows & {
+  TroubleRows &
+  WhyRows & {
     material: { readonly name: string; readonly condition: string };
     feedIn: { readonly infeed: Mm; readonly cut: boolean };
     firstTurn: { readonly firstBite: Mm };
@@ -104,7 +107,7 @@ export type RowId = keyof Rows;
 export type Row = { [K in RowId]: { readonly row: K; readonly values: Rows[K] } }[RowId];
 
 /** What a button says. */
-export type Labels = {
+export type Labels = WhyLabels & {
   asIs: { readonly stock: Mm };
   finishedSize: { readonly size: Mm };
   otherBasis: { readonly took: PitchBasis };

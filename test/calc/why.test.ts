@@ -17,6 +17,12 @@ import { MARK_ORDER, weakestMark } from '../../src/calc/why/marks.ts';
 import { CHECK_NUMBERS, type Origins, type Told, type Worked } from '../../src/calc/why/origin.ts';
 import { CHECK_FIGURE_ORIGINS } from '../../src/calc/why/originsOfCheck.ts';
 import { CHECK_ORIGINS } from '../../src/calc/why/originsOfChecks.ts';
+import {
+  PLAN_FIGURES,
+  PLAN_ORIGINS,
+  TROUBLE_FIGURES,
+  TROUBLE_ORIGINS,
+} from '../../src/calc/why/originsOfPlan.ts';
 import { SETUP_ORIGINS } from '../../src/calc/why/originsOfSetup.ts';
 import { waysOfSetUp } from '../../src/calc/why/ways.ts';
 import { type Explained, whyOf } from '../../src/calc/why/why.ts';
@@ -51,7 +57,15 @@ const entriesOf = (register: Readonly<Record<string, Origins>>): Entry[] =>
 const setupEntries = entriesOf(SETUP_ORIGINS);
 const checkEntries = entriesOf(CHECK_FIGURE_ORIGINS);
 const ruleEntries = entriesOf(CHECK_ORIGINS);
-const entries = [...setupEntries, ...checkEntries, ...ruleEntries];
+const planEntries = entriesOf(PLAN_ORIGINS);
+const troubleEntries = entriesOf(TROUBLE_ORIGINS);
+const entries = [
+  ...setupEntries,
+  ...checkEntries,
+  ...planEntries,
+  ...troubleEntries,
+  ...ruleEntries,
+];
 const title = ({ name, origin }: Entry) =>
   `${name} by ${origin.by}${origin.when === undefined ? '' : ` when ${origin.when.join(', ')}`}`;
 
@@ -101,8 +115,16 @@ describe('the register', () => {
   });
 
   it('always ends in an origin that holds for the rest', () => {
-    const registers = { ...SETUP_ORIGINS, ...CHECK_FIGURE_ORIGINS, ...CHECK_ORIGINS };
-    const open = Object.entries(registers).filter(([, all]) => all.at(-1)?.when !== undefined);
+    const registers = [
+      SETUP_ORIGINS,
+      CHECK_FIGURE_ORIGINS,
+      PLAN_ORIGINS,
+      TROUBLE_ORIGINS,
+      CHECK_ORIGINS,
+    ];
+    const open = registers
+      .flatMap((register) => Object.entries<Origins>(register))
+      .filter(([, all]) => all.at(-1)?.when !== undefined);
     expect(open.map(([name]) => name)).toEqual([]);
   });
 
@@ -162,6 +184,8 @@ describe('the register', () => {
     const [setup, check] = [Object.keys(SETUP_FIGURES), Object.keys(CHECK_FIGURES)];
     expect(strays(setupEntries, setup)).toEqual([]);
     expect(strays(checkEntries, check)).toEqual([]);
+    expect(strays(planEntries, PLAN_FIGURES)).toEqual([]);
+    expect(strays(troubleEntries, TROUBLE_FIGURES)).toEqual([]);
     // The rule of a check also reads numbers that only the check carries; its name may be a figure's.
     const rules = ruleEntries.map(({ name, origin }) => ({ name: `the check of ${name}`, origin }));
     expect(strays(rules, [...setup, ...check, ...numbers])).toEqual([]);

@@ -3,6 +3,7 @@ import { CHECK_FORMULAS } from './formulasOfChecks.ts';
 import { LOAD_FORMULAS } from './formulasOfLoad.ts';
 import { MOTION_FORMULAS } from './formulasOfMotion.ts';
 import { PART_FORMULAS } from './formulasOfParts.ts';
+import { PLAN_FORMULAS } from './formulasOfPlan.ts';
 import { TOOTH_FORMULAS } from './formulasOfTooth.ts';
 
 const ALL = {
@@ -11,6 +12,7 @@ const ALL = {
   ...LOAD_FORMULAS,
   ...CHECK_FORMULAS,
   ...PART_FORMULAS,
+  ...PLAN_FORMULAS,
 };
 
 /** A function by the name it is exported under. */

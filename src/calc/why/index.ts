@@ -8,6 +8,7 @@ export {
   type Given,
   type Remark,
 } from './origin.ts';
+export { PLAN_FIGURES, TROUBLE_FIGURES } from './originsOfPlan.ts';
 export { type Way, waysOfCheck, waysOfSetUp } from './ways.ts';
 export {
   EXPLAINED,

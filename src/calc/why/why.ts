@@ -1,17 +1,16 @@
 import type { CheckName } from '../check.ts';
-import { CHECK_FIGURES, type CheckFigureName } from '../checking/index.ts';
-import { SETUP_FIGURES, type SetupFigureName } from '../setup/index.ts';
 import { type Mark, SOURCES, type SourceId } from '../sources.ts';
 import { FORMULAS, type FormulaName } from './formulas.ts';
 import { weakestMark } from './marks.ts';
 import type { FigureName, Given, Origins, Remark, Through, Told, Worked } from './origin.ts';
 import { CHECK_FIGURE_ORIGINS } from './originsOfCheck.ts';
 import { CHECK_ORIGINS } from './originsOfChecks.ts';
+import { PLAN_ORIGINS, TROUBLE_ORIGINS } from './originsOfPlan.ts';
 import { SETUP_ORIGINS } from './originsOfSetup.ts';
 import type { Way } from './ways.ts';
 
 /** The cards whose figures can be asked about. */
-export const EXPLAINED = ['setup', 'check'] as const;
+export const EXPLAINED = ['setup', 'check', 'plan', 'trouble'] as const;
 export type ExplainedVerb = (typeof EXPLAINED)[number];
 
 /** What is asked about on a card. */
@@ -33,14 +32,18 @@ export type Explained = Step & {
 };
 export type Why = Explained | Pick<Told, 'told'>;
 
-const isSetupFigure = (name: string): name is SetupFigureName => name in SETUP_FIGURES;
-const isCheckFigure = (name: string): name is CheckFigureName => name in CHECK_FIGURES;
+const FIGURE_ORIGINS: Readonly<
+  Record<ExplainedVerb, Readonly<Partial<Record<FigureName, Origins>>>>
+> = {
+  setup: SETUP_ORIGINS,
+  check: CHECK_FIGURE_ORIGINS,
+  plan: PLAN_ORIGINS,
+  trouble: TROUBLE_ORIGINS,
+};
 
 const originsOf = (verb: ExplainedVerb, subject: Subject): Origins | null => {
   if ('check' in subject) return CHECK_ORIGINS[subject.check];
-  const { figure } = subject;
-  if (verb === 'setup') return isSetupFigure(figure) ? SETUP_ORIGINS[figure] : null;
-  return isCheckFigure(figure) ? CHECK_FIGURE_ORIGINS[figure] : null;
+  return FIGURE_ORIGINS[verb][subject.figure] ?? null;
 };
 
 const stepOf = (through: Through): Step =>
@@ -74,7 +77,7 @@ const explained = (worked: Worked): Explained => {
  *
  * | symbol | meaning | unit | range |
  * | --- | --- | --- | --- |
- * | verb | whose card it is: setup or check | - | |
+ * | verb | whose card it is: setup, check, plan or trouble | - | |
  * | subject | the figure or the check | - | |
  * | ways | in what ways the card's figures came about | - | |
  * | → why | formula, inputs, sources and mark; told where it was said; null where the card has no such figure | - | |

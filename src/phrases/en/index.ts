@@ -8,6 +8,7 @@ import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
 import { verbs } from './verbs.ts';
+import { whyLabels } from './whyLines.ts';
 
 export const en: Book = {
   language: 'en',
@@ -19,6 +20,7 @@ export const en: Book = {
   refusal,
   states: { fine: 'fine', watch: 'watch', stop: 'stop' },
   labels: {
+    ...whyLabels,
     asIs: ({ stock }, show) => `Leave it at ${show.length(stock)}`,
     finishedSize: ({ size }, show) => `${show.length(size)} is the finished size`,
     otherBasis: ({ took }) =>

@@ -7,6 +7,7 @@ import { patternName, pitchName, wheelName } from './names.ts';
 import { planLines } from './planLines.ts';
 import { remedyLabel } from './remedies.ts';
 import { troubleLines } from './troubleLines.ts';
+import { whyLines } from './whyLines.ts';
 
 const teeth = (count: number): string => `${String(count)} ${count === 1 ? 'tooth' : 'teeth'}`;
 const inSentence = (label: string): string => label.charAt(0).toLowerCase() + label.slice(1);
@@ -23,6 +24,7 @@ export const lines: Book['lines'] = {
   ...checkLines,
   ...planLines,
   ...troubleLines,
+  ...whyLines,
   turnTo: ({ blankDiameter, toothCount }, show) =>
     `Turn to ${show.length(blankDiameter)}: ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
   leaveAt: ({ blankDiameter, toothCount }, show) =>

@@ -2,6 +2,7 @@ import type { Book } from '../book.ts';
 import { checkRows } from './checkLines.ts';
 import { planRows } from './planLines.ts';
 import { troubleRows } from './troubleLines.ts';
+import { whyRows } from './whyLines.ts';
 
 const parts = (batch: number): string => (batch === 1 ? '' : ` for ${String(batch)} parts`);
 
@@ -9,6 +10,7 @@ export const rows: Book['rows'] = {
   ...checkRows,
   ...planRows,
   ...troubleRows,
+  ...whyRows,
   material: ({ name, condition }) => ({ label: 'Material', text: `${name}, ${condition}` }),
   feedIn: ({ infeed, cut }, show) => ({
     label: 'Feed in',
