@@ -9,6 +9,7 @@ export {
 } from './cards.ts';
 export { type Claimed, claimEffects, type NoteOf } from './claims.ts';
 export { CODE_SIGNS, readCode } from './codes.ts';
+export { canLeave, cribFor, leaves, sizeOf } from './crib.ts';
 export type { CellFault } from './csv/cells.ts';
 export {
   type Imported,
@@ -20,6 +21,7 @@ export {
 export { MACHINE_SHEET } from './csv/machineSheet.ts';
 export { type FileFault, MOST_ROWS } from './csv/readTable.ts';
 export { WHEEL_SHEET } from './csv/wheelSheet.ts';
+export { limitsOf, onDial } from './dial.ts';
 export { type GivenUp, givenUp, givenUpSeen, type QueuedEffect, queueEffects } from './effects.ts';
 export {
   type Entered,
