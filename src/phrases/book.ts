@@ -2,6 +2,7 @@ import type { CautionId, CheckName, CheckOf, State } from '../calc/index.ts';
 import type { LabelId, Labels, LineId, Lines, RowId, Rows } from '../card/index.ts';
 import type { Contradiction, Refusal } from '../refusal.ts';
 import type { ChatPhrases, ConfigPhrases } from './chat.ts';
+import type { RecordsPhrases } from './records.ts';
 import type { Show } from './show.ts';
 
 /** A figure with its name in front. */
@@ -33,6 +34,7 @@ export type Book = {
   readonly parameters: Readonly<Record<string, string>>;
   readonly chat: ChatPhrases;
   readonly config: ConfigPhrases;
+  readonly records: RecordsPhrases;
   readonly terminal: TerminalPhrases;
 };
 

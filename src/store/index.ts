@@ -4,7 +4,7 @@ export { BackupFault, type BackupFaultCode } from './backupFaults.ts';
 export { RecordsTooNew, StoreUnavailable, type UnavailableReason } from './faults.ts';
 export { literally } from './literally.ts';
 export type { Engine } from './migrations/columns.ts';
-export { type StorePlace, type StoreSettings, storePlace } from './place.ts';
+export { AddressWrong, type StorePlace, type StoreSettings, storePlace } from './place.ts';
 export { portionsOf, type Row } from './portions.ts';
 export {
   type RegisterReader,

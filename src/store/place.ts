@@ -13,15 +13,19 @@ export type StoreSettings = {
 
 const FILE = 'wholetooth.db';
 
+/** The address of the database is none of a PostgreSQL server. It may hold a password: not shown. */
+export class AddressWrong extends Error {
+  constructor() {
+    super('DATABASE_URL does not begin with postgres://');
+    this.name = 'AddressWrong';
+  }
+}
+
 /** A database address wins over a folder; without either the records are kept in .data. */
 export const storePlace = (settings: StoreSettings): StorePlace => {
   const url = settings.DATABASE_URL?.trim();
   if (url !== undefined && url !== '') {
-    if (!/^postgres(ql)?:\/\//.test(url)) {
-      throw new Error(
-        'DATABASE_URL does not begin with postgres://. Give the address of a PostgreSQL database, or leave it out to keep the records in a file.',
-      );
-    }
+    if (!/^postgres(ql)?:\/\//u.test(url)) throw new AddressWrong();
     return { engine: 'postgres', url };
   }
   return { engine: 'sqlite', file: path.resolve(settings.WHOLETOOTH_DATA || '.data', FILE) };

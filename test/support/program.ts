@@ -18,20 +18,33 @@ export type Program = {
 
 const root = fileURLToPath(new URL('../..', import.meta.url));
 
-/** Translates a program once, so that a hundred of its lives do not each begin with that. */
-export const builtProgram = async (source: URL): Promise<string> => {
-  const folder = path.join(root, 'dist', 'programs');
-  fs.mkdirSync(folder, { recursive: true });
-  const outDir = fs.mkdtempSync(path.join(folder, 'one-'));
-  onTestFinished(() => fs.rmSync(outDir, { recursive: true, force: true }));
+/** Translates programs once, so that a hundred of their lives do not each begin with that. */
+export const builtFolder = async (
+  sources: readonly URL[],
+): Promise<{ readonly folder: string; readonly remove: () => void }> => {
+  const above = path.join(root, 'dist', 'programs');
+  fs.mkdirSync(above, { recursive: true });
+  const folder = fs.mkdtempSync(path.join(above, 'one-'));
   await build({
     root,
     configFile: false,
     logLevel: 'silent',
-    build: { ssr: fileURLToPath(source), outDir, target: 'node20', minify: false },
+    build: {
+      ssr: true,
+      rolldownOptions: { input: sources.map((source) => fileURLToPath(source)) },
+      outDir: folder,
+      target: 'node20',
+      minify: false,
+    },
   });
-  const [file = ''] = fs.readdirSync(outDir).filter((name) => /\.m?js$/u.test(name));
-  return path.join(outDir, file);
+  return { folder, remove: () => fs.rmSync(folder, { recursive: true, force: true }) };
+};
+
+/** One program, for as long as the test runs. */
+export const builtProgram = async (source: URL): Promise<string> => {
+  const { folder, remove } = await builtFolder([source]);
+  onTestFinished(remove);
+  return path.join(folder, path.basename(source.pathname).replace(/\.ts$/u, '.js'));
 };
 
 /** Starts a built program. What it is told stands in its arguments, as JSON. */

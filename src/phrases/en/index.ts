@@ -4,6 +4,7 @@ import { chat, config } from './chat.ts';
 import { checks } from './checks.ts';
 import { lines } from './lines.ts';
 import { materialName, THINGS } from './names.ts';
+import { records } from './records.ts';
 import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
@@ -47,6 +48,7 @@ export const en: Book = {
   parameters: THINGS,
   chat,
   config,
+  records,
   terminal: {
     opening: [
       'Wholetooth, local channel: type a bar, a pattern and a pitch, such as 1.000 straight 21tpi 1018.',
