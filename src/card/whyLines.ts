@@ -27,7 +27,11 @@ export type WhyLines = {
     readonly edition: string | null;
     readonly mark: Mark;
   };
-  whySure: { readonly mark: Mark };
+  whySure: {
+    readonly mark: Mark;
+    /** The weakest of several. */
+    readonly weakest: boolean;
+  };
   whyAssumes: { readonly by: FormulaName };
 };
 

@@ -24,6 +24,27 @@ export function sharpHeight(p: Mm, included: Rad): Mm {
 }
 
 /**
+ * Height of a tooth that is filled to a share of its sharp height.
+ *
+ *     H = x Hf
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | x (fill) | tooth height over sharp height | - | 0 to 1 |
+ * | Hf (sharp) | sharp height | mm | > 0 |
+ * | → H | tooth height | mm | |
+ *
+ * Assumes the fill is meant of the height, not of the volume.
+ *
+ * @source tooth-geometry (similar triangles)
+ * @example heightOfFill(0.9, mm(0.4)) // 0.36 mm
+ */
+export function heightOfFill(fill: number, sharp: Mm): Mm {
+  within('fill', fill, 0, 1 + 1e-9);
+  return mm(fill * positive('sharpHeight', sharp));
+}
+
+/**
  * Flat left on a crest that is not filled to an edge.
  *
  *     w = p (1 − x)

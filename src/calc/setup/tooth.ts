@@ -1,5 +1,5 @@
 import { DEFAULT_FILL } from '../fill.ts';
-import { formedRound, roundWheelToothHeight, sharpHeight } from '../growth/index.ts';
+import { formedRound, heightOfFill, roundWheelToothHeight, sharpHeight } from '../growth/index.ts';
 import { formOf, type Pattern } from '../pattern.ts';
 import type { GrowthBelief } from '../shopGrowth.ts';
 import { growthInterval } from '../shopGrowth.ts';
@@ -73,7 +73,6 @@ export type MadeTooth = {
 /**
  * Height, infeed and crest of a tooth on a real blank: exact on round work when formed, the tooth itself when cut.
  *
- *     H = x Hf
  *     formed: Do = D + ḡ growth(H), its 80 % spread D + (ḡ ± 1.2816 sd) growth(H);  cut: Do = D
  *
  * | symbol | meaning | unit | range |
@@ -91,7 +90,7 @@ export type MadeTooth = {
  * @example makeTooth({ pattern: { kind: 'straight' }, process: 'form', sharpHeight: mm(0.4), wheelFill: 1, growth: growthBeforeResults() }, mm(6), 1).crest // 6.37578 mm
  */
 export function makeTooth(plan: ToothPlan, blank: Mm, fill: number): MadeTooth {
-  const height = mm(fill * plan.sharpHeight);
+  const height = heightOfFill(fill, plan.sharpHeight);
   // A tooth taller than the bar's radius has nothing left to stand on.
   if (height >= blank / 2) throw new OutOfRange('diameter', blank, 2 * height, 500, 'mm');
   if (plan.process === 'cut') {

@@ -2,9 +2,13 @@ import type { Formula } from './formula.ts';
 
 /** What the wheels press on, and what gives way. */
 export const LOAD_FORMULAS = {
-  rollingPressure: {
-    formula: ['metals 9.80665 HB 2.5ⁿ;  plastics 3 Re'],
-    sources: ['hardness-as-yield', 'work-hardening', 'plastic-pressure'],
+  metalPressure: {
+    formula: ['q = 9.80665 HB 2.5ⁿ'],
+    sources: ['hardness-as-yield', 'work-hardening'],
+  },
+  plasticPressure: {
+    formula: ['q = 3 Re'],
+    sources: ['plastic-pressure'],
   },
   wedgeShare: {
     formula: ['grooves x;  one of a pair x − x²/2;  crossed, raised 2x − x²;  crossed, sunk x²'],

@@ -32,6 +32,10 @@ export const PART_FORMULAS = {
     ],
     sources: ['check-after', 'check-limits', 'round-work', 'growth-prior'],
   },
+  measuredGrowthShare: {
+    formula: ['g = (D_crest − D_blank) / growth(H)'],
+    sources: ['round-work'],
+  },
   partChecks: {
     formula: [
       'count: N as worked out fine;  within Δ + 0.5 of π D/p_t watch;  else, or within 6 % of twice N, stop',

@@ -58,6 +58,10 @@ export const TOOTH_FORMULAS = {
     formula: ['Hf = p / (2 tan a)'],
     sources: ['tooth-geometry'],
   },
+  heightOfFill: {
+    formula: ['H = x Hf'],
+    sources: ['tooth-geometry'],
+  },
   startingFill: {
     formula: [
       "x = what was asked, else min(0.90, the material's own);  never over the wheel's own tooth",
@@ -66,7 +70,6 @@ export const TOOTH_FORMULAS = {
   },
   makeTooth: {
     formula: [
-      'H = x Hf',
       'formed: Do = D + ḡ growth(H), its 80 % spread D + (ḡ ± 1.2816 sd) growth(H);  cut: Do = D',
     ],
     sources: ['round-work', 'growth-prior'],

@@ -93,11 +93,13 @@ export type Given =
   | 'wheelFace'
   | 'wheelTeeth'
   | 'wholeByLabel'
-  | 'wholeTeeth';
+  | 'wholeTeeth'
+  | 'yieldOfMaterial';
 
 /** What is done with the formula's result before it is the figure. */
 export type Remark =
   | 'nearestWhole'
+  | 'onlyDifference'
   | 'timesParts'
   | 'timeOfOnePart'
   | 'timesWheels'

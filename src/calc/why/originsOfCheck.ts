@@ -147,9 +147,9 @@ const CREST: Origins = [
 ];
 
 const MEASURED_SHARE = {
-  by: 'checkAfter',
-  parts: ['g = (Do − D)/growth(x)'],
-  inputs: { Do: 'crestMeasured', D: 'blankDiameter' },
+  by: 'measuredGrowthShare',
+  inputs: { D_crest: 'crestMeasured', D_blank: 'blankDiameter' },
+  given: { growth: 'staticGrowth', H: 'heightMeasured' },
 } as const satisfies Worked;
 
 const PART_ORIGINS = {
@@ -158,12 +158,12 @@ const PART_ORIGINS = {
   crestMeasured: [{ told: 'person' }],
   countExpected: [
     {
-      by: 'checkAfter',
-      parts: ['N expected = round(π D/p_t)'],
+      by: 'toothCount',
       inputs: { D: 'blankDiameter', p_t: 'transversePitch' },
+      remark: 'nearestWhole',
     },
   ],
-  growthMeasured: [{ ...MEASURED_SHARE, given: { growth: 'staticGrowth', x: 'heightMeasured' } }],
+  growthMeasured: [{ ...MEASURED_SHARE, remark: 'onlyDifference' }],
   growthExpected: [
     {
       ...FORMED_CREST,
@@ -171,7 +171,7 @@ const PART_ORIGINS = {
       given: { growth: 'staticGrowth', sd: 'growthSpread', H: 'heightMeasured' },
     },
   ],
-  growthFactor: [{ ...MEASURED_SHARE, given: { growth: 'staticGrowth', x: 'heightMeasured' } }],
+  growthFactor: [MEASURED_SHARE],
   growthFactorExpected: GROWTH_FACTOR,
   fillMeasured: [
     {

@@ -6,6 +6,39 @@ const CUT_GIVEN = { kc: 'chipStiffness', r: 'voidOfForm' } as const;
 
 const BAND: Origins = [{ by: 'forceBand', inputs: { F: 'radialForce' } }];
 
+type Ground = {
+  readonly through: { readonly q: Through };
+  readonly given: Readonly<Record<string, Given>>;
+};
+const METAL: Ground = {
+  through: { q: 'metalPressure' },
+  given: { HB: 'hardness', n: 'hardening' },
+};
+const PLASTIC: Ground = { through: { q: 'plasticPressure' }, given: { Re: 'yieldOfMaterial' } };
+
+const travelling = ({ through, given }: Ground): Worked => ({
+  by: 'traverseForce',
+  inputs: { x: 'fill', z: 'infeed', f: 'feed', Dp: 'blankDiameter' },
+  through: {
+    ...through,
+    φ̄: 'meanWedgeShare',
+    p̄: ['trailingForce', 'p̄ = 0.5 q φ(x)'],
+    φ: 'wedgeShare',
+    b_e: 'hertzHalfWidth',
+    'E*': 'contactModulus',
+    Req: 'equivalentRadius',
+    b: 'contactWidth',
+  },
+  given: { ...given, E: 'modulus', Dw: 'wheelDiameter', face: 'wheelFace', bevel: 'bevel' },
+});
+
+const plunging = ({ through, given }: Ground): Worked => ({
+  by: 'plungeForce',
+  inputs: { x: 'fill', z1: 'firstBite', dz: 'infeedPerTurn', Dp: 'blankDiameter' },
+  through: { ...through, φ: 'wedgeShare', Req: 'equivalentRadius' },
+  given: { ...given, w: 'pressedWidth', Dw: 'wheelDiameter' },
+});
+
 const FORCE_ORIGINS = {
   radialForce: [
     {
@@ -15,35 +48,10 @@ const FORCE_ORIGINS = {
       inputs: { f: 'feed', H: 'toothHeight' },
       given: CUT_GIVEN,
     },
-    {
-      when: ['traverse'],
-      by: 'traverseForce',
-      inputs: { x: 'fill', z: 'infeed', f: 'feed', Dp: 'blankDiameter' },
-      through: {
-        q: 'rollingPressure',
-        φ̄: 'meanWedgeShare',
-        p̄: ['trailingForce', 'p̄ = 0.5 q φ(x)'],
-        φ: 'wedgeShare',
-        b_e: 'hertzHalfWidth',
-        'E*': 'contactModulus',
-        Req: 'equivalentRadius',
-        b: 'contactWidth',
-      },
-      given: {
-        HB: 'hardness',
-        n: 'hardening',
-        E: 'modulus',
-        Dw: 'wheelDiameter',
-        face: 'wheelFace',
-        bevel: 'bevel',
-      },
-    },
-    {
-      by: 'plungeForce',
-      inputs: { x: 'fill', z1: 'firstBite', dz: 'infeedPerTurn', Dp: 'blankDiameter' },
-      through: { q: 'rollingPressure', φ: 'wedgeShare', Req: 'equivalentRadius' },
-      given: { w: 'pressedWidth', Dw: 'wheelDiameter', HB: 'hardness', n: 'hardening' },
-    },
+    { ...travelling(PLASTIC), when: ['traverse', 'plastic'] },
+    { ...travelling(METAL), when: ['traverse'] },
+    { ...plunging(PLASTIC), when: ['plastic'] },
+    plunging(METAL),
   ],
   radialForceLow: BAND,
   radialForceHigh: BAND,

@@ -76,7 +76,7 @@ const BLANK_ORIGINS = {
 
 const TOOTH_ORIGINS = {
   sharpHeight: [{ by: 'sharpHeight', inputs: { p: 'pitch' }, given: { a: 'halfAngle' } }],
-  toothHeight: [{ by: 'makeTooth', parts: ['H = x Hf'], inputs: { x: 'fill', Hf: 'sharpHeight' } }],
+  toothHeight: [{ by: 'heightOfFill', inputs: { x: 'fill', Hf: 'sharpHeight' } }],
   fill: FILL,
   infeed: [
     { when: ['cut'], by: 'cutKnurl', parts: ['infeed = H'], inputs: { H: 'toothHeight' } },

@@ -1,6 +1,7 @@
 import type { AfterCheck, BlankCheck, SeamCheck } from '../checking/index.ts';
 import { CUT_FEED } from '../feed.ts';
 import { DEFAULT_FILL } from '../fill.ts';
+import { isPolymer } from '../materials/index.ts';
 import type { SetupRequest, SetupResult } from '../setup/index.ts';
 import type { WheelKnowledge } from '../tracking.ts';
 
@@ -18,6 +19,7 @@ export type Way =
   | 'counted'
   | 'proven'
   | 'cut'
+  | 'plastic'
   | 'traverse'
   /** Asked for and taken as it was said. */
   | 'speedAsked'
@@ -110,13 +112,14 @@ const motionWays = (request: SetupRequest, result: SetupResult): Holds => {
  * Assumes a figure that comes out as it was asked for was taken from the person.
  *
  * @source judgement (which cases are told apart)
- * @example waysOfSetUp({ asIs: false, stock: inch(1), wantedTeeth: null, finish: null, fill: null, knurlClass: null, speed: null, rotation: null, feed: null, turns: 18, support: 'chuck', growth: growthBeforeResults() }, { process: 'form', pitch: { knowledge: 'label' }, blank: { tooth: { fill: 0.9 }, fillMoved: false }, motion: { travel: 'plunge', feed: null, window: null, turns: 18 }, running: null }) // ["turnsAsked"]
+ * @example waysOfSetUp({ asIs: false, stock: inch(1), wantedTeeth: null, finish: null, fill: null, knurlClass: null, speed: null, rotation: null, feed: null, turns: 18, support: 'chuck', material: materialById('steel-lowC-CD'), growth: growthBeforeResults() }, { process: 'form', pitch: { knowledge: 'label' }, blank: { tooth: { fill: 0.9 }, fillMoved: false }, motion: { travel: 'plunge', feed: null, window: null, turns: 18 }, running: null }) // ["turnsAsked"]
  */
 export function waysOfSetUp(request: SetupRequest, result: SetupResult): readonly Way[] {
   return those({
     ...blankWays(request, result),
     ...wheelWays(request, result.pitch.knowledge),
     cut: result.process === 'cut',
+    plastic: isPolymer(request.material),
     ...motionWays(request, result),
     ...speedWays(request, result),
     growthLearned: request.growth.results > 0,

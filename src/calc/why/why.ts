@@ -20,6 +20,8 @@ export type Step = { readonly by: FormulaName; readonly formula: readonly string
 
 /** Why a figure is what it is. */
 export type Explained = Step & {
+  /** The formula is all of its card's, not the part of it that gives this figure. */
+  readonly isWhole: boolean;
   readonly inputs: Readonly<Record<string, FigureName>>;
   readonly also: readonly FigureName[];
   /** Symbols that are worked out on the way. */
@@ -60,6 +62,7 @@ const explained = (worked: Worked): Explained => {
   return {
     by: worked.by,
     formula: worked.parts ?? FORMULAS[worked.by].formula,
+    isWhole: worked.parts === undefined,
     inputs: worked.inputs ?? {},
     also: worked.also ?? [],
     through,

@@ -60,6 +60,7 @@ export const givens: Readonly<Record<Given, string>> = {
   wheelDiameter: 'diameter of the wheel',
   wheelFace: 'face of the wheel',
   wheelTeeth: 'teeth counted on the wheel',
+  yieldOfMaterial: 'yield strength of the material',
   wholeByLabel: 'nothing: a whole count by the label',
   wholeTeeth: 'whole teeth more, until the marks are gone',
 };
@@ -70,6 +71,7 @@ export const remarks: Readonly<Record<Remark, string>> = {
   blankLessThat: 'That comes off the blank.',
   comesOff: 'What comes off is the blank less that.',
   nearestWhole: 'The nearest whole number is taken.',
+  onlyDifference: 'The growth itself is crest less blank.',
   sideForce: 'F is the force of all the wheels on one side.',
   timeOfOnePart: 't is the time of one part.',
   timesParts: 'Times the number of parts.',

@@ -43,7 +43,10 @@ export const whyLines: WhyPhrases = {
     title === null
       ? `${capital(surenessOfAll[mark])}.`
       : sourced[mark](edition === null ? title : `${title}, ${edition}`),
-  whySure: ({ mark }) => `No surer than its weakest part: ${surenessOfAll[mark]}.`,
+  whySure: ({ mark, weakest }) =>
+    weakest
+      ? `No surer than its weakest part: ${surenessOfAll[mark]}.`
+      : `How sure: ${surenessOfAll[mark]}.`,
   whyAssumes: ({ by }) => formulaWords[by].assumes,
 };
 

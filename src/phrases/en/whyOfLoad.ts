@@ -2,10 +2,14 @@ import type { FormulaWords } from './whyFormulas.ts';
 
 /** What the wheels press on, and what gives way. */
 export const loadFormulas = {
-  rollingPressure: {
-    says: "Pressure under a tooth in this bar, its own hardness taken before the table's where it is known.",
+  metalPressure: {
+    says: 'Pressure under a tooth that is rolled into metal.',
     assumes:
-      'Assumes a hardness that was measured leaves the exponent of the table; of plastics it says nothing.',
+      'Assumes Brinell hardness is the pressure at which metal gives way under a blunt body.',
+  },
+  plasticPressure: {
+    says: 'Pressure under a tooth that is rolled into a plastic.',
+    assumes: 'Assumes the plastic does not spring back before the wheel has passed.',
   },
   wedgeShare: {
     says: 'Share of the ground under a wheel that its teeth bear on.',

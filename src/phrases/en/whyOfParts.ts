@@ -23,6 +23,11 @@ export const partFormulas = {
     says: 'Whether a finished part is right, which of count, fill and growth is off, and what to do now.',
     assumes: 'Assumes the crest is read to 0.01 mm, the height to 0.01 mm, the flat to 0.02 mm.',
   },
+  measuredGrowthShare: {
+    says: 'Share of the static growth that a finished part shows.',
+    assumes:
+      'Assumes a sharp wheel; the growth is that of the tooth that was measured, not of the one planned.',
+  },
   partChecks: {
     says: 'The checks a finished part can be put to, as far as it was measured.',
     assumes: 'Assumes a pattern with nearly twice its teeth has doubled.',

@@ -56,6 +56,10 @@ export const toothFormulas = {
     says: 'Height at which the flanks of a tooth would meet in an edge.',
     assumes: 'Assumes straight flanks of equal slope.',
   },
+  heightOfFill: {
+    says: 'Height of a tooth that is filled to a share of its sharp height.',
+    assumes: 'Assumes the fill is meant of the height, not of the volume.',
+  },
   startingFill: {
     says: 'The fill to start with, as a share of the sharp height.',
     assumes: 'Assumes a counted wheel has sharp teeth on its outside diameter.',
