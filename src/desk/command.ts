@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import type { Card } from '../card/index.ts';
 import type { Refusal, Suggestion } from '../refusal.ts';
-import type { AnyParameter, Parameter, ReadLine, ShopUnits } from '../words/index.ts';
+import type { AnyParameter, Cursor, Parameter, ReadLine, ShopUnits } from '../words/index.ts';
 import type { Effect } from './effect.ts';
 import type { Role } from './role.ts';
 
@@ -14,11 +14,21 @@ export type Context = {
   readonly units: ShopUnits;
   /** Every command, for the help. */
   readonly fleet: readonly Command[];
+  /** The last set-up, check, plan or trouble this person was answered in this place. */
+  readonly last: Card | null;
 };
 
 export type Reply =
   | { readonly card: Card; readonly effects: readonly Effect[] }
   | { readonly refusal: Refusal; readonly choices: readonly Suggestion[] };
+
+/** Reads what stands right behind a command's name; null where nothing of its kind stands there. */
+export type Lead = (
+  cursor: Cursor,
+) =>
+  | { readonly value: unknown; readonly used: number }
+  | { readonly refusal: Refusal; readonly choices: readonly Suggestion[] }
+  | null;
 
 /** What a person can ask for. One record feeds words, options, forms, help and manifest. */
 export type Command = {
@@ -27,6 +37,8 @@ export type Command = {
   /** A line that shows it at work; parsed and run by a test. */
   readonly examples: readonly string[];
   readonly parameters: readonly AnyParameter[];
+  /** The parameter that is read first and only there, before all others; words of its own may be theirs. */
+  readonly lead?: { readonly name: string; readonly read: Lead };
   /** Names of those to show first where a platform cannot show them all. */
   readonly foremost: readonly string[];
   /** Everyone of this role and above may. */
@@ -53,6 +65,7 @@ export const defineCommand = <S extends z.ZodRawShape>(definition: {
   readonly examples: readonly string[];
   readonly parameters: z.ZodObject<S>;
   readonly foremost?: readonly (keyof S & string)[];
+  readonly lead?: { readonly name: keyof S & string; readonly read: Lead };
   readonly allowed: Role;
   readonly run: (context: Context, given: z.infer<z.ZodObject<S>>) => Reply | Promise<Reply>;
 }): Command => ({
@@ -60,6 +73,7 @@ export const defineCommand = <S extends z.ZodRawShape>(definition: {
   examples: definition.examples,
   parameters: Object.values(definition.parameters.shape).map(parameterOf),
   foremost: definition.foremost ?? [],
+  ...(definition.lead === undefined ? {} : { lead: definition.lead }),
   allowed: definition.allowed,
   run: (context, given) => definition.run(context, definition.parameters.parse(given)),
 });

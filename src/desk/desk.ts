@@ -1,12 +1,16 @@
 import { OutOfRange } from '../calc/index.ts';
+import type { Card } from '../card/index.ts';
 import type { Refusal, Suggestion } from '../refusal.ts';
 import {
+  type Cursor,
   type LineResult,
   MATERIAL_PHRASES,
   type Names,
   NO_NAMES,
   readLine,
   type ShopUnits,
+  spanOf,
+  tokensOf,
   type Vocabulary,
   vocabularyOf,
 } from '../words/index.ts';
@@ -14,7 +18,7 @@ import { type Answer, choicesIn } from './answer.ts';
 import type { Call } from './call.ts';
 import type { Command, Context, Reply } from './command.ts';
 import { type KeptAnswers, keptInProcess } from './kept.ts';
-import { lineOf, route, wordsOf } from './route.ts';
+import { lineOf, type Route, route, wordsOf } from './route.ts';
 import { suggestionsFor } from './suggest.ts';
 
 export type Desk = {
@@ -29,8 +33,13 @@ export type Desk = {
   readonly fleet: readonly Command[];
 };
 
-/** What the desk needs to know of a shop before it reads a line. */
-export type ShopFacts = { readonly units: ShopUnits; readonly names: Names };
+/** What the desk needs to know of a shop, and of who asks, before it reads a line. */
+export type ShopFacts = {
+  readonly units: ShopUnits;
+  readonly names: Names;
+  /** The last card this person got in this place, where one is remembered. */
+  readonly last: Card | null;
+};
 export type FactsOf = (call: Call) => Promise<ShopFacts> | ShopFacts;
 
 /** A line that a button sends always says which command it is for. */
@@ -48,6 +57,30 @@ const asRefusal = (error: unknown): Refusal => {
 };
 
 type Asked = { readonly text: string; readonly command: Command; readonly read: LineResult };
+
+/** Reads a line: first what has to stand first, then the rest in any order. */
+const readFor = (
+  text: string,
+  { command, skip }: Extract<Route, { readonly command: Command }>,
+  vocabulary: Vocabulary,
+  { units, names }: ShopFacts,
+): LineResult => {
+  const cursor: Cursor = { text, tokens: tokensOf(text), at: skip, units };
+  const first = command.lead?.read(cursor) ?? null;
+  if (command.lead === undefined || first === null)
+    return readLine(text, vocabulary, units, names, skip);
+  if ('refusal' in first) return first;
+  const rest = readLine(text, vocabulary, units, names, skip + first.used);
+  if ('refusal' in rest) return rest;
+  const { name } = command.lead;
+  const { values, spans } = rest.read;
+  return {
+    read: {
+      values: new Map([...values, [name, first.value]]),
+      spans: new Map([...spans, [name, [spanOf(cursor, first.used)]]]),
+    },
+  };
+};
 
 /** The line that a call stands for. */
 const lineFor = (call: Call, fleet: readonly Command[], pressed: Answer | null): string | null => {
@@ -87,7 +120,7 @@ export const openDesk = (
     const way = route(text, fleet);
     if ('refusal' in way) return { text, refusal: way.refusal };
     const vocabulary = vocabularies.get(way.command) ?? vocabularyOf([]);
-    const read = readLine(text, vocabulary, shop.units, shop.names, way.skip);
+    const read = readFor(text, way, vocabulary, shop);
     return { text, command: way.command, read };
   };
 
@@ -125,7 +158,13 @@ export const openDesk = (
     if (!('command' in request)) return refused(request.refusal, []);
     if ('refusal' in request.read) return refused(request.read.refusal, request.read.choices);
     const { text, command } = request;
-    const context: Context = { text, read: request.read.read, units: shop.units, fleet };
+    const context: Context = {
+      text,
+      read: request.read.read,
+      units: shop.units,
+      fleet,
+      last: shop.last,
+    };
     const reply = await run(command, context);
     if ('refusal' in reply) return refused(reply.refusal, reply.choices);
     const card = { ...reply.card, choices: sendable(reply.card.choices) };
@@ -144,4 +183,4 @@ export const openDesk = (
 /** A shop that has said nothing about itself. */
 export const plainShop =
   (units: ShopUnits): FactsOf =>
-  () => ({ units, names: NO_NAMES });
+  () => ({ units, names: NO_NAMES, last: null });

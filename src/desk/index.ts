@@ -5,6 +5,7 @@ export {
   type Context,
   cardReply,
   defineCommand,
+  type Lead,
   type Reply,
   refuse,
   said,
