@@ -38,7 +38,7 @@ const seamReply = (
     scrap: said.scrap === true,
     count: said.count ?? null,
   });
-  return cardReply(seamCard({ context, said, diameter: request.stock, result }));
+  return cardReply(seamCard({ context, said, request, diameter: request.stock, result }));
 };
 
 const afterReply = (context: Context, said: CheckWords, request: SetupRequest): Reply => {
@@ -58,7 +58,7 @@ const afterReply = (context: Context, said: CheckWords, request: SetupRequest): 
           : { near: mm(flats.near), far: mm(flats.far), distance: mm(flats.distance) },
     },
   );
-  return cardReply(afterCard({ context, said, diameter: request.stock, result }));
+  return cardReply(afterCard({ context, said, request, diameter: request.stock, result }));
 };
 
 const missingDiameter = (): Reply =>
@@ -69,7 +69,7 @@ const checked = (context: Context, said: CheckWords, request: SetupRequest): Rep
   if (isAfter(said)) return afterReply(context, said, request);
   if (request.stock === null) return missingDiameter();
   const result = checkBlank(request, request.stock);
-  return cardReply(blankCard({ context, said, diameter: request.stock, result }));
+  return cardReply(blankCard({ context, said, request, diameter: request.stock, result }));
 };
 
 /** Before, at the seam, and after: is this right, and what now. */

@@ -7,7 +7,9 @@ import {
   type Mm,
   mm,
   type SeamCheck,
+  type SetupRequest,
   STANDING_CAUTIONS,
+  waysOfCheck,
 } from '../../src/calc/index.ts';
 import {
   type Card,
@@ -27,6 +29,7 @@ import { reworded } from './words.ts';
 type Checked<R> = {
   readonly context: Context;
   readonly said: CheckWords;
+  readonly request: SetupRequest;
   readonly diameter: Mm;
   readonly result: R;
 };
@@ -50,7 +53,7 @@ const otherUnits = ({ context, said }: Checked<unknown>): Choice => {
 };
 
 const cardOf = (
-  c: Checked<Pick<BlankCheck, 'figures' | 'checks' | 'alternatives'>>,
+  c: Checked<BlankCheck | SeamCheck | AfterCheck>,
   headline: Line,
   parts: readonly Part[],
   cautions: readonly CautionId[],
@@ -64,6 +67,7 @@ const cardOf = (
   checks: c.result.checks,
   cautions,
   alternatives: c.result.alternatives,
+  ways: waysOfCheck(c.request, c.result),
   units: c.said.units ?? c.context.units,
 });
 

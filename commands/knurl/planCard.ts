@@ -197,6 +197,7 @@ export const planCard = (p: Planned): Card => {
     checks: best?.checks ?? [],
     cautions: STANDING_CAUTIONS,
     alternatives: [],
+    ways: best?.process === 'cut' ? ['cut'] : [],
     lists: { candidates: listed(p).map(asSaid) },
     units: p.given.units ?? p.context.units,
   };

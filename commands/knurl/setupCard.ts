@@ -12,6 +12,7 @@ import {
   type SetupRequest,
   type SetupResult,
   USUAL_MATERIALS,
+  waysOfSetUp,
 } from '../../src/calc/index.ts';
 import {
   type Card,
@@ -333,5 +334,6 @@ export const setupCard = (w: Worked): Card => ({
   checks: w.result.checks,
   cautions: w.result.cautions,
   alternatives: w.result.alternatives,
+  ways: waysOfSetUp(w.request, w.result),
   units: w.said.units ?? w.context.units,
 });

@@ -1,4 +1,5 @@
 import {
+  figure,
   NO_FACTS,
   type RankedCause,
   STANDING_CAUTIONS,
@@ -46,7 +47,7 @@ export const troubleCard = ({ context, said, symptom, facts, causes }: Troubled)
     ],
     choices: [],
     pictures: [],
-    figures: {},
+    figures: { chanceOfCause: figure(likeliest.chance, '1') },
     checks: [],
     cautions: STANDING_CAUTIONS,
     alternatives: [],

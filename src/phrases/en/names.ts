@@ -103,6 +103,8 @@ export const THINGS: Readonly<Record<string, string>> = {
   width: 'contact width of the wheel',
   proven: 'proven pair',
   units: 'units shown',
+  figure: 'figure or check',
+  explained: 'set-up or check to explain',
 };
 
 export const thing = (what: string): string => THINGS[what] ?? what;
