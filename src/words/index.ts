@@ -21,10 +21,12 @@ export {
   withShopAliases,
 } from './material.ts';
 export { nearestOf } from './nearest.ts';
+export { numberOf } from './numbers.ts';
 export { freePitch, readPitch, samePitch } from './pitch.ts';
 export {
   type AnyParameter,
   choicesOf,
+  isReadable,
   type LineResult,
   LONGEST_LINE,
   type ReadLine,
@@ -42,6 +44,7 @@ export {
   type Suggested,
   took,
 } from './reading.ts';
+export { leadingText, quoted, textOf } from './text.ts';
 export { type Span, tokensOf } from './tokens.ts';
 export {
   BEVEL,
@@ -55,3 +58,4 @@ export {
   readWheel,
   type WheelWords,
 } from './tooling.ts';
+export { unitOf } from './unit.ts';

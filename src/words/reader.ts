@@ -227,6 +227,17 @@ const step = (cursor: Cursor, vocabulary: Vocabulary, names: Names): Step => {
   return unreadable(cursor, vocabulary.words);
 };
 
+/** Whether something stands here that is more than a word nobody knows. */
+export const isReadable = (
+  cursor: Cursor,
+  vocabulary: Vocabulary,
+  names: Names = NO_NAMES,
+): boolean => {
+  const next = step(cursor, vocabulary, names);
+  if ('found' in next) return true;
+  return 'refusal' in next && next.refusal.code !== 'unreadable';
+};
+
 type Progress = { readonly values: Map<string, unknown>; readonly spans: Map<string, Span[]> };
 
 /** The same thing said twice and differently: which one is asked. */

@@ -1,0 +1,78 @@
+import { plainText } from './characters.ts';
+import { type Cursor, moved, spanOf, tokenAt } from './cursor.ts';
+import { isReadable, type Vocabulary } from './reader.ts';
+import { type Names, NO_NAMES, type Reader, type Reading, took } from './reading.ts';
+
+/**
+ * Words that are nobody's but the person's own: a name, a place, a rule. In quotation marks they
+ * are taken as they stand; without, they go on until something stands there that can be read.
+ */
+
+/** A text as the reader takes it back whole; a quotation mark inside is doubled. */
+export const quoted = (text: string): string => `"${text.replaceAll('"', '""')}"`;
+
+/** How many words begin before a place in the line. */
+const wordsBefore = (cursor: Cursor, end: number): number => {
+  let count = 0;
+  for (let at = cursor.at; (cursor.tokens[at]?.start ?? end) < end; at += 1) count += 1;
+  return count;
+};
+
+/** `"Old Faithful"`, `"5"" wheel"`; null where no quotation mark opens or none closes. */
+const quotedAt = (cursor: Cursor): { readonly value: string; readonly used: number } | null => {
+  const first = tokenAt(cursor);
+  if (first === undefined) return null;
+  const line = plainText(cursor.text);
+  if (line[first.start] !== '"') return null;
+  let value = '';
+  for (let at = first.start + 1; at < line.length; at += 1) {
+    if (line[at] !== '"') value += cursor.text[at] ?? '';
+    else if (line[at + 1] === '"') {
+      value += '"';
+      at += 1;
+    } else {
+      const used = wordsBefore(cursor, at + 1);
+      return value.trim() === '' ? null : { value: value.trim(), used };
+    }
+  }
+  return null;
+};
+
+/** As typed, from the first word to the last of so many. */
+const typedAt = (cursor: Cursor, used: number): string => {
+  const { start, end } = spanOf(cursor, used);
+  return cursor.text.slice(start, end);
+};
+
+/** How many words stand here that mean nothing to this vocabulary. */
+const unknownWords = (cursor: Cursor, vocabulary: Vocabulary, names: Names): number => {
+  let used = 0;
+  for (;;) {
+    const here = moved(cursor, used);
+    if (tokenAt(here) === undefined || isReadable(here, vocabulary, names)) return used;
+    used += 1;
+  }
+};
+
+/** The words before anything that can be read: the name in `Old Faithful straight 21 tpi`. */
+export const leadingText = (
+  cursor: Cursor,
+  vocabulary: Vocabulary,
+  names: Names = NO_NAMES,
+): Reading<string> | null => {
+  const whole = quotedAt(cursor);
+  if (whole !== null) return took(whole.value, whole.used);
+  const used = unknownWords(cursor, vocabulary, names);
+  return used === 0 ? null : took(typedAt(cursor, used), used);
+};
+
+/** The words after a keyword, at least one of them, up to what can be read again. */
+export const textOf =
+  (vocabulary: () => Vocabulary): Reader<string> =>
+  (cursor, names) => {
+    const whole = quotedAt(cursor);
+    if (whole !== null) return took(whole.value, whole.used);
+    if (tokenAt(cursor) === undefined) return null;
+    const used = 1 + unknownWords(moved(cursor, 1), vocabulary(), names);
+    return took(typedAt(cursor, used), used);
+  };
