@@ -35,6 +35,7 @@ export type FigureName =
 /** What goes into a figure and is no figure of the card: it was said, or taken with the set-up. */
 export type Given =
   | 'bar'
+  | 'barIfAny'
   | 'bevel'
   | 'blankSaid'
   | 'bore'

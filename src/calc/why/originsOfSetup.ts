@@ -56,7 +56,7 @@ const BLANK_ORIGINS = {
       by: 'chooseBlank',
       parts: ['for a print: N whose crest comes nearest the middle of the limits, N ≤ ⌊π D/p_t⌋'],
       inputs: { p_t: 'transversePitch', crest: 'crestDiameter' },
-      given: { D: 'bar', limits: 'limits' },
+      given: { D: 'barIfAny', limits: 'limits' },
     },
     {
       by: 'largestWholeCount',

@@ -3,6 +3,7 @@ import type { Given, Mark, Remark } from '../../calc/index.ts';
 /** What goes into a figure without being one: said, taken with the set-up, or of the material. */
 export const givens: Readonly<Record<Given, string>> = {
   bar: 'the bar as it was given',
+  barIfAny: 'the bar, where one was given',
   bevel: 'bevel of the wheel',
   blankSaid: 'the blank as it was given',
   bore: 'bore of the work, none in a solid bar',
