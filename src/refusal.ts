@@ -107,6 +107,29 @@ export type Unavailable = {
   readonly words: string;
 };
 
+/** The name belongs to another of the same list. */
+export type Taken = {
+  readonly code: 'taken';
+  readonly what: string;
+  readonly name: string;
+};
+
+/** Somewhere a thing is in use. */
+export type Use = { readonly what: 'rule' | 'card'; readonly name: string };
+
+/** Removing it would leave these without it. */
+export type InUse = {
+  readonly code: 'inUse';
+  readonly what: string;
+  readonly name: string;
+  readonly where: readonly Use[];
+  /** There are further ones. */
+  readonly more: boolean;
+};
+
+/** Somebody must be left who can name owners. */
+export type LastOwner = { readonly code: 'lastOwner'; readonly name: string };
+
 export type Refusal =
   | Unreadable
   | Missing
@@ -115,4 +138,7 @@ export type Refusal =
   | NotAllowed
   | NotFound
   | Stale
-  | Unavailable;
+  | Unavailable
+  | Taken
+  | InUse
+  | LastOwner;

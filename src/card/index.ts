@@ -1,4 +1,14 @@
 export * from './card.ts';
+export type { CellFault, FileFault } from './fileFaults.ts';
 export * from './lines.ts';
 export type { CandidateSaid } from './planLines.ts';
+export type {
+  Amount,
+  Fact,
+  Moment,
+  ShopLabels,
+  ShopLines,
+  ShopRows,
+  ShopThing,
+} from './shopLines.ts';
 export type { Sure, WhyLabels, WhyLines, WhyRows } from './whyLines.ts';

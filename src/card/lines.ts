@@ -20,6 +20,7 @@ import type {
 } from '../calc/index.ts';
 import type { CheckLines, CheckRows } from './checkLines.ts';
 import type { PlanLines, PlanRows } from './planLines.ts';
+import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
 import type { TroubleLines, TroubleRows } from './troubleLines.ts';
 import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
 
@@ -29,6 +30,7 @@ import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
  */
 export type Lines = CheckLines &
   PlanLines &
+  ShopLines &
   TroubleLines &
   WhyLines & {
     turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
@@ -74,6 +76,7 @@ export type Line = { [K in LineId]: { readonly line: K; readonly values: Lines[K
 /** Label and value rows: the numbers of the card in reading order. */
 export type Rows = CheckRows &
   PlanRows &
+  ShopRows &
   TroubleRows &
   WhyRows & {
     material: { readonly name: string; readonly condition: string };
@@ -107,22 +110,23 @@ export type RowId = keyof Rows;
 export type Row = { [K in RowId]: { readonly row: K; readonly values: Rows[K] } }[RowId];
 
 /** What a button says. */
-export type Labels = WhyLabels & {
-  asIs: { readonly stock: Mm };
-  finishedSize: { readonly size: Mm };
-  otherBasis: { readonly took: PitchBasis };
-  material: { readonly name: string; readonly condition: string };
-  smaller: { readonly toothCount: number; readonly blankDiameter: Mm };
-  larger: { readonly toothCount: number; readonly blankDiameter: Mm };
-  remedy: { readonly kind: RemedyKind; readonly number: Figure | null };
-  candidate: { readonly place: number; readonly wheel: string; readonly toothCount: number };
-  ownSpeed: Record<never, never>;
-  cutInstead: Record<never, never>;
-  bevelled: Record<never, never>;
-  ownFill: Record<never, never>;
-  otherUnits: { readonly units: 'in' | 'mm' };
-  words: { readonly words: string };
-};
+export type Labels = ShopLabels &
+  WhyLabels & {
+    asIs: { readonly stock: Mm };
+    finishedSize: { readonly size: Mm };
+    otherBasis: { readonly took: PitchBasis };
+    material: { readonly name: string; readonly condition: string };
+    smaller: { readonly toothCount: number; readonly blankDiameter: Mm };
+    larger: { readonly toothCount: number; readonly blankDiameter: Mm };
+    remedy: { readonly kind: RemedyKind; readonly number: Figure | null };
+    candidate: { readonly place: number; readonly wheel: string; readonly toothCount: number };
+    ownSpeed: Record<never, never>;
+    cutInstead: Record<never, never>;
+    bevelled: Record<never, never>;
+    ownFill: Record<never, never>;
+    otherUnits: { readonly units: 'in' | 'mm' };
+    words: { readonly words: string };
+  };
 export type LabelId = keyof Labels;
 export type Label = { [K in LabelId]: { readonly label: K; readonly values: Labels[K] } }[LabelId];
 

@@ -1,4 +1,4 @@
-import type { Use } from './result.ts';
+import type { Use } from '../refusal.ts';
 import type { ShopView } from './view.ts';
 
 /** The newest cards that were made with something of the shop's lists. */

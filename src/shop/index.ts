@@ -10,7 +10,6 @@ export {
 export { type Claimed, claimEffects, type NoteOf } from './claims.ts';
 export { CODE_SIGNS, readCode } from './codes.ts';
 export { canLeave, cribFor, leaves, sizeOf } from './crib.ts';
-export type { CellFault } from './csv/cells.ts';
 export {
   type Imported,
   type ImportOptions,
@@ -19,7 +18,7 @@ export {
   type RowReport,
 } from './csv/import.ts';
 export { MACHINE_SHEET } from './csv/machineSheet.ts';
-export { type FileFault, MOST_ROWS } from './csv/readTable.ts';
+export { MOST_ROWS } from './csv/readTable.ts';
 export { WHEEL_SHEET } from './csv/wheelSheet.ts';
 export { limitsOf, onDial } from './dial.ts';
 export { type GivenUp, givenUp, givenUpSeen, type QueuedEffect, queueEffects } from './effects.ts';
@@ -67,7 +66,7 @@ export {
   type Register,
   removeFrom,
 } from './register.ts';
-export type { Done, ShopRefusal, Use } from './result.ts';
+export type { Done } from './result.ts';
 export { atLeast, ROLES, type Role } from './roles.ts';
 export { addRule, RULES, type Rule, type RuleScope, rulesOnCard } from './rules.ts';
 export {

@@ -10,10 +10,10 @@ import {
   type Watt,
   watt,
 } from '../calc/index.ts';
+import type { Refusal, Use } from '../refusal.ts';
 import { cardsUsing } from './cardUses.ts';
 import { outside, type Range, rangeFault } from './limits.ts';
 import type { Register } from './register.ts';
-import type { ShopRefusal, Use } from './result.ts';
 import { rulesFor } from './ruleUses.ts';
 import type { ShopView } from './view.ts';
 
@@ -61,16 +61,12 @@ export const FEED_RANGE: Range = [0.001, 10, 'mm/rev'];
 /** Gears of one lathe. Judgement. */
 const MOST_STEPS = 100;
 
-const fault = (machine: Machine): ShopRefusal | null =>
+const fault = (machine: Machine): Refusal | null =>
   rangeFault(MACHINE_RANGES, machine) ??
   stepsFault('speeds', machine.speeds, SPEED_RANGE) ??
   stepsFault('feeds', machine.feeds, FEED_RANGE);
 
-const stepsFault = (
-  what: string,
-  steps: Steps<number> | null,
-  range: Range,
-): ShopRefusal | null => {
+const stepsFault = (what: string, steps: Steps<number> | null, range: Range): Refusal | null => {
   if (steps === null) return null;
   const [, , unit] = range;
   if ('list' in steps) {

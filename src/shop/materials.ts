@@ -1,9 +1,9 @@
 import { materialById } from '../calc/index.ts';
+import type { Refusal, Use } from '../refusal.ts';
 import { cardsUsing } from './cardUses.ts';
 import { type Range, rangeFault } from './limits.ts';
 import { cleaned, LONGEST_TEXT, textFault } from './names.ts';
 import type { Register } from './register.ts';
-import type { ShopRefusal, Use } from './result.ts';
 import { rulesFor } from './ruleUses.ts';
 import type { ShopView } from './view.ts';
 
@@ -25,7 +25,7 @@ const RANGES = {
   elongation: [0, 100, '%'],
 } as const satisfies Record<string, Range>;
 
-const fault = (material: ShopMaterial): ShopRefusal | null => {
+const fault = (material: ShopMaterial): Refusal | null => {
   if (materialById(material.base) === undefined) {
     return { code: 'notFound', what: 'material', nearest: [] };
   }

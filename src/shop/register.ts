@@ -1,3 +1,4 @@
+import type { Refusal, Use } from '../refusal.ts';
 import {
   type RegisterName,
   readRegister,
@@ -7,7 +8,7 @@ import {
 } from '../store/index.ts';
 import { type Remembered, remember } from './history.ts';
 import { cleaned, keyOf, LONGEST_NAME, textFault } from './names.ts';
-import type { Done, ShopRefusal, Use } from './result.ts';
+import type { Done } from './result.ts';
 import { done, refused } from './result.ts';
 import type { ShopChange, ShopView } from './view.ts';
 
@@ -17,7 +18,7 @@ export type Register<N extends RegisterName, T extends { readonly name: string }
   readonly toRow: (content: T) => Omit<Written<N>, 'name' | 'name_key'>;
   readonly fromRow: (row: Tables[N]) => T;
   /** What is wrong with it, the name apart. */
-  readonly fault: (content: T) => ShopRefusal | null;
+  readonly fault: (content: T) => Refusal | null;
   /** Where it is in use, at most this many. */
   readonly uses: (view: ShopView, id: string, most: number) => Promise<readonly Use[]>;
 };
@@ -159,7 +160,7 @@ export const removeFrom = async <N extends RegisterName, T extends { readonly na
 export const faultOf = <N extends RegisterName, T extends { readonly name: string }>(
   register: Register<N, T>,
   content: T,
-): ShopRefusal | null => textFault('name', content.name, LONGEST_NAME) ?? register.fault(content);
+): Refusal | null => textFault('name', content.name, LONGEST_NAME) ?? register.fault(content);
 
 const written = <N extends RegisterName, T extends { readonly name: string }>(
   view: ShopView,
@@ -177,7 +178,7 @@ const nameFault = async <N extends RegisterName, T extends { readonly name: stri
   register: Register<N, T>,
   id: string,
   name: string,
-): Promise<ShopRefusal | null> => {
+): Promise<Refusal | null> => {
   const rows = readRegister(change.db, register.subject, change.id);
   const holder = await rows.byName(keyOf(change.words, name));
   return holder === undefined || holder.id === id

@@ -1,4 +1,4 @@
-import type { Use } from './result.ts';
+import type { Use } from '../refusal.ts';
 import type { ShopView } from './view.ts';
 
 /** The rules that hold for one machine or one material of the shop. */

@@ -1,7 +1,8 @@
 import { materialById } from '../calc/index.ts';
+import type { Refusal } from '../refusal.ts';
 import { cleaned, LONGEST_TEXT, textFault } from './names.ts';
 import { addTo, type Kept, listOf, type Register } from './register.ts';
-import { type Done, refused, type ShopRefusal } from './result.ts';
+import { type Done, refused } from './result.ts';
 import type { ShopChange, ShopView } from './view.ts';
 
 /** A sentence of the shop's own that stands on its cards: on all, or where it belongs. */
@@ -17,7 +18,7 @@ export type Rule = {
   readonly base: string | null;
 };
 
-const fault = (rule: Rule): ShopRefusal | null => {
+const fault = (rule: Rule): Refusal | null => {
   if (rule.base !== null && materialById(rule.base) === undefined) {
     return { code: 'notFound', what: 'material', nearest: [] };
   }
@@ -67,7 +68,7 @@ const nextNumber = async (change: ShopChange): Promise<string> => {
 const scopeFault = async (
   change: ShopChange,
   rule: Omit<Rule, 'name'>,
-): Promise<ShopRefusal | null> => {
+): Promise<Refusal | null> => {
   for (const what of ['machine', 'material'] as const) {
     const id = rule[what];
     if (id === null) continue;

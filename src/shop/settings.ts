@@ -1,6 +1,7 @@
 import { z } from 'zod';
+import type { Refusal } from '../refusal.ts';
 import { remember } from './history.ts';
-import { type Done, done, refused, type ShopRefusal } from './result.ts';
+import { type Done, done, refused } from './result.ts';
 import type { ShopChange, ShopView } from './view.ts';
 
 const isTimeZone = (zone: string): boolean => {
@@ -78,7 +79,7 @@ export const changeSetting = async <N extends SettingName>(
   return done(await settingsOf(change));
 };
 
-const settingFault = (view: ShopView, name: SettingName, value: unknown): ShopRefusal | null => {
+const settingFault = (view: ShopView, name: SettingName, value: unknown): Refusal | null => {
   if (SETTINGS[name].shape.safeParse(value).success) return null;
   if (name === 'questionHours') {
     const amount = Number(value);

@@ -12,12 +12,12 @@ import {
   type Rad,
   rad,
 } from '../calc/index.ts';
+import type { Refusal } from '../refusal.ts';
 import type { WheelTable } from '../store/index.ts';
 import { cardsUsing } from './cardUses.ts';
 import { outside, type Range, rangeFault, wholeFault } from './limits.ts';
 import { cleaned, LONGEST_NAME, textFault } from './names.ts';
 import type { Register } from './register.ts';
-import type { ShopRefusal } from './result.ts';
 
 /** How the teeth of a wheel run; a crossed one-piece wheel also has points of its own. */
 export const WHEEL_FORMS = [
@@ -104,7 +104,7 @@ export const WHEEL_RANGES = {
   proven: [FINEST_PITCH, COARSEST_PITCH * 2, 'mm'],
 } as const satisfies Record<string, Range>;
 
-const fault = (wheel: Wheel): ShopRefusal | null =>
+const fault = (wheel: Wheel): Refusal | null =>
   rangeFault(WHEEL_RANGES, wheel) ??
   wholeFault('teeth', wheel.teeth, WHEEL_RANGES.teeth) ??
   wholeFault('partsRun', wheel.partsRun, WHEEL_RANGES.partsRun) ??
@@ -113,7 +113,7 @@ const fault = (wheel: Wheel): ShopRefusal | null =>
   (wheel.place === null ? null : textFault('place', cleaned(wheel.place), LONGEST_NAME));
 
 /** Something must say how fine it is: the label, or the count with the diameter. */
-const pitchFault = ({ pitch, teeth, diameter, proven }: Wheel): ShopRefusal | null => {
+const pitchFault = ({ pitch, teeth, diameter, proven }: Wheel): Refusal | null => {
   if (pitch !== null) {
     if (!(pitch.value > 0)) return { code: 'missing', parameter: 'pitch', examples: ['21 tpi'] };
     return outside('pitch', labelledPitch(pitch), [FINEST_PITCH, COARSEST_PITCH, 'mm']);
@@ -130,7 +130,7 @@ const pitchFault = ({ pitch, teeth, diameter, proven }: Wheel): ShopRefusal | nu
 };
 
 /** The bore lies inside the wheel, the pin in the bore, and some face is left between the bevels. */
-const fitFault = ({ diameter, bore, face, bevel, pinDiameter }: Wheel): ShopRefusal | null => {
+const fitFault = ({ diameter, bore, face, bevel, pinDiameter }: Wheel): Refusal | null => {
   const largestBore = diameter === null ? null : diameter * 0.8;
   if (largestBore !== null && bore !== null && bore > largestBore) {
     return { code: 'outOfRange', what: 'bore', value: bore, min: 1, max: largestBore, unit: 'mm' };

@@ -8,6 +8,7 @@ import { records } from './records.ts';
 import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
+import { shopLabels } from './shopLines.ts';
 import { verbs } from './verbs.ts';
 import { whyLabels } from './whyLines.ts';
 
@@ -21,6 +22,7 @@ export const en: Book = {
   refusal,
   states: { fine: 'fine', watch: 'watch', stop: 'stop' },
   labels: {
+    ...shopLabels,
     ...whyLabels,
     asIs: ({ stock }, show) => `Leave it at ${show.length(stock)}`,
     finishedSize: ({ size }, show) => `${show.length(size)} is the finished size`,

@@ -6,6 +6,7 @@ import { checks } from './checks.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 import { planLines } from './planLines.ts';
 import { remedyLabel } from './remedies.ts';
+import { shopLines } from './shopLines.ts';
 import { troubleLines } from './troubleLines.ts';
 import { whyLines } from './whyLines.ts';
 
@@ -23,6 +24,7 @@ const stopText = (check: Check, show: Show): string =>
 export const lines: Book['lines'] = {
   ...checkLines,
   ...planLines,
+  ...shopLines,
   ...troubleLines,
   ...whyLines,
   turnTo: ({ blankDiameter, toothCount }, show) =>

@@ -1,6 +1,7 @@
 import { mPerMin } from '../../calc/units.ts';
 import type {
   Doubt,
+  InUse,
   NotFound,
   OutOfRangeRefusal,
   Refusal,
@@ -75,6 +76,8 @@ const outOfRange = (refusal: OutOfRangeRefusal, show: Show): string => {
   const { what, value, min, max, unit } = refusal;
   if (what === 'textLength')
     return `That is ${String(value)} characters; a request fits in ${String(max)}. Say the bar, the pattern and the pitch, such as 1.000 straight 21tpi.`;
+  if (unit === 'characters')
+    return `The ${thing(what)} has ${String(value)} characters; at most ${String(max)} are kept. Make it shorter.`;
   if (Number.isNaN(value)) return `The ${thing(what)} is missing.`;
   if (what === 'fill')
     return `The ${thing(what)} of ${show.percent(value)} is outside ${show.percent(min)} to ${show.percent(max)}. Type one between them, such as fill 85%.`;
@@ -166,7 +169,7 @@ export const refusal = (fault: Refusal, show: Show): string => {
         : `${quoted(fault.word)} is not a word I know. Say it another way or leave it out; help shows what I read.`;
     case 'missing':
       if (fault.word !== undefined)
-        return `${quoted(fault.word)} has nothing behind it that I can read. Type it like this: ${list(fault.examples)}.`;
+        return `${quoted(fault.word)} does not say the ${thing(fault.parameter)}. Type it like this: ${list(fault.examples)}.`;
       return `The ${thing(fault.parameter)} is missing. Add one, such as ${list(fault.examples)}.`;
     case 'outOfRange':
       return outOfRange(fault, show);
@@ -182,5 +185,19 @@ export const refusal = (fault: Refusal, show: Show): string => {
       return `The ${thing(fault.what)} was changed by ${fault.by} at ${fault.when}. Look at it again, then repeat your change.`;
     case 'unavailable':
       return `The ${thing(fault.what)} cannot be reached just now. Nothing was changed. Send this again in a minute: ${fault.words}`;
+    case 'taken':
+      return `There is a ${thing(fault.what)} ${quoted(fault.name)} already. Choose another name, or change that one.`;
+    case 'inUse':
+      return inUse(fault);
+    case 'lastOwner':
+      return `${fault.name} is the only owner. Name another owner first.`;
   }
+};
+
+const USES = { rule: 'rule', card: 'card' } as const;
+
+const inUse = ({ what, name, where, more }: InUse): string => {
+  const uses = where.map((use) => `${USES[use.what]} ${use.name}`);
+  const all = more ? `${uses.join(', ')} and others` : uses.join(', ');
+  return `The ${thing(what)} ${quoted(name)} is used by ${all}. They keep what they say; add the words even in use to remove it all the same.`;
 };

@@ -1,6 +1,7 @@
 import type { Book } from '../book.ts';
 import { checkRows } from './checkLines.ts';
 import { planRows } from './planLines.ts';
+import { shopRows } from './shopLines.ts';
 import { troubleRows } from './troubleLines.ts';
 import { whyRows } from './whyLines.ts';
 
@@ -9,6 +10,7 @@ const parts = (batch: number): string => (batch === 1 ? '' : ` for ${String(batc
 export const rows: Book['rows'] = {
   ...checkRows,
   ...planRows,
+  ...shopRows,
   ...troubleRows,
   ...whyRows,
   material: ({ name, condition }) => ({ label: 'Material', text: `${name}, ${condition}` }),

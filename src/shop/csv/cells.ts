@@ -1,31 +1,6 @@
 import type { Pitch, PitchSystem, Steps } from '../../calc/index.ts';
+import type { CellFault } from '../../card/index.ts';
 import type { ShopWords } from '../view.ts';
-
-/** What is wrong with a cell, as a value: the phrase book makes the sentence. */
-export type CellFault = {
-  readonly column: string;
-  /** What stands there. */
-  readonly cell: string;
-} & (
-  | { readonly why: 'missing'; readonly examples: readonly string[] }
-  | { readonly why: 'unreadable'; readonly examples: readonly string[] }
-  /** It is a quantity, but of another kind: a weight where a length belongs. */
-  | { readonly why: 'wrongUnit'; readonly wanted: readonly string[] }
-  | { readonly why: 'notOneOf'; readonly choices: readonly string[] }
-  /** It can be read in two ways. */
-  | { readonly why: 'unclear'; readonly readings: readonly string[] }
-  | {
-      readonly why: 'outOfRange';
-      readonly value: number;
-      readonly min: number;
-      readonly max: number;
-      readonly unit: string;
-    }
-  /** The name stands in an earlier line of the same file. */
-  | { readonly why: 'twice'; readonly line: number }
-  /** The shop has one of this name with other values, and it was not said to replace them. */
-  | { readonly why: 'differs'; readonly columns: readonly string[] }
-);
 
 type Fault = {
   [K in CellFault['why']]: Omit<Extract<CellFault, { why: K }>, 'column' | 'cell'>;

@@ -1,11 +1,12 @@
+import type { CellFault, FileFault } from '../../card/index.ts';
+import type { Refusal } from '../../refusal.ts';
 import { type RegisterName } from '../../store/index.ts';
 import { cleaned, keyOf } from '../names.ts';
 import { addRows, changeIn, faultOf, type Kept, listOf, type Register } from '../register.ts';
-import type { ShopRefusal } from '../result.ts';
 import type { ShopChange } from '../view.ts';
-import type { CellContext, CellFault } from './cells.ts';
+import type { CellContext } from './cells.ts';
 import { type Column, columnNamed, headingParts, type Sheet } from './columns.ts';
-import { type FileFault, readTable, type Table, type TableRow } from './readTable.ts';
+import { readTable, type Table, type TableRow } from './readTable.ts';
 
 export type RowReport = {
   /** The line of the file, the headings being line 1. */
@@ -277,7 +278,7 @@ const cellFault = <T>(
   sheet: Sheet<T>,
   placed: readonly Placed<T>[],
   content: T,
-  refusal: ShopRefusal,
+  refusal: Refusal,
 ): CellFault => {
   const field =
     refusal.code === 'missing'

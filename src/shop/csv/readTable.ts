@@ -1,25 +1,11 @@
 import { CsvError, parse } from 'csv-parse/sync';
+import type { FileFault } from '../../card/index.ts';
 import { unescaped } from './escape.ts';
 
 /** Most rows of one file. Judgement: far more than any crib; a larger file is another file. */
 export const MOST_ROWS = 10_000;
 /** Longest text. Judgement: ten thousand full rows are a third of it. */
 export const LONGEST_FILE = 8_000_000;
-
-/** Why nothing of a file was read. */
-export type FileFault =
-  | { readonly why: 'empty' }
-  | { readonly why: 'tooLong'; readonly most: number }
-  | { readonly why: 'tooManyRows'; readonly most: number }
-  /** Its quotes do not close, or it is no table. */
-  | { readonly why: 'notATable'; readonly line: number }
-  | {
-      readonly why: 'columns';
-      readonly missing: readonly string[];
-      readonly found: readonly string[];
-    }
-  /** Two columns say the same thing. */
-  | { readonly why: 'columnTwice'; readonly column: string };
 
 export type TableRow = { readonly line: number; readonly cells: readonly string[] };
 export type Table = { readonly headings: readonly string[]; readonly rows: readonly TableRow[] };
