@@ -1,6 +1,6 @@
 /** Why a figure is what it is: the register of formulas, inputs and sources. */
 export type { FormulaName } from './formulas.ts';
-export { MARK_ORDER, weakestMark } from './marks.ts';
+export { MARK_ORDER } from './marks.ts';
 export {
   CHECK_NUMBERS,
   type CheckNumber,

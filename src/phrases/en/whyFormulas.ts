@@ -1,13 +1,11 @@
 import type { FormulaName } from '../../calc/index.ts';
+import type { FormulaWords } from './formulaWords.ts';
 import { checkFormulas } from './whyOfChecks.ts';
 import { loadFormulas } from './whyOfLoad.ts';
 import { motionFormulas } from './whyOfMotion.ts';
 import { partFormulas } from './whyOfParts.ts';
 import { planFormulas } from './whyOfPlan.ts';
 import { toothFormulas } from './whyOfTooth.ts';
-
-/** What a formula works out, and what it takes for granted. */
-export type FormulaWords = { readonly says: string; readonly assumes: string };
 
 export const formulaWords: Readonly<Record<FormulaName, FormulaWords>> = {
   ...toothFormulas,

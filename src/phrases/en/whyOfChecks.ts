@@ -1,4 +1,4 @@
-import type { FormulaWords } from './whyFormulas.ts';
+import type { FormulaWords } from './formulaWords.ts';
 
 /** How each check ends. */
 export const checkFormulas = {

@@ -1,4 +1,4 @@
-import type { FormulaWords } from './whyFormulas.ts';
+import type { FormulaWords } from './formulaWords.ts';
 
 /** What the wheels press on, and what gives way. */
 export const loadFormulas = {

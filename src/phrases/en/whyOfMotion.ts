@@ -1,4 +1,4 @@
-import type { FormulaWords } from './whyFormulas.ts';
+import type { FormulaWords } from './formulaWords.ts';
 
 /** Speed, feed, turns and time. */
 export const motionFormulas = {

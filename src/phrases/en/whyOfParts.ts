@@ -1,4 +1,4 @@
-import type { FormulaWords } from './whyFormulas.ts';
+import type { FormulaWords } from './formulaWords.ts';
 
 /** A blank, a seam and a finished part. */
 export const partFormulas = {

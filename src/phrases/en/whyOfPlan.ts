@@ -1,4 +1,4 @@
-import type { FormulaWords } from './whyFormulas.ts';
+import type { FormulaWords } from './formulaWords.ts';
 
 /** A plan, and the causes of a trouble. */
 export const planFormulas = {

@@ -1,4 +1,4 @@
-import type { FormulaWords } from './whyFormulas.ts';
+import type { FormulaWords } from './formulaWords.ts';
 
 /** Pitch, count, blank, tooth and growth. */
 export const toothFormulas = {
