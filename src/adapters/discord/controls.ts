@@ -1,10 +1,10 @@
 import type { ButtonInteraction, ModalSubmitInteraction } from 'discord.js';
 import { type Answer, type Call, type Desk, route } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
+import { type ControlId, readId } from '../common/ids.ts';
 import { cautionsOf, parameterName, sentence } from '../common/spoken.ts';
 import { within } from '../common/within.ts';
 import type { Flow } from './flow.ts';
-import { type ControlId, readId } from './ids.ts';
 import { callOf, handleOf, WORDS_OPTION } from './receive.ts';
 import { formOfFields } from './render.ts';
 import type { Sender } from './send.ts';

@@ -11,9 +11,9 @@ import {
 import { unreachable } from '../../card/index.ts';
 import type { SpokenCard } from '../../phrases/index.ts';
 import { type Form, fit } from '../common/fit.ts';
+import { type ControlId, idOf } from '../common/ids.ts';
 import { type Drawn, type Piece, piecesOf } from '../common/pieces.ts';
 import { escaped } from './escape.ts';
-import { type ControlId, idOf } from './ids.ts';
 import { LIMITS } from './limits.ts';
 
 /** A message as Discord takes it, for every route that takes one. */

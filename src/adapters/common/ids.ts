@@ -1,5 +1,3 @@
-import { LIMITS } from './limits.ts';
-
 /** What a button or a form stands for. Only names and numbers: the rest is in the records. */
 export type ControlId = {
   /** The interaction whose answer carries it. */
@@ -22,9 +20,7 @@ export const idOf = (control: ControlId): string =>
     LETTERS[control.control] + (control.isPrivate ? PRIVATE : ''),
     ...(control.control === 'press' ? [String(control.choice)] : []),
     control.of,
-  ]
-    .join(':')
-    .slice(0, LIMITS.customId);
+  ].join(':');
 
 const FORM = /^(?<letter>[pcw])(?<quiet>!?):(?:(?<choice>\d{1,4}):)?(?<of>.+)$/u;
 
