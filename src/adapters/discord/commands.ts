@@ -8,11 +8,18 @@ import {
 } from 'discord.js';
 import type { Command } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
+import {
+  byWeight,
+  isSwitch,
+  isWhole,
+  type Parameter,
+  phrasesOf,
+  shortened,
+} from '../common/fields.ts';
 import { parameterName, verbSummary } from '../common/spoken.ts';
 import { LIMITS } from './limits.ts';
 import { ONLY_ME_OPTION, optionName, WORDS_OPTION } from './receive.ts';
 
-type Parameter = Command['parameters'][number];
 type Choice = { readonly name: string; readonly value: string };
 
 /** A command as Discord keeps it, as far as it is ours to say. */
@@ -34,28 +41,11 @@ const grouped = <T>(items: readonly T[], keyOf: (item: T) => string): Map<string
   return groups;
 };
 
-const shortened = (text: string, most: number): string =>
-  text.length <= most ? text : `${text.slice(0, most - 1)}…`;
-
-/** Counts are typed as numbers; everything else may carry a unit and is typed as text. */
-const WHOLE: ReadonlySet<string> = new Set(['teeth', 'turns', 'pieces']);
-const isWhole = (parameter: Parameter): boolean =>
-  parameter.measures?.some((measure) => WHOLE.has(measure)) === true;
-
-/** One phrase for each thing that can be said, or null where that is no short, closed list. */
 const choicesOf = (parameter: Parameter): readonly Choice[] | null => {
-  if (parameter.closed !== true) return null;
-  const phrases = new Map<string, string>();
-  for (const [phrase, value] of parameter.values ?? []) {
-    const key = JSON.stringify(value);
-    if (!phrases.has(key)) phrases.set(key, phrase);
-  }
-  const choices = [...phrases.values()].map((phrase) => ({ name: phrase, value: phrase }));
-  return choices.length <= LIMITS.choices ? choices : null;
+  const phrases = phrasesOf(parameter);
+  if (phrases === null || phrases.length > LIMITS.choices) return null;
+  return phrases.map((phrase) => ({ name: phrase, value: phrase }));
 };
-
-const isSwitch = (parameter: Parameter): boolean =>
-  parameter.closed === true && (parameter.values ?? []).every(([, value]) => value === true);
 
 const optionOf = (book: Book, parameter: Parameter): APIApplicationCommandOption => {
   const name = optionName(parameter.name);
@@ -109,9 +99,7 @@ const subcommandOf = (
   most: number,
 ): APIApplicationCommandSubcommandOption => {
   const own = ownOptions(book);
-  const { foremost, parameters } = command;
-  const first = foremost.flatMap((name) => parameters.filter((each) => each.name === name));
-  const ordered = [...first, ...parameters.filter((each) => !foremost.includes(each.name))];
+  const ordered = byWeight(command);
   const room = Math.min(most, LIMITS.options - own.length);
   return {
     type: ApplicationCommandOptionType.Subcommand,

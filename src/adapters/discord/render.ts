@@ -10,6 +10,7 @@ import {
 } from 'discord.js';
 import { unreachable } from '../../card/index.ts';
 import type { SpokenCard } from '../../phrases/index.ts';
+import { shortened } from '../common/fields.ts';
 import { type Form, fit } from '../common/fit.ts';
 import { type ControlId, idOf } from '../common/ids.ts';
 import { type Drawn, type Piece, piecesOf } from '../common/pieces.ts';
@@ -246,6 +247,3 @@ export const formOfFields = (control: ControlId, title: string, fields: readonly
     component: fieldOf(field),
   })),
 });
-
-const shortened = (text: string, most: number): string =>
-  text.length <= most ? text : `${text.slice(0, most - 1)}…`;
