@@ -1,5 +1,15 @@
 /** A person as their platform knows them. */
-export type Person = { readonly id: string; readonly name: string };
+export type Person = {
+  readonly id: string;
+  readonly name: string;
+  /** The platform's own roles or user groups they are in. */
+  readonly groups?: readonly string[];
+  /** Manages the server or installed the app; not said where the platform knows no such thing. */
+  readonly manages?: boolean;
+};
+
+/** A file that came with a request, as text. */
+export type Attached = { readonly name: string; readonly text: string };
 
 /** Where a request was made and where the reply belongs. */
 export type Place = {
@@ -16,6 +26,7 @@ export type Call = {
   readonly place: Place;
   /** One interaction acts once, however often the platform sends it. */
   readonly interactionId: string;
+  readonly attached?: readonly Attached[];
   readonly given: /** A line of plain words, with or without its slash command. */
     | { readonly words: string }
     /** Named options of a form: each is read with the same words as a line. */

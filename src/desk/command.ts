@@ -1,9 +1,18 @@
 import { z } from 'zod';
 import type { Card } from '../card/index.ts';
 import type { Refusal, Suggestion } from '../refusal.ts';
-import type { AnyParameter, Cursor, Parameter, ReadLine, ShopUnits } from '../words/index.ts';
+import type {
+  AnyParameter,
+  Cursor,
+  Names,
+  Parameter,
+  ReadLine,
+  ShopUnits,
+} from '../words/index.ts';
+import type { Attached, Place } from './call.ts';
 import type { Effect } from './effect.ts';
 import type { Role } from './role.ts';
+import type { Visit } from './visit.ts';
 
 /** What a command knows besides what was typed. */
 export type Context = {
@@ -16,15 +25,33 @@ export type Context = {
   readonly fleet: readonly Command[];
   /** The last set-up, check, plan or trouble this person was answered in this place. */
   readonly last: Card | null;
+  /** The shop's records, open for one change; null where nothing is kept. */
+  readonly visit: Visit | null;
+  readonly place: Place;
+  readonly attached: readonly Attached[];
+  /** What another line would be answered now. Nothing of it is kept. */
+  readonly again: (line: string) => Promise<Reply>;
+};
+
+/** What a card was worked out from: kept with it, so that it can be found and held against today. */
+export type About = {
+  readonly request: unknown;
+  /** Ids of what the shop's own lists gave to it. */
+  readonly wheel: string | null;
+  readonly machine: string | null;
+  readonly material: string | null;
+  /** The row of the table of materials. */
+  readonly base: string | null;
 };
 
 export type Reply =
-  | { readonly card: Card; readonly effects: readonly Effect[] }
+  | { readonly card: Card; readonly effects: readonly Effect[]; readonly about?: About }
   | { readonly refusal: Refusal; readonly choices: readonly Suggestion[] };
 
 /** Reads what stands right behind a command's name; null where nothing of its kind stands there. */
 export type Lead = (
   cursor: Cursor,
+  names: Names,
 ) =>
   | { readonly value: unknown; readonly used: number }
   | { readonly refusal: Refusal; readonly choices: readonly Suggestion[] }
@@ -78,10 +105,8 @@ export const defineCommand = <S extends z.ZodRawShape>(definition: {
   run: (context, given) => definition.run(context, definition.parameters.parse(given)),
 });
 
-export const cardReply = (card: Card, effects: readonly Effect[] = []): Reply => ({
-  card,
-  effects,
-});
+export const cardReply = (card: Card, effects: readonly Effect[] = [], about?: About): Reply =>
+  about === undefined ? { card, effects } : { card, effects, about };
 export const refuse = (refusal: Refusal, choices: readonly Suggestion[] = []): Reply => ({
   refusal,
   choices,

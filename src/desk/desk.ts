@@ -1,12 +1,14 @@
 import { OutOfRange } from '../calc/index.ts';
 import type { Card } from '../card/index.ts';
 import type { Refusal, Suggestion } from '../refusal.ts';
+import { whoMay } from '../shop/index.ts';
 import {
   type Cursor,
   type LineResult,
   MATERIAL_PHRASES,
   type Names,
   NO_NAMES,
+  type ReadLine,
   readLine,
   type ShopUnits,
   spanOf,
@@ -18,8 +20,10 @@ import { type Answer, choicesIn } from './answer.ts';
 import type { Call } from './call.ts';
 import type { Command, Context, Reply } from './command.ts';
 import { type KeptAnswers, keptInProcess } from './kept.ts';
+import { atLeast } from './role.ts';
 import { lineOf, type Route, route, wordsOf } from './route.ts';
 import { suggestionsFor } from './suggest.ts';
+import type { Visit } from './visit.ts';
 
 export type Desk = {
   readonly answer: (call: Call) => Promise<Answer>;
@@ -39,6 +43,10 @@ export type ShopFacts = {
   readonly names: Names;
   /** The last card this person got in this place, where one is remembered. */
   readonly last: Card | null;
+  /** The shop's records, where there are any. */
+  readonly visit?: Visit;
+  /** What is kept of a reply, and what it is given besides, before it is answered. */
+  readonly settle?: (reply: Reply, context: Context) => Promise<Reply>;
 };
 export type FactsOf = (call: Call) => Promise<ShopFacts> | ShopFacts;
 
@@ -66,7 +74,7 @@ const readFor = (
   { units, names }: ShopFacts,
 ): LineResult => {
   const cursor: Cursor = { text, tokens: tokensOf(text), at: skip, units };
-  const first = command.lead?.read(cursor) ?? null;
+  const first = command.lead?.read(cursor, names) ?? null;
   if (command.lead === undefined || first === null)
     return readLine(text, vocabulary, units, names, skip);
   if ('refusal' in first) return first;
@@ -80,6 +88,15 @@ const readFor = (
       spans: new Map([...spans, [name, [spanOf(cursor, first.used)]]]),
     },
   };
+};
+
+/** Who has to be asked instead, where the person may not ask for this themselves. */
+const notAllowed = async (
+  visit: Visit | undefined,
+  { allowed }: Command,
+): Promise<Refusal | null> => {
+  if (visit === undefined || atLeast(visit.role, allowed)) return null;
+  return { code: 'notAllowed', role: allowed, people: await whoMay(visit.shop, allowed) };
 };
 
 /** The line that a call stands for. */
@@ -108,20 +125,29 @@ export const openDesk = (
     fleet.map((command) => [command, vocabularyOf(command.parameters, MATERIAL_PHRASES)]),
   );
 
-  const asked = (
+  const read = (
+    text: string,
+    way: Extract<Route, { readonly command: Command }>,
+    shop: ShopFacts,
+  ): LineResult => {
+    const vocabulary = vocabularies.get(way.command) ?? vocabularyOf([]);
+    return readFor(text, way, vocabulary, shop);
+  };
+
+  const asked = async (
     call: Call,
     shop: ShopFacts,
     pressed: Answer | null,
-  ): Asked | { readonly text: string; readonly refusal: Refusal } => {
+  ): Promise<Asked | { readonly text: string; readonly refusal: Refusal }> => {
     const text = lineFor(call, fleet, pressed);
     // The answer behind the button is gone: nothing is guessed in its place.
     if (text === null)
       return { text: '', refusal: { code: 'notFound', what: 'card', nearest: [] } };
     const way = route(text, fleet);
     if ('refusal' in way) return { text, refusal: way.refusal };
-    const vocabulary = vocabularies.get(way.command) ?? vocabularyOf([]);
-    const read = readFor(text, way, vocabulary, shop);
-    return { text, command: way.command, read };
+    const refusal = await notAllowed(shop.visit, way.command);
+    if (refusal !== null) return { text, refusal };
+    return { text, command: way.command, read: read(text, way, shop) };
   };
 
   const run = async (command: Command, context: Context): Promise<Reply> => {
@@ -131,6 +157,26 @@ export const openDesk = (
       return { refusal: asRefusal(error), choices: [] };
     }
   };
+
+  const contextFor = (call: Call, shop: ShopFacts, text: string, given: ReadLine): Context => ({
+    text,
+    read: given,
+    units: shop.units,
+    fleet,
+    last: shop.last,
+    visit: shop.visit ?? null,
+    place: call.place,
+    attached: call.attached ?? [],
+    again: async (line) => {
+      const way = route(line, fleet);
+      if ('refusal' in way) return { refusal: way.refusal, choices: [] };
+      const refusal = await notAllowed(shop.visit, way.command);
+      if (refusal !== null) return { refusal, choices: [] };
+      const result = read(line, way, shop);
+      if ('refusal' in result) return result;
+      return await run(way.command, contextFor(call, shop, line, result.read));
+    },
+  });
 
   const recall: Desk['recall'] = async (call, of) => await kept.recall(call, of);
 
@@ -146,7 +192,7 @@ export const openDesk = (
   const answerTo = async (call: Call): Promise<Answer> => {
     const shop = await facts(call);
     const pressed = 'pressed' in call.given ? await recall(call, call.given.pressed.of) : null;
-    const request = asked(call, shop, pressed);
+    const request = await asked(call, shop, pressed);
     const refused = (refusal: Refusal, choices: readonly Suggestion[]): Answer => ({
       kind: 'refusal',
       refusal:
@@ -158,14 +204,9 @@ export const openDesk = (
     if (!('command' in request)) return refused(request.refusal, []);
     if ('refusal' in request.read) return refused(request.read.refusal, request.read.choices);
     const { text, command } = request;
-    const context: Context = {
-      text,
-      read: request.read.read,
-      units: shop.units,
-      fleet,
-      last: shop.last,
-    };
-    const reply = await run(command, context);
+    const context = contextFor(call, shop, text, request.read.read);
+    const ran = await run(command, context);
+    const reply = (await shop.settle?.(ran, context)) ?? ran;
     if ('refusal' in reply) return refused(reply.refusal, reply.choices);
     const card = { ...reply.card, choices: sendable(reply.card.choices) };
     return { kind: 'card', card, effects: reply.effects };

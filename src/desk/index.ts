@@ -1,6 +1,7 @@
 export { type Answer, choicesIn } from './answer.ts';
-export type { Call, Options, Person, Place, Pressed } from './call.ts';
+export type { Attached, Call, Options, Person, Place, Pressed } from './call.ts';
 export {
+  type About,
   type Command,
   type Context,
   cardReply,
@@ -21,3 +22,4 @@ export type { Effect, MessageAddress } from './effect.ts';
 export { type KeptAnswers, keptInProcess } from './kept.ts';
 export { atLeast, ROLES, type Role } from './role.ts';
 export { type Route, route } from './route.ts';
+export type { Visit } from './visit.ts';

@@ -1,0 +1,10 @@
+import type { Role, Settings, ShopChange, ShopPerson } from '../shop/index.ts';
+
+/** A shop that keeps records, opened for one change by whoever asks. */
+export type Visit = {
+  readonly shop: ShopChange;
+  readonly person: ShopPerson;
+  /** What they may, everything taken together. */
+  readonly role: Role;
+  readonly settings: Settings;
+};
