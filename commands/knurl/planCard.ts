@@ -9,6 +9,7 @@ import {
   type PlanChange,
   type SetupRequest,
   STANDING_CAUTIONS,
+  type Way,
   type Window,
 } from '../../src/calc/index.ts';
 import {
@@ -177,6 +178,11 @@ const figuresOf = (best: Candidate | undefined): Figures => ({
   chanceLands: best === undefined ? null : figure(best.chanceLands, '1'),
 });
 
+const waysOfPlan = ({ request }: Planned, best: Candidate | undefined): readonly Way[] => [
+  ...(best?.process === 'cut' ? (['cut'] as const) : []),
+  ...(request.growth.results > 0 ? (['growthLearned'] as const) : []),
+];
+
 /** The plan: the best first, what limits each, and what would pass where nothing does. */
 export const planCard = (p: Planned): Card => {
   const best = bestOf(p);
@@ -197,7 +203,7 @@ export const planCard = (p: Planned): Card => {
     checks: best?.checks ?? [],
     cautions: STANDING_CAUTIONS,
     alternatives: [],
-    ways: best?.process === 'cut' ? ['cut'] : [],
+    ways: waysOfPlan(p, best),
     lists: { candidates: listed(p).map(asSaid) },
     units: p.given.units ?? p.context.units,
   };

@@ -52,7 +52,6 @@ export type Given =
   | 'gapRead'
   | 'growthAtFull'
   | 'growthAtShallow'
-  | 'growthMean'
   | 'growthSpread'
   | 'growthWanted'
   | 'halfAngle'

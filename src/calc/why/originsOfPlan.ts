@@ -1,4 +1,4 @@
-import type { Origins } from './origin.ts';
+import type { Origins, Worked } from './origin.ts';
 import { FORMED_CREST } from './originsShared.ts';
 
 /** Names of the figures of a plan: those of its best set-up. */
@@ -11,6 +11,12 @@ export const PLAN_FIGURES = [
   'chanceLands',
 ] as const;
 export type PlanFigureName = (typeof PLAN_FIGURES)[number];
+
+/** What rests on the growth to expect: the shop's own, or what is taken before it has results. */
+const byGrowth = (worked: Worked): Origins => [
+  { ...worked, when: ['growthLearned'], through: { ḡ: 'growthBelief' } },
+  { ...worked, through: { ḡ: 'growthBeforeResults' } },
+];
 
 /** How every figure of a plan comes about. */
 export const PLAN_ORIGINS: Readonly<Record<PlanFigureName, Origins>> = {
@@ -29,22 +35,20 @@ export const PLAN_ORIGINS: Readonly<Record<PlanFigureName, Origins>> = {
       given: { p_t: 'pitchOfWheel' },
     },
   ],
-  fill: [
-    {
-      by: 'plan',
-      parts: ['x from ḡ·growth(x) = D_middle − D_b, 0.70 ≤ x ≤ 0.97'],
-      inputs: { D_b: 'blankDiameter' },
-      given: { D_middle: 'limits', ḡ: 'growthMean', growth: 'staticGrowth' },
-    },
-  ],
+  fill: byGrowth({
+    by: 'plan',
+    parts: ['x from ḡ·growth(x) = D_middle − D_b, 0.70 ≤ x ≤ 0.97'],
+    inputs: { D_b: 'blankDiameter' },
+    given: { D_middle: 'limits', growth: 'staticGrowth' },
+  }),
   crestDiameter: [
     { when: ['cut'], by: 'cutKnurl', parts: ['Do = Db'], inputs: { Db: 'blankDiameter' } },
-    {
+    ...byGrowth({
       ...FORMED_CREST,
       inputs: { D: 'blankDiameter' },
       also: ['fill'],
-      given: { ḡ: 'growthMean', growth: 'staticGrowth', H: 'heightOfFill', sd: 'growthSpread' },
-    },
+      given: { growth: 'staticGrowth', H: 'heightOfFill' },
+    }),
   ],
   chanceTracks: [
     {
@@ -61,7 +65,7 @@ export const PLAN_ORIGINS: Readonly<Record<PlanFigureName, Origins>> = {
       inputs: { 'D₀': 'blankDiameter' },
       given: { low: 'limits', high: 'limits', σ_D: 'turningSpread' },
     },
-    {
+    ...byGrowth({
       by: 'chanceOfLanding',
       also: ['blankDiameter'],
       given: {
@@ -69,10 +73,8 @@ export const PLAN_ORIGINS: Readonly<Record<PlanFigureName, Origins>> = {
         G_high: 'growthWanted',
         G_full: 'growthAtFull',
         G_shallow: 'growthAtShallow',
-        ḡ: 'growthMean',
-        sd: 'growthSpread',
       },
-    },
+    }),
   ],
 };
 

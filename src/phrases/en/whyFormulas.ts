@@ -27,6 +27,8 @@ const GIVES: Readonly<Partial<Record<FormulaName, string>>> = {
   formRatingByNumbers: 'how well it forms',
   formedFlat: 'infeed on flat work',
   giveState: 'how far it may give way',
+  growthBeforeResults: 'growth factor before any result',
+  growthBelief: 'growth factor by the results of the shop',
   heightFromCrest: 'tooth that the crest speaks for',
   hertzHalfWidth: 'half width of the contact',
   meanWedgeShare: 'mean share that the teeth bear on',

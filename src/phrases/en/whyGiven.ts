@@ -20,7 +20,6 @@ export const givens: Readonly<Record<Given, string>> = {
   gapRead: 'gap at the seam as read',
   growthAtFull: 'static growth at the fullest fill allowed',
   growthAtShallow: 'static growth at the shallowest fill allowed',
-  growthMean: 'growth factor to expect',
   growthSpread: 'standard deviation of the growth factor',
   growthWanted: 'crest the print allows, less the blank',
   halfAngle: 'half the tooth angle',

@@ -10,8 +10,7 @@ import {
   TROUBLE_FIGURES,
 } from '../../../src/calc/index.ts';
 import type { Card } from '../../../src/card/index.ts';
-import { type Answer, openDesk } from '../../../src/desk/index.ts';
-import { NO_NAMES } from '../../../src/words/index.ts';
+import { type Answer, openDesk, plainShop } from '../../../src/desk/index.ts';
 import { ask, type CardAnswer, cardFor, figureOf, refusalFor, textOf } from '../../support/desk.ts';
 
 const BAR = '1.000 straight 21tpi 1018';
@@ -53,7 +52,7 @@ const isTraced = (answer: CardAnswer): boolean => {
 
 /** A desk that remembers this card as the last one. */
 const deskAfter = (last: Card | null) =>
-  openDesk(FLEET, () => ({ units: 'in', names: NO_NAMES, last }));
+  openDesk(FLEET, async (call) => ({ ...(await plainShop('in')(call)), last }));
 const askAfter = (last: Card | null, words: string): Promise<Answer> =>
   deskAfter(last).answer(terminalCall(words, 1));
 
