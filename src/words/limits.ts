@@ -124,6 +124,8 @@ export const limitsOf =
     const firstUsed = first.used;
     const separator = SEPARATORS.has(tokenAt(cursor, firstUsed)?.text ?? '');
     const second = separator ? quantityAt(moved(cursor, firstUsed + 1)) : null;
+    // One word that looked like two sizes but is not: `0.745-0.755bored`.
+    if (extra > 0 && second === null) return null;
     const shop = cursor.units === 'in' ? MM_PER_INCH : 1;
     // `25.3-25.5mm`: the unit at the end speaks for both.
     const stated = [first, second].map((q) => q?.unit).find((unit) => unit?.measure === 'length');
@@ -136,9 +138,10 @@ export const limitsOf =
       );
     const size = { value: sizeIn(first, factor), used: firstUsed };
     if (second !== null) {
-      if (ofMeasure(second, 'length') === null) return null;
-      const used = firstUsed + 1 + second.used - extra;
-      const limits = { low: size.value, high: sizeIn(second, factor), nominalOnly: false };
+      const other = ofMeasure(second, 'length');
+      if (other === null) return null;
+      const used = firstUsed + 1 + other.used - extra;
+      const limits = { low: size.value, high: sizeIn(other, factor), nominalOnly: false };
       return within(whole, what, limits, used, range);
     }
     const parts = toleranceAt(moved(cursor, firstUsed));

@@ -65,16 +65,17 @@ const byLetter = (cursor: Cursor): Reading<Pitch> | null => {
   return quantity?.unit === null ? pitch('module', quantity.value, quantity.used + 1) : null;
 };
 
-const SYSTEM_WORDS: Readonly<Record<string, PitchSystem>> = {
-  tpi: 'tpi',
-  dp: 'dp',
-  module: 'module',
-  mod: 'module',
-};
+/** A map, not an object: `constructor` is a word people may type. */
+const SYSTEM_WORDS: ReadonlyMap<string, PitchSystem> = new Map<string, PitchSystem>([
+  ['tpi', 'tpi'],
+  ['dp', 'dp'],
+  ['module', 'module'],
+  ['mod', 'module'],
+]);
 
 /** `tpi 21`, `dp 96`, `module 0.3`. */
 const bySystemWord = (cursor: Cursor): Reading<Pitch> | null => {
-  const system = SYSTEM_WORDS[tokenAt(cursor)?.text ?? ''];
+  const system = SYSTEM_WORDS.get(tokenAt(cursor)?.text ?? '');
   const quantity = quantityAt(moved(cursor, 1));
   if (system === undefined || quantity?.unit !== null) return null;
   return pitch(system, signedValue(quantity), quantity.used + 1);

@@ -286,6 +286,7 @@ export const readLine = (
     if ('refusal' in next) return { refusal: next.refusal, choices: choicesOf(text, next) };
     if ('skip' in next) cursor = moved(cursor, next.skip);
     else {
+      if (next.found.used < 1) throw new Error(`${next.found.parameter.name} read no word`);
       const refusal = put(progress, cursor, next.found);
       if (refusal !== null) return { refusal, choices: choicesOf(text, { refusal }) };
       cursor = moved(cursor, next.found.used);

@@ -149,24 +149,28 @@ export type PinWords = {
   readonly material: 'hardened' | 'carbide' | null;
 };
 
-const PIN_MATERIALS: Readonly<Record<string, 'hardened' | 'carbide'>> = {
-  carbide: 'carbide',
-  hardened: 'hardened',
-  hard: 'hardened',
-  steel: 'hardened',
-};
+/** A map, not an object: `constructor` is a word people may type. */
+const PIN_MATERIALS: ReadonlyMap<string, 'hardened' | 'carbide'> = new Map<
+  string,
+  'hardened' | 'carbide'
+>([
+  ['carbide', 'carbide'],
+  ['hardened', 'hardened'],
+  ['hard', 'hardened'],
+  ['steel', 'hardened'],
+]);
 const pinDiameter: Reader<number> = hardwareOf('pinDiameter', PIN, PIN_SIZES);
 
 /** What may follow the word `pin`: `6mm carbide`, `carbide`, `1/4`. */
 export const readPin: Reader<PinWords> = (cursor, names) => {
-  const before = PIN_MATERIALS[tokenAt(cursor)?.text ?? ''] ?? null;
+  const before = PIN_MATERIALS.get(tokenAt(cursor)?.text ?? '') ?? null;
   const skipped = before === null ? 0 : 1;
   const diameter = pinDiameter(moved(cursor, skipped), names);
   // A number after `pin carbide` that is no pin size is the bar, not the pin.
   if (diameter === null || 'refusal' in diameter)
     return before !== null ? took({ diameter: null, material: before }, 1) : diameter;
   const used = skipped + diameter.used;
-  const after = before ?? PIN_MATERIALS[tokenAt(cursor, used)?.text ?? ''] ?? null;
+  const after = before ?? PIN_MATERIALS.get(tokenAt(cursor, used)?.text ?? '') ?? null;
   const more = before === null && after !== null ? 1 : 0;
   return took({ diameter: diameter.value, material: after }, used + more);
 };
@@ -190,22 +194,23 @@ const hardness = (scale: 'HB' | 'HRC', value: number, used: number): Reading<Har
     : refused(outOfRange('hardness', value, HARDNESS[scale], scale));
 };
 
-const SCALE_WORDS: Readonly<Record<string, 'HB' | 'HRC'>> = {
-  hb: 'HB',
-  bhn: 'HB',
-  brinell: 'HB',
-  hrc: 'HRC',
-  rc: 'HRC',
-};
+/** A map, not an object: `constructor` is a word people may type. */
+const SCALE_WORDS: ReadonlyMap<string, 'HB' | 'HRC'> = new Map<string, 'HB' | 'HRC'>([
+  ['hb', 'HB'],
+  ['bhn', 'HB'],
+  ['brinell', 'HB'],
+  ['hrc', 'HRC'],
+  ['rc', 'HRC'],
+]);
 
 /** `HB 210`, `hb210`, `28 HRC`. */
 export const readHardness: Reader<HardnessWords> = (cursor) => {
   const token = tokenAt(cursor);
   const attached = /^(hb|hrc|bhn|rc)([\d.,]+)$/u.exec(token?.text ?? '');
   const value = attached === null ? null : numberOf(attached[2] ?? '');
-  const scale = SCALE_WORDS[attached?.[1] ?? ''];
+  const scale = SCALE_WORDS.get(attached?.[1] ?? '');
   if (value !== null && scale !== undefined) return hardness(scale, value, 1);
-  const named = SCALE_WORDS[token?.text ?? ''];
+  const named = SCALE_WORDS.get(token?.text ?? '');
   if (named !== undefined) {
     const after = quantityAt(moved(cursor, 1));
     return after?.unit === null ? hardness(named, after.value, after.used + 1) : null;
