@@ -7,6 +7,8 @@ import type { ShopChange, ShopView } from './view.ts';
 export type CardDraft = {
   /** The verb it answers: setup, plan … */
   readonly kind: string;
+  /** Where it was asked for: an adapter's own address. */
+  readonly place: string;
   /** The person's own words. */
   readonly words: string;
   readonly request: unknown;
@@ -53,6 +55,7 @@ const rowOf = (change: ShopChange, draft: CardDraft): Omit<CardTable, 'code'> =>
   kind: draft.kind,
   made_at: change.at,
   made_by: change.by,
+  place: draft.place,
   words: draft.words.replaceAll('\0', ''),
   request: JSON.stringify(draft.request),
   figures: JSON.stringify(draft.figures),
@@ -69,6 +72,7 @@ const cardOf = (row: CardTable): KeptCard => ({
   kind: row.kind,
   madeAt: row.made_at,
   madeBy: row.made_by,
+  place: row.place,
   words: row.words,
   request: JSON.parse(row.request),
   figures: JSON.parse(row.figures),
@@ -114,6 +118,8 @@ export type CardsWanted = {
   readonly limit: number;
   /** Only one person's. */
   readonly madeBy?: string;
+  /** Only those asked for in one place. */
+  readonly place?: string;
   /** Only older ones than the card of this id. */
   readonly before?: string;
 };
@@ -121,10 +127,11 @@ export type CardsWanted = {
 /** The newest cards first. */
 export const latestCards = async (
   view: ShopView,
-  { limit, madeBy, before }: CardsWanted,
+  { limit, madeBy, place, before }: CardsWanted,
 ): Promise<readonly KeptCard[]> => {
   let query = rowsOf(view).orderBy('id', 'desc').limit(limit);
   if (madeBy !== undefined) query = query.where('made_by', '=', madeBy);
+  if (place !== undefined) query = query.where('place', '=', place);
   if (before !== undefined) query = query.where('id', '<', before);
   return (await query.execute()).map(cardOf);
 };

@@ -38,7 +38,7 @@ export {
   rolesOfGroups,
 } from './groups.ts';
 export { type HistoryLine, historyOf, type Subject, type Verb } from './history.ts';
-export { type Acted, forgetAnswers, once } from './interactions.ts';
+export { type Acted, answerTo, forgetAnswers, once } from './interactions.ts';
 export { BARE_MACHINE, DIALS, type Dial, MACHINES, type Machine } from './machines.ts';
 export { MATERIALS_OF_SHOP, type ShopMaterial } from './materials.ts';
 export {
@@ -76,6 +76,7 @@ export {
   type Settings,
   settingsOf,
 } from './settings.ts';
+export { type SpokenNames, spokenNames } from './spoken.ts';
 export { type ShopChange, type ShopView, type ShopWords, viewShop } from './view.ts';
 export {
   BARE_WHEEL,

@@ -1,5 +1,5 @@
 import type { Store } from '../store/index.ts';
-import type { ShopChange } from './view.ts';
+import type { ShopChange, ShopView } from './view.ts';
 
 export type Acted<A> = {
   /** False: it was done before, and this is the answer of then. */
@@ -35,14 +35,21 @@ export const once = async <A>(
 };
 
 const answerOf = async <A>(change: ShopChange, interaction: string): Promise<A> => {
-  const { answer } = await change.db
+  const answer = await answerTo<A>(change, interaction);
+  if (answer === null) throw new Error('an interaction was kept without its answer');
+  return answer;
+};
+
+/** The answer an interaction got, or null where it is not known or was forgotten. */
+export const answerTo = async <A>(view: ShopView, interaction: string): Promise<A | null> => {
+  const row = await view.db
     .selectFrom('interaction')
     .select('answer')
-    .where('shop', '=', change.id)
+    .where('shop', '=', view.id)
     .where('id', '=', interaction)
-    .executeTakeFirstOrThrow();
-  if (answer === null) throw new Error('an interaction was kept without its answer');
-  return JSON.parse(answer) as A;
+    .executeTakeFirst();
+  const answer = row?.answer ?? null;
+  return answer === null ? null : (JSON.parse(answer) as A);
 };
 
 /** How long an answer is given again. Judgement: platforms repeat within the hour, not the week. */

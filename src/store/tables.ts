@@ -125,6 +125,8 @@ export type CardTable = OfShop & {
   kind: string;
   made_at: Moment;
   made_by: string;
+  /** Where it was asked for: an adapter's own address. */
+  place: string;
   /** The person's own words. */
   words: string;
   request: Json;

@@ -18,7 +18,6 @@ export {
   MATERIAL_PHRASES,
   type MaterialWords,
   narrowed,
-  withShopAliases,
 } from './material.ts';
 export { nearestOf } from './nearest.ts';
 export { numberOf } from './numbers.ts';

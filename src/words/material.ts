@@ -1,7 +1,8 @@
 import { DEFAULT_MATERIAL_ID, MATERIALS, type Material } from '../calc/materials/index.ts';
 import type { Suggestion } from '../refusal.ts';
+import { plainText } from './characters.ts';
 import { type Cursor, tokenAt } from './cursor.ts';
-import { type Reader, took } from './reading.ts';
+import { type Names, type Reader, took } from './reading.ts';
 import { unitOf } from './unit.ts';
 
 /**
@@ -12,6 +13,8 @@ export type MaterialWords = {
   readonly ids: readonly string[];
   /** The one meant where nothing more is said. */
   readonly usual: string;
+  /** The shop's own name for it, where that was said. */
+  readonly own?: string;
 };
 
 type Entry = { readonly phrase: readonly string[]; readonly means: MaterialWords };
@@ -123,7 +126,7 @@ const isQuantity = (cursor: Cursor, used: number): boolean => {
   return last !== undefined && /^\d+$/u.test(last.text) && unit !== null && next?.text !== 'in';
 };
 
-export const freeMaterial: Reader<MaterialWords> = (cursor) => {
+const ofTable: Reader<MaterialWords> = (cursor) => {
   const first = tokenAt(cursor);
   if (first === undefined) return null;
   let best: Entry | null = null;
@@ -135,28 +138,35 @@ export const freeMaterial: Reader<MaterialWords> = (cursor) => {
   return took(best.means, best.phrase.length);
 };
 
+/** A name the shop has given goes before the general ones, unless they say more. */
+const ofShop = (cursor: Cursor, { materials = [] }: Names): Entry | undefined =>
+  materials
+    .map(({ name, base }) =>
+      entry(plainText(name).trim().replaceAll(/\s+/gu, ' '), {
+        ids: [base],
+        usual: base,
+        own: name,
+      }),
+    )
+    .filter((known) => known.phrase.every((word, i) => tokenAt(cursor, i)?.text === word))
+    .sort((a, b) => b.phrase.length - a.phrase.length)[0];
+
+export const freeMaterial: Reader<MaterialWords> = (cursor, names) => {
+  const own = ofShop(cursor, names);
+  const general = ofTable(cursor, names);
+  const used = general !== null && 'used' in general ? general.used : 0;
+  return own !== undefined && own.phrase.length >= used
+    ? took(own.means, own.phrase.length)
+    : general;
+};
+
 /** What two words about the material leave together; null where they exclude each other. */
 export const narrowed = (a: MaterialWords, b: MaterialWords): MaterialWords | null => {
   const ids = a.ids.filter((id) => b.ids.includes(id));
   // The narrower word knows better what is usually meant.
   const order = a.ids.length <= b.ids.length ? [a, b] : [b, a];
   const usual = order.map((words) => words.usual).find((id) => ids.includes(id)) ?? ids[0];
-  return usual === undefined ? null : { ids, usual };
-};
-
-/** A shop's own alias for a row of the table, read before the general ones. */
-export const withShopAliases = (
-  aliases: readonly { readonly alias: string; readonly id: string }[],
-): Reader<MaterialWords> => {
-  const own = aliases.map(({ alias, id }) => entry(alias.toLowerCase(), { ids: [id], usual: id }));
-  return (cursor, names) => {
-    const found = own
-      .filter((known) => known.phrase.every((word, i) => tokenAt(cursor, i)?.text === word))
-      .sort((a, b) => b.phrase.length - a.phrase.length)[0];
-    const general = freeMaterial(cursor, names);
-    const used = general !== null && 'used' in general ? general.used : 0;
-    return found !== undefined && found.phrase.length >= used
-      ? took(found.means, found.phrase.length)
-      : general;
-  };
+  const own = a.own ?? b.own;
+  if (usual === undefined) return null;
+  return own === undefined ? { ids, usual } : { ids, usual, own };
 };

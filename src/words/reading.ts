@@ -14,6 +14,8 @@ export const refused = (refusal: Refusal): { readonly refusal: Refusal } => ({ r
 export type Names = {
   readonly wheels: readonly string[];
   readonly machines: readonly string[];
+  /** Its own names for rows of the table of materials. */
+  readonly materials?: readonly { readonly name: string; readonly base: string }[];
 };
 export const NO_NAMES: Names = { wheels: [], machines: [] };
 

@@ -18,6 +18,7 @@ const cards = async (db: Kysely<unknown>, c: Columns): Promise<void> => {
     .addColumn('kind', c.text, (col) => col.notNull())
     .addColumn('made_at', c.whole, (col) => col.notNull())
     .addColumn('made_by', c.text, (col) => col.notNull())
+    .addColumn('place', c.text, (col) => col.notNull())
     .addColumn('words', c.text, (col) => col.notNull())
     .addColumn('request', c.text, (col) => col.notNull())
     .addColumn('figures', c.text, (col) => col.notNull())
@@ -44,6 +45,11 @@ const cards = async (db: Kysely<unknown>, c: Columns): Promise<void> => {
       .execute();
   };
   for (const column of ['made_by', 'wheel', 'machine', 'material']) await newestOf(column);
+  await db.schema
+    .createIndex('card_in_place')
+    .on('card')
+    .columns(['shop', 'place', 'made_by', 'id'])
+    .execute();
 };
 
 const interactions = async (db: Kysely<unknown>, c: Columns): Promise<void> => {

@@ -49,6 +49,7 @@ export const TURRET: Machine = {
 
 export const CARD = {
   kind: 'setup',
+  place: 'channel',
   words: '1 in 1018 straight 21 tpi',
   request: { stock: 25.4, pitch: { system: 'tpi', value: 21 } },
   figures: { blankDiameter: { value: 25.02522, unit: 'mm' } },
