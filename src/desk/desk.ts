@@ -1,4 +1,3 @@
-import { OutOfRange } from '../calc/index.ts';
 import type { Card } from '../card/index.ts';
 import type { Refusal, Suggestion } from '../refusal.ts';
 import { whoMay } from '../shop/index.ts';
@@ -8,6 +7,7 @@ import {
   MATERIAL_PHRASES,
   type Names,
   NO_NAMES,
+  OutOfRange,
   type ReadLine,
   readLine,
   type ShopUnits,

@@ -20,6 +20,8 @@ export {
 } from './desk.ts';
 export type { Effect, MessageAddress } from './effect.ts';
 export { type KeptAnswers, keptInProcess } from './kept.ts';
+export { openRecordsDesk, type RecordsDeskOptions } from './records.ts';
 export { atLeast, ROLES, type Role } from './role.ts';
 export { type Route, route } from './route.ts';
+export { placeName } from './settle.ts';
 export type { Visit } from './visit.ts';

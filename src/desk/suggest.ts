@@ -12,8 +12,10 @@ const plainly = (names: readonly string[]): readonly Suggestion[] =>
   names.map((name) => ({ label: name, words: name }));
 
 const offersOf = (kind: Suggested, names: Names): readonly Suggestion[] => {
-  if (kind === 'materials') return MATERIAL_OFFERS;
-  const given: Partial<Record<Suggested, readonly string[]>> = names;
+  const { wheels, machines, materials = [] } = names;
+  if (kind === 'materials')
+    return [...plainly(materials.map(({ name }) => name)), ...MATERIAL_OFFERS];
+  const given: Partial<Record<Suggested, readonly string[]>> = { wheels, machines };
   return plainly(given[kind] ?? []);
 };
 

@@ -1,4 +1,5 @@
 /** What a shop remembers: asked of one shop, changed whole or not at all. */
+export { type Store, StoreUnavailable } from '../store/index.ts';
 export {
   type CardDraft,
   type CardsWanted,

@@ -1,0 +1,187 @@
+import {
+  answerTo,
+  enterShop,
+  once,
+  type ShopChange,
+  type ShopOutside,
+  type ShopView,
+  type ShopWords,
+  type Store,
+  StoreUnavailable,
+  settingsOf,
+  shopOf,
+  spokenNames,
+  viewShop,
+} from '../shop/index.ts';
+import { nearestOf, numberOf, plainText, type ShopUnits, unitOf } from '../words/index.ts';
+import { type Answer, choicesIn } from './answer.ts';
+import type { Call } from './call.ts';
+import type { Command } from './command.ts';
+import { type Desk, openDesk, type ShopFacts } from './desk.ts';
+import { lineOf } from './route.ts';
+import { lastCard, settled } from './settle.ts';
+import type { Visit } from './visit.ts';
+
+export type RecordsDeskOptions = {
+  /** Whose shops and people these are: discord, slack, terminal … */
+  readonly platform: string;
+  /** The program's version, kept with every card. */
+  readonly program: string;
+  readonly now: () => number;
+  /** Something may have been queued for delivery. */
+  readonly onAnswered?: () => void;
+  /** For the log: the records could not be used. */
+  readonly onFault?: (error: unknown) => void;
+};
+
+/** Names of the shop's own are compared and guessed at as everything else that is typed. */
+const WORDS: ShopWords = { plainText, nearestOf, numberOf, unitOf };
+
+/** What is read of a shop that nobody has come into yet. */
+const UNKNOWN_UNITS: ShopUnits = 'in';
+
+/** An answer that leaves nothing behind but itself. */
+class Refused extends Error {
+  readonly answer: Answer;
+
+  constructor(answer: Answer) {
+    super('refused');
+    this.answer = answer;
+  }
+}
+
+/**
+ * A desk whose shops keep records. A call is one change: whatever it does, what is to be
+ * delivered because of it and the answer itself are kept together or not at all, and a call that
+ * comes again gets the answer of the first time.
+ */
+export const openRecordsDesk = (
+  fleet: readonly Command[],
+  store: Store,
+  options: RecordsDeskOptions,
+): Desk => {
+  const { platform, now, onAnswered = () => undefined, onFault = () => undefined } = options;
+  const visits = new WeakMap<object, Visit>();
+  const outsideOf = (call: Pick<Call, 'shop'>, person?: Call['person']): ShopOutside => ({
+    platform,
+    // Somebody who writes to the bot alone has a shop of their own.
+    id: call.shop === '' ? `person:${person?.id ?? ''}` : call.shop,
+    name: call.shop === '' ? (person?.name ?? '') : call.shop,
+  });
+  const viewOf = async (call: Pick<Call, 'shop'> & Partial<Call>): Promise<ShopView | null> => {
+    const open = visits.get(call);
+    if (open !== undefined) return open.shop;
+    const id = await shopOf(store.read, outsideOf(call, call.person));
+    return id === null ? null : viewShop(store.read, id, WORDS);
+  };
+
+  const facts = async (call: Call): Promise<ShopFacts> => {
+    const view = await viewOf(call);
+    if (view === null)
+      return { units: UNKNOWN_UNITS, names: { wheels: [], machines: [] }, last: null };
+    const names = await spokenNames(view);
+    const visit = visits.get(call);
+    if (visit === undefined) return { units: (await settingsOf(view)).units, names, last: null };
+    return {
+      units: visit.settings.units,
+      names,
+      last: await lastCard(visit, call.place),
+      visit,
+      settle: (reply, context) => settled(reply, context, visit, options.program),
+    };
+  };
+
+  const desk = openDesk(fleet, facts, {
+    keep: () => undefined,
+    recall: async (call, of) => {
+      const view = await viewOf(call);
+      return view === null ? null : await answerTo<Answer>(view, of);
+    },
+  });
+
+  /** Enters the shop and acts, unless that was done before. */
+  const change = <T>(call: Call, act: (shop: ShopChange, visit: Visit) => Promise<T>): Promise<T> =>
+    store.transact(
+      async (tx) => {
+        const { person } = call;
+        const { change: shop, ...entered } = await enterShop(
+          tx,
+          WORDS,
+          outsideOf(call, person),
+          { ...person, groups: person.groups ?? [], manages: person.manages ?? null },
+          now(),
+        );
+        const settings = await settingsOf(shop);
+        return await act(shop, { shop, settings, person: entered.person, role: entered.role });
+      },
+      { repeatable: true },
+    );
+
+  const acted = (call: Call): Promise<Answer> =>
+    change(call, async (shop, visit) => {
+      const { answer } = await once(shop, call.interactionId, async () => {
+        visits.set(call, visit);
+        const given = await desk.answer(call).finally(() => visits.delete(call));
+        if (given.kind === 'refusal') throw new Refused(given);
+        return given;
+      });
+      return answer;
+    });
+
+  /** A refusal has changed nothing; only what it offers is kept, for its buttons. */
+  const keptRefusal = (call: Call, given: Answer): Promise<Answer> =>
+    change(call, async (shop) => {
+      const { answer } = await once(shop, call.interactionId, () => Promise.resolve(given));
+      return answer;
+    });
+
+  const unavailable = async (call: Call): Promise<Answer> => {
+    const text = await textOf(call, desk).catch(() => '');
+    return {
+      kind: 'refusal',
+      refusal: { code: 'unavailable', what: 'records', words: text },
+      choices: [],
+      units: UNKNOWN_UNITS,
+      text,
+    };
+  };
+
+  const answer: Desk['answer'] = async (call) => {
+    try {
+      const given = await acted(call).catch((error: unknown) => {
+        if (error instanceof Refused) return keptRefusal(call, error.answer);
+        throw error;
+      });
+      onAnswered();
+      return given;
+    } catch (error) {
+      if (!(error instanceof StoreUnavailable)) throw error;
+      onFault(error);
+      return await unavailable(call);
+    }
+  };
+
+  const suggest: Desk['suggest'] = async (call, asked) => {
+    try {
+      return await desk.suggest(call, asked);
+    } catch (error) {
+      if (!(error instanceof StoreUnavailable)) throw error;
+      onFault(error);
+      return [];
+    }
+  };
+
+  return { ...desk, answer, suggest };
+};
+
+/** The person's words, to be repeated to them. */
+const textOf = async (call: Call, desk: Desk): Promise<string> => {
+  const { given } = call;
+  if ('words' in given) return given.words;
+  if ('path' in given) {
+    const command = desk.fleet.find(({ path }) => path.join(' ') === given.path.join(' '));
+    return command === undefined ? '' : lineOf(command, given.options);
+  }
+  const pressed = await desk.recall(call, given.pressed.of);
+  return choicesIn(pressed)[given.pressed.choice]?.words ?? '';
+};
