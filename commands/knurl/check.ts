@@ -1,4 +1,3 @@
-import type { z } from 'zod';
 import { checkAfter, checkBlank, mm, type SetupRequest, seamTest } from '../../src/calc/index.ts';
 import {
   type Context,
@@ -8,20 +7,8 @@ import {
   refuse,
 } from '../../src/desk/index.ts';
 import { afterCard, blankCard, seamCard } from './checkCards.ts';
-import * as words from './checkParameters.ts';
+import { type CheckWords, checkFields } from './checkFields.ts';
 import { requestOf } from './request.ts';
-import { setupParameters } from './setup.ts';
-
-const parameters = setupParameters.extend({
-  seam: words.seam,
-  count: words.count,
-  scrap: words.scrap,
-  crest: words.crest,
-  height: words.height,
-  flat: words.flat,
-  flats: words.flats,
-});
-export type CheckWords = z.infer<typeof parameters>;
 
 const isAfter = (said: CheckWords): boolean =>
   [said.crest, said.height, said.flat, said.flats, said.count].some((each) => each !== undefined);
@@ -80,7 +67,7 @@ export const check = defineCommand({
     '/knurl check 0.995 21tpi straight seam 0.3',
     '/knurl check 0.9852 straight 21tpi 1018 count 65 crest 1.0040',
   ],
-  parameters,
+  parameters: checkFields,
   foremost: [
     'diameter',
     'pattern',

@@ -22,7 +22,7 @@ import {
   row,
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
-import type { CheckWords } from './check.ts';
+import type { CheckWords } from './checkFields.ts';
 import { reworded } from './words.ts';
 
 /** What a check's card is made from. */

@@ -1,4 +1,3 @@
-import { z } from 'zod';
 import {
   type CribWheel,
   DEFAULT_INCLUDED,
@@ -16,62 +15,10 @@ import {
   defineCommand,
   type Reply,
   refuse,
-  said,
 } from '../../src/desk/index.ts';
-import { shareOf } from '../../src/words/index.ts';
-import { fit, plate } from './finishParameters.ts';
-import * as words from './parameters.ts';
 import { planCard } from './planCard.ts';
+import { type CribKind, type PlanWords, planFields } from './planFields.ts';
 import { requestOf } from './request.ts';
-
-/** How far off the pitch asked for a wheel may be. */
-const tolerance = said<number>({
-  name: 'tolerance',
-  read: shareOf('tolerance', [0, 0.5]),
-  keywords: ['within', 'tolerance', 'pitch within'],
-  examples: ['within 3%'],
-});
-
-const parameters = z.object({
-  finish: words.finish,
-  pattern: words.pattern,
-  pitch: words.pitch,
-  material: words.material,
-  callout: words.callout,
-  diameter: words.diameter,
-  points: words.points,
-  hand: words.hand,
-  rim: words.rim,
-  tolerance,
-  length: words.length,
-  stickout: words.stickout,
-  support: words.support,
-  layout: words.layout,
-  process: words.process,
-  class: words.knurlClass,
-  helix: words.helix,
-  angle: words.angle,
-  wheel: words.wheel,
-  bevel: words.bevel,
-  edge: words.edge,
-  oneWheel: words.onePiece,
-  pin: words.pin,
-  bore: words.bore,
-  plug: words.plug,
-  hardness: words.hardness,
-  speed: words.speed,
-  rotation: words.rotation,
-  feed: words.feed,
-  turns: words.turns,
-  batch: words.batch,
-  runout: words.runout,
-  plate,
-  fit,
-  units: words.shown,
-});
-export type PlanWords = z.infer<typeof parameters>;
-
-export type CribKind = 'byStandard' | 'oneWheel';
 
 /** The wheel that was named, as the only one in the crib. */
 const namedWheel = (request: SetupRequest): CribWheel => ({
@@ -127,7 +74,7 @@ export const plan = defineCommand({
     '/knurl plan finish 0.995-1.005 straight 96dp 303 long 0.5',
     '/knurl plan finish 19.8-20.1mm RGE 0.8 1018 long 15mm',
   ],
-  parameters,
+  parameters: planFields,
   allowed: 'operator',
   run: (context, given) => {
     if (given.finish === undefined) return missingFinish(context);

@@ -23,7 +23,7 @@ import {
   row,
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
-import type { CribKind, PlanWords } from './plan.ts';
+import type { CribKind, PlanWords } from './planFields.ts';
 import { reworded } from './words.ts';
 
 type Planned = {

@@ -29,7 +29,7 @@ import {
 import type { Context } from '../../src/desk/index.ts';
 import type { Refusal, Suggestion } from '../../src/refusal.ts';
 import type { WheelWords } from '../../src/words/index.ts';
-import type { SetupWords } from './setup.ts';
+import type { SetupWords } from './setupParameters.ts';
 import { contradiction, keeping, reworded, typed } from './words.ts';
 
 /** Stops the building of a request with what is to be asked instead. */
@@ -140,7 +140,7 @@ const PITCH_EXAMPLES = ['21tpi', '96dp', '1.0 pitch'] as const;
 const pitchFor = (context: Context, said: SetupWords, needed: boolean): Pitch | null => {
   const pitch = agreed(context, 'pitch', said.pitch, said.callout?.pitch ?? null);
   const counted = said.wheel?.teeth !== undefined && said.wheel.teeth !== null;
-  if (pitch === null && !counted && said.proven === undefined)
+  if (needed && pitch === null && !counted && said.proven === undefined)
     throw missing(context, 'pitch', PITCH_EXAMPLES);
   if (counted && said.wheel?.diameter === null)
     throw missing(context, 'wheelDiameter', ['wheel 20mm 63 teeth', 'wheel 3/4 in 60 teeth']);
@@ -274,18 +274,22 @@ const brinell = (said: SetupWords): number | null => {
 const diameterExamples = ({ units }: Context): readonly string[] =>
   units === 'in' ? ['1.000', '7/8', '19mm'] : ['20', '25.4', '3/4 in'];
 
+const countedOf = ({ wheel }: SetupWords): SetupRequest['counted'] => {
+  const [diameter, teeth] = [wheel?.diameter ?? null, wheel?.teeth ?? null];
+  return diameter === null || teeth === null ? null : { diameter: mm(diameter), teeth };
+};
+
 /** What was said of the wheel and of what it turns on. */
 const wheelParts = (said: SetupWords) => {
-  const { wheel, pin } = said;
-  const counted = wheel?.teeth != null && wheel.diameter !== null;
+  const { pin } = said;
   return {
-    counted: counted ? { diameter: mm(wheel.diameter), teeth: wheel.teeth } : null,
+    counted: countedOf(said),
     proven:
       said.proven === undefined ? null : provenPitch(mm(said.proven.diameter), said.proven.teeth),
     wheel: wheelSize(said),
     edge: said.edge ?? null,
     pin: pin?.material ?? 'hardened',
-    pinDiameter: pin?.diameter == null ? null : mm(pin.diameter),
+    pinDiameter: length(pin?.diameter ?? undefined),
     onePiece: said.oneWheel === true,
     layout: said.layout ?? null,
   } as const;

@@ -26,7 +26,7 @@ import {
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
 import { partOf } from '../../src/words/index.ts';
-import type { SetupWords } from './setup.ts';
+import type { SetupWords } from './setupParameters.ts';
 import { reworded } from './words.ts';
 
 /** What the card is made from. */

@@ -1,4 +1,3 @@
-import type { z } from 'zod';
 import {
   checkAfter,
   type MeasuredPart,
@@ -18,23 +17,9 @@ import {
   type Reply,
   refuse,
 } from '../../src/desk/index.ts';
-import * as measured from './checkParameters.ts';
 import { requestOf } from './request.ts';
-import { setupParameters } from './setup.ts';
 import { troubleCard } from './troubleCard.ts';
-import * as words from './troubleParameters.ts';
-
-const parameters = setupParameters.extend({
-  symptom: words.symptom,
-  partsOnWheel: words.partsOnWheel,
-  bite: words.biteTaken,
-  count: measured.count,
-  crest: measured.crest,
-  height: measured.height,
-  flat: measured.flat,
-  flats: measured.flats,
-});
-export type TroubleWords = z.infer<typeof parameters>;
+import { type TroubleWords, troubleFields } from './troubleFields.ts';
 
 /** Nothing of the set-up was said: only the words of the symptom speak. */
 const wordsAlone = (said: TroubleWords): boolean =>
@@ -88,7 +73,7 @@ export const trouble = defineCommand({
     '/knurl trouble flaking 20mm diamond 0.8 pitch brass fill 95%',
     '/knurl trouble pin seized',
   ],
-  parameters,
+  parameters: troubleFields,
   foremost: [
     'symptom',
     'diameter',

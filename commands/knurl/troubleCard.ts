@@ -8,7 +8,7 @@ import {
 } from '../../src/calc/index.ts';
 import { type Card, line, row } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
-import type { TroubleWords } from './trouble.ts';
+import type { TroubleWords } from './troubleFields.ts';
 
 type Troubled = {
   readonly context: Context;

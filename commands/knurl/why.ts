@@ -12,7 +12,8 @@ import {
 } from '../../src/desk/index.ts';
 import { check } from './check.ts';
 import { plan } from './plan.ts';
-import { setup, setupParameters } from './setup.ts';
+import { setup } from './setup.ts';
+import { setupParameters } from './setupParameters.ts';
 import { trouble } from './trouble.ts';
 import { absentCard, type Explaining, whyCard } from './whyCard.ts';
 import { whatBrings } from './whyNeeds.ts';

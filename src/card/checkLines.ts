@@ -1,4 +1,5 @@
 import type { Mm, NextPartMoveId, OffFigure, PartMove, ThisPartMoveId } from '../calc/index.ts';
+import type { Nothing } from './nothing.ts';
 
 /** What the check says before, at the seam of a trial turn, and after. */
 export type CheckLines = {
@@ -20,13 +21,23 @@ export type CheckLines = {
   seamWhole: { readonly diameter: Mm };
   seamTurnTo: { readonly diameter: Mm; readonly takeOff: Mm };
   seamChance: { readonly chance: number; readonly byLabel: number };
-  seamMarksStay: Record<never, never>;
+  seamMarksStay: Nothing;
+  seamCountFar: { readonly count: number; readonly expected: number };
   seamProven: { readonly effectivePitch: Mm; readonly count: number; readonly diameter: Mm };
   seamStep: { readonly step: 1 | 2 | 3 | 4; readonly bite: Mm | null };
   partRight: { readonly blank: Mm; readonly toothCount: number };
-  partOff: { readonly off: readonly OffFigure[] };
+  /** The first thing to do to this part, and what is off. */
+  partOff: { readonly off: readonly OffFigure[]; readonly move: PartMove<ThisPartMoveId> };
   thisPart: { readonly move: PartMove<ThisPartMoveId> };
-  nextPart: { readonly move: PartMove<NextPartMoveId> };
+  /** The flat on the crests that the planned fill leaves: what to stop by where the dial is no judge. */
+  nextPart: { readonly move: PartMove<NextPartMoveId>; readonly flat: Mm };
+  /** The wheel differs from its label: the blank already is whole, or is turned for the other count. */
+  nextCount: {
+    readonly blank: Mm;
+    readonly counted: number;
+    readonly diameter: Mm;
+    readonly expected: number;
+  };
   rescue: {
     readonly cleaned: Mm;
     readonly diameter: Mm;

@@ -19,6 +19,7 @@ import type {
   Window,
 } from '../calc/index.ts';
 import type { CheckLines, CheckRows } from './checkLines.ts';
+import type { Nothing } from './nothing.ts';
 import type { PlanLines, PlanRows } from './planLines.ts';
 import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
 import type { TroubleLines, TroubleRows } from './troubleLines.ts';
@@ -64,9 +65,9 @@ export type Lines = CheckLines &
     labelOverruled: { readonly label: Pitch; readonly counted: CountedWheel; readonly normal: Mm };
     wheelTaken: { readonly wheel: WheelSize; readonly edge: Edge };
     classWindow: { readonly knurlClass: KnurlClass };
-    feedNeedsLength: Record<never, never>;
+    feedNeedsLength: Nothing;
     startHalfOn: { readonly chamfer: Mm; readonly clearance: Mm };
-    helpIntro: Record<never, never>;
+    helpIntro: Nothing;
     helpVerb: { readonly verb: string; readonly line: string };
     helpExample: { readonly line: string };
   };
@@ -120,10 +121,10 @@ export type Labels = ShopLabels &
     larger: { readonly toothCount: number; readonly blankDiameter: Mm };
     remedy: { readonly kind: RemedyKind; readonly number: Figure | null };
     candidate: { readonly place: number; readonly wheel: string; readonly toothCount: number };
-    ownSpeed: Record<never, never>;
-    cutInstead: Record<never, never>;
-    bevelled: Record<never, never>;
-    ownFill: Record<never, never>;
+    ownSpeed: Nothing;
+    cutInstead: Nothing;
+    bevelled: Nothing;
+    ownFill: Nothing;
     otherUnits: { readonly units: 'in' | 'mm' };
     words: { readonly words: string };
   };

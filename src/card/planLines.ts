@@ -1,4 +1,5 @@
 import type { Figure, LimitedBy, Mm, Process, RemedyKind, State, Window } from '../calc/index.ts';
+import type { Nothing } from './nothing.ts';
 
 /** A set-up that the plan found, as a card tells it. */
 export type CandidateSaid = {
@@ -17,9 +18,9 @@ export type PlanLines = {
   planBest: CandidateSaid;
   planNone: { readonly limits: Window };
   planFor: { readonly limits: Window; readonly wheels: number };
-  planCribByStandard: Record<never, never>;
-  planCribOneWheel: Record<never, never>;
-  planOffMiddle: Record<never, never>;
+  planCribByStandard: Nothing;
+  planCribOneWheel: Nothing;
+  planOffMiddle: Nothing;
   planRemedy: {
     readonly kind: RemedyKind;
     readonly number: Figure | null;

@@ -1,4 +1,5 @@
 import type { CauseId, Evidence, NextMove, SymptomId } from '../calc/index.ts';
+import type { Nothing } from './nothing.ts';
 
 /** A cause as a card tells it. */
 export type CauseSaid = {
@@ -11,8 +12,8 @@ export type CauseSaid = {
 export type TroubleLines = {
   troubleLikeliest: CauseSaid;
   troubleSeen: { readonly symptom: SymptomId };
-  troubleByNumbers: Record<never, never>;
-  troubleByWords: Record<never, never>;
+  troubleByNumbers: Nothing;
+  troubleByWords: Nothing;
 };
 
 export type TroubleRows = {

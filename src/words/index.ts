@@ -1,3 +1,4 @@
+export { OutOfRange } from '../calc/units.ts';
 export { freeCallout } from './callout.ts';
 export { plainText } from './characters.ts';
 export {

@@ -65,6 +65,8 @@ const LIMITS: readonly Limit[] = [
   { parameter: 'turns', line: `turns ? ${JOB}`, low: 5, high: 500, whole: true },
   { parameter: 'batch', line: `${JOB} batch ?`, low: 1, high: 1_000_000, whole: true },
   { parameter: 'bevel', line: `${JOB} bevel ? mm`, low: 0, high: 5 },
+  { parameter: 'plate', line: `${JOB} plate ? mm`, low: 0.0001, high: 1 },
+  { parameter: 'fit', line: `${JOB} fit ? mm`, low: 1, high: 500 },
   { parameter: 'runout', line: `${JOB} runout ? mm`, low: 0, high: 5 },
   {
     parameter: 'wheel',
