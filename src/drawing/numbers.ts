@@ -1,0 +1,89 @@
+import type { Form, Mm, Process, Rad, State, Support, Travel, Window } from '../calc/index.ts';
+
+/** Section across the work: everything the tooth form is drawn from, lengths in millimetres. */
+export type ToothFormNumbers = {
+  readonly toothCount: number;
+  readonly blankDiameter: Mm;
+  /** Over the crests, as expected. */
+  readonly crestDiameter: Mm;
+  readonly toothHeight: Mm;
+  readonly sharpHeight: Mm;
+  readonly infeed: Mm;
+  readonly pitch: Mm;
+  readonly transversePitch: Mm;
+  readonly crestFlat: Mm;
+  readonly process: Process;
+};
+
+/** A diameter that is marked on the strip. */
+export type StripMark = { readonly what: 'bar' | 'blank' | 'part'; readonly diameter: Mm };
+
+export type TrackingStripNumbers = {
+  readonly transversePitch: Mm;
+  /** Half width of the window round each whole count, on the diameter. */
+  readonly below: Mm;
+  readonly above: Mm;
+  readonly marks: readonly StripMark[];
+  /** From a diameter that does not track to the next that does. */
+  readonly next: { readonly from: Mm; readonly to: Mm } | null;
+};
+
+export type SetupSketchNumbers = {
+  readonly blankDiameter: Mm;
+  readonly bore: Mm | null;
+  readonly length: Mm;
+  /** Null: not said. */
+  readonly stickout: Mm | null;
+  readonly chamfer: Mm;
+  readonly wheelDiameter: Mm;
+  readonly wheelFace: Mm;
+  readonly support: Support;
+  readonly opposed: boolean;
+  readonly travel: Travel;
+};
+
+export type DevelopedPatternNumbers = {
+  readonly toothCount: number;
+  readonly transversePitch: Mm;
+  readonly helix: Rad;
+  readonly families: 'straight' | 'left' | 'right' | 'crossed' | 'square';
+  /** Share of a tooth that the second turn is beside the first. */
+  readonly toothError: number;
+  /** The error is small enough for the second turn to fall into the first. */
+  readonly tracks: boolean;
+};
+
+export type MapCandidate = {
+  readonly blankDiameter: Mm;
+  readonly fill: number;
+  readonly toothCount: number;
+  readonly state: State;
+};
+
+export type PlanMapNumbers = {
+  readonly limits: Window;
+  /** The likeliest first; the first few are numbered. */
+  readonly candidates: readonly MapCandidate[];
+  /** The tooth that the limits are drawn for: that of the first candidate. */
+  readonly tooth: {
+    readonly form: Form;
+    readonly sharpHeight: Mm;
+    readonly growthMean: number;
+    readonly process: Process;
+  };
+};
+
+export type PictureNumbers = {
+  readonly toothForm: ToothFormNumbers;
+  readonly trackingStrip: TrackingStripNumbers;
+  readonly setupSketch: SetupSketchNumbers;
+  readonly developedPattern: DevelopedPatternNumbers;
+  readonly planMap: PlanMapNumbers;
+};
+export type PictureKind = keyof PictureNumbers;
+export type PictureOf<K extends PictureKind> = {
+  readonly kind: K;
+  readonly numbers: PictureNumbers[K];
+};
+/** A closed union: a new kind of picture needs a drawing, words and alt text before it compiles. */
+export type Picture = { [K in PictureKind]: PictureOf<K> }[PictureKind];

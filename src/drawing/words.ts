@@ -1,0 +1,58 @@
+import type { PictureKind } from './numbers.ts';
+
+/** A name and the number that stands under it. */
+export type Named = { readonly name: string; readonly value: string };
+
+/** What a person reads in each picture; chosen and formatted by the phrase book. */
+export type WordsOf = {
+  readonly toothForm: {
+    readonly title: string;
+    readonly crest: Named;
+    readonly blank: Named;
+    readonly rise: Named | null;
+    readonly infeed: Named;
+    readonly height: Named;
+    readonly pitch: Named;
+    readonly flat: Named;
+    readonly wheel: string;
+    readonly shown: (teeth: number) => string;
+  };
+  readonly trackingStrip: {
+    readonly title: string;
+    readonly count: (teeth: number) => string;
+    readonly diameter: (value: number) => string;
+    readonly window: string;
+    readonly marks: readonly string[];
+    readonly next: string | null;
+    readonly broken: string;
+  };
+  readonly setupSketch: {
+    readonly title: string;
+    readonly length: string;
+    readonly stickout: string | null;
+    readonly chamfer: string;
+    readonly travel: string;
+    readonly nip: string;
+    readonly wheel: string;
+    readonly broken: string;
+  };
+  readonly developedPattern: {
+    readonly title: string;
+    readonly first: string;
+    readonly second: string | null;
+    readonly angle: string;
+    readonly pitch: string;
+    readonly shown: (teeth: number) => string;
+  };
+  readonly planMap: {
+    readonly title: string;
+    readonly diameter: (value: number) => string;
+    readonly diameterAxis: string;
+    readonly fill: (value: number) => string;
+    readonly fillAxis: string;
+    readonly band: string;
+    readonly states: string;
+    readonly candidates: readonly string[];
+  };
+};
+export type PictureWords = { [K in PictureKind]: WordsOf[K] }[PictureKind];
