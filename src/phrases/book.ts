@@ -4,6 +4,7 @@ import type { Contradiction, Refusal } from '../refusal.ts';
 import type { ChatPhrases, ConfigPhrases } from './chat.ts';
 import type { RecordsPhrases } from './records.ts';
 import type { Show } from './show.ts';
+import type { SlackPhrases } from './slack.ts';
 
 /** A figure with its name in front. */
 export type LabelledText = { readonly label: string; readonly text: string };
@@ -33,6 +34,7 @@ export type Book = {
   /** What a parameter is called, by its name. */
   readonly parameters: Readonly<Record<string, string>>;
   readonly chat: ChatPhrases;
+  readonly slack: SlackPhrases;
   readonly config: ConfigPhrases;
   readonly records: RecordsPhrases;
   readonly terminal: TerminalPhrases;

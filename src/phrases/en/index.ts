@@ -9,6 +9,7 @@ import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
 import { shopLabels } from './shopLines.ts';
+import { slack } from './slack.ts';
 import { verbs } from './verbs.ts';
 import { whyLabels } from './whyLines.ts';
 
@@ -49,6 +50,7 @@ export const en: Book = {
   verbs,
   parameters: THINGS,
   chat,
+  slack,
   config,
   records,
   terminal: {

@@ -1,0 +1,224 @@
+import type { Answer, Call, Desk } from '../../desk/index.ts';
+import type { Book, SpokenCard } from '../../phrases/index.ts';
+import type { Log } from '../common/log.ts';
+import type { Drawn } from '../common/pieces.ts';
+import { hasMoreCautions, sentence, spoken } from '../common/spoken.ts';
+import { faultText, isRefused } from './faults.ts';
+import { LIMITS } from './limits.ts';
+import type { Handle } from './receive.ts';
+import { controlButton, type ExtraButton, type Message, render } from './render.ts';
+import type { Sender, Where } from './send.ts';
+
+/** Draws what an answer shows; nothing where it shows nothing. */
+export type Draw = (answer: Answer) => Promise<readonly Drawn[]>;
+
+export type FlowOptions = {
+  readonly desk: Desk;
+  readonly book: Book;
+  readonly log: Log;
+  readonly draw: Draw;
+};
+
+/** What is to be shown, before anything is known of messages. */
+type Reply = {
+  readonly card: SpokenCard;
+  readonly isPrivate: boolean;
+  readonly extra: readonly ExtraButton[];
+  readonly pictures: () => Promise<readonly Drawn[]>;
+};
+
+const NO_PICTURES = () => Promise.resolve([]);
+
+const extrasOf = (answer: Answer, call: Call, book: Book): readonly ExtraButton[] => {
+  const common = { of: call.interactionId, isPrivate: call.place.isPrivate };
+  if (answer.kind === 'card')
+    return hasMoreCautions(answer)
+      ? [controlButton({ ...common, control: 'cautions' }, book.chat.cautions)]
+      : [];
+  const correctable = answer.text !== '' && answer.text.length <= LIMITS.inputText;
+  return correctable ? [controlButton({ ...common, control: 'correct' }, book.chat.correct)] : [];
+};
+
+const whereOf = (handle: Handle): Where | null =>
+  handle.channel === null ? null : { channel: handle.channel, thread: handle.thread };
+
+/** The ways a message can go, the one that shows it best first. */
+type Way = () => Promise<unknown>;
+
+export type Flow = ReturnType<typeof openFlow>;
+
+export const openFlow = ({ desk, book, log, draw }: FlowOptions) => {
+  const own = (card: SpokenCard, extra: readonly ExtraButton[] = []): Reply => ({
+    card,
+    isPrivate: true,
+    extra,
+    pictures: NO_PICTURES,
+  });
+
+  const replyOf = (call: Call, answer: Answer): Reply => ({
+    card: spoken(answer, book),
+    // A refusal is between the bot and whoever asked.
+    isPrivate: call.place.isPrivate || answer.kind === 'refusal',
+    extra: extrasOf(answer, call, book),
+    pictures: () => draw(answer),
+  });
+
+  const replyFor = async (call: Call, asked: Promise<Answer>): Promise<Reply> => {
+    try {
+      return replyOf(call, await asked);
+    } catch (error) {
+      log.fault('answer', { interaction: call.interactionId, fault: faultText(error), error });
+      return own(sentence(book.chat.fault));
+    }
+  };
+
+  /** Goes down the ways until one is open. */
+  const firstOpen = async (call: Call, ways: readonly Way[]): Promise<void> => {
+    let last: unknown = new Error('no way to reply');
+    for (const way of ways) {
+      try {
+        await way();
+        return;
+      } catch (error) {
+        log.note('way closed', { interaction: call.interactionId, fault: faultText(error) });
+        last = error;
+      }
+    }
+    throw last;
+  };
+
+  const privately = async (
+    sender: Sender,
+    handle: Handle,
+    call: Call,
+    messages: readonly Message[],
+    since: number,
+  ): Promise<void> => {
+    const where = whereOf(handle);
+    const { responseUrl: url, thread, person } = handle;
+    for (const [index, message] of messages.entries()) {
+      const key = `${call.interactionId}-${String(since + index)}`;
+      const respond = (address: string) => () =>
+        sender.respond(address, message, { isPrivate: true, thread });
+      await firstOpen(call, [
+        ...(url === null || index >= LIMITS.responses ? [] : [respond(url)]),
+        ...(where === null ? [] : [() => sender.whisper(where, person.id, message)]),
+        () => sender.direct(person.id, message, key),
+      ]);
+    }
+  };
+
+  const openly = async (
+    sender: Sender,
+    handle: Handle,
+    call: Call,
+    messages: readonly Message[],
+  ): Promise<boolean> => {
+    const where = whereOf(handle);
+    const { responseUrl: url, thread, person } = handle;
+    let isPosted = where !== null;
+    for (const [index, message] of messages.entries()) {
+      const key = `${call.interactionId}-${String(index)}`;
+      const direct = () => sender.direct(person.id, message, key);
+      if (where === null) {
+        await direct();
+        continue;
+      }
+      try {
+        await sender.post(where, message, key);
+      } catch (error) {
+        // Only where the bot may not write: after any other fault the post may stand already.
+        if (!isRefused(error, 'notThere')) throw error;
+        isPosted = false;
+        const respond = (address: string) => () =>
+          sender.respond(address, message, { isPrivate: false, thread });
+        await firstOpen(call, [...(url === null ? [] : [respond(url)]), direct]);
+      }
+    }
+    return isPosted;
+  };
+
+  /** A card without its picture still says everything: a fault here is counted, not told. */
+  const pictures = async (
+    sender: Sender,
+    handle: Handle,
+    call: Call,
+    reply: Reply,
+  ): Promise<void> => {
+    const where = whereOf(handle);
+    if (where === null) return;
+    try {
+      for (const drawn of await reply.pictures()) await sender.picture(where, drawn);
+    } catch (error) {
+      log.fault('picture', { interaction: call.interactionId, fault: faultText(error) });
+    }
+  };
+
+  const deliver = async (
+    sender: Sender,
+    handle: Handle,
+    call: Call,
+    reply: Reply,
+  ): Promise<void> => {
+    const messages = render({
+      card: reply.card,
+      of: call.interactionId,
+      wasPrivate: call.place.isPrivate,
+      extra: reply.extra,
+    });
+    if (reply.isPrivate) {
+      await privately(sender, handle, call, messages, 0);
+      return;
+    }
+    if (await openly(sender, handle, call, messages)) await pictures(sender, handle, call, reply);
+  };
+
+  /** Nothing more than one short sentence is left to say, by whichever way is still open. */
+  const EXCUSE_FROM = 900;
+  const sending = async (
+    sender: Sender,
+    handle: Handle,
+    call: Call,
+    reply: Reply,
+  ): Promise<void> => {
+    try {
+      await deliver(sender, handle, call, reply);
+    } catch (error) {
+      log.fault('send', { interaction: call.interactionId, fault: faultText(error) });
+      const messages = render({
+        card: sentence(book.chat.fault),
+        of: call.interactionId,
+        wasPrivate: true,
+      });
+      await privately(sender, handle, call, messages, EXCUSE_FROM).catch((second: unknown) => {
+        log.fault('excuse', { interaction: call.interactionId, fault: faultText(second) });
+      });
+    }
+  };
+
+  return {
+    /** Asks the desk and sends what it says. */
+    answer: async (sender: Sender, handle: Handle, call: Call): Promise<void> => {
+      await sending(sender, handle, call, await replyFor(call, desk.answer(call)));
+    },
+
+    /** Sends what the desk was asked before. */
+    send: async (
+      sender: Sender,
+      handle: Handle,
+      call: Call,
+      asked: Promise<Answer>,
+    ): Promise<void> => {
+      await sending(sender, handle, call, await replyFor(call, asked));
+    },
+
+    /** Something said to this person without asking the desk. */
+    say: (
+      sender: Sender,
+      handle: Handle,
+      call: Call,
+      card: SpokenCard,
+      extra: readonly ExtraButton[] = [],
+    ): Promise<void> => sending(sender, handle, call, own(card, extra)),
+  };
+};

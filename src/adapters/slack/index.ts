@@ -1,0 +1,94 @@
+import type { Desk } from '../../desk/index.ts';
+import type { Book } from '../../phrases/index.ts';
+import type { Log } from '../common/log.ts';
+import { type Once, onceInProcess } from '../common/once.ts';
+import {
+  type Connecting,
+  type Connection,
+  connectHttp,
+  connectSocket,
+  installationOf,
+  type Listen,
+  loggerFor,
+} from './connect.ts';
+import { faultText } from './faults.ts';
+import { type Draw, openFlow } from './flow.ts';
+import { listen } from './listen.ts';
+import { interactionOf } from './receive.ts';
+
+export { TokenRefused } from './connect.ts';
+export { manifestFor } from './manifest.ts';
+
+export type SlackOptions = {
+  /** One for each workspace that the bot is in. */
+  readonly botTokens: readonly string[];
+  readonly by: { readonly appToken: string } | Listen;
+  /** Of a proxy or a local counterpart; the socket's address comes from it. */
+  readonly api?: string | undefined;
+  readonly desk: Desk;
+  readonly book: Book;
+  readonly log: Log;
+  readonly draw?: Draw;
+  /** Of the records, where several processes share the work. */
+  readonly once?: Once;
+  readonly formPatienceMs?: number;
+};
+
+export type Slack = {
+  /** How many workspaces it is in. */
+  readonly shops: number;
+  readonly stop: () => Promise<void>;
+};
+
+/** Judgement: of the three seconds there are, half for the answer and half for the way. */
+const FORM_PATIENCE_MS = 1_500;
+
+/** Every interaction goes on only once, however often it comes. */
+const onlyOnce = ({ app }: Connection, once: Once, log: Log): void => {
+  app.use(async ({ body, context, next, ...rest }) => {
+    const id = interactionOf(body);
+    if (id === null || (await once(`${context.teamId ?? ''} ${id}`))) {
+      await next();
+      return;
+    }
+    log.note('repeated', { interaction: id });
+    if ('ack' in rest && typeof rest.ack === 'function') await rest.ack();
+  });
+};
+
+/** Connects, and answers until stopped. */
+export const openSlack = async (options: SlackOptions): Promise<Slack> => {
+  const { by, api, desk, book, log, once = onceInProcess() } = options;
+  const logger = loggerFor(log);
+  const installations = await Promise.all(
+    options.botTokens.map((token) => installationOf(token, api, logger)),
+  );
+  const connecting: Connecting = { installations, api, log, logger };
+  const connection =
+    'appToken' in by ? connectSocket(connecting, by.appToken) : connectHttp(connecting, by);
+  const busy = new Set<Promise<void>>();
+  /** Nothing that happens to one event may end the program. */
+  const keep = (what: string, work: Promise<void>): void => {
+    const watched = work
+      .catch((error: unknown) => log.fault(what, { fault: faultText(error), error }))
+      .finally(() => busy.delete(watched));
+    busy.add(watched);
+  };
+  const draw = options.draw ?? (() => Promise.resolve([]));
+  const formPatienceMs = options.formPatienceMs ?? FORM_PATIENCE_MS;
+  const flow = openFlow({ desk, book, log, draw });
+  onlyOnce(connection, once, log);
+  listen(connection.app, { desk, book, log, flow, keep, formPatienceMs });
+  connection.app.error((error) => {
+    log.fault('event', { fault: faultText(error), error });
+    return Promise.resolve();
+  });
+  await connection.start();
+  return {
+    shops: installations.length,
+    stop: async () => {
+      await Promise.allSettled(busy);
+      await connection.stop();
+    },
+  };
+};

@@ -1,0 +1,22 @@
+/** What only Slack has a place for: the app's own page, its forms, its home. */
+export type SlackPhrases = {
+  readonly appName: string;
+  readonly appDescription: string;
+  readonly slash: (root: string) => string;
+  readonly fromMessageDescription: string;
+  readonly setupShortcut: string;
+  readonly setupDescription: string;
+  /** Typed at either end of a line, it hides the reply. */
+  readonly onlyMeWords: string;
+  readonly audience: string;
+  readonly moreWords: string;
+  readonly send: string;
+  readonly cancel: string;
+  readonly choose: string;
+  readonly home: string;
+  /** Slack gave the form no time to open. */
+  readonly formLate: string;
+  /** Where a form cannot open by itself. */
+  readonly formNeeded: string;
+  readonly openForm: string;
+};
