@@ -13,14 +13,11 @@ export const freeCallout: Reader<Callout> = (cursor) => {
   if (token === undefined) return null;
   const found = readCallout(plainText(cursor.text).slice(token.start));
   if (found === null) return null;
-  if ('problem' in found)
-    return refused({
-      code: 'unreadable',
-      word: cursor.text.slice(token.start, token.end),
-      start: token.start,
-      end: token.end,
-      nearest: found.nearest,
-    });
+  if ('problem' in found) {
+    const [start, end] = [token.start + found.start, token.start + found.end];
+    const word = cursor.text.slice(start, end);
+    return refused({ code: 'unreadable', word, start, end, nearest: found.nearest });
+  }
   const { callout, length } = found;
   if (!SPELT_BY_STANDARD.has(callout.standard) && !NAMES_STANDARD.test(token.text)) return null;
   const end = token.start + length;

@@ -302,6 +302,10 @@ export const choicesOf = (
 ): readonly Suggestion[] => {
   if (fault.choices !== undefined) return fault.choices;
   if (fault.refusal.code === 'unclear') return fault.refusal.readings;
+  if (fault.refusal.code === 'unreadable') {
+    const { nearest, start, end } = fault.refusal;
+    return nearest.map((by) => readAs(text, { start, end }, by));
+  }
   if (fault.refusal.code === 'missing')
     return fault.refusal.examples.map((example) => ({
       label: example,

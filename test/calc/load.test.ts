@@ -254,9 +254,10 @@ describe('senseless input names both values', () => {
     throw new Error('it was not refused');
   };
 
-  it('a bore larger than the blank', () => {
+  it('a bore larger than the bar, or than the blank it is turned to', () => {
     const { diameter } = work().blank;
-    expect(refused({ bore: mm(26) })).toMatchObject({ what: 'bore', value: 26, max: diameter });
+    expect(refused({ bore: mm(26) })).toMatchObject({ what: 'bore', value: 26, max: inch(1) });
+    expect(refused({ bore: mm(25.2) })).toMatchObject({ what: 'bore', value: 25.2, max: diameter });
   });
 
   it('a wall under the groove root thinner than the tooth', () => {

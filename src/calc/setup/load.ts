@@ -120,7 +120,10 @@ const bearingWidth = (p: Pressing): Mm => {
 const refuseSenseless = (p: Pressing): void => {
   const { bore, stickout, stockLength } = p.request;
   if (bore !== null) {
-    if (!(bore >= 0 && bore < p.diameter)) throw new OutOfRange('bore', bore, 0, p.diameter, 'mm');
+    // The diameter that was said is named before the one it is turned to.
+    const { stock } = p.request;
+    const outside = stock !== null && bore >= stock ? stock : p.diameter;
+    if (!(bore >= 0 && bore < outside)) throw new OutOfRange('bore', bore, 0, outside, 'mm');
     const wall = wallOf(p, bore);
     if (wall < p.tooth.height)
       throw new OutOfRange('wall', wall, p.tooth.height, LARGEST_DIAMETER / 2, 'mm');

@@ -176,6 +176,8 @@ const formsOfPattern = (pattern: Pattern): readonly DinForm[] =>
 const LOOKS_LIKE_A_FORM = /^(?:R[BGK][A-Z]?|RA[^ADGMNPSTWY])$/u;
 
 const unknownForm = (pieces: readonly Piece[]): UnknownForm | null => {
+  // A number before the callout is the bar: the callout itself is read from its own first word on.
+  if (pieces[0]?.is === 'number') return null;
   const din = pieces.find((piece) => piece.is === 'standard' && piece.standard === 'din82');
   const letters = first(pieces, 'letters');
   const at = letters === null ? -1 : pieces.indexOf(letters);

@@ -59,9 +59,11 @@ type Because = (refusal: OutOfRangeRefusal, print: (value: number) => string) =>
 /** Where both values come from the person, the sentence names both. */
 const BECAUSE: Readonly<Record<string, Because>> = {
   bore: ({ value, max }, print) =>
-    `The bore, ${print(value)}, does not fit into the blank, ${print(max)}. Type a smaller bore, or the right diameter.`,
+    `The bore, ${print(value)}, is not smaller than the diameter, ${print(max)}. Type a smaller bore, or the right diameter.`,
   wall: ({ value, min }, print) =>
-    `The wall left under the teeth, ${print(value)}, is thinner than the tooth is high, ${print(min)}. Take a finer pitch, less fill or a smaller bore.`,
+    value <= 0
+      ? `The bore reaches ${print(-value)} into the teeth; the wall under them has to be ${print(min)} at least, as thick as the tooth is high. Take a smaller bore, or a finer pitch.`
+      : `The wall left under the teeth, ${print(value)}, is thinner than the tooth is high, ${print(min)}. Take a finer pitch, less fill or a smaller bore.`,
   stickout: ({ value, min, max }, print) =>
     value < min
       ? `The stickout, ${print(value)}, is shorter than the knurl, ${print(min)}. Type a longer stickout or a shorter knurl.`
