@@ -7,9 +7,10 @@ const rooms = {
   calc: {},
   words: { values: ['calc'] },
   drawing: { values: ['calc'] },
-  card: { types: ['calc'] },
+  // What a picture is drawn from, and the words it needs, are said by the drawing.
+  card: { types: ['calc', 'drawing'] },
   // Quantities are converted at the two edges, words and phrases, by the one set of conversions.
-  phrases: { values: ['card', 'calc/units'], types: ['calc'] },
+  phrases: { values: ['card', 'calc/units'], types: ['calc', 'drawing'] },
   store: {},
   shop: { values: ['store', 'calc'], types: ['card'] },
   desk: { values: ['card', 'words', 'phrases', 'shop'] },

@@ -23,6 +23,7 @@ import {
   row,
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
+import { planPictures } from './pictures.ts';
 import type { CribKind, PlanWords } from './planFields.ts';
 import { reworded } from './words.ts';
 
@@ -198,7 +199,7 @@ export const planCard = (p: Planned): Card => {
       { part: 'footing' },
     ],
     choices: choices(p),
-    pictures: [],
+    pictures: planPictures(p.request, p.limits, listed(p)),
     figures: figuresOf(best),
     checks: best?.checks ?? [],
     cautions: STANDING_CAUTIONS,

@@ -26,6 +26,7 @@ import {
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
 import { partOf } from '../../src/words/index.ts';
+import { setupPictures } from './pictures.ts';
 import type { SetupWords } from './setupParameters.ts';
 import { reworded } from './words.ts';
 
@@ -329,7 +330,7 @@ export const setupCard = (w: Worked): Card => ({
   headline: headline(w),
   parts: parts(w),
   choices: choices(w),
-  pictures: [],
+  pictures: setupPictures(w.request, w.result),
   figures: w.result.figures,
   checks: w.result.checks,
   cautions: w.result.cautions,

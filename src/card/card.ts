@@ -1,4 +1,5 @@
 import type { CautionId, Check, CheckAlternative, Figures, Way } from '../calc/index.ts';
+import type { Picture } from '../drawing/index.ts';
 import type { Label, Line, Row } from './lines.ts';
 
 /** A button: what it says and the line it sends. */
@@ -10,10 +11,7 @@ export type Choice = {
 };
 
 /** A drawing that answers the card's question; its words are said by the phrase book. */
-export type Picture = {
-  readonly kind: 'toothForm' | 'trackingStrip';
-  readonly figures: Figures;
-};
+export type { Picture } from '../drawing/index.ts';
 
 /**
  * The parts of a reply in reading order. Semantic, not visual: no markup, no colour, no unit

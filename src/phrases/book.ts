@@ -3,6 +3,7 @@ import type { LabelId, Labels, LineId, Lines, RowId, Rows } from '../card/index.
 import type { Contradiction, Refusal } from '../refusal.ts';
 import type { ChatPhrases, ConfigPhrases } from './chat.ts';
 import type { RecordsPhrases } from './records.ts';
+import type { PicturePhrases } from './pictures.ts';
 import type { Show } from './show.ts';
 import type { SlackPhrases } from './slack.ts';
 
@@ -37,6 +38,7 @@ export type Book = {
   readonly slack: SlackPhrases;
   readonly config: ConfigPhrases;
   readonly records: RecordsPhrases;
+  readonly pictures: PicturePhrases;
   readonly terminal: TerminalPhrases;
 };
 
@@ -47,4 +49,7 @@ export type TerminalPhrases = {
   readonly usage: string;
   readonly unitsArgument: string;
   readonly fault: string;
+  readonly pictureAt: (path: string) => string;
+  /** Nothing is missing but the picture. */
+  readonly noPicture: string;
 };

@@ -5,6 +5,7 @@ import { checks } from './checks.ts';
 import { lines } from './lines.ts';
 import { materialName, THINGS } from './names.ts';
 import { records } from './records.ts';
+import { pictures } from './pictures.ts';
 import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
@@ -53,6 +54,7 @@ export const en: Book = {
   slack,
   config,
   records,
+  pictures,
   terminal: {
     opening: [
       'Wholetooth, local channel: type a bar, a pattern and a pitch, such as 1.000 straight 21tpi 1018.',
@@ -63,5 +65,7 @@ export const en: Book = {
       'Give one line in quotes, such as: npm run --silent ask -- "/knurl 1.000 straight 21tpi 1018"',
     unitsArgument: '--units takes in or mm.',
     fault: 'Something went wrong here, not in what you typed. Nothing was changed; send it again.',
+    pictureAt: (path) => `Picture: ${path}`,
+    noPicture: 'The picture could not be made. Nothing else is missing from the card.',
   },
 };
