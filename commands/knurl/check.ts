@@ -1,4 +1,12 @@
-import { checkAfter, checkBlank, mm, type SetupRequest, seamTest } from '../../src/calc/index.ts';
+import {
+  checkAfter,
+  checkBlank,
+  type Mm,
+  mm,
+  OutOfRange,
+  type SetupRequest,
+  seamTest,
+} from '../../src/calc/index.ts';
 import {
   type Context,
   cardReply,
@@ -9,9 +17,17 @@ import {
 import { afterCard, blankCard, seamCard } from './checkCards.ts';
 import { type CheckWords, checkFields } from './checkFields.ts';
 import { requestOf } from './request.ts';
+import { reworded } from './words.ts';
 
 const isAfter = (said: CheckWords): boolean =>
   [said.crest, said.height, said.flat, said.flats, said.count].some((each) => each !== undefined);
+
+/** The bar that was said; a bore that is no smaller makes no sense of it. */
+const barOf = ({ stock, bore }: SetupRequest): Mm | null => {
+  if (stock !== null && bore !== null && bore >= stock)
+    throw new OutOfRange('bore', bore, 0, stock, 'mm');
+  return stock;
+};
 
 const seamReply = (
   context: Context,
@@ -19,22 +35,24 @@ const seamReply = (
   request: SetupRequest,
   gap: number,
 ): Reply => {
-  if (request.stock === null) return missingDiameter();
-  const result = seamTest(request, request.stock, {
+  const diameter = barOf(request);
+  if (diameter === null) return missingDiameter(context);
+  const result = seamTest(request, diameter, {
     gap,
     scrap: said.scrap === true,
     count: said.count ?? null,
   });
-  return cardReply(seamCard({ context, said, request, diameter: request.stock, result }));
+  return cardReply(seamCard({ context, said, request, diameter, result }));
 };
 
 const afterReply = (context: Context, said: CheckWords, request: SetupRequest): Reply => {
-  if (request.stock === null) return missingDiameter();
+  const blank = barOf(request);
+  if (blank === null) return missingDiameter(context);
   const { flats } = said;
   const result = checkAfter(
     { ...request, asIs: true },
     {
-      blank: request.stock,
+      blank,
       teeth: said.count ?? null,
       crest: said.crest === undefined ? null : mm(said.crest),
       toothHeight: said.height === undefined ? null : mm(said.height),
@@ -42,21 +60,34 @@ const afterReply = (context: Context, said: CheckWords, request: SetupRequest): 
       ends:
         flats === undefined
           ? null
-          : { near: mm(flats.near), far: mm(flats.far), distance: mm(flats.distance) },
+          : {
+              near: mm(flats.near),
+              far: mm(flats.far),
+              distance: mm(flats.distance),
+            },
     },
   );
-  return cardReply(afterCard({ context, said, request, diameter: request.stock, result }));
+  return cardReply(afterCard({ context, said, request, diameter: blank, result }));
 };
 
-const missingDiameter = (): Reply =>
-  refuse({ code: 'missing', parameter: 'diameter', examples: ['1.000', '7/8', '19mm'] });
+const missingDiameter = (context: Context): Reply => {
+  const examples = context.units === 'in' ? ['1.000', '7/8', '19mm'] : ['20', '25.4', '3/4 in'];
+  return refuse(
+    { code: 'missing', parameter: 'diameter', examples },
+    examples.map((example) => ({
+      label: example,
+      words: reworded(context, [], example),
+    })),
+  );
+};
 
 const checked = (context: Context, said: CheckWords, request: SetupRequest): Reply => {
   if (said.seam !== undefined) return seamReply(context, said, request, said.seam);
   if (isAfter(said)) return afterReply(context, said, request);
-  if (request.stock === null) return missingDiameter();
-  const result = checkBlank(request, request.stock);
-  return cardReply(blankCard({ context, said, request, diameter: request.stock, result }));
+  const diameter = barOf(request);
+  if (diameter === null) return missingDiameter(context);
+  const result = checkBlank(request, diameter);
+  return cardReply(blankCard({ context, said, request, diameter, result }));
 };
 
 /** Before, at the seam, and after: is this right, and what now. */

@@ -4,11 +4,18 @@ import {
   type CautionId,
   CHOSEN_CAUTIONS,
   type CheckFigures,
+  firstBite,
+  MM_PER_INCH,
   type Mm,
   mm,
   type SeamCheck,
   type SetupRequest,
   STANDING_CAUTIONS,
+  sharpHeight,
+  standardDp,
+  TRACKS_WITHIN,
+  trackingWindow,
+  type Window,
   waysOfCheck,
 } from '../../src/calc/index.ts';
 import {
@@ -23,6 +30,7 @@ import {
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
 import type { CheckWords } from './checkFields.ts';
+import { checkPictures } from './pictures.ts';
 import { reworded } from './words.ts';
 
 /** What a check's card is made from. */
@@ -52,17 +60,43 @@ const otherUnits = ({ context, said }: Checked<unknown>): Choice => {
   };
 };
 
+/** What only a check can say; without it the line is that of a set-up. */
+const CHECK_WORDS = ['seam', 'count', 'scrap', 'crest', 'height', 'flat', 'flats'] as const;
+
+/** Decimals that a diameter is typed with: fine enough that no rounding moves a count. */
+const TYPED = { in: 4, mm: 3 } as const;
+
+const typedLength = ({ context }: Checked<unknown>, length: Mm): string =>
+  context.units === 'in'
+    ? `${(length / MM_PER_INCH).toFixed(TYPED.in)} in`
+    : `${length.toFixed(TYPED.mm)} mm`;
+
+/** A diameter and its count, said so that the wheel is taken by them from now on. */
+const pairWords = (c: Checked<unknown>, count: number, diameter: Mm): string =>
+  `proven ${String(count)} at ${typedLength(c, diameter)}`;
+
+const BLANK_WORDS = ['diameter', 'asIs', 'teeth'] as const;
+
+/** The set-up card of this blank, left as it is; said without what only a check reads. */
+const setUpAt = (c: Checked<unknown>, diameter: Mm, pair = ''): Choice => {
+  const without = [...CHECK_WORDS, ...BLANK_WORDS, ...(pair === '' ? [] : ['proven'])];
+  const more = `${typedLength(c, diameter)} as-is ${pair}`;
+  const words = reworded(c.context, without, more).replace(/^(?:\/?knurl\s+)?check\b\s*/iu, '');
+  return { label: label('setUpAt', { diameter }), words: `/knurl ${words}` };
+};
+
 const cardOf = (
   c: Checked<BlankCheck | SeamCheck | AfterCheck>,
   headline: Line,
   parts: readonly Part[],
   cautions: readonly CautionId[],
+  choices: readonly Choice[],
 ): Card => ({
   verb: 'check',
   headline,
   parts: [...parts, cautionPart(cautions), { part: 'footing' }],
-  choices: [otherUnits(c)],
-  pictures: [],
+  choices: [...choices, otherUnits(c)],
+  pictures: checkPictures(c.diameter, c.result),
   figures: c.result.figures,
   checks: c.result.checks,
   cautions,
@@ -71,12 +105,15 @@ const cardOf = (
   units: c.said.units ?? c.context.units,
 });
 
-const blankHeadline = ({ diameter, result }: Checked<BlankCheck>): Line => {
-  const { figures, checks } = result;
+const tracks = ({ result }: Checked<BlankCheck>): boolean =>
+  result.checks.every((check) => check.name !== 'tracking' || check.state === 'fine');
+
+const blankHeadline = (c: Checked<BlankCheck>): Line => {
+  const { figures } = c.result;
+  const { diameter } = c;
   const toothCount = figureOf(figures, 'toothCount') ?? 0;
   const toothError = figureOf(figures, 'toothError') ?? 0;
-  const tracks = checks.every((check) => check.name !== 'tracking' || check.state === 'fine');
-  if (tracks)
+  if (tracks(c))
     return line('blankTracks', {
       diameter,
       toothCount,
@@ -96,55 +133,125 @@ const blankHeadline = ({ diameter, result }: Checked<BlankCheck>): Line => {
   });
 };
 
-const blankLines = ({ result }: Checked<BlankCheck>): readonly Line[] => {
-  const low = figureOf(result.figures, 'blankWindowLow');
-  const high = figureOf(result.figures, 'blankWindowHigh');
-  const chance = figureOf(result.figures, 'chanceTracks');
+/** The window of the count the headline tells: a bar cannot be turned up to a larger one. */
+const windowTold = (c: Checked<BlankCheck>): Window | null => {
+  const { pitch, knurlClass } = c.request;
+  const { figures } = c.result;
+  const teeth = figureOf(figures, tracks(c) ? 'toothCount' : 'nextToothCount');
+  return teeth === null
+    ? null
+    : trackingWindow({
+        teeth,
+        transversePitch: c.result.pitch.transverse,
+        dp: pitch?.system === 'dp' ? standardDp(pitch.value) : null,
+        knurlClass,
+      });
+};
+
+const blankLines = (c: Checked<BlankCheck>): readonly Line[] => {
+  const { figures } = c.result;
+  const window = windowTold(c);
+  const chance = figureOf(figures, 'chanceTracks');
+  const doubted = tracks(c) && doubtsWheel(c);
   return [
-    ...(low === null || high === null
+    ...(tracks(c)
       ? []
-      : [line('windowTracks', { low: mm(low), high: mm(high) })]),
-    ...(chance === null ? [] : [line('chanceTracks', { chance })]),
+      : [
+          line('blankIsOff', {
+            diameter: c.diameter,
+            toothCount: figureOf(figures, 'toothCount') ?? 0,
+            toothError: figureOf(figures, 'toothError') ?? 0,
+          }),
+        ]),
+    ...(window === null ? [] : [line('windowTracks', window)]),
+    ...(chance === null || !doubted ? [] : [line('chanceTracks', { chance })]),
   ];
 };
 
-const seamSteps = (figures: CheckFigures): readonly Line[] => {
-  const bite = figureOf(figures, 'firstBite');
-  return ([1, 2, 3, 4] as const).map((step) =>
-    line('seamStep', { step, bite: bite === null ? null : mm(bite) }),
-  );
-};
+const seamSteps = (bite: Mm): readonly Line[] =>
+  ([1, 2, 3, 4] as const).map((step) => line('seamStep', { step, bite }));
+
+/** Infeed of the trial turn, the same as the first turn's. */
+const trialBite = ({ request, result }: Checked<{ pitch: BlankCheck['pitch'] }>): Mm =>
+  firstBite(sharpHeight(result.pitch.normal, request.included), TRACKS_WITHIN);
 
 /** Where the wheel's label leaves the count open, the seam test settles it. */
 const doubtsWheel = ({ result }: Checked<BlankCheck>): boolean =>
   result.checks.some((check) => check.name === 'wheel' && check.state !== 'fine');
 
 /** Before a wheel touches the blank. */
-export const blankCard = (c: Checked<BlankCheck>): Card =>
-  cardOf(
+export const blankCard = (c: Checked<BlankCheck>): Card => {
+  const next = figureOf(c.result.figures, 'nextDiameter');
+  const to = tracks(c) ? c.diameter : next === null ? null : mm(next);
+  return cardOf(
     c,
     blankHeadline(c),
     [
       { part: 'lines', lines: blankLines(c) },
       { part: 'checks', checks: c.result.checks },
-      { part: 'lines', lines: doubtsWheel(c) ? seamSteps(c.result.figures) : [] },
+      { part: 'lines', lines: doubtsWheel(c) ? seamSteps(trialBite(c)) : [] },
     ],
     STANDING_CAUTIONS,
+    to === null ? [] : [setUpAt(c, to)],
   );
+};
 
-const seamLines = ({ said, result, diameter }: Checked<SeamCheck>): readonly Line[] => {
+/** The pair that proves the wheel: the whole count, and the diameter on which it closes. */
+const provenPair = ({
+  result,
+}: Checked<SeamCheck>): {
+  readonly count: number;
+  readonly diameter: Mm;
+} | null => {
+  const count = figureOf(result.figures, 'nextToothCount');
+  const diameter = figureOf(result.figures, 'nextDiameter');
+  const isProven = figureOf(result.figures, 'effectivePitch') !== null;
+  return !isProven || count === null || diameter === null
+    ? null
+    : { count, diameter: mm(diameter) };
+};
+
+/** A count that no doubt about the wheel covers, by more than one tooth. */
+const countIsFar = ({ said, result }: Checked<SeamCheck>): boolean => {
+  const expected = figureOf(result.figures, 'toothCount') ?? 0;
+  const doubt = figureOf(result.figures, 'countDoubt') ?? 0;
+  return said.count !== undefined && Math.abs(said.count - expected) > doubt + 1 + 1e-9;
+};
+
+const seamLines = (c: Checked<SeamCheck>): readonly Line[] => {
+  const { said, result } = c;
   const { figures } = result;
   const chance = figureOf(figures, 'chanceTracks');
   const byLabel = figureOf(figures, 'seamLabelChance');
   const effective = figureOf(figures, 'effectivePitch');
+  const pair = provenPair(c);
+  const expected = figureOf(figures, 'toothCount') ?? 0;
+  if (countIsFar(c)) return [line('seamCountFar', { count: said.count ?? 0, expected })];
   return [
     ...(chance === null || byLabel === null ? [] : [line('seamChance', { chance, byLabel })]),
     ...(result.kind === 'closes' && said.scrap !== true ? [] : [line('seamMarksStay', {})]),
-    ...(effective === null
+    ...(effective === null || pair === null
       ? []
-      : [line('seamProven', { effectivePitch: mm(effective), count: said.count ?? 0, diameter })]),
+      : [line('seamProven', { effectivePitch: mm(effective), ...pair })]),
   ];
 };
+
+const seamChoices = (c: Checked<SeamCheck>, left: Mm): readonly Choice[] => {
+  if (countIsFar(c))
+    return [
+      {
+        label: label('withoutCount', {}),
+        words: reworded(c.context, ['count'], ''),
+      },
+    ];
+  const pair = provenPair(c);
+  if (pair === null) return [setUpAt(c, left)];
+  return [setUpAt(c, left, pairWords(c, pair.count, pair.diameter))];
+};
+
+/** The label no longer counts once the seam has spoken: only a wheel that is proven is named. */
+const seamChecks = ({ result }: Checked<SeamCheck>): SeamCheck['checks'] =>
+  result.checks.filter((check) => check.name !== 'wheel' || check.state === 'fine');
 
 /** How much the trial turn says is to come off. */
 export const seamCard = (c: Checked<SeamCheck>): Card => {
@@ -155,15 +262,17 @@ export const seamCard = (c: Checked<SeamCheck>): Card => {
     kind === 'whole'
       ? line('seamWhole', { diameter: c.diameter })
       : line('seamTurnTo', { diameter: left, takeOff });
+  const result = { ...c.result, checks: seamChecks(c) };
   return cardOf(
-    c,
+    { ...c, result },
     headline,
     [
       { part: 'lines', lines: seamLines(c) },
-      { part: 'checks', checks: c.result.checks },
-      { part: 'lines', lines: seamSteps(figures) },
+      { part: 'checks', checks: result.checks },
+      { part: 'lines', lines: seamSteps(trialBite(c)) },
     ],
     c.result.cautions,
+    seamChoices(c, left),
   );
 };
 
@@ -195,29 +304,71 @@ const rescueLines = ({ result }: Checked<AfterCheck>): readonly Line[] => {
   const { cleaned, blank, meetsPrint } = rescue;
   return blank === null
     ? [line('noRescue', { cleaned })]
-    : [line('rescue', { cleaned, diameter: blank.diameter, toothCount: blank.teeth, meetsPrint })];
+    : [
+        line('rescue', {
+          cleaned,
+          diameter: blank.diameter,
+          toothCount: blank.teeth,
+          meetsPrint,
+        }),
+      ];
+};
+
+const thisPartLines = ({ result }: Checked<AfterCheck>): readonly Line[] =>
+  result.thisPart.filter((move) => move.id !== 'keep').map((move) => line('thisPart', { move }));
+
+const nextPartLines = ({ result, diameter, said }: Checked<AfterCheck>): readonly Line[] => {
+  const fill = figureOf(result.figures, 'fillExpected') ?? 0;
+  const flat = mm(result.pitch.normal * (1 - fill));
+  const expected = figureOf(result.figures, 'countExpected') ?? 0;
+  const differs = result.checks.some(
+    ({ name, reason }) => name === 'count' && reason === 'wheelDiffers',
+  );
+  return result.nextPart.map((move) =>
+    move.id === 'turnBlank' && differs && move.number !== null && said.finish === undefined
+      ? line('nextCount', {
+          blank: diameter,
+          counted: said.count ?? expected,
+          diameter: mm(move.number),
+          expected,
+        })
+      : line('nextPart', { move, flat }),
+  );
+};
+
+const afterHeadline = ({ result, diameter, said }: Checked<AfterCheck>): Line => {
+  const [move] = result.thisPart;
+  const expected = figureOf(result.figures, 'countExpected') ?? 0;
+  return result.right || move === undefined
+    ? line('partRight', { blank: diameter, toothCount: said.count ?? expected })
+    : line('partOff', { off: result.off, move });
+};
+
+/** A part that is spoiled is turned down where that helps; the next one is set up. */
+const afterChoices = (c: Checked<AfterCheck>): readonly Choice[] => {
+  const { result, said, diameter } = c;
+  const { rescue } = result;
+  const down = result.thisPart.some((move) => move.id === 'turnDown');
+  const count = result.checks.find((check) => check.name === 'count');
+  const isProven = count?.reason === 'asExpected' || count?.reason === 'wheelDiffers';
+  const pair = isProven && said.count !== undefined ? pairWords(c, said.count, diameter) : '';
+  const smaller = down ? (rescue?.blank?.diameter ?? null) : null;
+  return [...(smaller === null ? [] : [setUpAt(c, smaller, pair)]), setUpAt(c, diameter, pair)];
 };
 
 /** The finished part: right or not, what is off, and what to do. */
-export const afterCard = (c: Checked<AfterCheck>): Card => {
-  const { result, diameter } = c;
-  const toothCount = figureOf(result.figures, 'countExpected') ?? 0;
-  const headline = result.right
-    ? line('partRight', { blank: diameter, toothCount })
-    : line('partOff', { off: result.off });
-  const moves: readonly Line[] = [
-    ...result.thisPart.map((move) => line('thisPart', { move })),
-    ...result.nextPart.map((move) => line('nextPart', { move })),
-    ...rescueLines(c),
-  ];
-  return cardOf(
+export const afterCard = (c: Checked<AfterCheck>): Card =>
+  cardOf(
     c,
-    headline,
+    afterHeadline(c),
     [
-      { part: 'lines', lines: moves },
+      {
+        part: 'lines',
+        lines: [...thisPartLines(c), ...nextPartLines(c), ...rescueLines(c)],
+      },
       { part: 'rows', rows: afterRows(c) },
-      { part: 'checks', checks: result.checks },
+      { part: 'checks', checks: c.result.checks },
     ],
     STANDING_CAUTIONS,
+    afterChoices(c),
   );
-};

@@ -19,6 +19,7 @@ import {
 import { planCard } from './planCard.ts';
 import { type CribKind, type PlanWords, planFields } from './planFields.ts';
 import { requestOf } from './request.ts';
+import { reworded } from './words.ts';
 
 /** The wheel that was named, as the only one in the crib. */
 const namedWheel = (request: SetupRequest): CribWheel => ({
@@ -43,12 +44,16 @@ const cribFor = (
     ? { crib: [...dinCrib(), ...dpCrib()], kind: 'byStandard' }
     : { crib: [namedWheel(request)], kind: 'oneWheel' };
 
-const missingFinish = ({ units }: Context): Reply =>
-  refuse({
-    code: 'missing',
-    parameter: 'finish',
-    examples: units === 'in' ? ['finish 0.995-1.005'] : ['finish 19.8-20.0'],
-  });
+const missingFinish = (context: Context): Reply => {
+  const examples = context.units === 'in' ? ['finish 0.995-1.005'] : ['finish 19.8-20.0'];
+  return refuse(
+    { code: 'missing', parameter: 'finish', examples },
+    examples.map((example) => ({
+      label: example,
+      words: reworded(context, ['finish'], example),
+    })),
+  );
+};
 
 const planned = (context: Context, given: PlanWords, request: SetupRequest): Reply => {
   const { finish } = request;

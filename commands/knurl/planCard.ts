@@ -7,6 +7,7 @@ import {
   type Pitch,
   type Plan,
   type PlanChange,
+  type RemedyKind,
   type SetupRequest,
   STANDING_CAUTIONS,
   type Way,
@@ -103,7 +104,12 @@ const wheelWords = ({ wheel }: Candidate): string => {
 const degreesOf = (angle: number): string => String(Math.round((angle * 180) / Math.PI));
 
 /** The line that works this candidate out in full. */
-const setupWords = (p: Planned, candidate: Candidate): string => {
+const setupWords = (
+  p: Planned,
+  candidate: Candidate,
+  without: readonly string[] = [],
+  besides = '',
+): string => {
   const { wheel, process, toothCount, fill } = candidate;
   const more = [
     wheelWords(candidate),
@@ -112,8 +118,9 @@ const setupWords = (p: Planned, candidate: Candidate): string => {
     wheel.onePiece && p.request.pattern.kind === 'diamond' ? 'one wheel' : '',
     wheel.included === DEFAULT_INCLUDED ? '' : `angle ${degreesOf(wheel.included)}`,
     process === 'cut' ? 'cut' : '',
+    besides,
   ].filter((part) => part !== '');
-  return reworded(p.context, REPLACED, more.join(' ')).replace(
+  return reworded(p.context, [...REPLACED, ...without], more.join(' ')).replace(
     /^(?:\/?knurl\s+)?plan\b/iu,
     '/knurl',
   );
@@ -137,28 +144,89 @@ const bestOf = (p: Planned): Candidate | undefined => listed(p).find(passes);
 const isOffMiddle = (p: Planned): boolean =>
   p.plan.changes.some((change) => change.kind === 'offMiddle' && change.candidate === bestOf(p));
 
+const otherChanges = ({ plan }: Planned): readonly PlanChange[] =>
+  plan.changes.filter((change) => change.kind !== 'offMiddle');
+
 const headline = (p: Planned): Line => {
   const best = bestOf(p);
-  return best === undefined
-    ? line('planNone', { limits: p.limits })
-    : line('planBest', asSaid(best));
+  if (best !== undefined) return line('planBest', asSaid(best));
+  // Where nothing passes, the smallest change that would is what can be acted on.
+  const [change] = otherChanges(p);
+  return change === undefined ? line('planNone', { limits: p.limits }) : changeLine(change);
 };
 
 const firstLines = (p: Planned): readonly Line[] => [
+  ...(bestOf(p) === undefined && otherChanges(p).length > 0
+    ? [line('planNone', { limits: p.limits })]
+    : []),
   line('planFor', { limits: p.limits, wheels: p.plan.fittingWheels }),
   ...(isOffMiddle(p) ? [line('planOffMiddle', {})] : []),
   p.kind === 'byStandard' ? line('planCribByStandard', {}) : line('planCribOneWheel', {}),
 ];
 
-const otherChanges = ({ plan }: Planned): readonly PlanChange[] =>
-  plan.changes.filter((change) => change.kind !== 'offMiddle');
+/** The changes that the headline does not tell already. */
+const changesBelow = (p: Planned): readonly PlanChange[] =>
+  bestOf(p) === undefined ? otherChanges(p).slice(1) : otherChanges(p);
 
 const candidateRows = (p: Planned): readonly Row[] =>
   listed(p)
     .slice(0, SHOWN)
     .map((candidate, index) => row('candidate', { ...asSaid(candidate), place: index + 1 }));
 
-const choices = (p: Planned): readonly Choice[] =>
+/** What a remedy's words take the place of. */
+const REMEDY_REPLACES: { readonly [K in RemedyKind]: readonly string[] } = {
+  stickout: ['stickout'],
+  tailstock: ['support'],
+  moreTurns: ['turns', 'feed'],
+  slower: ['speed', 'rotation'],
+  narrowerWheel: [],
+  plug: ['plug'],
+  opposed: ['layout'],
+  cut: [],
+};
+
+/** A change as the line that works it out: its candidate in full, or the plan once more. */
+const changeChoice = (p: Planned, change: PlanChange): readonly Choice[] => {
+  const { candidate } = change;
+  const { toothCount } = candidate;
+  const words = setupWords(p, candidate);
+  switch (change.kind) {
+    case 'offMiddle':
+      return [];
+    case 'remedy': {
+      const { kind, number, words: more } = change.remedy;
+      const said = kind === 'narrowerWheel' || kind === 'cut' ? '' : more;
+      return [
+        {
+          label: label('candidateWith', { kind, number, toothCount }),
+          words: setupWords(p, candidate, REMEDY_REPLACES[kind], said),
+        },
+      ];
+    }
+    case 'widerLimits':
+      return [{ label: label('planWith', change), words: widerWords(p, change.limits) }];
+    case 'otherPitch': {
+      const pitch = cribPitch(candidate.wheel).normal;
+      return [{ label: label('otherPitch', { pitch, toothCount }), words }];
+    }
+    case 'cut':
+      return [{ label: label('candidateCut', { toothCount }), words }];
+  }
+};
+
+/** The plan once more with limits that let something pass, rounded outward. */
+const widerWords = (p: Planned, { low, high }: Window): string => {
+  const scale = 1000;
+  const [from, to] = [Math.floor(low * scale) / scale, Math.ceil(high * scale) / scale];
+  return reworded(p.context, ['finish'], `finish ${String(from)}-${String(to)} mm`);
+};
+
+const choices = (p: Planned): readonly Choice[] => [
+  ...(bestOf(p) === undefined ? otherChanges(p).flatMap((each) => changeChoice(p, each)) : []),
+  ...candidateChoices(p),
+];
+
+const candidateChoices = (p: Planned): readonly Choice[] =>
   listed(p)
     .slice(0, SHOWN)
     .map((candidate, index) => ({
@@ -192,7 +260,7 @@ export const planCard = (p: Planned): Card => {
     headline: headline(p),
     parts: [
       { part: 'lines', lines: firstLines(p) },
-      { part: 'lines', lines: otherChanges(p).map(changeLine) },
+      { part: 'lines', lines: changesBelow(p).map(changeLine) },
       { part: 'rows', rows: candidateRows(p) },
       { part: 'checks', checks: best?.checks ?? [] },
       { part: 'cautions', shown: [], rest: [], all: STANDING_CAUTIONS },

@@ -20,6 +20,7 @@ import {
 import { requestOf } from './request.ts';
 import { troubleCard } from './troubleCard.ts';
 import { type TroubleWords, troubleFields } from './troubleFields.ts';
+import { reworded } from './words.ts';
 
 /** Nothing of the set-up was said: only the words of the symptom speak. */
 const wordsAlone = (said: TroubleWords): boolean =>
@@ -65,6 +66,17 @@ const ranked = (
 ): Reply =>
   cardReply(troubleCard({ context, said, symptom, facts, causes: rankCauses(symptom, facts, {}) }));
 
+const SYMPTOM_EXAMPLES = ['double', 'flaking', 'shallow', 'pin seized'] as const;
+
+const missingSymptom = (context: Context): Reply =>
+  refuse(
+    { code: 'missing', parameter: 'symptom', examples: SYMPTOM_EXAMPLES },
+    SYMPTOM_EXAMPLES.map((example) => ({
+      label: example,
+      words: reworded(context, [], example),
+    })),
+  );
+
 /** From what is seen on the part to its likeliest causes, each with one next move. */
 export const trouble = defineCommand({
   path: ['knurl', 'trouble'],
@@ -90,12 +102,7 @@ export const trouble = defineCommand({
   ],
   allowed: 'operator',
   run: (context, said) => {
-    if (said.symptom === undefined)
-      return refuse({
-        code: 'missing',
-        parameter: 'symptom',
-        examples: ['double', 'flaking', 'shallow', 'pin seized'],
-      });
+    if (said.symptom === undefined) return missingSymptom(context);
     if (wordsAlone(said)) return ranked(context, said, said.symptom, NO_FACTS);
     const built = requestOf(context, said);
     return 'refusal' in built

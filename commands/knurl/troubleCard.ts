@@ -6,9 +6,10 @@ import {
   type SymptomId,
   type TroubleFacts,
 } from '../../src/calc/index.ts';
-import { type Card, line, row } from '../../src/card/index.ts';
+import { type Card, type Choice, label, line, row } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
 import type { TroubleWords } from './troubleFields.ts';
+import { reworded } from './words.ts';
 
 type Troubled = {
   readonly context: Context;
@@ -20,6 +21,21 @@ type Troubled = {
 
 /** Causes told on the card; programs get all of them. */
 const SHOWN = 5;
+
+/** What only this verb reads, and what only a finished part says. */
+const TROUBLE_WORDS = ['symptom', 'bite', 'partsOnWheel'] as const;
+const PART_WORDS = ['count', 'crest', 'height', 'flat', 'flats'] as const;
+
+const lineAs = (context: Context, verb: string, without: readonly string[]): string =>
+  reworded(context, without, '').replace(/^(?:\/?knurl\s+)?trouble\b\s*/iu, `/knurl ${verb}`);
+
+/** The same bar on the card of another verb. */
+const choices = (context: Context): readonly Choice[] => [
+  { label: label('setUpCard', {}), words: lineAs(context, '', [...TROUBLE_WORDS, ...PART_WORDS]) },
+  ...(context.read.values.has('diameter')
+    ? [{ label: label('checkCard', {}), words: lineAs(context, 'check ', TROUBLE_WORDS) }]
+    : []),
+];
 
 /** Causes of a symptom, what speaks for each in numbers, and one next move each. */
 export const troubleCard = ({ context, said, symptom, facts, causes }: Troubled): Card => {
@@ -45,7 +61,7 @@ export const troubleCard = ({ context, said, symptom, facts, causes }: Troubled)
       { part: 'cautions', shown: [], rest: [], all: STANDING_CAUTIONS },
       { part: 'footing' },
     ],
-    choices: [],
+    choices: facts === NO_FACTS ? [] : choices(context),
     pictures: [],
     figures: { chanceOfCause: figure(likeliest.chance, '1') },
     checks: [],

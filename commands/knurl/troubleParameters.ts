@@ -1,6 +1,14 @@
 import type { SymptomId } from '../../src/calc/index.ts';
 import { said } from '../../src/desk/index.ts';
-import { countOf, smallLengthOf } from '../../src/words/index.ts';
+import {
+  countOf,
+  type Reader,
+  readAs,
+  refused,
+  smallLengthOf,
+  spanOf,
+  tokenAt,
+} from '../../src/words/index.ts';
 
 /** What people say they see. `size wrong` alone says too little and is asked. */
 const SPOKEN: { readonly [S in SymptomId]: readonly string[] } = {
@@ -61,12 +69,29 @@ const SPOKEN: { readonly [S in SymptomId]: readonly string[] } = {
 
 const symptomOf = (name: string): SymptomId => name as SymptomId;
 
+/** Words for a size that is off without saying which way. */
+const WRONG_SIZE = ['size wrong', 'wrong size', 'size is wrong', 'size off', 'off size'].map(
+  (phrase) => phrase.split(' '),
+);
+
+/** Too large and too small have other causes: which one is asked. */
+const sizeWrong: Reader<SymptomId> = (cursor) => {
+  const said = WRONG_SIZE.find((words) =>
+    words.every((word, index) => tokenAt(cursor, index)?.text === word),
+  );
+  if (said === undefined) return null;
+  const span = spanOf(cursor, said.length);
+  const readings = ['oversize', 'undersize'].map((by) => readAs(cursor.text, span, by));
+  return refused({ code: 'unclear', what: 'symptom', readings });
+};
+
 export const symptom = said<SymptomId>({
   name: 'symptom',
   read: () => null,
   values: Object.entries(SPOKEN).flatMap(([name, phrases]) =>
     phrases.map((phrase) => [phrase, symptomOf(name)] as const),
   ),
+  free: sizeWrong,
   examples: ['double', 'flaking', 'shallow', 'pin seized'],
 });
 

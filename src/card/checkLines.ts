@@ -16,6 +16,11 @@ export type CheckLines = {
     readonly nextToothCount: number;
     readonly takeOff: Mm;
   };
+  blankIsOff: {
+    readonly diameter: Mm;
+    readonly toothCount: number;
+    readonly toothError: number;
+  };
   blankTooSmall: { readonly diameter: Mm; readonly toothError: number };
   chanceTracks: { readonly chance: number };
   seamWhole: { readonly diameter: Mm };
@@ -23,11 +28,18 @@ export type CheckLines = {
   seamChance: { readonly chance: number; readonly byLabel: number };
   seamMarksStay: Nothing;
   seamCountFar: { readonly count: number; readonly expected: number };
-  seamProven: { readonly effectivePitch: Mm; readonly count: number; readonly diameter: Mm };
-  seamStep: { readonly step: 1 | 2 | 3 | 4; readonly bite: Mm | null };
+  seamProven: {
+    readonly effectivePitch: Mm;
+    readonly count: number;
+    readonly diameter: Mm;
+  };
+  seamStep: { readonly step: 1 | 2 | 3 | 4; readonly bite: Mm };
   partRight: { readonly blank: Mm; readonly toothCount: number };
   /** The first thing to do to this part, and what is off. */
-  partOff: { readonly off: readonly OffFigure[]; readonly move: PartMove<ThisPartMoveId> };
+  partOff: {
+    readonly off: readonly OffFigure[];
+    readonly move: PartMove<ThisPartMoveId>;
+  };
   thisPart: { readonly move: PartMove<ThisPartMoveId> };
   /** The flat on the crests that the planned fill leaves: what to stop by where the dial is no judge. */
   nextPart: { readonly move: PartMove<NextPartMoveId>; readonly flat: Mm };
@@ -51,5 +63,14 @@ export type CheckRows = {
   countSeen: { readonly counted: number; readonly expected: number };
   crestSeen: { readonly crest: Mm; readonly low: Mm; readonly high: Mm };
   growthSeen: { readonly growth: Mm; readonly factor: number };
-  fillSeen: { readonly measured: number | null; readonly fromCrest: number | null };
+  fillSeen: {
+    readonly measured: number | null;
+    readonly fromCrest: number | null;
+  };
+};
+
+/** What the buttons of a check say. */
+export type CheckLabels = {
+  setUpAt: { readonly diameter: Mm };
+  withoutCount: Nothing;
 };

@@ -18,11 +18,11 @@ import type {
   WheelSize,
   Window,
 } from '../calc/index.ts';
-import type { CheckLines, CheckRows } from './checkLines.ts';
+import type { CheckLabels, CheckLines, CheckRows } from './checkLines.ts';
 import type { Nothing } from './nothing.ts';
-import type { PlanLines, PlanRows } from './planLines.ts';
+import type { PlanLabels, PlanLines, PlanRows } from './planLines.ts';
 import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
-import type { TroubleLines, TroubleRows } from './troubleLines.ts';
+import type { TroubleLabels, TroubleLines, TroubleRows } from './troubleLines.ts';
 import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
 
 /**
@@ -111,7 +111,10 @@ export type RowId = keyof Rows;
 export type Row = { [K in RowId]: { readonly row: K; readonly values: Rows[K] } }[RowId];
 
 /** What a button says. */
-export type Labels = ShopLabels &
+export type Labels = CheckLabels &
+  PlanLabels &
+  ShopLabels &
+  TroubleLabels &
   WhyLabels & {
     asIs: { readonly stock: Mm };
     finishedSize: { readonly size: Mm };

@@ -36,6 +36,18 @@ export type PlanLines = {
   planCut: CandidateSaid;
 };
 
+/** What the buttons of a plan say. */
+export type PlanLabels = {
+  candidateWith: {
+    readonly kind: RemedyKind;
+    readonly number: Figure | null;
+    readonly toothCount: number;
+  };
+  otherPitch: { readonly pitch: Mm; readonly toothCount: number };
+  planWith: { readonly limits: Window };
+  candidateCut: { readonly toothCount: number };
+};
+
 export type PlanRows = {
   candidate: CandidateSaid & { readonly place: number };
 };

@@ -16,6 +16,9 @@ export type TroubleLines = {
   troubleByWords: Nothing;
 };
 
+/** What the buttons of a trouble say. */
+export type TroubleLabels = { setUpCard: Nothing; checkCard: Nothing };
+
 export type TroubleRows = {
   cause: CauseSaid & { readonly place: number };
 };

@@ -21,6 +21,7 @@ export type NextPartMoveId =
   | 'feedMore'
   | 'feedLess'
   | 'logGrowth'
+  | 'stopAtCrest'
   | 'swivel'
   | 'support';
 
@@ -99,6 +100,16 @@ const nextForFill = (seen: Seen): PartMove<NextPartMoveId>[] => {
   return [more > 0 ? move('feedMore', more) : move('feedLess', -more)];
 };
 
+/** A crest that is off with nothing else measured: the crest itself says when to stop. */
+const nextForCrest = (seen: Seen): PartMove<NextPartMoveId>[] => {
+  const { judged, checks, off } = seen;
+  const finish = found(checks, 'finish');
+  const missed = finish !== null && finish.state === 'stop' && off.length === 0;
+  return missed || off.includes('fillOrGrowth')
+    ? [move('stopAtCrest', judged.plan.blank.tooth.crest)]
+    : [];
+};
+
 const nextForGrowth = (seen: Seen): PartMove<NextPartMoveId>[] => {
   if (!seen.off.includes('growth')) return [];
   const blank = blankForPrint(seen);
@@ -119,7 +130,10 @@ export const nextPartMoves = (seen: Seen): PartMove<NextPartMoveId>[] => {
     ...nextForCount(seen),
     ...nextForFill(seen),
     ...nextForGrowth(seen),
+    ...nextForCrest(seen),
     ...nextForTaper(seen),
   ];
-  return moves.length === 0 ? [move('same', null)] : moves;
+  // A count that cannot be right says nothing about the next part until it is counted again.
+  const again = found(seen.checks, 'count')?.reason === 'notThisWheel';
+  return moves.length === 0 && !again ? [move('same', null)] : moves;
 };

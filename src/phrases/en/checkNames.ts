@@ -21,7 +21,7 @@ export const checkNames: { readonly [N in CheckName]: string } = {
   fit: 'Fit',
   seam: 'Seam',
   count: 'Count',
-  filled: 'Fill',
+  filled: 'Depth',
   growth: 'Growth',
   taper: 'Taper',
 };

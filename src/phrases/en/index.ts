@@ -1,16 +1,19 @@
 import type { Book } from '../book.ts';
 import { cautions, standing } from './cautions.ts';
 import { chat, config } from './chat.ts';
+import { checkLabels } from './checkLines.ts';
 import { checks } from './checks.ts';
 import { lines } from './lines.ts';
 import { materialName, THINGS } from './names.ts';
-import { records } from './records.ts';
 import { pictures } from './pictures.ts';
+import { planLabels } from './planLines.ts';
+import { records } from './records.ts';
 import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
 import { shopLabels } from './shopLines.ts';
 import { slack } from './slack.ts';
+import { troubleLabels } from './troubleLines.ts';
 import { verbs } from './verbs.ts';
 import { whyLabels } from './whyLines.ts';
 
@@ -24,6 +27,9 @@ export const en: Book = {
   refusal,
   states: { fine: 'fine', watch: 'watch', stop: 'stop' },
   labels: {
+    ...checkLabels,
+    ...planLabels,
+    ...troubleLabels,
     ...shopLabels,
     ...whyLabels,
     asIs: ({ stock }, show) => `Leave it at ${show.length(stock)}`,

@@ -1,4 +1,4 @@
-import type { CandidateSaid, PlanLines, PlanRows } from '../../card/planLines.ts';
+import type { CandidateSaid, PlanLabels, PlanLines, PlanRows } from '../../card/planLines.ts';
 import type { LabelledText } from '../book.ts';
 import type { Show } from '../show.ts';
 import { checkNames } from './checkNames.ts';
@@ -28,7 +28,7 @@ type PlanPhrases = {
 export const planLines: PlanPhrases = {
   planBest: (said, show) => `Turn to ${setUp(said, show)}: ${odds(said)}`,
   planNone: ({ limits }, show) =>
-    `Nothing in the crib comes out at ${show.span(limits.low, limits.high)}`,
+    `Nothing in the crib passes for ${show.span(limits.low, limits.high)} ${show.units} as it was asked.`,
   planFor: ({ limits, wheels }, show) =>
     `For a finished ${show.span(limits.low, limits.high)} ${show.units}; ${String(wheels)} ${wheels === 1 ? 'wheel suits' : 'wheels suit'}.`,
   planCribByStandard: () =>
@@ -37,12 +37,23 @@ export const planLines: PlanPhrases = {
   planOffMiddle: () =>
     'No count meets the middle of the limits; this one lies inside them, off it.',
   planRemedy: ({ kind, number, candidate }, show) =>
-    `Would pass: ${remedyLabel(kind, number, show)}: ${setUp(candidate, show)}; ${odds(candidate)}.`,
+    `${remedyLabel(kind, number, show)}, then it passes: ${setUp(candidate, show)}; ${odds(candidate)}.`,
   planWider: ({ side, by, limits, candidate }, show) =>
     `Limits ${show.length(by, 'up')} wider ${side}, ${show.span(limits.low, limits.high)}: ${setUp(candidate, show)}; ${odds(candidate)}.`,
   planOtherPitch: ({ pitch, candidate }, show) =>
     `Another pitch, ${show.both(pitch)}: ${setUp(candidate, show)}; ${odds(candidate)}.`,
   planCut: (said, show) => `Cut instead: ${setUp(said, show)}; ${odds(said)}.`,
+};
+
+export const planLabels: {
+  readonly [K in keyof PlanLabels]: (values: PlanLabels[K], show: Show) => string;
+} = {
+  candidateWith: ({ kind, number, toothCount }, show) =>
+    `${remedyLabel(kind, number, show)}: ${String(toothCount)} teeth`,
+  otherPitch: ({ pitch, toothCount }, show) =>
+    `Pitch ${show.length(pitch)}: ${String(toothCount)} teeth`,
+  planWith: ({ limits }, show) => `Limits ${show.span(limits.low, limits.high)}`,
+  candidateCut: ({ toothCount }) => `Cut it: ${String(toothCount)} teeth`,
 };
 
 export const planRows: {

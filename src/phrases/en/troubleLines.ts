@@ -1,5 +1,10 @@
 import type { Evidence } from '../../calc/index.ts';
-import type { CauseSaid, TroubleLines, TroubleRows } from '../../card/troubleLines.ts';
+import type {
+  CauseSaid,
+  TroubleLabels,
+  TroubleLines,
+  TroubleRows,
+} from '../../card/troubleLines.ts';
 import type { LabelledText } from '../book.ts';
 import type { Show } from '../show.ts';
 import { checkNames } from './checkNames.ts';
@@ -41,6 +46,13 @@ export const troubleLines: {
   troubleByNumbers: () => "Ranked by this set-up's numbers.",
   troubleByWords: () =>
     'Ranked by words alone: say the bar, the pattern and the pitch too, and the numbers speak.',
+};
+
+export const troubleLabels: {
+  readonly [K in keyof TroubleLabels]: (values: TroubleLabels[K], show: Show) => string;
+} = {
+  setUpCard: () => 'Set-up card',
+  checkCard: () => 'Check this blank',
 };
 
 export const troubleRows: {
