@@ -1,7 +1,15 @@
 import { parseArgs } from 'node:util';
 import { FLEET } from '../commands/index.ts';
-import { answerJson, cardText, spoken, terminalCall, widthOf } from './adapters/terminal/index.ts';
+import {
+  answerJson,
+  cardText,
+  spoken,
+  terminalCall,
+  widthOf,
+  writePictures,
+} from './adapters/terminal/index.ts';
 import { type Answer, openDesk, plainShop } from './desk/index.ts';
+import { openRenderer } from './drawing/index.ts';
 import { en } from './phrases/index.ts';
 
 /** Exit statuses of `ask`: a card, a refusal, a call that makes no sense. */
@@ -22,6 +30,7 @@ const argumentsOf = () => {
         units: { type: 'string', default: 'in' },
         json: { type: 'boolean', default: false },
         phone: { type: 'boolean', default: false },
+        pictures: { type: 'string' },
       },
     });
   } catch {
@@ -39,6 +48,26 @@ const { units } = values;
 if (units !== 'in' && units !== 'mm') misuse(en.terminal.unitsArgument);
 const desk = openDesk(FLEET, plainShop(units === 'mm' ? 'mm' : 'in'));
 const answer = await desk.answer(terminalCall(positionals.join(' '), 1));
-process.stdout.write(`${printed(answer, values.json, values.phone)}\n`, () => {
-  process.exit(answer.kind === 'card' ? CARD : REFUSAL);
-});
+/** Where the pictures were written, or that nothing but them is missing. */
+const pictured = async (folder: string): Promise<string> => {
+  try {
+    const to = { folder, prefix: '' };
+    const paths = await writePictures(answer, to, { book: en, render: openRenderer() });
+    return paths.map((path) => `${en.terminal.pictureAt(path)}\n`).join('');
+  } catch {
+    return `${en.terminal.noPicture}\n`;
+  }
+};
+
+const written = (stream: NodeJS.WriteStream, text: string): Promise<void> =>
+  new Promise((done) => {
+    stream.write(text, () => {
+      done();
+    });
+  });
+
+await written(process.stdout, `${printed(answer, values.json, values.phone)}\n`);
+if (values.pictures !== undefined)
+  // What a program reads is the answer alone.
+  await written(values.json ? process.stderr : process.stdout, await pictured(values.pictures));
+process.exit(answer.kind === 'card' ? CARD : REFUSAL);

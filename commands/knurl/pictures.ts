@@ -172,11 +172,12 @@ export const planPictures = (
         limits,
         candidates: candidates
           .slice(0, MAPPED)
-          .map(({ blankDiameter, fill, toothCount, state }) => ({
+          .map(({ blankDiameter, fill, toothCount, state, wheel }) => ({
             blankDiameter,
             fill,
             toothCount,
             state,
+            wheel: wheel.name,
           })),
         tooth: {
           form: formOf(first.wheel.pattern),

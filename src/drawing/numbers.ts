@@ -58,6 +58,8 @@ export type MapCandidate = {
   readonly fill: number;
   readonly toothCount: number;
   readonly state: State;
+  /** The shop's name for the wheel, as it is. */
+  readonly wheel: string;
 };
 
 export type PlanMapNumbers = {

@@ -12,6 +12,8 @@ const CHUCK = 22;
 /** Most that the part or a wheel may be drawn smaller than the other, and still be seen. Judgement. */
 const LEAST_SHARE = 0.2;
 const LEAST_LENGTH = 26;
+/** Diameter that part and wheel keep when the lengths ask for a smaller scale. Judgement. */
+const LEAST_DRAWN = 28;
 
 type Drawn = { readonly size: number; readonly isTrue: boolean };
 const atLeast = (size: number, least: number): Drawn =>
@@ -27,7 +29,12 @@ const endSizes = (n: SetupSketchNumbers) => {
   const wheel = Math.max(n.wheelDiameter, larger * LEAST_SHARE);
   const room = 2 * MIDDLE - 24;
   const width = END.right - END.left - 20;
-  const scale = Math.min(room / (part + wheels * wheel), width / Math.max(part, wheel));
+  const fitting = Math.min(room / (part + wheels * wheel), width / Math.max(part, wheel));
+  // Rather smaller than broken, as long as the smaller of the two is still seen.
+  const along = n.stickout ?? n.length * 1.5;
+  const unbroken = (SIDE.right - SIDE.left - CHUCK - 28) / along;
+  const smallest = LEAST_DRAWN / Math.min(part, wheel);
+  const scale = Math.min(fitting, Math.max(unbroken, smallest));
   const isTrue = part === n.blankDiameter && wheel === n.wheelDiameter;
   return { part: part * scale, wheel: wheel * scale, scale, isTrue, wheels };
 };
@@ -40,8 +47,10 @@ const sideSizes = (n: SetupSketchNumbers, scale: number) => {
   const shoulder = n.stickout === null ? null : Math.max(0, n.stickout - n.length);
   const free = shoulder === null ? 24 : shoulder * scale;
   const wanted = atLeast(n.length * scale, LEAST_LENGTH);
-  const zone = atMost(wanted.size, room * 0.6);
-  const gap = atMost(free, room - zone.size);
+  // What fits as a whole is not broken; otherwise the knurl keeps the larger share.
+  const fits = wanted.size + free <= room + 1e-6;
+  const zone = atMost(wanted.size, fits ? room : room * 0.6);
+  const gap = atMost(free, Math.max(0, room - zone.size) + 1e-6);
   return {
     start,
     zone: { size: zone.size, isTrue: zone.isTrue && wanted.isTrue },

@@ -4,11 +4,11 @@ import { element, line, type Point, polygon, text } from './svg.ts';
 import type { Named, WordsOf } from './words.ts';
 
 /** The close-up stands in this box; names and numbers beside it. */
-const BOX = { left: MARGIN + 2, width: 176, height: 250 };
+const BOX = { left: MARGIN + 2, width: 180, height: 226 };
 const LABELS = 262;
 const LABEL_STEP = 34;
-/** Under this many teeth the work is so round that fewer fit in a close-up. Judgement. */
-const FEW_TEETH = 12;
+/** Full teeth in the close-up: fewer are drawn larger. Judgement. */
+const TEETH = 2;
 
 /** A point by its radius and its angle from the top, the centre of the work being the origin. */
 const polar = (radius: number, angle: number): Point => [
@@ -23,7 +23,7 @@ const sectionOf = (n: ToothFormNumbers) => {
   const root = crest - n.toothHeight;
   const step = n.transversePitch / blank;
   const flat = (n.crestFlat * n.transversePitch) / n.pitch / crest;
-  const teeth = n.toothCount < FEW_TEETH ? 2 : 4;
+  const teeth = TEETH;
   const grooves = Array.from({ length: teeth + 1 }, (_, i) => (i - teeth / 2) * step);
   const surface = grooves.flatMap((at, i): readonly Point[] => {
     const valley = polar(root, at);
@@ -59,7 +59,7 @@ const placedIn = (s: Section, wheel: readonly Point[], top: number) => {
   // Room under the grooves for the body of the work.
   const scale = Math.min(BOX.width / wide, (BOX.height * 0.8) / tall);
   const inset = (BOX.width - wide * scale) / 2;
-  const drop = Math.max(0, (BOX.height * 0.8 - tall * scale) / 2);
+  const drop = Math.max(0, (BOX.height * 0.8 - tall * scale) / 2.5);
   const at = ([x, y]: Point): Point => [
     BOX.left + inset + (x - left) * scale,
     top + drop + (y - high) * scale,
@@ -198,7 +198,7 @@ export const toothForm = (n: ToothFormNumbers, words: WordsOf['toothForm']): str
       dims.map((d) => dimensionLine(d, d.x, scale)).join('') +
       labelled(
         [
-          { anchor: at(polar(s.crest, s.half - s.step / 2)), said: words.crest },
+          { anchor: at(polar(s.crest, s.step / 2)), said: words.crest },
           { anchor: at(polar(s.blank, s.half)), said: words.blank },
           { anchor: at(polar(s.blank, s.step * 0.75)), said: words.pitch },
           ...dims.map((d) => ({ anchor: [d.x, (d.from + d.to) / 2] as const, said: d.said })),

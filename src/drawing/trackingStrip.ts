@@ -84,7 +84,7 @@ const stretchSvg = (
     const from = Math.max(s.left, placeIn(s, diameter - n.below));
     const to = Math.min(s.right, placeIn(s, diameter + n.above));
     // Words of a count at the very end would leave the strip.
-    const hasRoom = x > s.left + 24 && x < s.right - 24;
+    const hasRoom = x > s.left + 32 && x < s.right - 32;
     const words_ = hasRoom
       ? text(
           [x, axis + 22],

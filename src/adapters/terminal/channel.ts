@@ -1,6 +1,6 @@
 import { createInterface } from 'node:readline';
 import type { Readable, Writable } from 'node:stream';
-import type { Call, Desk } from '../../desk/index.ts';
+import type { Answer, Call, Desk } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
 import { spoken } from '../common/spoken.ts';
 import { cardText } from '../common/text.ts';
@@ -31,6 +31,8 @@ export type ChannelOptions = {
   readonly interactive: boolean;
   readonly width: () => number;
   readonly onFault: (error: unknown) => void;
+  /** Writes the pictures of the answer to a line and says where; null where none are wanted. */
+  readonly pictures: ((answer: Answer, line: number) => Promise<readonly string[]>) | null;
 };
 
 const written = (output: Writable, text: string): Promise<void> =>
@@ -39,6 +41,22 @@ const written = (output: Writable, text: string): Promise<void> =>
       done();
     });
   });
+
+const pictured = async (
+  { pictures, book, output, onFault }: ChannelOptions,
+  answer: Answer,
+  line: number,
+): Promise<void> => {
+  if (pictures === null) return;
+  try {
+    const paths = await pictures(answer, line);
+    if (paths.length > 0)
+      await written(output, `${paths.map(book.terminal.pictureAt).join('\n')}\n\n`);
+  } catch (error) {
+    onFault(error);
+    await written(output, `${book.terminal.noPicture}\n\n`);
+  }
+};
 
 /** The local channel: one card a line, until the input ends. */
 export const runChannel = async (options: ChannelOptions): Promise<void> => {
@@ -55,6 +73,8 @@ export const runChannel = async (options: ChannelOptions): Promise<void> => {
     try {
       const answer = await desk.answer(terminalCall(line, number));
       await written(output, `${cardText(spoken(answer, book), width())}\n\n`);
+      // The card stands already: nobody waits for a picture to read it.
+      await pictured(options, answer, number);
     } catch (error) {
       options.onFault(error);
       await written(output, `${book.terminal.fault}\n\n`);

@@ -59,7 +59,7 @@ const angleText = (n: PictureNumbers['developedPattern'], show: Show): string =>
 const candidateLines = (n: PictureNumbers['planMap'], show: Show): readonly string[] =>
   n.candidates.map(
     (each) =>
-      `${show.length(each.blankDiameter)}, ${teeth(each.toothCount)}, fill ${show.percent(each.fill)}`,
+      `${show.length(each.blankDiameter)}, ${teeth(each.toothCount)}, fill ${show.percent(each.fill)}, ${each.wheel}`,
   );
 
 export const pictures: PicturePhrases = {
@@ -88,7 +88,7 @@ export const pictures: PicturePhrases = {
   trackingStrip: {
     words: (n, show) => ({
       title: 'Where it tracks',
-      count: (count) => `${String(count)} t`,
+      count: teeth,
       diameter: (value) => show.bare(value),
       window: window(n, show),
       marks: markLines(n, show),
