@@ -113,7 +113,7 @@ const setupWords = (
   const { wheel, process, toothCount, fill } = candidate;
   const more = [
     wheelWords(candidate),
-    `teeth ${String(toothCount)}`,
+    `${String(toothCount)} teeth`,
     `fill ${String(Number((fill * 100).toFixed(2)))}%`,
     wheel.onePiece && p.request.pattern.kind === 'diamond' ? 'one wheel' : '',
     wheel.included === DEFAULT_INCLUDED ? '' : `angle ${degreesOf(wheel.included)}`,

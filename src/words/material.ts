@@ -118,12 +118,19 @@ export const MATERIAL_OFFERS: readonly Suggestion[] = [...new Set(MATERIAL_PHRAS
   },
 );
 
+/** Numbers that a hardness can be, on either scale. */
+const [SOFTEST, HARDEST] = [5, 750];
+
 /** `416 rpm` is a speed, not a stainless steel. */
 const isQuantity = (cursor: Cursor, used: number): boolean => {
   const last = tokenAt(cursor, used - 1);
   const next = tokenAt(cursor, used);
   const unit = next === undefined ? null : unitOf(next.text);
-  return last !== undefined && /^\d+$/u.test(last.text) && unit !== null && next?.text !== 'in';
+  if (last === undefined || !/^\d+$/u.test(last.text) || unit === null) return false;
+  // In `4140 HB 210` the scale belongs to the number behind it.
+  const isScale = unit.measure === 'hb' || unit.measure === 'hrc';
+  const hardness = isScale ? Number(tokenAt(cursor, used + 1)?.text) : Number.NaN;
+  return next?.text !== 'in' && !(hardness >= SOFTEST && hardness <= HARDEST);
 };
 
 const ofTable: Reader<MaterialWords> = (cursor) => {

@@ -1,7 +1,8 @@
 import { MM_PER_INCH } from '../calc/units.ts';
 import { plainText } from './characters.ts';
-import { type Cursor, moved, quantityAt, tokenAt } from './cursor.ts';
+import { type Cursor, moved, type Quantity, quantityAt, tokenAt } from './cursor.ts';
 import { type BareRange, hardwareOf, outOfRange, type Range } from './kinds.ts';
+import { MATERIAL_PHRASES } from './material.ts';
 import { nearestOf } from './nearest.ts';
 import { NUMBER, numberOf } from './numbers.ts';
 import { type Names, type Reader, type Reading, refused, took } from './reading.ts';
@@ -203,6 +204,18 @@ const SCALE_WORDS: ReadonlyMap<string, 'HB' | 'HRC'> = new Map<string, 'HB' | 'H
   ['rc', 'HRC'],
 ]);
 
+/** In `4140 HB 210` the scale belongs to the number behind it: the first one is the material. */
+const announcesNext = (cursor: Cursor, quantity: Quantity): boolean => {
+  const next = quantityAt(moved(cursor, quantity.used));
+  const before = tokenAt(cursor)?.text ?? '';
+  const scale = quantity.unit?.measure === 'hrc' ? 'HRC' : 'HB';
+  const [low, high] = HARDNESS[scale];
+  const likely = next?.unit === null && next.value >= low && next.value <= high;
+  return (
+    quantity.unitApart && likely && (quantity.value > high || MATERIAL_PHRASES.includes(before))
+  );
+};
+
 /** `HB 210`, `hb210`, `28 HRC`. */
 export const readHardness: Reader<HardnessWords> = (cursor) => {
   const token = tokenAt(cursor);
@@ -218,5 +231,6 @@ export const readHardness: Reader<HardnessWords> = (cursor) => {
   const quantity = quantityAt(cursor);
   const measure = quantity?.unit?.measure;
   if (quantity === null || (measure !== 'hb' && measure !== 'hrc')) return null;
+  if (announcesNext(cursor, quantity)) return null;
   return hardness(measure === 'hb' ? 'HB' : 'HRC', quantity.value, quantity.used);
 };

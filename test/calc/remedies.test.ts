@@ -139,7 +139,7 @@ describe('the smallest change', () => {
     )!;
     const remedy = setUp(found).remedies.find(({ kind }) => kind === 'moreTurns')!;
     const turns = remedy.number!.value;
-    expect(remedy.words).toBe(`turns ${turns}`);
+    expect(remedy.words).toBe(`${turns} turns`);
     expect(stopsOf({ ...found, turns: turns - 1 })).toContain('bending');
   });
 

@@ -89,7 +89,8 @@ const shorterStickout = (of: Stopped, passes: Passes): Try | null => {
 const withTurns = (of: Stopped, turns: number): Try => {
   const { request, travel } = of;
   if (travel === 'plunge' || request.feed === null)
-    return { number: figure(turns, '1'), words: `turns ${turns}`, change: { turns } };
+    // The number first: behind another number the word would be taken for its unit.
+    return { number: figure(turns, '1'), words: `${turns} turns`, change: { turns } };
   const bevel = request.wheel.bevel ?? (request.edge === 'square' ? mm(0) : DEFAULT_BEVEL);
   // Rounded up and written out, so that what is read back is what was tried.
   const feed = Number((contactWidth(request.wheel.face, bevel) / turns + 5e-4).toFixed(3));
