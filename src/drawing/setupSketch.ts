@@ -12,12 +12,16 @@ const CHUCK = 22;
 /** Most that the part or a wheel may be drawn smaller than the other, and still be seen. Judgement. */
 const LEAST_SHARE = 0.2;
 const LEAST_LENGTH = 26;
+const LEAST_WALL = 2.5;
 /** Diameter that part and wheel keep when the lengths ask for a smaller scale. Judgement. */
 const LEAST_DRAWN = 28;
 
 type Drawn = { readonly size: number; readonly isTrue: boolean };
 const atLeast = (size: number, least: number): Drawn =>
   size >= least ? { size, isTrue: true } : { size: least, isTrue: false };
+/** What is drawn larger than it is has a dashed outline. */
+const enlarged = (isTrue: boolean): Readonly<Record<string, string>> =>
+  isTrue ? {} : { 'stroke-dasharray': '4 3' };
 const atMost = (size: number, most: number): Drawn =>
   size <= most ? { size, isTrue: true } : { size: most, isTrue: false };
 
@@ -35,8 +39,13 @@ const endSizes = (n: SetupSketchNumbers) => {
   const unbroken = (SIDE.right - SIDE.left - CHUCK - 28) / along;
   const smallest = LEAST_DRAWN / Math.min(part, wheel);
   const scale = Math.min(fitting, Math.max(unbroken, smallest));
-  const isTrue = part === n.blankDiameter && wheel === n.wheelDiameter;
-  return { part: part * scale, wheel: wheel * scale, scale, isTrue, wheels };
+  const wall =
+    n.bore === null ? null : atLeast(((n.blankDiameter - n.bore) / 2) * scale, LEAST_WALL);
+  const isPartTrue = part === n.blankDiameter;
+  const isWheelTrue = wheel === n.wheelDiameter;
+  const isTrue = isPartTrue && isWheelTrue && (wall?.isTrue ?? true);
+  const sizes = { part: part * scale, wheel: wheel * scale, wall };
+  return { ...sizes, scale, isPartTrue, isWheelTrue, isTrue, wheels };
 };
 
 /** Lengths along the part, broken where they would leave the view or be lost in it. */
@@ -101,10 +110,6 @@ const endView = (n: SetupSketchNumbers, top: number): string => {
   const x = (END.left + END.right) / 2;
   const y = top + MIDDLE + (e.wheels === 2 ? 0 : (e.part + e.wheel) / 2 - e.part / 2);
   const r = e.part / 2;
-  const wall =
-    n.bore === null
-      ? null
-      : Math.max(2.5, ((n.blankDiameter - n.bore) / 2 / n.blankDiameter) * e.part);
   const wheelAt = (way: 1 | -1): string =>
     circle([x, y + way * (r + e.wheel / 2)], e.wheel / 2, {
       fill: INK.wheel,
@@ -112,7 +117,8 @@ const endView = (n: SetupSketchNumbers, top: number): string => {
       'stroke-width': 1.5,
       'data-figure': 'wheelDiameter',
       'data-scale': e.scale.toFixed(6),
-      'data-true': String(e.isTrue),
+      'data-true': String(e.isWheelTrue),
+      ...enlarged(e.isWheelTrue),
     }) + circle([x, y + way * (r + e.wheel / 2)], 2, { fill: INK.ink });
   const nip = Math.max(8, Math.min(r, e.wheel / 2) * 0.55);
   return (
@@ -122,14 +128,16 @@ const endView = (n: SetupSketchNumbers, top: number): string => {
       'stroke-width': 2,
       'data-figure': 'blankDiameter',
       'data-scale': e.scale.toFixed(6),
-      'data-true': String(e.isTrue),
+      'data-true': String(e.isPartTrue),
+      ...enlarged(e.isPartTrue),
     }) +
-    (wall === null
+    (e.wall === null
       ? ''
-      : circle([x, y], Math.max(1, r - wall), {
+      : circle([x, y], Math.max(1, r - e.wall.size), {
           fill: INK.panel,
           stroke: INK.ink,
           'stroke-width': 1.2,
+          ...enlarged(e.wall.isTrue),
         })) +
     wheelAt(-1) +
     (n.opposed ? wheelAt(1) : '') +
@@ -174,6 +182,7 @@ const lengthRow = (
       'data-figure': id,
       'data-scale': scale.toFixed(6),
       'data-true': String(isTrue),
+      ...enlarged(isTrue),
     }) +
     tick(from) +
     tick(to) +

@@ -36,9 +36,11 @@ const sectionOf = (n: ToothFormNumbers) => {
 
 type Section = ReturnType<typeof sectionOf>;
 
-/** The wheel's own tooth in the middle groove, as deep as it is sharp. */
+/** The wheel's own tooth in the middle groove: along its flanks, and as deep as it is sharp. */
 const wheelTooth = (n: ToothFormNumbers, s: Section): readonly Point[] => {
-  const slope = (s.step / 2 - crestHalf(n, s)) * s.crest * (1 / n.toothHeight);
+  const [x, y] = s.surface.find((_, i) => i === 4) ?? [0, 0];
+  // On very round and shallow work the crest falls away beside the groove.
+  const slope = x / Math.max(-y - s.root, n.toothHeight * 0.3);
   const deep = n.sharpHeight * 1.15;
   return [
     [-slope * deep, -s.root - deep],
@@ -46,11 +48,11 @@ const wheelTooth = (n: ToothFormNumbers, s: Section): readonly Point[] => {
     [0, -s.root],
   ];
 };
-const crestHalf = (n: ToothFormNumbers, s: Section): number =>
-  (n.crestFlat * n.transversePitch) / n.pitch / s.crest / 2;
 
 const placedIn = (s: Section, wheel: readonly Point[], top: number) => {
-  const all = [...s.surface, ...wheel];
+  // The dashed circles reach a little further out than the grooves do.
+  const ends = [-1, 1].map((side) => polar(Math.max(s.crest, s.blank), side * s.half));
+  const all = [...s.surface, ...wheel, ...ends];
   const xs = all.map(([x]) => x);
   const ys = all.map(([, y]) => y);
   const [left, high] = [Math.min(...xs), Math.min(...ys)];

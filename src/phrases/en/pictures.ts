@@ -107,7 +107,7 @@ export const pictures: PicturePhrases = {
       travel: travelText(n),
       nip: 'Closing nip: work and wheel run together here. Keep hands and rags out.',
       wheel: wheelText(n, show),
-      broken: 'Scale broken here: lengths or diameters are not all in proportion.',
+      broken: 'Scale broken at a double wave; what is dashed is drawn larger than it is.',
     }),
     alt: (n, show) =>
       `Set-up sketch, ${SUPPORTS[n.support]}: blank ${show.length(n.blankDiameter)}, knurl ${show.length(n.length)} long${n.stickout === null ? '' : `, ${show.length(n.stickout)} out`}. ${wheelText(n, show)}. ${travelText(n)} The closing nip is marked where work and wheel run together.`,
