@@ -194,17 +194,22 @@ const isTimely = ({ headers }: IncomingMessage): boolean => {
   return Math.abs(Date.now() / 1000 - at) <= AGE_LIMIT_S;
 };
 
-class TimelyReceiver extends HTTPReceiver {
+/** Said to be larger than anything Slack sends: not read at all. */
+const isTooLarge = ({ headers }: IncomingMessage): boolean =>
+  Number(headers['content-length'] ?? 0) > BODY_LIMIT;
+
+class GuardedReceiver extends HTTPReceiver {
   constructor(options: HTTPReceiverOptions) {
     super(options);
     const listener = this.requestListener;
     this.requestListener = (request: IncomingMessage, response: ServerResponse) => {
-      if (isTimely(request)) {
+      const status = isTooLarge(request) ? 413 : isTimely(request) ? null : 401;
+      if (status === null) {
         listener(request, response);
         return;
       }
-      response.writeHead(401, { connection: 'close' });
-      response.end();
+      response.writeHead(status, { connection: 'close' });
+      response.end(() => request.destroy());
     };
   }
 }
@@ -221,7 +226,7 @@ export const connectHttp = (
   { installations, api, logger }: Connecting,
   { signingSecret, port, host }: Listen,
 ): Connection => {
-  const receiver = new TimelyReceiver({
+  const receiver = new GuardedReceiver({
     signingSecret,
     bodyLimit: BODY_LIMIT,
     logger,

@@ -5,6 +5,7 @@ import type { Drawn } from '../common/pieces.ts';
 import { hasMoreCautions, sentence, spoken } from '../common/spoken.ts';
 import { faultText, isRefused } from './faults.ts';
 import { LIMITS } from './limits.ts';
+import type { StandingOf } from './people.ts';
 import type { Handle } from './receive.ts';
 import { controlButton, type ExtraButton, type Message, render } from './render.ts';
 import type { Sender, Where } from './send.ts';
@@ -17,6 +18,7 @@ export type FlowOptions = {
   readonly book: Book;
   readonly log: Log;
   readonly draw: Draw;
+  readonly standingOf: StandingOf;
 };
 
 /** What is to be shown, before anything is known of messages. */
@@ -47,7 +49,13 @@ type Way = () => Promise<unknown>;
 
 export type Flow = ReturnType<typeof openFlow>;
 
-export const openFlow = ({ desk, book, log, draw }: FlowOptions) => {
+export const openFlow = ({ desk, book, log, draw, standingOf }: FlowOptions) => {
+  /** The desk also hears what this person may by the platform's own reckoning. */
+  const ask = async (sender: Sender, call: Call): Promise<Answer> => {
+    const standing = await standingOf(sender, call.shop, call.person.id);
+    return await desk.answer({ ...call, person: { ...call.person, ...standing } });
+  };
+
   const own = (card: SpokenCard, extra: readonly ExtraButton[] = []): Reply => ({
     card,
     isPrivate: true,
@@ -197,9 +205,11 @@ export const openFlow = ({ desk, book, log, draw }: FlowOptions) => {
   };
 
   return {
+    ask,
+
     /** Asks the desk and sends what it says. */
     answer: async (sender: Sender, handle: Handle, call: Call): Promise<void> => {
-      await sending(sender, handle, call, await replyFor(call, desk.answer(call)));
+      await sending(sender, handle, call, await replyFor(call, ask(sender, call)));
     },
 
     /** Sends what the desk was asked before. */

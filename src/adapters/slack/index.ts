@@ -14,6 +14,7 @@ import {
 import { faultText } from './faults.ts';
 import { type Draw, openFlow } from './flow.ts';
 import { listen } from './listen.ts';
+import { openStanding } from './people.ts';
 import { interactionOf } from './receive.ts';
 
 export { TokenRefused } from './connect.ts';
@@ -76,7 +77,7 @@ export const openSlack = async (options: SlackOptions): Promise<Slack> => {
   };
   const draw = options.draw ?? (() => Promise.resolve([]));
   const formPatienceMs = options.formPatienceMs ?? FORM_PATIENCE_MS;
-  const flow = openFlow({ desk, book, log, draw });
+  const flow = openFlow({ desk, book, log, draw, standingOf: openStanding(log) });
   onlyOnce(connection, once, log);
   listen(connection.app, { desk, book, log, flow, keep, formPatienceMs });
   connection.app.error((error) => {

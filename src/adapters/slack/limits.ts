@@ -19,7 +19,7 @@ export const LIMITS = {
   actionId: 255,
   option: 75,
   /** A value of an option (composition objects, option object). */
-  optionValue: 150,
+  optionValue: 75,
   options: 100,
   placeholder: 150,
   inputLabel: 2000,

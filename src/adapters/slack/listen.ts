@@ -360,7 +360,7 @@ export const listen = (app: App, listening: Listening): void => {
     }
     const { call, handle } = sent;
     const there = at(client, handle, body);
-    const asked = desk.answer(call);
+    const asked = flow.ask(there.sender, call);
     // Its fault is told by whoever sends the reply.
     const early = await within(
       asked.catch(() => null),

@@ -21,6 +21,7 @@ const SCOPES = [
   'mpim:history',
   'pins:write',
   'usergroups:read',
+  'users:read',
 ] as const;
 
 const EVENTS = ['app_home_opened', 'app_mention'] as const;

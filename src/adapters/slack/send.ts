@@ -169,6 +169,12 @@ export const openSender = (client: webApi.WebClient) => {
         alt_text: shortened(alt, LIMITS.altText),
       }),
 
+    /** An administrator of this very workspace; guests of another one manage nothing here. */
+    manages: async (person: string, shop: string): Promise<boolean> => {
+      const { user } = await trying(() => client.users.info({ user: person }));
+      return user?.team_id === shop && (user.is_admin === true || user.is_owner === true);
+    },
+
     /** The user groups a person is in, where the workspace has any. */
     groups: async (person: string): Promise<readonly string[]> => {
       const { usergroups = [] } = await trying(() =>
