@@ -71,9 +71,9 @@ const SHAPES = {
   polyline: pointsOf,
   // Ends of the strokes; an arc bulges no further than its ends by more than the frame's margin.
   path: (e: Read) =>
-    [...(e.at['d'] ?? '').matchAll(/(?:[ML]|[01] )(-?[\d.]+) (-?[\d.]+)(?=[MLAZ]|$)/gu)].map(
-      ([, x, y]) => [Number(x), Number(y)],
-    ),
+    [
+      ...(e.at['d'] ?? '').matchAll(/(?:[ML]|A[\d.]+ [\d.]+ 0 [01] [01] )(-?[\d.]+) (-?[\d.]+)/gu),
+    ].map(([, x, y]) => [Number(x), Number(y)]),
 } as const;
 
 export const boxOf = (element: Read): Box | null => {

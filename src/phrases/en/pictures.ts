@@ -93,7 +93,7 @@ export const pictures: PicturePhrases = {
       window: window(n, show),
       marks: markLines(n, show),
       next: nextLine(n, show),
-      broken: `Strip broken: the diameters are too far apart to show all between them; ${show.units}.`,
+      broken: `Strip broken: the diameters are too far apart to show all between them.`,
     }),
     alt: (n, show) =>
       `Diameters that track: ${[...markLines(n, show), window(n, show), nextLine(n, show) ?? ''].filter((each) => each !== '').join('. ')}.`,
