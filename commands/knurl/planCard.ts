@@ -113,7 +113,8 @@ const setupWords = (
   const { wheel, process, toothCount, fill } = candidate;
   const more = [
     wheelWords(candidate),
-    `${String(toothCount)} teeth`,
+    // The word first: behind a wheel's size the number would be the wheel's own teeth.
+    `teeth ${String(toothCount)}`,
     `fill ${String(Number((fill * 100).toFixed(2)))}%`,
     wheel.onePiece && p.request.pattern.kind === 'diamond' ? 'one wheel' : '',
     wheel.included === DEFAULT_INCLUDED ? '' : `angle ${degreesOf(wheel.included)}`,
