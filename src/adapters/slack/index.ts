@@ -1,21 +1,26 @@
-import type { Desk } from '../../desk/index.ts';
+import { webApi } from '@slack/bolt';
+import type { Desk, Effect } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
+import type { Delivering, Delivery } from '../common/delivery.ts';
 import type { Log } from '../common/log.ts';
 import { type Once, onceInProcess } from '../common/once.ts';
 import {
   type Connecting,
   type Connection,
+  clientOptions,
   connectHttp,
   connectSocket,
   installationOf,
   type Listen,
   loggerFor,
 } from './connect.ts';
+import { deliverEffect } from './effects.ts';
 import { faultText } from './faults.ts';
 import { type Draw, openFlow } from './flow.ts';
 import { listen } from './listen.ts';
 import { openStanding } from './people.ts';
 import { interactionOf } from './receive.ts';
+import { openSender } from './send.ts';
 
 export { TokenRefused } from './connect.ts';
 export { manifestFor } from './manifest.ts';
@@ -38,6 +43,8 @@ export type SlackOptions = {
 export type Slack = {
   /** How many workspaces it is in. */
   readonly shops: number;
+  /** Makes an effect happen that was queued with a change. */
+  readonly deliver: (effect: Effect, delivering: Delivering) => Promise<Delivery>;
   readonly stop: () => Promise<void>;
 };
 
@@ -87,6 +94,12 @@ export const openSlack = async (options: SlackOptions): Promise<Slack> => {
   await connection.start();
   return {
     shops: installations.length,
+    deliver: async (effect, delivering) => {
+      const found = installations.find(({ team }) => team === delivering.shop);
+      if (found === undefined) return { delivered: false, fault: 'no such workspace', final: true };
+      const client = new webApi.WebClient(found.botToken, clientOptions(api, logger));
+      return await deliverEffect(openSender(client), book, effect, delivering);
+    },
     stop: async () => {
       await Promise.allSettled(busy);
       await connection.stop();

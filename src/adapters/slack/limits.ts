@@ -66,6 +66,15 @@ export const REFUSALS = {
   ],
   pinned: ['already_pinned'],
   notPinned: ['no_pin', 'not_pinned', 'message_not_found'],
+  /** What was asked for can never be done. */
+  refused: [
+    'too_many_pins',
+    'cannot_pin',
+    'not_pinnable',
+    'permission_denied',
+    'cant_update_message',
+    'edit_window_closed',
+  ],
   gone: [
     'message_not_found',
     'channel_not_found',

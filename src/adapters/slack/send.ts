@@ -82,11 +82,19 @@ export const openSender = (client: webApi.WebClient) => {
     return found?.data?.ts ?? null;
   };
 
-  /** Posts once: after a fault that leaves it open whether it stands, it is looked for first. */
-  const post = async (where: Where, message: Message, key: string): Promise<Sent> => {
-    const since = Date.now();
+  /**
+   * Posts once: after a fault that leaves it open whether it stands, it is looked for first.
+   * `since` is when it was first tried, where that was before.
+   */
+  const post = async (
+    where: Where,
+    message: Message,
+    key: string,
+    firstTried: number | null = null,
+  ): Promise<Sent> => {
+    const since = firstTried ?? Date.now();
     return await trying(async (before) => {
-      if (before !== null && mayBeDone(before)) {
+      if (firstTried !== null || (before !== null && mayBeDone(before))) {
         const stands = await find(where, key, since);
         if (stands !== null) return { channel: where.channel, message: stands };
       }
@@ -108,9 +116,15 @@ export const openSender = (client: webApi.WebClient) => {
       trying(() => client.chat.postEphemeral({ ...placed(where), user: person, ...message })),
 
     /** To the person alone, where there is no channel to say it in. */
-    direct: async (person: string, message: Message, key: string): Promise<Sent> => {
+    direct: async (
+      person: string,
+      message: Message,
+      key: string,
+      firstTried: number | null = null,
+    ): Promise<Sent> => {
       const { channel } = await trying(() => client.conversations.open({ users: person }));
-      return await post({ channel: channel?.id ?? person, thread: null }, message, key);
+      const where = { channel: channel?.id ?? person, thread: null };
+      return await post(where, message, key, firstTried);
     },
 
     /** By the address that came with the interaction. */
