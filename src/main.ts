@@ -1,11 +1,17 @@
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { parseArgs } from 'node:util';
+import { config as loadEnvironment } from 'dotenv';
 import { FLEET } from '../commands/index.ts';
 import { runChannel, widthOf, writePictures } from './adapters/terminal/index.ts';
-import { openDesk, plainShop } from './desk/index.ts';
+import { ChatFault, sentencesFor, startChats } from './chats.ts';
+import { type Config, configOf } from './config.ts';
+import { openDesk, openRecordsDesk, plainShop } from './desk/index.ts';
 import { openRenderer } from './drawing/index.ts';
+import { openLog } from './log.ts';
 import { en } from './phrases/index.ts';
+import { recordsFault, recordsPlace } from './records.ts';
+import { openStore } from './store/index.ts';
 
 const { values } = parseArgs({
   options: { phone: { type: 'boolean', default: false }, units: { type: 'string', default: 'in' } },
@@ -27,21 +33,75 @@ const folder =
       : null;
 const render = openRenderer();
 
-await runChannel({
-  desk: openDesk(FLEET, plainShop(values.units === 'mm' ? 'mm' : 'in')),
-  book: en,
-  input: process.stdin,
-  output: process.stdout,
-  interactive,
-  pictures:
-    folder === null
-      ? null
-      : (answer, line) =>
-          writePictures(answer, { folder, prefix: `${String(line)}-` }, { book: en, render }),
-  width: () => widthOf(process.stdout.columns, values.phone),
-  onFault: (error) => {
-    process.stderr.write(
-      `${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`,
-    );
-  },
-});
+/** Says what is wrong and ends with an exit code that a supervisor of processes understands. */
+const refuse = (sentences: readonly string[]): never => {
+  process.stderr.write(`${sentences.join('\n')}\n`);
+  process.exit(1);
+};
+
+/** Answers on the chat platforms until it is told to stop. */
+const chat = async (config: Config): Promise<void> => {
+  const log = openLog((line) => process.stderr.write(line));
+  const store = await openStore(recordsPlace());
+  const running = await startChats(
+    {
+      book: en,
+      deskFor: (platform) =>
+        openRecordsDesk(FLEET, store, {
+          platform,
+          program: process.env['npm_package_version'] ?? '',
+          now: Date.now,
+          onFault: (error) => log.fault('records', { error }),
+        }),
+      render,
+      log,
+      print: (line) => process.stdout.write(`${line}\n`),
+    },
+    config,
+  ).catch(async (error: unknown) => {
+    await store.close();
+    throw error;
+  });
+  const stop = (): void => {
+    running
+      .stop()
+      .then(() => store.close())
+      .then(
+        () => process.exit(0),
+        () => process.exit(1),
+      );
+  };
+  process.once('SIGINT', stop);
+  process.once('SIGTERM', stop);
+};
+
+const terminal = (): Promise<void> =>
+  runChannel({
+    desk: openDesk(FLEET, plainShop(values.units === 'mm' ? 'mm' : 'in')),
+    book: en,
+    input: process.stdin,
+    output: process.stdout,
+    interactive,
+    pictures:
+      folder === null
+        ? null
+        : (answer, line) =>
+            writePictures(answer, { folder, prefix: `${String(line)}-` }, { book: en, render }),
+    width: () => widthOf(process.stdout.columns, values.phone),
+    onFault: (error) => {
+      process.stderr.write(
+        `${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`,
+      );
+    },
+  });
+
+loadEnvironment({ quiet: true });
+const found = configOf(process.env);
+if ('faults' in found) refuse(sentencesFor(en, found.faults));
+else if (found.config.discord === null && found.config.slack === null) await terminal();
+else
+  await chat(found.config).catch((error: unknown) => {
+    const sentence = error instanceof ChatFault ? error.message : recordsFault(error);
+    if (sentence === null) throw error;
+    refuse([sentence]);
+  });

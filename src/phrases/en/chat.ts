@@ -41,6 +41,12 @@ const WHAT: Readonly<Record<string, string>> = {
   DISCORD_TOKEN: "the bot's token: application's page, Bot, Reset Token",
   DISCORD_APPLICATION_ID: "the application's id, 17 to 20 digits: application's page, General",
   DISCORD_TEST_GUILD: 'the id of one server, 17 to 20 digits, or nothing',
+  SLACK_BOT_TOKEN:
+    'begins with xoxb-: app page, OAuth & Permissions (several workspaces: several, with commas)',
+  SLACK_APP_TOKEN: 'begins with xapp-: app page, Basic Information, App-Level Tokens',
+  SLACK_SIGNING_SECRET: 'app page, Basic Information, App Credentials',
+  SLACK_API_URL: 'an address such as http://127.0.0.1:8080/api/, or nothing',
+  PORT: 'the number of the port that Slack can reach, 1 to 65535',
   DISCORD_API_URL: 'an address such as http://127.0.0.1:8080/api, or nothing',
 };
 
