@@ -19,6 +19,7 @@ import type {
   Window,
 } from '../calc/index.ts';
 import type { CheckLabels, CheckLines, CheckRows } from './checkLines.ts';
+import type { ConvertLabels, ConvertLines, ConvertRows } from './convertLines.ts';
 import type { Nothing } from './nothing.ts';
 import type { PlanLabels, PlanLines, PlanRows } from './planLines.ts';
 import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
@@ -30,6 +31,7 @@ import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
  * has one entry for each; a new line here is a compile error there until it has words.
  */
 export type Lines = CheckLines &
+  ConvertLines &
   PlanLines &
   ShopLines &
   TroubleLines &
@@ -76,6 +78,7 @@ export type Line = { [K in LineId]: { readonly line: K; readonly values: Lines[K
 
 /** Label and value rows: the numbers of the card in reading order. */
 export type Rows = CheckRows &
+  ConvertRows &
   PlanRows &
   ShopRows &
   TroubleRows &
@@ -112,6 +115,7 @@ export type Row = { [K in RowId]: { readonly row: K; readonly values: Rows[K] } 
 
 /** What a button says. */
 export type Labels = CheckLabels &
+  ConvertLabels &
   PlanLabels &
   ShopLabels &
   TroubleLabels &

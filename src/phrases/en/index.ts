@@ -3,6 +3,7 @@ import { cautions, standing } from './cautions.ts';
 import { chat, config } from './chat.ts';
 import { checkLabels } from './checkLines.ts';
 import { checks } from './checks.ts';
+import { convertLabels } from './convertLines.ts';
 import { lines } from './lines.ts';
 import { materialName, THINGS } from './names.ts';
 import { pictures } from './pictures.ts';
@@ -28,6 +29,7 @@ export const en: Book = {
   states: { fine: 'fine', watch: 'watch', stop: 'stop' },
   labels: {
     ...checkLabels,
+    ...convertLabels,
     ...planLabels,
     ...troubleLabels,
     ...shopLabels,

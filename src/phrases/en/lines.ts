@@ -3,6 +3,7 @@ import type { Book } from '../book.ts';
 import type { Show } from '../show.ts';
 import { checkLines } from './checkLines.ts';
 import { checks } from './checks.ts';
+import { convertLines } from './convertLines.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 import { planLines } from './planLines.ts';
 import { remedyLabel } from './remedies.ts';
@@ -23,6 +24,7 @@ const stopText = (check: Check, show: Show): string =>
 
 export const lines: Book['lines'] = {
   ...checkLines,
+  ...convertLines,
   ...planLines,
   ...shopLines,
   ...troubleLines,

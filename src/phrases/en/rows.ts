@@ -1,5 +1,6 @@
 import type { Book } from '../book.ts';
 import { checkRows } from './checkLines.ts';
+import { convertRows } from './convertLines.ts';
 import { planRows } from './planLines.ts';
 import { shopRows } from './shopLines.ts';
 import { troubleRows } from './troubleLines.ts';
@@ -9,6 +10,7 @@ const parts = (batch: number): string => (batch === 1 ? '' : ` for ${String(batc
 
 export const rows: Book['rows'] = {
   ...checkRows,
+  ...convertRows,
   ...planRows,
   ...shopRows,
   ...troubleRows,
