@@ -15,11 +15,11 @@ const leansOf = (n: DevelopedPatternNumbers): readonly number[] => {
     case 'straight':
       return [0];
     case 'left':
-      return [-n.helix];
+      return [0 - n.helix];
     case 'right':
       return [n.helix];
     case 'crossed':
-      return [-n.helix, n.helix];
+      return [0 - n.helix, n.helix];
     case 'square':
       return [0];
   }

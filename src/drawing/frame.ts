@@ -6,7 +6,7 @@ export const WIDTH = 400;
 export const MARGIN = 12;
 /** Sizes that are still read at that width. Judgement. */
 export const SMALL = 12;
-export const PLAIN = 13;
+const PLAIN = 13;
 const TITLE = 15;
 const LINE = 17;
 

@@ -8,7 +8,7 @@ import type { WordsOf } from './words.ts';
 
 export type * from './numbers.ts';
 export { openRenderer, PNG_WIDTH, type Renderer } from './png.ts';
-export type { Named, WordsOf } from './words.ts';
+export type { WordsOf } from './words.ts';
 
 const DRAWINGS: {
   readonly [K in PictureKind]: (numbers: PictureNumbers[K], words: WordsOf[K]) => string;

@@ -7,7 +7,7 @@ import type { WordsOf } from './words.ts';
 const PLOT = { left: MARGIN + 50, right: WIDTH - MARGIN - 16, height: 200, head: 26 };
 const FILLS = { low: 0.65, high: 1.02 };
 /** Candidates that get a number and a line in words. Judgement. */
-export const NUMBERED = 5;
+const NUMBERED = 5;
 const STEPS = 24;
 
 /** Blank whose crest comes out at a diameter when the tooth is filled this far. */

@@ -3,6 +3,7 @@ import { createRequire } from 'node:module';
 import { dirname, join } from 'node:path';
 import { renderAsync } from '@resvg/resvg-js';
 import PQueue from 'p-queue';
+import { pngOf } from './encode.ts';
 
 const fonts = (): readonly string[] => {
   const folder = join(
@@ -44,7 +45,8 @@ export const openRenderer = (): Renderer => {
     if (known !== undefined) return known;
     const making = queue.add(async () => {
       const image = await renderAsync(svg, renderOptions(width));
-      return new Uint8Array(image.asPng());
+      const { width: across, height } = image;
+      return await pngOf({ width: across, height, pixels: image.pixels });
     });
     kept.set(key, making);
     // One that failed is tried again the next time it is asked for.

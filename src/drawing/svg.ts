@@ -34,9 +34,6 @@ export const circle = (center: Point, r: number, more: Attributes): string =>
 const pair = ([x, y]: Point): string => `${written(x)},${written(y)}`;
 export const polygon = (points: readonly Point[], more: Attributes): string =>
   element('polygon', { points: points.map(pair).join(' '), ...more });
-export const polyline = (points: readonly Point[], more: Attributes): string =>
-  element('polyline', { points: points.map(pair).join(' '), fill: 'none', ...more });
-
 export type TextStyle = {
   readonly size: number;
   readonly weight?: Weight;

@@ -109,7 +109,11 @@ const BOLD: Advances = [
 ];
 
 const tableOf = (advances: Advances): ReadonlyMap<string, number> =>
-  new Map(advances.flatMap(([width, letters]) => [...letters].map((letter) => [letter, width])));
+  new Map(
+    advances.flatMap(([width, letters]) =>
+      Array.from(letters, (letter) => [letter, width] as const),
+    ),
+  );
 const TABLES = { regular: tableOf(REGULAR), bold: tableOf(BOLD) };
 
 export type Weight = keyof typeof TABLES;
@@ -119,7 +123,7 @@ const WIDEST = 1105;
 
 /** Width of a line of text, without kerning, which only ever narrows it. */
 export const textWidth = (text: string, size: number, weight: Weight = 'regular'): number =>
-  [...text].reduce((sum, letter) => sum + (TABLES[weight].get(letter) ?? WIDEST), 0) *
+  Array.from(text).reduce((sum, letter) => sum + (TABLES[weight].get(letter) ?? WIDEST), 0) *
   (size / 1000);
 
 /** Broken at spaces into lines no wider than asked. */

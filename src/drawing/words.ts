@@ -1,5 +1,3 @@
-import type { PictureKind } from './numbers.ts';
-
 /** A name and the number that stands under it. */
 export type Named = { readonly name: string; readonly value: string };
 
@@ -55,4 +53,3 @@ export type WordsOf = {
     readonly candidates: readonly string[];
   };
 };
-export type PictureWords = { [K in PictureKind]: WordsOf[K] }[PictureKind];

@@ -3,7 +3,7 @@ import type { LabelId, Labels, LineId, Lines, RowId, Rows } from '../card/index.
 import type { Contradiction, Refusal } from '../refusal.ts';
 import type { ChatPhrases, ConfigPhrases } from './chat.ts';
 import type { RecordsPhrases } from './records.ts';
-import type { PicturePhrases } from './pictures.ts';
+import type { PicturePhrases } from './picturePhrases.ts';
 import type { Show } from './show.ts';
 import type { SlackPhrases } from './slack.ts';
 

@@ -2,7 +2,7 @@ export type { Book, LabelledText } from './book.ts';
 export type { ChatPhrases, ConfigPhrases, RegistrationPhrases } from './chat.ts';
 export { en } from './en/index.ts';
 export type { RecordsPhrases } from './records.ts';
-export { type PicturePhrases, type SpokenPicture, speakPictures } from './pictures.ts';
+export { type SpokenPicture, speakPictures } from './pictures.ts';
 export { type ShopUnits, type Show, showIn } from './show.ts';
 export {
   type SpokenCard,

@@ -129,7 +129,7 @@ const advancesOf = (file: string): ((letter: string) => number) => {
 const FONTS = { regular: advancesOf('DejaVuSans.ttf'), bold: advancesOf('DejaVuSans-Bold.ttf') };
 
 export const realWidth = (text: string, size: number, weight: 'regular' | 'bold'): number =>
-  [...text].reduce((sum, letter) => sum + FONTS[weight](letter), 0) * size;
+  Array.from(text).reduce((sum, letter) => sum + FONTS[weight](letter), 0) * size;
 
 /** Where a text stands, by the advances of the real font and its usual heights. */
 export const textBox = (element: Read): Box => {

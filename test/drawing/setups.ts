@@ -33,7 +33,7 @@ export const spokenIn = (
 ): readonly SpokenPicture[] => speakPictures(en, { pictures, units } as Card);
 
 export const svgOf = (spoken: SpokenPicture): string =>
-  drawPicture(spoken.kind, spoken.numbers as never, spoken.words as never);
+  drawPicture(spoken.kind, spoken.numbers, spoken.words);
 
 /** From 4 teeth to thousands, pitch 0.2 to 3.2 mm, walls down to half a millimetre, any hold. */
 const extremes = (count: number, seed: number): readonly SetupRequest[] => {

@@ -1,14 +1,7 @@
 import type { Answer } from '../../desk/index.ts';
-import { drawPicture, type PictureKind, type Renderer } from '../../drawing/index.ts';
-import { type Book, type SpokenPicture, speakPictures } from '../../phrases/index.ts';
+import { drawPicture, type Renderer } from '../../drawing/index.ts';
+import { type Book, speakPictures } from '../../phrases/index.ts';
 import type { Drawn } from './pieces.ts';
-
-const svgOf = <K extends PictureKind>(
-  spoken: Extract<SpokenPicture, { kind: K }> & SpokenPicture,
-): string => {
-  const { kind, numbers, words } = spoken as SpokenPicture & { readonly kind: K };
-  return drawPicture(kind, numbers as never, words as never);
-};
 
 export type Sketch = { readonly name: string; readonly svg: string; readonly alt: string };
 
@@ -17,7 +10,7 @@ export const sketchesOf = (answer: Answer, book: Book): readonly Sketch[] =>
   answer.kind === 'card'
     ? speakPictures(book, answer.card).map((spoken, i) => ({
         name: `${String(i + 1)}-${spoken.kind}`,
-        svg: svgOf(spoken),
+        svg: drawPicture(spoken.kind, spoken.numbers, spoken.words),
         alt: spoken.alt,
       }))
     : [];

@@ -1,5 +1,5 @@
 import type { PictureNumbers } from '../../drawing/index.ts';
-import type { PicturePhrases } from '../pictures.ts';
+import type { PicturePhrases } from '../picturePhrases.ts';
 import type { Show } from '../show.ts';
 
 const teeth = (count: number): string => `${String(count)} ${count === 1 ? 'tooth' : 'teeth'}`;
