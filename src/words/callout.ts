@@ -4,8 +4,8 @@ import { tokenAt } from './cursor.ts';
 import { type Reader, refused, took } from './reading.ts';
 
 /** `96 DP straight` is read word by word; these are the callouts that only a standard spells. */
-const SPELT_BY_STANDARD = new Set(['din82', 'jis', 'gost']);
-const NAMES_STANDARD = /^(?:asme|ansi)/u;
+const SPELT_BY_STANDARD = new Set(['din82', 'gost']);
+const NAMES_STANDARD = /^(?:asme|ansi|jis)/u;
 
 /** A drawing's callout: `RGE 0.8`, `DIN 82-RAA 0,8`, `JIS B 0951 straight m 0.3`. */
 export const freeCallout: Reader<Callout> = (cursor) => {

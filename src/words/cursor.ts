@@ -32,6 +32,8 @@ export type Quantity = {
   readonly used: number;
   /** The unit is a word of its own: `1.0 in`. */
   readonly unitApart: boolean;
+  /** A number stands behind that word, so that it may belong to it: `feed 0.012 turns 18`. */
+  readonly numberFollows: boolean;
   /** Place of the number without its unit: where a unit would be added. */
   readonly number: Span;
 };
@@ -59,11 +61,14 @@ const withUnit = (cursor: Cursor, head: Head, used: number, start: number): Quan
   const base = { value: head.value, sign: head.sign, number };
   if (head.rest !== '') {
     const unit = unitOf(head.rest);
-    return unit === null ? null : { ...base, unit, used, unitApart: false };
+    return unit === null ? null : { ...base, unit, used, unitApart: false, numberFollows: false };
   }
   const next = tokenAt(cursor, used);
   const unit = next === undefined ? null : unitOf(next.text);
-  return { ...base, unit, used: unit === null ? used : used + 1, unitApart: unit !== null };
+  if (unit === null) return { ...base, unit, used, unitApart: false, numberFollows: false };
+  const behind = tokenAt(cursor, used + 1);
+  const numberFollows = behind !== undefined && headOf(behind.text) !== null;
+  return { ...base, unit, used: used + 1, unitApart: true, numberFollows };
 };
 
 /** The quantity that starts here: `1.0`, `1.0in`, `1.0 in`, `1 1/4"`, `-0.010`. */
@@ -83,14 +88,24 @@ export const quantityAt = (cursor: Cursor): Quantity | null => {
 
 /**
  * The quantity as one of a measure: its own unit or none. The `in` of `turns 18 in brass` is a
- * word, not a unit, where an inch makes no sense; any other unit means something else was meant.
+ * word, not a unit, where an inch makes no sense, and the `turns` of `feed 0.012 turns 18` belongs
+ * to the number behind it; any other unit means something else was meant.
  */
 export const ofMeasure = (quantity: Quantity, measure: Unit['measure'] | null): Quantity | null => {
   const { unit } = quantity;
   if (unit === null || unit.measure === measure) return quantity;
-  const wordIn = quantity.unitApart && unit.measure === 'length';
-  return wordIn ? { ...quantity, unit: null, used: quantity.used - 1, unitApart: false } : null;
+  const isWord = quantity.unitApart && (unit.measure === 'length' || quantity.numberFollows);
+  return isWord ? withoutUnit(quantity) : null;
 };
+
+/** The number alone, its unit word left for what follows. */
+export const withoutUnit = (quantity: Quantity): Quantity => ({
+  ...quantity,
+  unit: null,
+  used: quantity.used - (quantity.unitApart ? 1 : 0),
+  unitApart: false,
+  numberFollows: false,
+});
 
 /** How many tokens a phrase takes here, 0 where it does not stand here. */
 export const phraseAt = (cursor: Cursor, phrase: readonly string[]): number =>

@@ -127,6 +127,9 @@ const isQuantity = (cursor: Cursor, used: number): boolean => {
   const next = tokenAt(cursor, used);
   const unit = next === undefined ? null : unitOf(next.text);
   if (last === undefined || !/^\d+$/u.test(last.text) || unit === null) return false;
+  // In `1018 turns 18` the word announces the number behind it, unless that is a material too.
+  const behind = tokenAt(cursor, used + 1)?.text ?? '';
+  if (/^\d/u.test(behind) && !BY_FIRST_WORD.has(behind)) return false;
   // In `4140 HB 210` the scale belongs to the number behind it.
   const isScale = unit.measure === 'hb' || unit.measure === 'hrc';
   const hardness = isScale ? Number(tokenAt(cursor, used + 1)?.text) : Number.NaN;

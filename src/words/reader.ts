@@ -175,6 +175,16 @@ const unclearAngle = (
     : { refusal: { code: 'unclear', what: 'angle', readings } };
 };
 
+/** The number alone, where the word behind it announces another. */
+const bareBefore = (cursor: Cursor, vocabulary: Vocabulary, names: Names): Step | null => {
+  const parameter = vocabulary.parameters.find((each) => each.bare === true);
+  const alone = { ...cursor, tokens: cursor.tokens.slice(0, cursor.at + 1) };
+  const reading = parameter?.read(alone, names) ?? null;
+  return parameter === undefined || reading === null || 'refusal' in reading
+    ? null
+    : stepOf(parameter, reading);
+};
+
 const byQuantity = (cursor: Cursor, vocabulary: Vocabulary, names: Names): Step | null => {
   const quantity = quantityAt(cursor);
   if (quantity === null) return null;
@@ -187,6 +197,9 @@ const byQuantity = (cursor: Cursor, vocabulary: Vocabulary, names: Names): Step 
       : (parameter.measures ?? []).some((own) => own === measure);
   const parameter = vocabulary.parameters.find(claims);
   const reading = parameter?.read(cursor, names) ?? null;
+  // `1.0 turns 18`: one turn makes no sense, so the word belongs to the number behind it.
+  if (quantity.numberFollows && reading !== null && 'refusal' in reading)
+    return bareBefore(cursor, vocabulary, names) ?? { refusal: reading.refusal };
   if (parameter !== undefined && reading !== null) return stepOf(parameter, reading);
   return measure === 'angle' ? unclearAngle(cursor, quantity, vocabulary, names) : null;
 };

@@ -7,8 +7,8 @@ export type Span = { readonly start: number; readonly end: number };
 /** Marks that end or wrap a word and mean nothing by themselves. */
 const LEADING = /^[([{<,;:!?&]+/u;
 const TRAILING = /[)\]}>,;:!?&]+$/u;
-/** A full stop ends a sentence, but `21.` is a number and `1.0 in.` a unit. */
-const FULL_STOP = /^(?<word>.*[^\d.])\.+$/u;
+/** A full stop ends a sentence: `1.0 in.`, `1.0.`; but `21.` is a number. */
+const FULL_STOP = /^(?<word>.*[^\d.]|\d*[.,]\d+)\.+$/u;
 
 const trimmed = (word: string, start: number): Token | null => {
   const lead = LEADING.exec(word)?.[0].length ?? 0;
@@ -25,9 +25,7 @@ const partsAt = (word: string): readonly number[] => {
     if (word[i] !== ',') continue;
     const before = word.slice(0, i);
     const decimal =
-      /(^|[^\d.])\d*$/u.test(before) &&
-      !/\d*\.\d*$/u.test(before) &&
-      /^\d/u.test(word.slice(i + 1));
+      (before === '' || /(^|[^\d.,])\d+$/u.test(before)) && /^\d/u.test(word.slice(i + 1));
     if (!decimal) cuts.push(i);
   }
   return cuts;
