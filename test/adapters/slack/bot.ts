@@ -68,6 +68,7 @@ export const openBot = async ({
   if (http) platform.useHttp(url);
   return {
     platform,
+    bot,
     people: openPeople(platform),
     url,
     faults,

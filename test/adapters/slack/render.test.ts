@@ -1,0 +1,197 @@
+/** Generated cards: every message within every limit, and nothing that a card says is lost. */
+import fc from 'fast-check';
+import { describe, expect, test } from 'vitest';
+import { FLEET } from '../../../commands/index.ts';
+import { spoken } from '../../../src/adapters/common/spoken.ts';
+import { literally, typedText } from '../../../src/adapters/slack/escape.ts';
+import { verbForm } from '../../../src/adapters/slack/form.ts';
+import { homeView } from '../../../src/adapters/slack/home.ts';
+import { type Message, render } from '../../../src/adapters/slack/render.ts';
+import { en, type SpokenCard } from '../../../src/phrases/index.ts';
+import { buttonsOf } from '../../platforms/slack/people.ts';
+import { ruleFaults } from '../../platforms/slack/rules.ts';
+import { bodyCheck, mostIn, slackSchema } from '../../platforms/slack/schemas.ts';
+import { deskIn } from '../../support/desk.ts';
+
+const check = bodyCheck();
+const faultsIn = (message: Message): readonly string[] =>
+  [check('message', message), ...ruleFaults('message', message)].filter((each) => each !== null);
+
+/** Words of any kind, and what has a meaning in Slack's markup. */
+const words = (most: number) =>
+  fc
+    .array(
+      fc.oneof(
+        { weight: 4, arbitrary: fc.string({ minLength: 1, maxLength: 12, unit: 'grapheme' }) },
+        fc.constantFrom(
+          '<!channel>',
+          '<@U0SOMEBODY>',
+          '&amp;',
+          '*bold*',
+          '_so_',
+          '`x`',
+          '~',
+          '>',
+          '0.9852 in',
+          '😀',
+        ),
+      ),
+      { minLength: 1, maxLength: most },
+    )
+    .map((each) => `w${each.join(' ')}`);
+const short = words(4);
+const text = fc.oneof({ weight: 5, arbitrary: words(20) }, { weight: 1, arbitrary: words(900) });
+
+const part = fc.oneof(
+  fc.record({ part: fc.constant('lines' as const), texts: fc.array(text, { maxLength: 12 }) }),
+  fc.record({
+    part: fc.constant('rows' as const),
+    rows: fc.array(fc.record({ label: short, text }), { maxLength: 30 }),
+  }),
+  fc.record({
+    part: fc.constant('checks' as const),
+    checks: fc.array(
+      fc.record({
+        label: short,
+        state: fc.constantFrom('fine' as const, 'watch' as const, 'stop' as const),
+        stateWord: fc.constantFrom('fine', 'watch', 'stop'),
+        text: words(60),
+      }),
+      { maxLength: 20 },
+    ),
+  }),
+  fc.record({
+    part: fc.constant('cautions' as const),
+    shown: fc.array(text, { maxLength: 5 }),
+    standing: text,
+    all: fc.array(text, { maxLength: 5 }),
+    rest: fc.array(text, { maxLength: 5 }),
+  }),
+  fc.record({ part: fc.constant('own' as const), texts: fc.array(text, { maxLength: 5 }) }),
+  fc.record({ part: fc.constant('footing' as const), text }),
+);
+const card: fc.Arbitrary<SpokenCard> = fc.record({
+  headline: text,
+  parts: fc.array(part, { maxLength: 7 }),
+  choicesTitle: fc.constant('Next'),
+  choices: fc.array(fc.record({ label: text, words: text }), { maxLength: 40 }),
+});
+
+const bare = (said: string): string => said.replaceAll(/\s+/gu, '');
+/** What is read in a message, marks taken as marks. */
+const readIn = ({ blocks }: Message): string =>
+  blocks.flatMap((block) => (block.type === 'section' ? [block.text?.text ?? ''] : [])).join('\n');
+
+const saidBy = (each: SpokenCard['parts'][number]): readonly string[] => {
+  switch (each.part) {
+    case 'lines':
+    case 'own':
+      return each.texts;
+    case 'rows':
+      return each.rows.flatMap((row) => [row.label, row.text]);
+    case 'checks':
+      return each.checks.flatMap((one) => [one.label, one.stateWord, one.text]);
+    case 'cautions':
+      return [...each.shown, ...each.rest, each.standing];
+    case 'footing':
+      return [each.text];
+  }
+};
+
+test('generated cards: within every limit, nothing lost, every choice has its button', () => {
+  fc.assert(
+    fc.property(card, (generated) => {
+      const messages = render({ card: generated, of: 'Ev1', wasPrivate: false });
+      for (const message of messages) expect(faultsIn(message)).toEqual([]);
+      const read = bare(messages.map(readIn).join('\n'));
+      // A text that was parted stands in two places, one after the other.
+      for (const said of [generated.headline, ...generated.parts.flatMap(saidBy)])
+        expect(read.replaceAll('**', '')).toContain(bare(literally(said)));
+      const values = messages.flatMap((message) => buttonsOf(message).map(({ value }) => value));
+      expect(values).toEqual(generated.choices.map((_, index) => `p:${String(index)}:Ev1`));
+    }),
+    { numRuns: 60 },
+  );
+});
+
+test('what a person typed comes back as it was typed', () => {
+  fc.assert(
+    fc.property(fc.string(), (typed) => {
+      const escaped = typed
+        .replaceAll('&', '&amp;')
+        .replaceAll('<', '&lt;')
+        .replaceAll('>', '&gt;');
+      expect(typedText(escaped)).toBe(typed.replaceAll(/\s+/gu, ' ').trim());
+    }),
+  );
+});
+
+describe('the limits come from the types', () => {
+  test('lengths are read out of the comments', () => {
+    expect(mostIn('Maximum length for this field is 255 characters.')).toBe(255);
+    expect(mostIn('There is a maximum of 25 elements in each action block.')).toBe(25);
+    expect(mostIn('The minimum length is 1 and maximum length is 3000 characters.')).toBe(3000);
+    expect(mostIn('An array of up to 5 options')).toBe(5);
+    expect(mostIn('The type of block.')).toBeNull();
+    const limits = JSON.stringify(slackSchema()).match(/"max(?:Length|Items)":\d+/gu) ?? [];
+    expect(limits.length).toBeGreaterThan(100);
+  });
+
+  test.each([
+    ['a section too long', [{ type: 'section', text: { type: 'mrkdwn', text: 'a'.repeat(3001) } }]],
+    ['an unknown block', [{ type: 'banner' }]],
+    ['an unknown property', [{ type: 'divider', colour: 'red' }]],
+    [
+      'a label too long',
+      [
+        {
+          type: 'actions',
+          elements: [{ type: 'button', text: { type: 'plain_text', text: 'a'.repeat(76) } }],
+        },
+      ],
+    ],
+    ['too many blocks', Array.from({ length: 51 }, () => ({ type: 'divider' }))],
+    ['somebody rung', [{ type: 'section', text: { type: 'mrkdwn', text: '<!channel>' } }]],
+  ])('%s is refused', (_what, blocks) => {
+    const message = { text: 'x', blocks } as unknown as Message;
+    expect(faultsIn(message)).not.toEqual([]);
+  });
+});
+
+test('every verb has a form within the limits, and the home too', () => {
+  const handle = {
+    shop: 'T0SHOP',
+    person: { id: 'U0OPERATOR', name: 'robin' },
+    channel: 'C0FLOORSHOP',
+    thread: null,
+    responseUrl: 'https://hooks.example/commands/T0SHOP/1/abc',
+  };
+  for (const command of FLEET) {
+    const view = verbForm({ book: en, handle, isPrivate: false }, command);
+    expect(check('modal', view)).toBeNull();
+    expect(ruleFaults('view', view)).toEqual([]);
+  }
+  const home = homeView(en, FLEET);
+  expect(check('home', home)).toBeNull();
+  expect(ruleFaults('view', home)).toEqual([]);
+});
+
+/** Kept as files; `npm test -- test/adapters/slack/render -u` writes them anew. */
+const WORK = FLEET.filter(({ path }) => path[0] === 'knurl');
+test.each(WORK.map((command) => [command.path.join(' '), command] as const))(
+  'golden: /%s',
+  async (name, command) => {
+    const answer = await deskIn('in').answer({
+      shop: 'T0SHOP',
+      person: { id: 'U0OPERATOR', name: 'robin' },
+      place: { channel: 'C0FLOORSHOP', thread: null, isPrivate: false },
+      interactionId: 'Ev1',
+      given: { words: command.examples[0] ?? `/${name}` },
+    });
+    const messages = render({ card: spoken(answer, en), of: 'Ev1', wasPrivate: false });
+    for (const message of messages) expect(faultsIn(message)).toEqual([]);
+    await expect(`${JSON.stringify(messages, null, 2)}\n`).toMatchFileSnapshot(
+      `goldens/${name.replaceAll(' ', '-')}.txt`,
+    );
+  },
+);
