@@ -108,9 +108,18 @@ const cardOf = (
 const tracks = ({ result }: Checked<BlankCheck>): boolean =>
   result.checks.every((check) => check.name !== 'tracking' || check.state === 'fine');
 
+/** Smallest diameter that makes sense with this pitch, where the blank is below it. */
+const sensibleFrom = ({ result }: Checked<BlankCheck>): Mm | null => {
+  const tracking = result.checks.find(({ reason }) => reason === 'fewTeeth');
+  const smallest = tracking?.figures['smallestDiameter'];
+  return smallest === undefined || smallest === null ? null : mm(smallest.value);
+};
+
 const blankHeadline = (c: Checked<BlankCheck>): Line => {
   const { figures } = c.result;
   const { diameter } = c;
+  const smallest = sensibleFrom(c);
+  if (smallest !== null) return line('blankFewTeeth', { diameter, smallest });
   const toothCount = figureOf(figures, 'toothCount') ?? 0;
   const toothError = figureOf(figures, 'toothError') ?? 0;
   if (tracks(c))
@@ -150,6 +159,7 @@ const windowTold = (c: Checked<BlankCheck>): Window | null => {
 
 const blankLines = (c: Checked<BlankCheck>): readonly Line[] => {
   const { figures } = c.result;
+  if (sensibleFrom(c) !== null) return [];
   const window = windowTold(c);
   const chance = figureOf(figures, 'chanceTracks');
   const doubted = tracks(c) && doubtsWheel(c);
@@ -192,7 +202,7 @@ export const blankCard = (c: Checked<BlankCheck>): Card => {
       { part: 'lines', lines: doubtsWheel(c) ? seamSteps(trialBite(c)) : [] },
     ],
     STANDING_CAUTIONS,
-    to === null ? [] : [setUpAt(c, to)],
+    to === null || sensibleFrom(c) !== null ? [] : [setUpAt(c, to)],
   );
 };
 
@@ -317,9 +327,13 @@ const rescueLines = ({ result }: Checked<AfterCheck>): readonly Line[] => {
 const thisPartLines = ({ result }: Checked<AfterCheck>): readonly Line[] =>
   result.thisPart.filter((move) => move.id !== 'keep').map((move) => line('thisPart', { move }));
 
-const nextPartLines = ({ result, diameter, said }: Checked<AfterCheck>): readonly Line[] => {
-  const fill = figureOf(result.figures, 'fillExpected') ?? 0;
-  const flat = mm(result.pitch.normal * (1 - fill));
+/** What the planned fill leaves on the crests: near full form a better judge than the dial. */
+const plannedFlat = ({ result }: Checked<AfterCheck>): Mm =>
+  mm(result.pitch.normal * (1 - (figureOf(result.figures, 'fillExpected') ?? 0)));
+
+const nextPartLines = (c: Checked<AfterCheck>): readonly Line[] => {
+  const { result, diameter, said } = c;
+  const flat = plannedFlat(c);
   const expected = figureOf(result.figures, 'countExpected') ?? 0;
   const differs = result.checks.some(
     ({ name, reason }) => name === 'count' && reason === 'wheelDiffers',
@@ -336,12 +350,13 @@ const nextPartLines = ({ result, diameter, said }: Checked<AfterCheck>): readonl
   );
 };
 
-const afterHeadline = ({ result, diameter, said }: Checked<AfterCheck>): Line => {
+const afterHeadline = (c: Checked<AfterCheck>): Line => {
+  const { result, diameter, said } = c;
   const [move] = result.thisPart;
   const expected = figureOf(result.figures, 'countExpected') ?? 0;
   return result.right || move === undefined
     ? line('partRight', { blank: diameter, toothCount: said.count ?? expected })
-    : line('partOff', { off: result.off, move });
+    : line('partOff', { off: result.off, move, flat: plannedFlat(c) });
 };
 
 /** A part that is spoiled is turned down where that helps; the next one is set up. */

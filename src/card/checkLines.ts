@@ -21,6 +21,7 @@ export type CheckLines = {
     readonly toothCount: number;
     readonly toothError: number;
   };
+  blankFewTeeth: { readonly diameter: Mm; readonly smallest: Mm };
   blankTooSmall: { readonly diameter: Mm; readonly toothError: number };
   chanceTracks: { readonly chance: number };
   seamWhole: { readonly diameter: Mm };
@@ -39,6 +40,8 @@ export type CheckLines = {
   partOff: {
     readonly off: readonly OffFigure[];
     readonly move: PartMove<ThisPartMoveId>;
+    /** What the planned fill leaves on the crests. */
+    readonly flat: Mm;
   };
   thisPart: { readonly move: PartMove<ThisPartMoveId> };
   /** The flat on the crests that the planned fill leaves: what to stop by where the dial is no judge. */

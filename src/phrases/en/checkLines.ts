@@ -29,12 +29,12 @@ const odds = (share: number): string =>
   `${String(Math.min(99, Math.max(1, Math.round(share * 100))))} %`;
 
 /** What to do to this part, short enough to stand in front. */
-const inShort = (move: CheckLines['partOff']['move'], show: Show): string => {
+const inShort = ({ move, flat }: Pick<CheckLines['partOff'], 'move' | 'flat'>, show: Show) => {
   switch (move.id) {
     case 'keep':
       return 'Keep it';
     case 'feedFurther':
-      return `Feed in ${show.length(amount(move))} further`;
+      return `Feed in further, until the crests keep a flat of ${show.length(flat)}`;
     case 'measureFlat':
       return 'Measure the flat on the crests';
     case 'countAgain':
@@ -82,7 +82,7 @@ const nextPart = ({ move, flat }: CheckLines['nextPart'], show: Show): string =>
     case 'logGrowth':
       return `Next part: it grows ${show.percent(amount(move))} of the static growth; log the result so that the cards learn it.`;
     case 'swivel':
-      return `Next part: swivel the tool by ${show.angle(amount(move))}, the shallow end deeper.`;
+      return `Next part: swivel the tool by ${show.angle(Math.abs(amount(move)))}, the shallow end deeper.`;
     case 'support':
       return `Next part: support the bar; it gives by ${show.length(amount(move))}.`;
   }
@@ -97,6 +97,8 @@ export const checkLines: CheckPhrases = {
     `Turn to ${show.length(nextDiameter)}: ${String(nextToothCount)} teeth; ${show.length(takeOff)} comes off`,
   blankIsOff: ({ diameter, toothCount, toothError }, show) =>
     `${show.length(diameter)} as it is: ${show.teeth(toothError)} of a tooth ${side(toothError)} ${String(toothCount)}.`,
+  blankFewTeeth: ({ diameter, smallest }, show) =>
+    `${show.length(diameter)} holds too few teeth to roll: take a finer pitch, or ${show.length(smallest, 'up')} or more`,
   blankTooSmall: ({ diameter, toothError }, show) =>
     `${show.length(diameter)} is ${show.teeth(toothError)} of a tooth off, and no smaller whole count is left`,
   chanceTracks: ({ chance }) =>
@@ -114,9 +116,9 @@ export const checkLines: CheckPhrases = {
   seamStep: ({ step, bite }, show) => SEAM_STEPS[step](show.length(bite, 'up')),
   partRight: ({ blank, toothCount }, show) =>
     `Right, keep it: ${String(toothCount)} teeth on ${show.length(blank)}`,
-  partOff: ({ off, move }, show) => {
+  partOff: ({ off, move, flat }, show) => {
     const what = off.length === 0 ? 'the size' : off.map((figure) => OFF[figure]).join(' and ');
-    return `${inShort(move, show)}: ${what} ${off.length > 1 ? 'are' : 'is'} off`;
+    return `${inShort({ move, flat }, show)}: ${what} ${off.length > 1 ? 'are' : 'is'} off`;
   },
   thisPart: ({ move }, show) => thisPart(move, show),
   nextPart: (values, show) => nextPart(values, show),
@@ -139,7 +141,7 @@ export const checkRows: {
     text: `${String(counted)} counted, ${String(expected)} worked out`,
   }),
   crestSeen: ({ crest, low, high }, show) => ({
-    label: 'Over crests',
+    label: 'Crests',
     text: `${show.both(crest)} measured, ${show.span(low, high)} expected`,
   }),
   growthSeen: ({ growth, factor }, show) => ({

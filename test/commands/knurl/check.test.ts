@@ -164,6 +164,28 @@ describe('check after: the finished part', () => {
   });
 });
 
+describe('what a person can act on', () => {
+  it.each([
+    [
+      'check 0.12 straight 14tpi',
+      '0.1200 in holds too few teeth to roll: take a finer pitch, or 0.2729 in or more',
+    ],
+    [
+      'check 1.000 diamond 21tpi 304 count 57 crest 1.02 height 0.018',
+      'Feed in further, until the crests keep a flat of 0.0048 in: the fill is off',
+    ],
+  ])('%s', async (line, first) => {
+    expect(headline(await cardFor(line))).toBe(first);
+  });
+
+  it('an angle to swivel by has no sign, whichever end is shallow', async () => {
+    for (const flats of ['0.012 and 0.004', '0.004 and 0.012']) {
+      const answer = await cardFor(`check 0.9852 straight 21tpi flats ${flats} over 1.0`);
+      expect(said(textOf(answer))).toContain('swivel the tool by 0.04°');
+    }
+  });
+});
+
 describe('in a metric shop', () => {
   it('a check says millimetres first, and its choices are typed in them', async () => {
     const answer = await cardFor('/knurl check 20 straight 0.8 pitch', 'mm');
