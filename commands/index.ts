@@ -1,4 +1,5 @@
 import type { Command } from '../src/desk/index.ts';
+import { card } from './knurl/card.ts';
 import { check } from './knurl/check.ts';
 import { convert } from './knurl/convert.ts';
 import { help } from './knurl/help.ts';
@@ -6,6 +7,29 @@ import { plan } from './knurl/plan.ts';
 import { setup } from './knurl/setup.ts';
 import { trouble } from './knurl/trouble.ts';
 import { why } from './knurl/why.ts';
+import { exportAll } from './shop/export.ts';
+import { machines } from './shop/machines.ts';
+import { materials } from './shop/materials.ts';
+import { people } from './shop/people.ts';
+import { rules } from './shop/rules.ts';
+import { settings } from './shop/settings.ts';
+import { wheels } from './shop/wheels.ts';
 
 /** Everything a person can ask for. A new command is one new file and one line here. */
-export const FLEET: readonly Command[] = [setup, check, plan, trouble, convert, why, help];
+export const FLEET: readonly Command[] = [
+  setup,
+  check,
+  plan,
+  trouble,
+  convert,
+  card,
+  why,
+  help,
+  ...wheels,
+  ...machines,
+  ...materials,
+  ...rules,
+  ...people,
+  ...settings,
+  exportAll,
+];

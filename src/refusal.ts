@@ -59,11 +59,11 @@ export type Doubt =
   | 'keywordBetween'
   | 'sizeByWhat'
   | 'limitsOfWhat'
-  | 'whichSpeed'
   | 'whichAngle'
   | 'wholeNumber'
   | 'oneOfRange'
   | 'gradeOnly'
+  | 'familyOnly'
   | 'calloutAgainst';
 
 /** Things people say together that exclude each other. */

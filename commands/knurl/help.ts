@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { type Card, line } from '../../src/card/index.ts';
-import { type Context, cardReply, defineCommand } from '../../src/desk/index.ts';
+import { type Command, type Context, cardReply, defineCommand } from '../../src/desk/index.ts';
 
 /** Examples in the shop's own units, so that the first line a person copies works as it is. */
 const EXAMPLES = {
@@ -16,6 +16,9 @@ const EXAMPLES = {
   ],
 } as const;
 
+/** Of a list's commands the one that shows it is enough: it says how to add to it. */
+const isNamed = ({ path }: Command): boolean => path.length <= 2 || path.at(-1) === 'list';
+
 const helpCard = ({ units, fleet }: Context): Card => ({
   verb: 'help',
   headline: line('helpIntro', {}),
@@ -26,7 +29,7 @@ const helpCard = ({ units, fleet }: Context): Card => ({
     },
     {
       part: 'lines',
-      lines: fleet.map((command) =>
+      lines: fleet.filter(isNamed).map((command) =>
         line('helpVerb', {
           verb: command.path.join(' '),
           line: command.examples[0] ?? `/${command.path.join(' ')}`,

@@ -47,13 +47,13 @@ const toothForm = ({ figures, blank, pitch, process }: SetupResult): readonly Pi
 
 const strip = (of: {
   readonly transversePitch: Mm;
-  readonly toothCount: number;
+  /** The whole-tooth diameter that the window belongs to. */
+  readonly whole: number;
   readonly window: Window;
   readonly marks: StripMarks;
   readonly next: PictureFor<'trackingStrip'>['numbers']['next'];
 }): Picture => {
-  const whole = (of.toothCount * of.transversePitch) / Math.PI;
-  const { transversePitch, marks, next } = of;
+  const { transversePitch, whole, marks, next } = of;
   return {
     kind: 'trackingStrip',
     numbers: {
@@ -72,7 +72,7 @@ const setupStrip = (request: SetupRequest, result: SetupResult): Picture => {
   const blankMark = { what: 'blank', diameter: blank.diameter } as const;
   return strip({
     transversePitch: pitch.transverse,
-    toothCount: blank.teeth,
+    whole: (blank.teeth * pitch.transverse) / Math.PI,
     window,
     marks: stock === null ? [blankMark] : [{ what: 'bar', diameter: stock }, blankMark],
     next: null,
@@ -142,12 +142,16 @@ export const checkPictures = (
   ];
   const [low, high] = [figureOf(figures, 'blankWindowLow'), figureOf(figures, 'blankWindowHigh')];
   if (pitch === null || toothCount === null || low === null || high === null) return [];
-  const to = figureOf(figures, 'seamDiameter') ?? figureOf(figures, 'nextDiameter');
-  const needsNext = to !== null && to < diameter - 1e-6 && !isFine(checks);
+  const seam = figureOf(figures, 'seamDiameter');
+  const proven = figureOf(figures, 'effectivePitch');
+  // A seam that does not close speaks against the label: its counts are not shown as if they held.
+  if (seam !== null && proven === null) return [];
+  const to = seam ?? figureOf(figures, 'nextDiameter');
+  const needsNext = to !== null && to < diameter - 1e-6 && (seam !== null || !isFine(checks));
   return [
     strip({
-      transversePitch: mm(pitch),
-      toothCount,
+      transversePitch: mm(proven ?? pitch),
+      whole: (toothCount * pitch) / Math.PI,
       window: { low: mm(low), high: mm(high) },
       marks: [{ what: 'bar', diameter }],
       next: needsNext ? { from: diameter, to: mm(to) } : null,

@@ -10,6 +10,7 @@ import type {
   Watt,
 } from '../calc/index.ts';
 import type { CellFault, FileFault } from './fileFaults.ts';
+import type { Nothing } from './nothing.ts';
 
 /** What a shop keeps lists of. */
 export type ShopThing = 'wheel' | 'machine' | 'material' | 'rule' | 'person' | 'group';
@@ -31,6 +32,7 @@ export type Amount =
   | { readonly kind: 'text'; readonly value: string }
   /** One of the program's own words; the phrase book says it. */
   | { readonly kind: 'word'; readonly value: string }
+  | { readonly kind: 'moment'; readonly value: Moment }
   | { readonly kind: 'nothing' };
 
 /** What a fact of the records is about, by the name its parameter has. */
@@ -65,14 +67,14 @@ export type ShopLines = {
   };
   importedIgnored: { readonly heading: string; readonly nearest: readonly string[] };
   importRefused: { readonly fault: FileFault };
-  settings: Record<never, never>;
+  settings: Nothing;
   settingChanged: { readonly fact: Fact };
   exported: { readonly files: readonly string[] };
   cardCode: { readonly code: string };
   cardAgain: Moment & { readonly code: string; readonly by: string; readonly program: string };
-  cardSame: Record<never, never>;
+  cardSame: Nothing;
   cardDiffers: { readonly count: number };
-  cardNotToday: Record<never, never>;
+  cardNotToday: Nothing;
   machineTaken: { readonly machine: string };
   wheelTakenFrom: { readonly wheel: string; readonly place: string | null };
   wheelInState: { readonly wheel: string; readonly state: string };
@@ -80,7 +82,7 @@ export type ShopLines = {
   undelivered: { readonly count: number; readonly fault: string };
   givenUp: { readonly attempts: number; readonly fault: string };
   planCribOfShop: { readonly wheels: number };
-  invented: Record<never, never>;
+  invented: Nothing;
 };
 
 export type ShopRows = {
@@ -101,5 +103,5 @@ export type ShopRows = {
 
 export type ShopLabels = {
   removeAnyway: { readonly name: string };
-  today: Record<never, never>;
+  today: Nothing;
 };

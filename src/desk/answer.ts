@@ -5,7 +5,13 @@ import type { Effect } from './effect.ts';
 
 /** What goes back to the adapter. */
 export type Answer =
-  | { readonly kind: 'card'; readonly card: Card; readonly effects: readonly Effect[] }
+  | {
+      readonly kind: 'card';
+      readonly card: Card;
+      readonly effects: readonly Effect[];
+      /** Names of files that go with it; the desk gives their content. */
+      readonly files?: readonly string[];
+    }
   | {
       readonly kind: 'refusal';
       readonly refusal: Refusal;

@@ -45,7 +45,12 @@ export type About = {
 };
 
 export type Reply =
-  | { readonly card: Card; readonly effects: readonly Effect[]; readonly about?: About }
+  | {
+      readonly card: Card;
+      readonly effects: readonly Effect[];
+      readonly about?: About;
+      readonly files?: readonly string[];
+    }
   | { readonly refusal: Refusal; readonly choices: readonly Suggestion[] };
 
 /** Reads what stands right behind a command's name; null where nothing of its kind stands there. */
@@ -80,7 +85,8 @@ export const said = <T>(parameter: Parameter<T>) =>
     .optional()
     .meta({ parameter });
 
-const parameterOf = (field: z.core.$ZodType): AnyParameter => {
+/** The words of a field. */
+export const parameterOf = (field: z.core.$ZodType): AnyParameter => {
   const parameter = z.globalRegistry.get(field)?.['parameter'];
   if (parameter === undefined) throw new Error('a parameter without words');
   return parameter as AnyParameter;

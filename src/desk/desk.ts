@@ -34,6 +34,8 @@ export type Desk = {
     call: Call,
     asked: { readonly parameter: string; readonly typed: string },
   ) => Promise<readonly Suggestion[]>;
+  /** The content of a file that an answer names, for who may have it; null for who may not. */
+  readonly download: (call: Call, file: string) => Promise<AsyncIterable<string> | null>;
   readonly fleet: readonly Command[];
 };
 
@@ -209,7 +211,8 @@ export const openDesk = (
     const reply = (await shop.settle?.(ran, context)) ?? ran;
     if ('refusal' in reply) return refused(reply.refusal, reply.choices);
     const card = { ...reply.card, choices: sendable(reply.card.choices) };
-    return { kind: 'card', card, effects: reply.effects };
+    const { effects, files } = reply;
+    return { kind: 'card', card, effects, ...(files === undefined ? {} : { files }) };
   };
 
   const answer = async (call: Call): Promise<Answer> => {
@@ -218,7 +221,7 @@ export const openDesk = (
     return given;
   };
 
-  return { answer, recall, suggest, fleet };
+  return { answer, recall, suggest, download: () => Promise.resolve(null), fleet };
 };
 
 /** A shop that has said nothing about itself. */

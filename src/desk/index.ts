@@ -1,4 +1,4 @@
-export { type Answer, choicesIn } from './answer.ts';
+export { type Answer } from './answer.ts';
 export type { Attached, Call, Options, Person, Place, Pressed } from './call.ts';
 export {
   type About,
@@ -7,6 +7,7 @@ export {
   cardReply,
   defineCommand,
   type Lead,
+  parameterOf,
   type Reply,
   refuse,
   said,
@@ -19,9 +20,8 @@ export {
   type ShopFacts,
 } from './desk.ts';
 export type { Effect, MessageAddress } from './effect.ts';
-export { type KeptAnswers, keptInProcess } from './kept.ts';
+export { type KeptAnswers } from './kept.ts';
 export { openRecordsDesk, type RecordsDeskOptions } from './records.ts';
-export { atLeast, ROLES, type Role } from './role.ts';
+export { ROLES, type Role } from './role.ts';
 export { type Route, route } from './route.ts';
-export { placeName } from './settle.ts';
 export type { Visit } from './visit.ts';

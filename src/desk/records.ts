@@ -1,6 +1,7 @@
 import {
   answerTo,
   enterShop,
+  exportFiles,
   once,
   type ShopChange,
   type ShopOutside,
@@ -18,6 +19,7 @@ import { type Answer, choicesIn } from './answer.ts';
 import type { Call } from './call.ts';
 import type { Command } from './command.ts';
 import { type Desk, openDesk, type ShopFacts } from './desk.ts';
+import { atLeast, type Role } from './role.ts';
 import { lineOf } from './route.ts';
 import { lastCard, settled } from './settle.ts';
 import type { Visit } from './visit.ts';
@@ -28,6 +30,8 @@ export type RecordsDeskOptions = {
   /** The program's version, kept with every card. */
   readonly program: string;
   readonly now: () => number;
+  /** The platform's id of a person who is called so; where not said, what is typed is the id. */
+  readonly outsideId?: (called: string) => string;
   /** Something may have been queued for delivery. */
   readonly onAnswered?: () => void;
   /** For the log: the records could not be used. */
@@ -39,6 +43,9 @@ const WORDS: ShopWords = { plainText, nearestOf, numberOf, unitOf };
 
 /** What is read of a shop that nobody has come into yet. */
 const UNKNOWN_UNITS: ShopUnits = 'in';
+
+/** Who may take everything a shop has kept along. */
+const EXPORTS_NEED: Role = 'owner';
 
 /** An answer that leaves nothing behind but itself. */
 class Refused extends Error {
@@ -112,7 +119,9 @@ export const openRecordsDesk = (
           now(),
         );
         const settings = await settingsOf(shop);
-        return await act(shop, { shop, settings, person: entered.person, role: entered.role });
+        const { outsideId = (called: string) => called } = options;
+        const { person: who, role } = entered;
+        return await act(shop, { shop, settings, person: who, role, outsideId });
       },
       { repeatable: true },
     );
@@ -171,8 +180,26 @@ export const openRecordsDesk = (
     }
   };
 
-  return { ...desk, answer, suggest };
+  /** Files are made from a view of one moment while they are sent, however large they are. */
+  const download: Desk['download'] = async (call, file) => {
+    const role = await change(call, (_, visit) => Promise.resolve(visit.role));
+    const view = await viewOf(call);
+    if (view === null || !atLeast(role, EXPORTS_NEED)) return null;
+    return filePieces(store, view, file);
+  };
+
+  return { ...desk, answer, suggest, download };
 };
+
+async function* filePieces(store: Store, { id }: ShopView, name: string): AsyncGenerator<string> {
+  const view = await store.view();
+  try {
+    const file = exportFiles(viewShop(view.db, id, WORDS)).find((each) => each.name === name);
+    if (file !== undefined) yield* file.pieces;
+  } finally {
+    await view.close();
+  }
+}
 
 /** The person's words, to be repeated to them. */
 const textOf = async (call: Call, desk: Desk): Promise<string> => {

@@ -1,11 +1,12 @@
 import type { Refusal } from '../refusal.ts';
-import { nearestOf, tokensOf } from '../words/index.ts';
+import { nearestOf, quoted, tokensOf } from '../words/index.ts';
 import type { Options } from './call.ts';
 import type { Command } from './command.ts';
 
 /** The root and verb that are meant where none is said. */
 const DEFAULT_ROOT = 'knurl';
 const DEFAULT_VERB = 'setup';
+const LIST = 'list';
 const HELP: readonly string[] = [DEFAULT_ROOT, 'help'];
 
 export type Route =
@@ -54,6 +55,9 @@ export const route = (text: string, fleet: readonly Command[]): Route => {
   const asked = isRoot ? root : DEFAULT_ROOT;
   const found = rest.length > 0 ? named(fleet, asked, rest) : null;
   if (found !== null) return { command: found.command, skip: before + found.skip };
+  // A list is shown where nothing is said to be done with it: `/shop wheels`.
+  const list = find(fleet, [asked, rest[0] ?? '', LIST]);
+  if (list !== undefined) return { command: list, skip: before + 1 };
   const fallback = rest.length === 0 ? HELP : [asked, DEFAULT_VERB];
   const command = find(fleet, fallback) ?? find(fleet, HELP);
   if (command === undefined) throw new Error('a fleet without a help');
@@ -69,6 +73,7 @@ export const wordsOf = (command: Command, options: Options): readonly string[] =
     const keyword =
       parameter.bare === true || parameter.free ? '' : (parameter.keywords?.[0] ?? '');
     const typed = String(given).trim();
+    if (parameter.text === true) return [`${keyword} ${quoted(typed)}`];
     const announced = keyword !== '' && typed.toLowerCase().startsWith(`${keyword} `);
     return [announced ? typed : `${keyword} ${typed}`.trim()];
   });

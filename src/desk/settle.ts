@@ -89,5 +89,10 @@ export const settled = async (
   const card =
     about === undefined ? reply.card : await keptCard(reply.card, about, context, visit, program);
   await queueEffects(visit.shop, effects.map(queued));
-  return { card: await withNotes(card, visit), effects };
+  const { files } = reply;
+  return {
+    card: await withNotes(card, visit),
+    effects,
+    ...(files === undefined ? {} : { files }),
+  };
 };

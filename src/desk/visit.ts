@@ -7,4 +7,6 @@ export type Visit = {
   /** What they may, everything taken together. */
   readonly role: Role;
   readonly settings: Settings;
+  /** The id with which a person comes in who is called so here. */
+  readonly outsideId: (called: string) => string;
 };

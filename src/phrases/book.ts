@@ -2,8 +2,8 @@ import type { CautionId, CheckName, CheckOf, State } from '../calc/index.ts';
 import type { LabelId, Labels, LineId, Lines, RowId, Rows } from '../card/index.ts';
 import type { Contradiction, Refusal } from '../refusal.ts';
 import type { ChatPhrases, ConfigPhrases } from './chat.ts';
-import type { RecordsPhrases } from './records.ts';
 import type { PicturePhrases } from './picturePhrases.ts';
+import type { RecordsPhrases } from './records.ts';
 import type { Show } from './show.ts';
 import type { SlackPhrases } from './slack.ts';
 

@@ -1,8 +1,8 @@
 export type { Book, LabelledText } from './book.ts';
 export type { ChatPhrases, ConfigPhrases, RegistrationPhrases } from './chat.ts';
 export { en } from './en/index.ts';
-export type { RecordsPhrases } from './records.ts';
 export { type SpokenPicture, speakPictures } from './pictures.ts';
+export type { RecordsPhrases } from './records.ts';
 export { type ShopUnits, type Show, showIn } from './show.ts';
 export {
   type SpokenCard,
@@ -10,7 +10,5 @@ export {
   type SpokenChoice,
   type SpokenPart,
   speakCard,
-  speakLabel,
-  speakLine,
   speakRefusal,
 } from './speak.ts';

@@ -38,6 +38,12 @@ const withContent = ({ json }: TableFacts, row: Row): Record<string, unknown> =>
     ]),
   );
 
+/** Everything, once as JSON and once as tables. */
+export const exportFiles = (view: ShopView): readonly ExportFile[] => [
+  { name: 'shop.json', pieces: exportJson(view) },
+  ...exportCsv(view),
+];
+
 /** The same as tables; wheels and machines in the form in which they can be read in again. */
 export const exportCsv = (view: ShopView): readonly ExportFile[] =>
   TABLES.map((table) => ({ name: `${table.name}.csv`, pieces: piecesOf(view, table) }));

@@ -10,7 +10,7 @@ export {
 } from './cards.ts';
 export { type Claimed, claimEffects, type NoteOf } from './claims.ts';
 export { CODE_SIGNS, readCode } from './codes.ts';
-export { canLeave, cribFor, leaves, sizeOf } from './crib.ts';
+export { canLeave, cribFor, sizeOf } from './crib.ts';
 export {
   type Imported,
   type ImportOptions,
@@ -19,7 +19,6 @@ export {
   type RowReport,
 } from './csv/import.ts';
 export { MACHINE_SHEET } from './csv/machineSheet.ts';
-export { MOST_ROWS } from './csv/readTable.ts';
 export { WHEEL_SHEET } from './csv/wheelSheet.ts';
 export { limitsOf, onDial } from './dial.ts';
 export { type GivenUp, givenUp, givenUpSeen, type QueuedEffect, queueEffects } from './effects.ts';
@@ -30,7 +29,14 @@ export {
   type ShopOutside,
   shopOf,
 } from './enter.ts';
-export { type ExportFile, exportCsv, exportJson, machinesCsv, wheelsCsv } from './export.ts';
+export {
+  type ExportFile,
+  exportCsv,
+  exportFiles,
+  exportJson,
+  machinesCsv,
+  wheelsCsv,
+} from './export.ts';
 export {
   listGroups,
   nameGroupRole,
@@ -40,7 +46,7 @@ export {
 } from './groups.ts';
 export { type HistoryLine, historyOf, type Subject, type Verb } from './history.ts';
 export { type Acted, answerTo, forgetAnswers, once } from './interactions.ts';
-export { BARE_MACHINE, DIALS, type Dial, MACHINES, type Machine } from './machines.ts';
+export { BARE_MACHINE, type Dial, MACHINES, type Machine } from './machines.ts';
 export { MATERIALS_OF_SHOP, type ShopMaterial } from './materials.ts';
 export {
   type Attempt,
@@ -52,6 +58,7 @@ export {
 export {
   findPerson,
   listPeople,
+  meetPerson,
   nameRole,
   personById,
   removePerson,
@@ -72,7 +79,6 @@ export { atLeast, ROLES, type Role } from './roles.ts';
 export { addRule, RULES, type Rule, type RuleScope, rulesOnCard } from './rules.ts';
 export {
   changeSetting,
-  SETTING_NAMES,
   type SettingName,
   type Settings,
   settingsOf,

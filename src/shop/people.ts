@@ -1,6 +1,6 @@
 import type { PersonTable } from '../store/index.ts';
 import { remember } from './history.ts';
-import { keyOf } from './names.ts';
+import { cleaned, keyOf, LONGEST_NAME, textFault } from './names.ts';
 import { type Done, done, refused } from './result.ts';
 import { atLeast, ROLES, type Role, roleOf } from './roles.ts';
 import type { ShopChange, ShopView } from './view.ts';
@@ -123,6 +123,40 @@ export const removePerson = async (
     { subjectId: before.id, verb: 'removed', before: said(before), after: null },
   ]);
   return done(before);
+};
+
+/** Puts somebody on the list who has not come in yet, by the id they will come with. */
+export const meetPerson = async (
+  change: ShopChange,
+  who: { readonly outside: string; readonly name: string },
+  role: Role,
+): Promise<Done<ShopPerson>> => {
+  const name = cleaned(who.name);
+  const fault = textFault('name', name, LONGEST_NAME);
+  if (fault !== null) return refused(fault);
+  const fresh = {
+    shop: change.id,
+    id: change.db.newId(change.at),
+    outside: who.outside,
+    name,
+    name_key: keyOf(change.words, name),
+    role,
+    version: 1,
+    met_at: change.at,
+    removed_at: null,
+  };
+  const row = await change.db
+    .insertInto('person')
+    .values(fresh)
+    .onConflict((oc) => oc.columns(['shop', 'outside']).doNothing())
+    .returningAll()
+    .executeTakeFirst();
+  if (row === undefined) return refused({ code: 'taken', what: 'person', name });
+  const person = personOf(row);
+  await remember(change, 'person', [
+    { subjectId: person.id, verb: 'added', before: null, after: said(person) },
+  ]);
+  return done(person);
 };
 
 const said = ({ name, outside, role }: ShopPerson) => ({ name, outside, role });

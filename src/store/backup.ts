@@ -7,7 +7,7 @@ import { writeLines } from './lines.ts';
 import type { StorePlace } from './place.ts';
 import { openPostgres } from './postgres.ts';
 import { openSqlite, ours } from './sqlite.ts';
-import type { Reader } from './store.ts';
+import type { Reader } from './view.ts';
 
 /** More pages than any file has: everything in one step, which no writer can make begin again. */
 const ALL_PAGES = 0x7fffffff;
@@ -45,10 +45,11 @@ const linesOfServer = async (url: string, draft: string): Promise<void> => {
 
 const linesOfFile = async (file: string, draft: string): Promise<void> => {
   if (!fs.existsSync(file)) throw new BackupFault('absent', file);
-  const { write, snapshot, close } = await openSqlite(file);
+  const { write, view, close } = await openSqlite(file);
   try {
     const form = (await stepsDone(write)).at(-1) ?? KNOWN_FORM;
-    await snapshot((view: Reader) => writeLines(view, form, draft));
+    const moment = await view();
+    await writeLines(moment.db, form, draft).finally(moment.close);
   } finally {
     await close();
   }

@@ -18,10 +18,10 @@ export { type Restored, restore } from './restore.ts';
 export {
   migrate,
   openStore,
-  type Reader,
   type Store,
   type StoreOptions,
   type Tx,
 } from './store.ts';
 export * from './tables.ts';
 export type { TransactOptions } from './transact.ts';
+export type { Reader, View } from './view.ts';

@@ -3,8 +3,8 @@ import { createInterface } from 'node:readline';
 import { pipeline } from 'node:stream/promises';
 import { BackupFault } from './backupFaults.ts';
 import { portionsOf, type Row } from './portions.ts';
-import type { Reader } from './store.ts';
 import { TABLES } from './tables.ts';
+import type { Reader } from './view.ts';
 
 /**
  * A backup as lines of JSON: what it is, then the rows table by table, then how many there were.

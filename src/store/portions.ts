@@ -1,6 +1,6 @@
 import { type Kysely, sql } from 'kysely';
-import type { Reader } from './store.ts';
 import type { TableFacts } from './tables.ts';
+import type { Reader } from './view.ts';
 
 export type Row = Readonly<Record<string, string | number | null>>;
 

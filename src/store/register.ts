@@ -1,6 +1,7 @@
 import type { Kysely, SelectQueryBuilder } from 'kysely';
-import type { Reader, Tx } from './store.ts';
+import type { Tx } from './store.ts';
 import type { RegisterColumns, RegisterName, Tables } from './tables.ts';
+import type { Reader } from './view.ts';
 
 /** The columns that say who keeps a row and since when; the rest is what the row is about. */
 type Content<N extends RegisterName> = Omit<Tables[N], keyof RegisterColumns>;

@@ -8,6 +8,7 @@ import { patiently, WAIT_MS } from './patience.ts';
 import { type SqliteUse, sqliteDialect } from './sqliteDriver.ts';
 import { fromSqlite } from './sqliteFaults.ts';
 import type { Tables } from './tables.ts';
+import { openView, type View } from './view.ts';
 
 /**
  * How long the driver itself may stand still for a lock, and with it the whole process, which
@@ -24,7 +25,7 @@ export type SqliteStore = {
   readonly write: Kysely<Tables>;
   readonly read: Kysely<Tables>;
   /** A view of one moment: what is written meanwhile does not show in it. */
-  readonly snapshot: <T>(work: (view: Kysely<Tables>) => Promise<T>) => Promise<T>;
+  readonly view: () => Promise<View>;
   readonly close: () => Promise<void>;
 };
 
@@ -45,12 +46,13 @@ export const openSqlite = async (
   return {
     write,
     read,
-    snapshot: async (work) => {
+    view: async () => {
       const own = openReader(file);
       try {
-        return await use(own, 'begin').transaction().execute(work);
-      } finally {
+        return await openView(use(own, 'begin'), () => own.close());
+      } catch (error) {
         own.close();
+        throw error;
       }
     },
     close: async () => {

@@ -1,4 +1,4 @@
-import type { Kysely, Transaction } from 'kysely';
+import type { Transaction } from 'kysely';
 import { bringUp } from './form.ts';
 import type { Watch } from './guard.ts';
 import { idMaker, type NewId } from './ids.ts';
@@ -8,9 +8,8 @@ import { openPostgres } from './postgres.ts';
 import { openSqlite } from './sqlite.ts';
 import type { Tables } from './tables.ts';
 import { changeRunner, type TransactOptions } from './transact.ts';
+import { openView, type Reader, type View } from './view.ts';
 
-/** What can be asked of the records. */
-export type Reader = Pick<Kysely<Tables>, 'selectFrom' | 'with'>;
 /** What can be asked and changed while a change is open. */
 export type Tx = Reader &
   Pick<Transaction<Tables>, 'insertInto' | 'updateTable' | 'deleteFrom'> & {
@@ -29,6 +28,8 @@ export type Store = {
   readonly transact: <T>(work: (tx: Tx) => Promise<T>, options?: TransactOptions) => Promise<T>;
   /** A view of one moment, however long the reading takes and whatever is changed meanwhile. */
   readonly snapshot: <T>(work: (view: Reader) => Promise<T>) => Promise<T>;
+  /** The same, kept open by whoever asks for it, until it is closed. */
+  readonly view: () => Promise<View>;
   readonly close: () => Promise<void>;
 };
 
@@ -64,7 +65,7 @@ export const migrate = async (place: StorePlace): Promise<readonly string[]> => 
 };
 
 const sqliteStore = async (file: string, options: StoreOptions): Promise<Store> => {
-  const { write, read, snapshot, close } = await openSqlite(file, options);
+  const { write, read, view, close } = await openSqlite(file, options);
   const run = changeRunner();
   const newId = idMaker();
   return {
@@ -72,7 +73,8 @@ const sqliteStore = async (file: string, options: StoreOptions): Promise<Store> 
     read,
     transact: (work, how) =>
       run(() => write.transaction().execute((trx) => work(changing(trx, newId))), how),
-    snapshot,
+    view,
+    snapshot: (work) => within(view, work),
     close,
   };
 };
@@ -81,17 +83,17 @@ const postgresStore = (url: string, options: StoreOptions): Store => {
   const { db, close } = openPostgres(url, options);
   const run = changeRunner();
   const newId = idMaker();
+  const view = (): Promise<View> =>
+    openView(db, undefined, (begin) =>
+      begin.setIsolationLevel('repeatable read').setAccessMode('read only'),
+    );
   return {
     engine: 'postgres',
     read: db,
     transact: (work, how) =>
       run(() => db.transaction().execute((trx) => work(changing(trx, newId))), how),
-    snapshot: (work) =>
-      db
-        .transaction()
-        .setIsolationLevel('repeatable read')
-        .setAccessMode('read only')
-        .execute(work),
+    view,
+    snapshot: (work) => within(view, work),
     close,
   };
 };
@@ -105,3 +107,15 @@ const changing = (trx: Transaction<Tables>, newId: NewId): Tx => ({
   deleteFrom: trx.deleteFrom.bind(trx),
   newId,
 });
+
+const within = async <T>(
+  open: () => Promise<View>,
+  work: (db: Reader) => Promise<T>,
+): Promise<T> => {
+  const view = await open();
+  try {
+    return await work(view.db);
+  } finally {
+    await view.close();
+  }
+};

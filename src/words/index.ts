@@ -10,7 +10,7 @@ export {
   spanOf,
   tokenAt,
 } from './cursor.ts';
-export { partOf, readAs, replaced, withMore, without } from './edit.ts';
+export { partOf, readAs, replaced, withMore } from './edit.ts';
 export * from './kinds.ts';
 export { type Limits, limitsOf } from './limits.ts';
 export {
@@ -25,10 +25,7 @@ export { numberOf } from './numbers.ts';
 export { freePitch, readPitch, samePitch } from './pitch.ts';
 export {
   type AnyParameter,
-  choicesOf,
-  isReadable,
   type LineResult,
-  LONGEST_LINE,
   type ReadLine,
   readLine,
   type Vocabulary,

@@ -157,9 +157,6 @@ export const rateOf =
     return numberOfKind(what, limits, measure, unit, bare)(cursor, names);
   };
 
-/** Only the words listed with the parameter; nothing follows a keyword. */
-export const noValue = (): null => null;
-
 /** One of the names the shop has given. */
 export const nameOf =
   (

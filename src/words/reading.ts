@@ -49,6 +49,8 @@ export type Parameter<T> = {
   readonly bare?: boolean;
   /** Puts together what was said in two places; null where the two disagree. */
   readonly merge?: (a: T, b: T) => T | null;
+  /** Words of the person's own; a form's field is quoted, so that it is taken as it stands. */
+  readonly text?: boolean;
   /** Nothing but `values` says it: a platform may list them all. */
   readonly closed?: boolean;
   /** Where names to offer while somebody types come from. */

@@ -280,7 +280,9 @@ describe('senseless input names both values', () => {
   });
 
   it('a pin larger than the wheel', () => {
-    expect(refused({ pinDiameter: mm(21) })).toMatchObject({ value: 21, max: 20 });
+    expect(refused({ pinDiameter: mm(21) })).toMatchObject({ value: 21, max: 18 });
+    // A pin as large as its wheel once left no wheel to warm and gave an endless warm-up.
+    expect(refused({ pinDiameter: mm(20) })).toMatchObject({ value: 20, max: 18 });
     expect(DEFAULT_WHEEL.diameter).toBe(20);
   });
 });

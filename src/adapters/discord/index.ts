@@ -21,6 +21,8 @@ import { LIMITS } from './limits.ts';
 import { callOf, focusedIn, handleOf, isForBot, messageCall, typedIn, wordsOf } from './receive.ts';
 import { openSender } from './send.ts';
 
+export { register } from './register.ts';
+
 export type DiscordOptions = {
   readonly token: string;
   /** Of a proxy or a local counterpart; the gateway's address comes from it. */

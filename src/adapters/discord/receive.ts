@@ -4,7 +4,6 @@ import {
   type ChatInputCommandInteraction,
   type CommandInteractionOption,
   type Message as DiscordMessage,
-  PermissionFlagsBits,
   type RepliableInteraction,
 } from 'discord.js';
 import type { Call, Command, Options } from '../../desk/index.ts';
@@ -45,11 +44,6 @@ const nameOf = (interaction: BaseInteraction): string => {
   const { member, user } = interaction;
   if (member === null) return user.displayName;
   return 'displayName' in member ? member.displayName : (member.nick ?? user.displayName);
-};
-
-const groupsOf = ({ member }: BaseInteraction): readonly string[] => {
-  if (member === null) return [];
-  return Array.isArray(member.roles) ? member.roles : [...member.roles.cache.keys()];
 };
 
 /** What every call says of who asked and where. */
@@ -138,6 +132,3 @@ export const messageCall = (message: DiscordMessage, bot: string): Call => ({
   interactionId: message.id,
   given: { words: wordsOf(message.content, bot) },
 });
-
-export const managesOf = (interaction: BaseInteraction): boolean =>
-  interaction.memberPermissions?.has(PermissionFlagsBits.ManageGuild) === true;

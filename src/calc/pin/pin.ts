@@ -141,6 +141,9 @@ export function ordinaryPinHeat(): number {
   return pinHeat(force, sliding) / (pin * face);
 }
 
+/** Thickest pin a wheel can turn on, as a share of its diameter. Judgement: it needs a rim. */
+const THICKEST_PIN = 0.9;
+
 /**
  * How much warmer the whole wheel gets in a cut when no heat leaves it.
  *
@@ -151,7 +154,7 @@ export function ordinaryPinHeat(): number {
  * | Q (heat) | heat on the pin | W | ≥ 0 |
  * | t (time) | time of the cut | s | ≥ 0 |
  * | Dw (wheelDiameter) | diameter of the wheel | mm | > 0 |
- * | d (pinDiameter) | diameter of the pin | mm | 0 to Dw |
+ * | d (pinDiameter) | diameter of the pin | mm | 0 to 0.9 Dw |
  * | w (face) | face of the wheel | mm | > 0 |
  * | → ΔT | warm-up | K | |
  *
@@ -170,7 +173,7 @@ export function wheelWarmUp(of: {
   within('heat', of.heat, 0, 1e9, 'W');
   within('time', of.time, 0, 1e9, 's');
   within('wheelDiameter', of.wheelDiameter, Number.MIN_VALUE, 1e6, 'mm');
-  within('pinDiameter', of.pinDiameter, 0, of.wheelDiameter, 'mm');
+  within('pinDiameter', of.pinDiameter, 0, THICKEST_PIN * of.wheelDiameter, 'mm');
   within('face', of.face, Number.MIN_VALUE, 1e6, 'mm');
   const area = (Math.PI * (of.wheelDiameter ** 2 - of.pinDiameter ** 2)) / 4;
   const mass = WHEEL_DENSITY * area * of.face;

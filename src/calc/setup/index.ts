@@ -6,7 +6,6 @@ export { type ResolvedPitch, resolvePitch } from './pitch.ts';
 export { NARROWEST_FACE, REMEDY_KINDS, type Remedy, type RemedyKind } from './remedy.ts';
 export {
   type CountedWheel,
-  DEFAULT_BEVEL,
   DEFAULT_INCLUDED,
   DEFAULT_WHEEL,
   type MachineLimits,

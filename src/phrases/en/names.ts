@@ -128,6 +128,9 @@ export const THINGS: Readonly<Record<string, string>> = {
   questionHours: 'time a question waits',
   dial: 'dial',
   state: 'state',
+  setting: 'setting',
+  change: 'change',
+  file: 'file',
   figure: 'figure or check',
   explained: 'set-up or check to explain',
 };

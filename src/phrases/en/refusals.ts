@@ -127,11 +127,11 @@ const doubts: { readonly [D in Doubt]: (word: string, fault: Unclear) => string 
   keywordBetween: (word) => `${word} can be read from either end.`,
   sizeByWhat: (word) => `${word}: it does not say what the sizes are of.`,
   limitsOfWhat: (word) => `${word} has limits, but not what they are of.`,
-  whichSpeed: (word) => `${word}: of the surface, or of the spindle?`,
   whichAngle: (word) => `${word} does not say which angle it is.`,
   wholeNumber: (word, { what }) => `${word}: the ${thing(what)} is a whole number.`,
   oneOfRange: (word) => `${word} is a range; the card is worked out for one value.`,
   gradeOnly: (word) => `${word} is not the same pitch in every shop.`,
+  familyOnly: (_, { what }) => `More than one ${thing(what)} answers to that.`,
   calloutAgainst: (_, { what }) =>
     `The callout and the words beside it disagree about the ${thing(what)}.`,
 };

@@ -46,6 +46,8 @@ export const SHOP_FACTS: Readonly<Record<string, string>> = {
   role: 'role',
   outside: 'known as',
   metAt: 'first met',
+  setting: 'setting',
+  change: 'change',
   shopUnits: 'units',
   language: 'language',
   timeZone: 'time zone',
@@ -127,6 +129,8 @@ export const amountText = (amount: Amount, show: Show): string => {
       return amount.value;
     case 'word':
       return shopWord(amount.value);
+    case 'moment':
+      return momentText(amount.value);
     case 'nothing':
       return 'not set';
   }

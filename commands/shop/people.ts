@@ -1,0 +1,207 @@
+import { z } from 'zod';
+import { type Fact, line, row } from '../../src/card/index.ts';
+import {
+  type Command,
+  type Context,
+  cardReply,
+  defineCommand,
+  parameterOf,
+  type Reply,
+  ROLES,
+  type Role,
+  said,
+  type Visit,
+} from '../../src/desk/index.ts';
+import {
+  findPerson,
+  listGroups,
+  listPeople,
+  meetPerson,
+  nameGroupRole,
+  nameRole,
+  removeGroup,
+  removePerson,
+  type ShopPerson,
+} from '../../src/shop/index.ts';
+import { nameless, withWord } from './lists.ts';
+import { nameField, newName, type Others } from './named.ts';
+import { refused, shopCard, visiting } from './visit.ts';
+
+const NAME = 'Ben';
+
+const role = said<Role>({
+  name: 'role',
+  read: () => null,
+  closed: true,
+  values: ROLES.map((each) => [each, each] as const),
+  examples: ['engineer', 'supervisor'],
+});
+
+const others: Others = () => [parameterOf(role)];
+const name = nameField(others, [NAME]);
+const lead = { name: 'name', read: newName(others) } as const;
+
+const roleless = {
+  code: 'missing',
+  parameter: 'role',
+  examples: ['engineer', 'supervisor'],
+} as const;
+
+const roleFact = (of: Role): Fact => ({ name: 'role', amount: { kind: 'word', value: of } });
+
+/** Who works here, and who may what. */
+const list = defineCommand({
+  path: ['shop', 'people', 'list'],
+  examples: ['/shop people'],
+  parameters: z.object({}),
+  allowed: 'operator',
+  run: (context) =>
+    visiting(context, async ({ shop }) => {
+      const people = await listPeople(shop);
+      const groups = await listGroups(shop);
+      const items = [...people, ...groups];
+      return cardReply(
+        shopCard(context, {
+          verb: 'people',
+          headline: line('listed', { what: 'person', count: people.length }),
+          rows: items.map((one) =>
+            row('listItem', { name: one.name, facts: [roleFact(one.role)] }),
+          ),
+          lists: { people, groups },
+        }),
+      );
+    }),
+});
+
+const found = async (
+  { shop }: Visit,
+  called: string | undefined,
+  then: (person: ShopPerson) => Promise<Reply>,
+): Promise<Reply> => {
+  if (called === undefined) return refused(nameless(NAME));
+  const person = await findPerson(shop, called);
+  return person.ok ? await then(person.value) : refused(withWord(person.refusal, called));
+};
+
+/** One person, and since when. */
+const show = defineCommand({
+  path: ['shop', 'people', 'show'],
+  examples: [`/shop people show ${NAME}`],
+  parameters: z.object({ name }),
+  lead,
+  allowed: 'operator',
+  run: (context, given) =>
+    visiting(context, (visit) =>
+      found(visit, given.name, (person) =>
+        Promise.resolve(cardReply(personCard(context, visit, person))),
+      ),
+    ),
+});
+
+const personCard = (context: Context, { settings }: Visit, person: ShopPerson) =>
+  shopCard(context, {
+    verb: 'people',
+    headline: line('shown', { what: 'person', name: person.name }),
+    rows: [
+      row('fact', roleFact(person.role)),
+      row('fact', { name: 'outside', amount: { kind: 'text', value: person.outside } }),
+      row('fact', {
+        name: 'metAt',
+        amount: { kind: 'moment', value: { at: person.metAt, zone: settings.timeZone } },
+      }),
+    ],
+    lists: { people: [person] },
+  });
+
+const named = (context: Context, called: string, is: Role): Reply =>
+  cardReply(
+    shopCard(context, {
+      verb: 'people',
+      headline: line('roleNamed', { name: called, role: is }),
+    }),
+  );
+
+/** Somebody who has not spoken yet, by the name or id they will come with. */
+const add = defineCommand({
+  path: ['shop', 'people', 'add'],
+  examples: [`/shop people add ${NAME} engineer`],
+  parameters: z.object({ name, role }),
+  lead,
+  allowed: 'owner',
+  run: (context, given) =>
+    visiting(context, async ({ shop, outsideId }) => {
+      if (given.name === undefined) return refused(nameless(NAME));
+      const who = { outside: outsideId(given.name), name: given.name };
+      const met = await meetPerson(shop, who, given.role ?? 'operator');
+      return met.ok ? named(context, met.value.name, met.value.role) : refused(met.refusal);
+    }),
+});
+
+/** Gives a person another role. */
+const change = defineCommand({
+  path: ['shop', 'people', 'change'],
+  examples: [`/shop people change ${NAME} supervisor`],
+  parameters: z.object({ name, role }),
+  lead,
+  allowed: 'owner',
+  run: (context, given) =>
+    visiting(context, (visit) =>
+      found(visit, given.name, async (person) => {
+        if (given.role === undefined) return refused(roleless);
+        const result = await nameRole(visit.shop, person.id, given.role);
+        return result.ok ? named(context, person.name, given.role) : refused(result.refusal);
+      }),
+    ),
+});
+
+/** Takes somebody off the list. */
+const remove = defineCommand({
+  path: ['shop', 'people', 'remove'],
+  examples: [`/shop people remove ${NAME}`],
+  parameters: z.object({ name }),
+  lead,
+  allowed: 'owner',
+  run: (context, given) =>
+    visiting(context, (visit) =>
+      found(visit, given.name, async (person) => {
+        const result = await removePerson(visit.shop, person.id);
+        if (!result.ok) return refused(result.refusal);
+        const headline = line('done', { did: 'removed', what: 'person', name: person.name });
+        return cardReply(shopCard(context, { verb: 'people', headline }));
+      }),
+    ),
+});
+
+const none = said<true>({
+  name: 'none',
+  read: () => null,
+  closed: true,
+  values: [['none', true]],
+  examples: ['none'],
+});
+const groupOthers: Others = () => [parameterOf(role), parameterOf(none)];
+
+/** Gives the members of a platform's own group a role, or takes it from them. */
+const group = defineCommand({
+  path: ['shop', 'people', 'group'],
+  examples: ['/shop people group Leads supervisor', '/shop people group Leads none'],
+  parameters: z.object({ name: nameField(groupOthers, ['Leads']), role, none }),
+  lead: { name: 'name', read: newName(groupOthers) },
+  allowed: 'owner',
+  run: (context, given) =>
+    visiting(context, async ({ shop }) => {
+      const called = given.name;
+      if (called === undefined) return refused(nameless('Leads'));
+      if (given.none === true) {
+        const removed = await removeGroup(shop, called);
+        if (!removed.ok) return refused(withWord(removed.refusal, called));
+        const headline = line('done', { did: 'removed', what: 'group', name: removed.value.name });
+        return cardReply(shopCard(context, { verb: 'people', headline }));
+      }
+      if (given.role === undefined) return refused(roleless);
+      const result = await nameGroupRole(shop, { outside: called, name: called }, given.role);
+      return result.ok ? named(context, called, given.role) : refused(result.refusal);
+    }),
+});
+
+export const people: readonly Command[] = [list, show, add, change, remove, group];
