@@ -10,8 +10,6 @@ import {
 import { said } from '../../src/desk/index.ts';
 import {
   angleOf,
-  BEVEL,
-  BEVEL_SIZES,
   countOf,
   freeCallout,
   freeMaterial,
@@ -19,11 +17,14 @@ import {
   hardwareOf,
   lengthOf,
   limitsOf,
+  nameOf,
   narrowed,
   numberOfKind,
   onePin,
   oneWheel,
   type Parameter,
+  pinFirst,
+  pitchesOf,
   quantityAt,
   rateOf,
   readHardness,
@@ -34,6 +35,8 @@ import {
   samePitch,
   shareOf,
   smallLengthOf,
+  unannouncedLimits,
+  wheelFirst,
 } from '../../src/words/index.ts';
 
 /** Only the listed words say it. */
@@ -47,12 +50,14 @@ const USUAL_DIAMETERS = { in: [0.06, 8], mm: [2, 200] } as const;
 
 export const diameter = said<number>({
   name: 'diameter',
-  read: lengthOf('diameter', DIAMETERS, USUAL_DIAMETERS),
-  keywords: ['ø', 'dia', 'diameter', 'bar', 'stock'],
+  read: lengthOf('diameter', DIAMETERS, USUAL_DIAMETERS, ['mm', 'in', 'thou']),
+  keywords: ['ø', 'dia', 'diam', 'diameter', 'bar', 'stock'],
+  postfix: true,
   loose: true,
   measures: ['length'],
   bare: true,
   examples: ['1.000', '7/8', '19mm'],
+  metricExamples: ['20', '25.4', '3/4 in'],
 });
 
 export const pattern = wordsOnly<PatternKind>({
@@ -60,12 +65,15 @@ export const pattern = wordsOnly<PatternKind>({
   values: [
     ['straight', 'straight'],
     ['axial', 'straight'],
+    ['parallel', 'straight'],
     ['diagonal', 'diagonal'],
     ['helical', 'diagonal'],
     ['spiral', 'diagonal'],
     ['diamond', 'diamond'],
     ['diamonds', 'diamond'],
     ['crosshatch', 'diamond'],
+    ['cross-hatch', 'diamond'],
+    ['criss-cross', 'diamond'],
     ['square', 'square'],
     ['square pattern', 'square'],
     ['squares', 'square'],
@@ -76,14 +84,12 @@ export const pattern = wordsOnly<PatternKind>({
 export const points = wordsOnly<'raised' | 'sunk'>({
   name: 'points',
   values: [
-    ['raised', 'raised'],
-    ['raised points', 'raised'],
-    ['points raised', 'raised'],
-    ['sunk', 'sunk'],
-    ['sunken', 'sunk'],
-    ['indented', 'sunk'],
-    ['sunk points', 'sunk'],
-    ['points sunk', 'sunk'],
+    ...['raised', 'raised points', 'points raised', 'male'].map(
+      (phrase) => [phrase, 'raised'] as const,
+    ),
+    ...['sunk', 'sunken', 'indented', 'sunk points', 'points sunk', 'female', 'depressed'].map(
+      (phrase) => [phrase, 'sunk'] as const,
+    ),
   ],
   examples: ['raised', 'sunk'],
 });
@@ -92,13 +98,9 @@ export const hand = wordsOnly<'left' | 'right'>({
   name: 'hand',
   values: ['left', 'right'].flatMap((side) => {
     const own = side === 'left' ? 'left' : 'right';
-    return [
-      side,
-      `${side}-hand`,
-      `${side} hand`,
-      `${side}-handed`,
-      own === 'left' ? 'lh' : 'rh',
-    ].map((phrase) => [phrase, own] as const);
+    return [side, `${side}-hand`, `${side}-handed`, own === 'left' ? 'lh' : 'rh'].map(
+      (phrase) => [phrase, own] as const,
+    );
   }),
   examples: ['left', 'right'],
 });
@@ -108,8 +110,11 @@ export const pitch = said({
   read: readPitch,
   free: freePitch,
   keywords: ['pitch'],
+  measures: ['tpi', 'dp', 'module'],
+  mayBe: pitchesOf,
   merge: samePitch,
   examples: ['21tpi', '96dp', '1.0 pitch'],
+  metricExamples: ['1.0 pitch', '21tpi', 'RGE 0.8'],
 });
 
 export const rim = wordsOnly<true>({
@@ -148,8 +153,10 @@ export const process = wordsOnly<Process>({
 export const finish = said({
   name: 'finish',
   read: limitsOf('finish', DIAMETERS, USUAL_DIAMETERS),
-  keywords: ['finish', 'finished', 'print'],
+  keywords: ['finish', 'finished', 'print', 'finish size', 'finished size'],
+  unannounced: unannouncedLimits('finish', 'finish'),
   examples: ['finish 0.995-1.005', 'finish 1.000 +0 -0.010'],
+  metricExamples: ['finish 19.9-20.1', 'finish 20 +0 -0.2'],
 });
 
 export const asIs = wordsOnly<true>({
@@ -181,7 +188,7 @@ export const knurlClass = wordsOnly<KnurlClass>({
     ] as const
   ).flatMap(([own, spellings]) =>
     spellings.flatMap((spelling) =>
-      [`class ${spelling}`, `class-${spelling}`].map((phrase) => [phrase, own] as const),
+      [`class ${spelling}`, `cl ${spelling}`].map((phrase) => [phrase, own] as const),
     ),
   ),
   examples: ['class I', 'class II'],
@@ -198,7 +205,7 @@ export const helix = said<number>({
 export const tilt = said<number>({
   name: 'tilt',
   read: angleOf('tilt', [degrees(1), degrees(60)]),
-  keywords: ['tilt', 'set over', 'swivel', 'swivelled', 'swiveled'],
+  keywords: ['tilt', 'tilted', 'set over', 'swivel', 'swivelled', 'swiveled'],
   postfix: true,
   examples: ['tilt 30'],
 });
@@ -226,6 +233,7 @@ export const length = said<number>({
   keywords: ['long', 'length', 'knurl length'],
   postfix: true,
   examples: ['long 1.5'],
+  metricExamples: ['long 30'],
 });
 
 export const stickout = said<number>({
@@ -234,6 +242,7 @@ export const stickout = said<number>({
   keywords: ['out', 'stickout', 'stick out', 'sticking out', 'overhang'],
   postfix: true,
   examples: ['out 3'],
+  metricExamples: ['out 60'],
 });
 
 export const stockLength = said<number>({
@@ -241,6 +250,7 @@ export const stockLength = said<number>({
   read: lengthOf('stockLength', [10, 12_000], { in: [1, 240], mm: [25, 6100] }),
   keywords: ['bar length', 'stock length'],
   examples: ['bar length 36'],
+  metricExamples: ['bar length 1000'],
 });
 
 export const support = wordsOnly<Support>({
@@ -249,6 +259,7 @@ export const support = wordsOnly<Support>({
     ['chuck', 'chuck'],
     ['chucked', 'chuck'],
     ['in the chuck', 'chuck'],
+    ['collet', 'chuck'],
     ['tailstock', 'tailstock'],
     ['tail stock', 'tailstock'],
     ['live center', 'tailstock'],
@@ -267,6 +278,7 @@ export const bore = said<number>({
   keywords: ['bore', 'id', 'bored'],
   postfix: true,
   examples: ['bore 0.75'],
+  metricExamples: ['bore 16'],
 });
 
 export const plug = wordsOnly<true>({
@@ -281,11 +293,16 @@ export const plug = wordsOnly<true>({
 export const wheel = said({
   name: 'wheel',
   read: readWheel,
+  unannounced: wheelFirst,
   keywords: ['wheel', 'wheels'],
+  loose: true,
   merge: oneWheel,
   suggests: 'wheels',
   examples: ['wheel 20x8x6', 'wheel 20mm 63 teeth'],
 });
+
+const BEVEL = [0, 5] as const;
+const BEVEL_SIZES = { in: [0, 0.19], mm: [0.2, 5] } as const;
 
 export const bevel = said<number>({
   name: 'bevel',
@@ -298,18 +315,10 @@ export const bevel = said<number>({
 export const edge = wordsOnly<Edge>({
   name: 'edge',
   values: [
-    ...[
-      'beveled',
-      'bevelled',
-      'bevel edge',
-      'beveled edge',
-      'bevelled edge',
-      'beveled edges',
-      'bevelled edges',
-    ].map((phrase) => [phrase, 'bevelled'] as const),
-    ...['square edge', 'square edges', 'square edged', 'square-edged', 'square-edge'].map(
-      (phrase) => [phrase, 'square'] as const,
+    ...['beveled', 'bevelled', 'bevel edge', 'beveled edge', 'bevelled edge'].flatMap((phrase) =>
+      [phrase, `${phrase}s`].map((each) => [each, 'bevelled'] as const),
     ),
+    ...['square edge', 'square edges', 'square edged'].map((phrase) => [phrase, 'square'] as const),
     ...['convex', 'convex edge', 'convex edges'].map((phrase) => [phrase, 'convex'] as const),
   ],
   examples: ['beveled', 'square edge', 'convex'],
@@ -318,6 +327,7 @@ export const edge = wordsOnly<Edge>({
 export const pin = said({
   name: 'pin',
   read: readPin,
+  unannounced: pinFirst,
   keywords: ['pin', 'pins'],
   values: [
     ['carbide', { diameter: null, material: 'carbide' }],
@@ -330,12 +340,15 @@ export const pin = said({
   examples: ['pin 6mm carbide'],
 });
 
-export const onePiece = wordsOnly<true>({
+export const onePiece = wordsOnly<boolean>({
   name: 'oneWheel',
   values: [
-    ['one wheel', true],
-    ['single wheel', true],
-    ['crossed wheel', true],
+    ...['one wheel', '1 wheel', 'single wheel', 'crossed wheel', 'one-piece wheel'].map(
+      (phrase) => [phrase, true] as const,
+    ),
+    ...['two wheels', '2 wheels', 'pair of wheels', 'wheel pair'].map(
+      (phrase) => [phrase, false] as const,
+    ),
   ],
   examples: ['one wheel'],
 });
@@ -344,9 +357,8 @@ export const layout = wordsOnly<ToolLayout>({
   name: 'layout',
   values: [
     ['one-sided', 'oneSided'],
-    ['one sided', 'oneSided'],
     ['onesided', 'oneSided'],
-    ['single sided', 'oneSided'],
+    ['single-sided', 'oneSided'],
     ['opposed', 'opposed'],
     ['straddle', 'opposed'],
     ['scissor', 'opposed'],
@@ -359,6 +371,7 @@ export const hardness = said({
   name: 'hardness',
   read: readHardness,
   free: readHardness,
+  measures: ['hb', 'hrc'],
   examples: ['HB 210', '28 HRC'],
 });
 
@@ -370,9 +383,10 @@ export const speed = said<number>({
   // `speed 200 rpm` is a spindle speed.
   read: (cursor, names) =>
     quantityAt(cursor)?.unit?.measure === 'rotation' ? null : readSurfaceSpeed(cursor, names),
-  keywords: ['speed', 'surface speed', 'sfm'],
+  keywords: ['speed', 'surface speed', 'cutting speed', 'sfm'],
   measures: ['speed'],
   examples: ['speed 60 sfm', 'speed 18 m/min'],
+  metricExamples: ['speed 18 m/min', 'speed 60 sfm'],
 });
 
 export const rotation = said<number>({
@@ -389,6 +403,7 @@ export const feed = said<number>({
   keywords: ['feed'],
   measures: ['feed'],
   examples: ['feed 0.012'],
+  metricExamples: ['feed 0.3'],
 });
 
 export const turns = said<number>({
@@ -409,10 +424,21 @@ export const batch = said<number>({
 
 export const runout = said<number>({
   name: 'runout',
-  read: smallLengthOf('runout', [0, 5]),
-  keywords: ['runout', 'run-out', 'run out', 'tir'],
+  read: smallLengthOf('runout', [0, 5], { in: [0, 0.05], mm: [0, 1] }),
+  keywords: ['runout', 'run-out', 'tir'],
   postfix: true,
   examples: ['runout 0.004'],
+  metricExamples: ['runout 0.1'],
+});
+
+export const machine = said<string>({
+  name: 'machine',
+  read: nameOf('machine', (names) => names.machines),
+  keywords: ['on', 'machine'],
+  // `on a 1.0 bar` names no machine.
+  loose: true,
+  suggests: 'machines',
+  examples: ['on <machine>'],
 });
 
 export const shown = wordsOnly<ShopUnits>({

@@ -68,6 +68,7 @@ const agreed = <T>(
   throw new Asks({
     code: 'unclear',
     what: name,
+    because: 'calloutAgainst',
     readings: [keeping(context, 'callout', [name]), keeping(context, name, ['callout'])],
   });
 };
@@ -123,6 +124,7 @@ const patternFor = (context: Context, said: SetupWords): Pattern => {
   throw new Asks({
     code: 'unclear',
     what: 'pattern',
+    because: 'calloutAgainst',
     readings: [
       keeping(context, 'callout', ['pattern', 'hand', 'points']),
       {
@@ -135,13 +137,14 @@ const patternFor = (context: Context, said: SetupWords): Pattern => {
   });
 };
 
-const PITCH_EXAMPLES = ['21tpi', '96dp', '1.0 pitch'] as const;
+const pitchExamples = ({ units }: Context): readonly string[] =>
+  units === 'in' ? ['21tpi', '96dp', '1.0 pitch'] : ['1.0 pitch', '21tpi', '96dp'];
 
 const pitchFor = (context: Context, said: SetupWords, needed: boolean): Pitch | null => {
   const pitch = agreed(context, 'pitch', said.pitch, said.callout?.pitch ?? null);
   const counted = said.wheel?.teeth !== undefined && said.wheel.teeth !== null;
   if (needed && pitch === null && !counted && said.proven === undefined)
-    throw missing(context, 'pitch', PITCH_EXAMPLES);
+    throw missing(context, 'pitch', pitchExamples(context));
   if (counted && said.wheel?.diameter === null)
     throw missing(context, 'wheelDiameter', ['wheel 20mm 63 teeth', 'wheel 3/4 in 60 teeth']);
   return pitch;
@@ -175,7 +178,8 @@ const checkAngles = (context: Context, said: SetupWords, pattern: Pattern): void
 const classFor = (context: Context, said: SetupWords, pattern: Pattern, pitch: Pitch | null) => {
   const own = agreed(context, 'class', said.class, said.callout?.knurlClass ?? null);
   if (own === null) return null;
-  const without = { label: `no class`, words: reworded(context, ['class'], '') };
+  const line = reworded(context, ['class'], '');
+  const without = { label: line, words: line };
   const dp = pitch?.system === 'dp' ? standardDp(pitch.value) : null;
   if (dp === null)
     throw new Asks(
@@ -258,11 +262,28 @@ const finishFor = (
     : { ...print, limits: finishedSizeMinusPlate(print.limits, mm(said.plate)) };
 };
 
-const materialFor = (said: SetupWords): { material: Material; assumed: boolean } => {
-  const id = said.material?.usual ?? DEFAULT_MATERIAL_ID;
+/** Most rows of the table that are offered where a word leaves several. */
+const MOST_MATERIALS = 5;
+
+/** `annealed` alone leaves a dozen rows and no usual one among them. */
+const whichMaterial = (context: Context, ids: readonly string[]): Asks => {
+  const names = ids.flatMap((id) => materialById(id)?.aliases[0] ?? []);
+  const readings = names
+    .slice(0, MOST_MATERIALS)
+    .map((name) => ({ label: name, words: reworded(context, ['material'], name) }));
+  return new Asks({ code: 'unclear', what: 'material', because: 'familyOnly', readings });
+};
+
+const materialFor = (
+  context: Context,
+  said: SetupWords,
+): { material: Material; assumed: boolean } => {
+  const { material: words } = said;
+  if (words?.usual === null) throw whichMaterial(context, words.ids);
+  const id = words?.usual ?? DEFAULT_MATERIAL_ID;
   const material = materialById(id);
   if (material === undefined) throw new Error(`no material ${id}`);
-  return { material, assumed: said.material === undefined };
+  return { material, assumed: words === undefined };
 };
 
 const brinell = (said: SetupWords): number | null => {
@@ -339,7 +360,7 @@ const assemble = (context: Context, said: SetupWords, pitchNeeded: boolean): Bui
   const { limits, aimOnly } = finishFor(said, dp, knurlClass);
   if (said.diameter === undefined && limits === null)
     throw missing(context, 'diameter', diameterExamples(context));
-  const { material, assumed } = materialFor(said);
+  const { material, assumed } = materialFor(context, said);
   const request: SetupRequest = {
     pattern,
     pitch,

@@ -39,6 +39,7 @@ export const setupParameters = z.object({
   support: words.support,
   bore: words.bore,
   plug: words.plug,
+  machine: words.machine,
   hardness: words.hardness,
   runout: words.runout,
   plate,

@@ -23,7 +23,9 @@ export const typed = (context: Context, name: string): string =>
   (context.read.spans.get(name) ?? []).map((span: Span) => partOf(context.text, span)).join(' ');
 
 /** One reading that keeps this and drops that. */
-export const keeping = (context: Context, keep: string, drop: readonly string[]): Suggestion => ({
-  label: typed(context, keep),
-  words: reworded(context, drop, ''),
-});
+export const keeping = (context: Context, keep: string, drop: readonly string[]): Suggestion => {
+  const words = reworded(context, drop, '');
+  const said = typed(context, keep);
+  // What a callout or another word implied was not typed itself: the whole line then says it.
+  return { label: said === '' ? words : said, words };
+};

@@ -22,7 +22,8 @@ import { nameField, newName, oldName, recordsOf } from './named.ts';
 const readBase: Reader<string> = (cursor) => {
   const reading = freeMaterial(cursor, NO_NAMES);
   if (reading === null || 'refusal' in reading) return reading;
-  return { value: reading.value.usual, used: reading.used };
+  const { usual } = reading.value;
+  return usual === null ? null : { value: usual, used: reading.used };
 };
 
 const base = said<string>({

@@ -2,12 +2,10 @@ import type { z } from 'zod';
 import { type Lead, parameterOf, said } from '../../src/desk/index.ts';
 import {
   type AnyParameter,
-  type Cursor,
+  knownName,
   leadingText,
   type Names,
-  plainText,
   textOf,
-  tokenAt,
   type Vocabulary,
   vocabularyOf,
 } from '../../src/words/index.ts';
@@ -42,20 +40,10 @@ export const newName =
     return 'refusal' in reading ? { ...reading, choices: [] } : reading;
   };
 
-/** The longest of the names the shop has given that stands here. */
-const knownName = (
-  cursor: Cursor,
-  known: readonly string[],
-): { readonly value: string; readonly used: number } | null => {
-  const standing = known
-    .map((name) => ({ name, words: plainText(name).trim().split(/\s+/u) }))
-    .filter(({ words }) => words.every((word, at) => tokenAt(cursor, at)?.text === word))
-    .sort((a, b) => b.words.length - a.words.length)[0];
-  return standing === undefined ? null : { value: standing.name, used: standing.words.length };
-};
-
 /** A name that is on the list; one that is not is taken as typed, so that it can be said so. */
 export const oldName =
   (others: Others, known: (names: Names) => readonly string[]): Lead =>
-  (cursor, names) =>
-    knownName(cursor, known(names)) ?? newName(others)(cursor, names);
+  (cursor, names) => {
+    const reading = knownName(known)(cursor, names);
+    return reading !== null && 'value' in reading ? reading : newName(others)(cursor, names);
+  };

@@ -8,10 +8,11 @@ import {
   hardwareOf,
   NO_NAMES,
   type Parameter,
+  type Reader,
   readWheel,
   smallLengthOf,
   textOf,
-  tokenAt,
+  timesAt,
   vocabularyOf,
   type WheelWords,
 } from '../../src/words/index.ts';
@@ -78,13 +79,14 @@ const wheelTeeth = said<number>({
   examples: ['63 teeth'],
 });
 
+const readSizes: Reader<WheelWords> = (cursor) =>
+  timesAt(cursor) === null ? null : readWheel(cursor, NO_NAMES);
+
 /** `20x8x6`, which says three at once; names are none of its business. */
 const size = said<WheelWords>({
   name: 'wheel',
-  read: (cursor) =>
-    /\dx\d/u.test(tokenAt(cursor)?.text ?? '') ? readWheel(cursor, NO_NAMES) : null,
-  free: (cursor) =>
-    /^[\d./]+x\d/u.test(tokenAt(cursor)?.text ?? '') ? readWheel(cursor, NO_NAMES) : null,
+  read: readSizes,
+  free: readSizes,
   keywords: ['size'],
   examples: ['20x8x6'],
 });

@@ -4,15 +4,15 @@ export { plainText } from './characters.ts';
 export {
   type Cursor,
   moved,
-  type Quantity,
-  quantityAt,
   type ShopUnits,
   spanOf,
   tokenAt,
 } from './cursor.ts';
 export { partOf, readAs, replaced, withMore } from './edit.ts';
+export { type HardnessWords, readHardness } from './hardness.ts';
 export * from './kinds.ts';
-export { type Limits, limitsOf } from './limits.ts';
+export { type BareRange, hardwareOf, lengthOf, smallLengthOf } from './length.ts';
+export { type Limits, limitsOf, unannouncedLimits } from './limits.ts';
 export {
   freeMaterial,
   MATERIAL_OFFERS,
@@ -20,17 +20,14 @@ export {
   type MaterialWords,
   narrowed,
 } from './material.ts';
+export { knownName, nameOf } from './names.ts';
 export { nearestOf } from './nearest.ts';
 export { numberOf } from './numbers.ts';
-export { freePitch, readPitch, samePitch } from './pitch.ts';
-export {
-  type AnyParameter,
-  type LineResult,
-  type ReadLine,
-  readLine,
-  type Vocabulary,
-  vocabularyOf,
-} from './reader.ts';
+export { onePin, type PinWords, pinFirst, readPin } from './pin.ts';
+export { freePitch, pitchesOf, readPitch, samePitch } from './pitch.ts';
+export { quantityAt } from './quantity.ts';
+export type { Range } from './range.ts';
+export { type LineResult, type ReadLine, readLine } from './reader.ts';
 export {
   type Names,
   NO_NAMES,
@@ -43,16 +40,7 @@ export {
 } from './reading.ts';
 export { leadingText, quoted, textOf } from './text.ts';
 export { type Span, tokensOf } from './tokens.ts';
-export {
-  BEVEL,
-  BEVEL_SIZES,
-  type HardnessWords,
-  onePin,
-  oneWheel,
-  type PinWords,
-  readHardness,
-  readPin,
-  readWheel,
-  type WheelWords,
-} from './tooling.ts';
+export type { Quantity } from './unit.ts';
 export { unitOf } from './unit.ts';
+export { type AnyParameter, type Vocabulary, vocabularyOf } from './vocabulary.ts';
+export { oneWheel, readWheel, timesAt, type WheelWords, wheelFirst } from './wheel.ts';

@@ -1,9 +1,10 @@
 import { DEFAULT_MATERIAL_ID, MATERIALS, type Material } from '../calc/materials/index.ts';
 import type { Suggestion } from '../refusal.ts';
-import { plainText } from './characters.ts';
-import { type Cursor, tokenAt } from './cursor.ts';
+import { type Cursor, isAfterComma, moved, phraseAt, phraseOf, textAt } from './cursor.ts';
+import { DESIGNATIONS, LOOKS_LIKE_A_SIZE } from './designations.ts';
+import { quantityAt } from './quantity.ts';
 import { type Names, type Reader, took } from './reading.ts';
-import { unitOf } from './unit.ts';
+import { tokensOf } from './tokens.ts';
 
 /**
  * What the words so far leave of the materials table. `stainless` leaves all stainless steels and
@@ -11,8 +12,8 @@ import { unitOf } from './unit.ts';
  */
 export type MaterialWords = {
   readonly ids: readonly string[];
-  /** The one meant where nothing more is said. */
-  readonly usual: string;
+  /** The one meant where nothing more is said; null where that cannot be told. */
+  readonly usual: string | null;
   /** The shop's own name for it, where that was said. */
   readonly own?: string;
 };
@@ -37,21 +38,31 @@ const inCondition =
 const NARROWING: readonly (readonly [phrases: string, ids: readonly string[], usual: string])[] = [
   ['steel', [...idsWhere(steels), ...idsWhere(startsWith('ss'))], DEFAULT_MATERIAL_ID],
   ['carbon steel', idsWhere(startsWith('steel-lowC', 'steel-medC')), DEFAULT_MATERIAL_ID],
-  ['alloy steel', idsWhere(startsWith('steel-CrMo')), 'steel-CrMo-ann'],
+  [
+    'mild steel|mild|low carbon steel|low carbon',
+    idsWhere(startsWith('steel-lowC')),
+    'steel-lowC-CD',
+  ],
+  ['medium carbon steel|medium carbon|c45', idsWhere(startsWith('steel-medC')), 'steel-medC-CD'],
+  [
+    'alloy steel|chromoly|chrome moly|42crmo4|1.7225|scm440|en19|709m40',
+    idsWhere(startsWith('steel-CrMo')),
+    'steel-CrMo-ann',
+  ],
   ['tool steel', idsWhere(startsWith('tool')), 'tool-O1-ann'],
-  ['stainless|stainless steel|ss', idsWhere(startsWith('ss')), 'ss304'],
-  ['aluminium|aluminum|alu|ally', idsWhere((m) => m.group === 'aluminium'), 'al6061-T6'],
+  ['stainless|stainless steel|ss|inox', idsWhere(startsWith('ss')), 'ss304'],
+  ['aluminium|aluminum|alu|ally|al', idsWhere((m) => m.group === 'aluminium'), 'al6061-T6'],
   ['brass', idsWhere((m) => m.group === 'brass'), 'brass360'],
   ['bronze', idsWhere((m) => m.group === 'bronze'), 'bronze932'],
   ['copper', idsWhere((m) => m.group === 'copper'), 'copper110'],
-  ['titanium', idsWhere((m) => m.group === 'titanium'), 'ti-cp2'],
+  ['titanium|ti', idsWhere((m) => m.group === 'titanium'), 'ti-cp2'],
   [
-    'cold drawn|cold rolled|cold finished|cd|cr|crs',
+    'cold drawn|cold rolled|cold finished|cold drawn steel|cold rolled steel|cd|cr|crs',
     idsWhere((m) => steels(m) && inCondition('cold')(m)),
     'steel-lowC-CD',
   ],
   [
-    'hot rolled|hr|hrs',
+    'hot rolled|hot rolled steel|hr|hrs',
     idsWhere((m) => steels(m) && inCondition('hot rolled')(m)),
     'steel-lowC-HR',
   ],
@@ -61,21 +72,30 @@ const NARROWING: readonly (readonly [phrases: string, ids: readonly string[], us
   ['17-4', ['ss17-4-A', 'ss17-4-H1150'], 'ss17-4-A'],
 ];
 
-/** A condition said with a family it fits: `304 annealed`. Alone it says too little. */
-const CONDITIONS: readonly (readonly [phrases: string, ids: readonly string[]])[] = [
-  ['annealed', idsWhere(inCondition('annealed', 'solution'))],
-  ['prehard|pre-hard|ph|quenched and tempered|q&t', ['steel-CrMo-PH', 'ss17-4-A', 'ss17-4-H1150']],
-  ['h1150', ['ss17-4-H1150']],
-  ['as cast|cast', idsWhere(inCondition('cast'))],
-  ['leaded', ['steel-free-Pb', 'bronze932']],
+/** A condition said with a family it fits: `304 annealed`. Alone it says too little, and is asked. */
+const CONDITIONS: readonly (readonly [
+  phrases: string,
+  ids: readonly string[],
+  usual: string | null,
+])[] = [
+  ['annealed', idsWhere(inCondition('annealed', 'solution')), null],
   [
-    'free machining|free cutting',
+    'prehard|pre-hard|ph|quenched and tempered|q&t',
+    ['steel-CrMo-PH', 'ss17-4-A', 'ss17-4-H1150'],
+    'steel-CrMo-PH',
+  ],
+  ['h1150', ['ss17-4-H1150'], 'ss17-4-H1150'],
+  ['as cast|cast', idsWhere(inCondition('cast')), null],
+  ['leaded', ['steel-free-Pb', 'bronze932'], null],
+  [
+    'free machining|free cutting|free-machining|free-cutting',
     ['steel-free-S', 'steel-free-Pb', 'ss303', 'ss416', 'brass360', 'al2011-T3', 'bronze544'],
+    null,
   ],
 ];
 
 const entry = (phrase: string, means: MaterialWords): Entry => ({
-  phrase: phrase.split(' '),
+  phrase: phraseOf(phrase),
   means,
 });
 
@@ -83,8 +103,8 @@ const LEXICON: readonly Entry[] = [
   ...NARROWING.flatMap(([phrases, ids, usual]) =>
     phrases.split('|').map((phrase) => entry(phrase, { ids, usual })),
   ),
-  ...CONDITIONS.flatMap(([phrases, ids]) =>
-    phrases.split('|').map((phrase) => entry(phrase, { ids, usual: ids[0] ?? '' })),
+  ...CONDITIONS.flatMap(([phrases, ids, usual]) =>
+    phrases.split('|').map((phrase) => entry(phrase, { ids, usual })),
   ),
 ];
 const NARROWED = new Set(LEXICON.map((known) => known.phrase.join(' ')));
@@ -92,9 +112,14 @@ const NARROWED = new Set(LEXICON.map((known) => known.phrase.join(' ')));
 const NAMED: readonly Entry[] = MATERIALS.flatMap((material) =>
   material.aliases
     .filter((alias) => !NARROWED.has(alias))
+    // `2024-t3` is typed `2024 t3` as well.
+    .flatMap((alias) => [...new Set([alias, alias.replace(/-(?=t\d)/u, ' ')])])
     .map((alias) => entry(alias, { ids: [material.id], usual: material.id })),
 );
-const ENTRIES: readonly Entry[] = [...LEXICON, ...NAMED];
+const ELSEWHERE: readonly Entry[] = DESIGNATIONS.flatMap(([names, id]) =>
+  names.split('|').map((name) => entry(name, { ids: [id], usual: id })),
+);
+const ENTRIES: readonly Entry[] = [...LEXICON, ...NAMED, ...ELSEWHERE];
 
 /** First words, so that most places in a line cost one look. */
 const BY_FIRST_WORD: ReadonlyMap<string, readonly Entry[]> = ENTRIES.reduce(
@@ -118,56 +143,46 @@ export const MATERIAL_OFFERS: readonly Suggestion[] = [...new Set(MATERIAL_PHRAS
   },
 );
 
-/** Numbers that a hardness can be, on either scale. */
-const [SOFTEST, HARDEST] = [5, 750];
-
-/** `416 rpm` is a speed, not a stainless steel. */
+/** `416 rpm` is a speed, not a stainless steel; in `416 rpm 200` the word announces the 200. */
 const isQuantity = (cursor: Cursor, used: number): boolean => {
-  const last = tokenAt(cursor, used - 1);
-  const next = tokenAt(cursor, used);
-  const unit = next === undefined ? null : unitOf(next.text);
-  if (last === undefined || !/^\d+$/u.test(last.text) || unit === null) return false;
-  // In `1018 turns 18` the word announces the number behind it, unless that is a material too.
-  const behind = tokenAt(cursor, used + 1)?.text ?? '';
-  if (/^\d/u.test(behind) && !BY_FIRST_WORD.has(behind)) return false;
-  // In `4140 HB 210` the scale belongs to the number behind it.
-  const isScale = unit.measure === 'hb' || unit.measure === 'hrc';
-  const hardness = isScale ? Number(tokenAt(cursor, used + 1)?.text) : Number.NaN;
-  return next?.text !== 'in' && !(hardness >= SOFTEST && hardness <= HARDEST);
+  const last = moved(cursor, used - 1);
+  if (!/^\d+$/u.test(textAt(last))) return false;
+  const quantity = quantityAt(last);
+  if (quantity === null || !quantity.unitApart || textAt(last, quantity.used - 1) === 'in')
+    return false;
+  const after = moved(last, quantity.used);
+  return isAfterComma(after) || quantityAt(after) === null;
 };
 
-const ofTable: Reader<MaterialWords> = (cursor) => {
-  const first = tokenAt(cursor);
-  if (first === undefined) return null;
+/** Four-figure inch sizes are measured every day; a metric bar is never 1.4301. */
+const isSize = (cursor: Cursor, { phrase }: Entry): boolean =>
+  cursor.units === 'in' && LOOKS_LIKE_A_SIZE.test(phrase[0] ?? '');
+
+const ofTable = (cursor: Cursor): Entry | null => {
   let best: Entry | null = null;
-  for (const known of BY_FIRST_WORD.get(first.text) ?? []) {
-    const stands = known.phrase.every((word, i) => tokenAt(cursor, i)?.text === word);
-    if (stands && known.phrase.length > (best?.phrase.length ?? 0)) best = known;
+  for (const known of BY_FIRST_WORD.get(textAt(cursor)) ?? []) {
+    const length = phraseAt(cursor, known.phrase);
+    if (length > (best?.phrase.length ?? 0) && !isSize(cursor, known)) best = known;
   }
-  if (best === null || isQuantity(cursor, best.phrase.length)) return null;
-  return took(best.means, best.phrase.length);
+  return best === null || isQuantity(cursor, best.phrase.length) ? null : best;
 };
 
 /** A name the shop has given goes before the general ones, unless they say more. */
-const ofShop = (cursor: Cursor, { materials = [] }: Names): Entry | undefined =>
-  materials
-    .map(({ name, base }) =>
-      entry(plainText(name).trim().replaceAll(/\s+/gu, ' '), {
-        ids: [base],
-        usual: base,
-        own: name,
-      }),
-    )
-    .filter((known) => known.phrase.every((word, i) => tokenAt(cursor, i)?.text === word))
-    .sort((a, b) => b.phrase.length - a.phrase.length)[0];
+const ofShop = (cursor: Cursor, { materials = [] }: Names): Entry | null => {
+  let best: Entry | null = null;
+  for (const { name, base } of materials) {
+    const phrase = tokensOf(name).map((token) => token.text);
+    if (phraseAt(cursor, phrase) > (best?.phrase.length ?? 0))
+      best = { phrase, means: { ids: [base], usual: base, own: name } };
+  }
+  return best;
+};
 
 export const freeMaterial: Reader<MaterialWords> = (cursor, names) => {
+  const general = ofTable(cursor);
   const own = ofShop(cursor, names);
-  const general = ofTable(cursor, names);
-  const used = general !== null && 'used' in general ? general.used : 0;
-  return own !== undefined && own.phrase.length >= used
-    ? took(own.means, own.phrase.length)
-    : general;
+  const longer = own !== null && own.phrase.length >= (general?.phrase.length ?? 0) ? own : general;
+  return longer === null ? null : took(longer.means, longer.phrase.length);
 };
 
 /** What two words about the material leave together; null where they exclude each other. */
@@ -175,8 +190,9 @@ export const narrowed = (a: MaterialWords, b: MaterialWords): MaterialWords | nu
   const ids = a.ids.filter((id) => b.ids.includes(id));
   // The narrower word knows better what is usually meant.
   const order = a.ids.length <= b.ids.length ? [a, b] : [b, a];
-  const usual = order.map((words) => words.usual).find((id) => ids.includes(id)) ?? ids[0];
+  const usual = order.map((words) => words.usual).find((id) => id !== null && ids.includes(id));
+  const only = ids.length === 1 ? (ids[0] ?? null) : null;
+  if (ids.length === 0) return null;
   const own = a.own ?? b.own;
-  if (usual === undefined) return null;
-  return own === undefined ? { ids, usual } : { ids, usual, own };
+  return { ids, usual: usual ?? only, ...(own === undefined ? {} : { own }) };
 };

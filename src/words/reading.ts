@@ -10,6 +10,10 @@ export type Reading<T> =
 export const took = <T>(value: T, used: number): Reading<T> => ({ value, used });
 export const refused = (refusal: Refusal): { readonly refusal: Refusal } => ({ refusal });
 
+/** What two halves of one thing say together; null where both say it and differ. */
+export const either = <T>(a: T | null, b: T | null): { readonly value: T | null } | null =>
+  a !== null && b !== null && a !== b ? null : { value: a ?? b };
+
 /** Names the shop has given, which the reader cannot know by itself. */
 export type Names = {
   readonly wheels: readonly string[];
@@ -37,16 +41,20 @@ export type Parameter<T> = {
   readonly keywords?: readonly string[];
   /** The keyword may also follow: `1.5 long`. */
   readonly postfix?: boolean;
-  /** A keyword without a value is only a filler: the `bar` of `1 in bar`. */
+  /** A keyword without a value of its own is only a filler: the `bar` of `1 in bar`. */
   readonly loose?: boolean;
   /** Words that are the value by themselves: `as-is`. */
   readonly values?: readonly (readonly [phrase: string, value: T])[];
   /** Reads the value where no keyword announces it. */
   readonly free?: Reader<T>;
+  /** Reads forms that give it away without a keyword in front: `20mm wheel`, `1.0 ±0.005`. */
+  readonly unannounced?: Reader<T>;
   /** Quantities that can only be this: 200 rpm. */
   readonly measures?: readonly Measure[];
   /** Takes a number that says nothing about itself. */
   readonly bare?: boolean;
+  /** What a number that says nothing about itself may also have been meant for: `21 tpi`. */
+  readonly mayBe?: (number: string) => readonly string[];
   /** Puts together what was said in two places; null where the two disagree. */
   readonly merge?: (a: T, b: T) => T | null;
   /** Words of the person's own; a form's field is quoted, so that it is taken as it stands. */
@@ -57,4 +65,6 @@ export type Parameter<T> = {
   readonly suggests?: Suggested;
   /** Things to type, shown where it is missing and in the help. */
   readonly examples: readonly string[];
+  /** The same for a shop that measures in mm, where those would not do. */
+  readonly metricExamples?: readonly string[];
 };

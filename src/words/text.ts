@@ -1,7 +1,7 @@
-import { plainText } from './characters.ts';
-import { type Cursor, moved, spanOf, tokenAt } from './cursor.ts';
-import { isReadable, type Vocabulary } from './reader.ts';
+import { type Cursor, moved, plainOf, spanOf, tokenAt } from './cursor.ts';
+import { isReadable } from './reader.ts';
 import { type Names, NO_NAMES, type Reader, type Reading, took } from './reading.ts';
+import type { Vocabulary } from './vocabulary.ts';
 
 /**
  * Words that are nobody's but the person's own: a name, a place, a rule. In quotation marks they
@@ -22,10 +22,12 @@ const wordsBefore = (cursor: Cursor, end: number): number => {
 const quotedAt = (cursor: Cursor): { readonly value: string; readonly used: number } | null => {
   const first = tokenAt(cursor);
   if (first === undefined) return null;
-  const line = plainText(cursor.text);
-  if (line[first.start] !== '"') return null;
+  const line = plainOf(cursor);
+  // A quotation mark that touches its word is no part of it.
+  const mark = line[first.start - 1] === '"' ? first.start - 1 : first.start;
+  if (line[mark] !== '"') return null;
   let value = '';
-  for (let at = first.start + 1; at < line.length; at += 1) {
+  for (let at = mark + 1; at < line.length; at += 1) {
     if (line[at] !== '"') value += cursor.text[at] ?? '';
     else if (line[at + 1] === '"') {
       value += '"';

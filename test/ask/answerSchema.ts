@@ -61,7 +61,11 @@ const alternative = z.looseObject({ toothCount: number.int().min(3), blankDiamet
 const choice = z.strictObject({ label: text, words: z.string().regex(/^\/\S/u) });
 
 /** Where in the line it stands, for those refusals that know. */
-const place = { start: number.int().min(0).optional(), end: number.int().min(0).optional() };
+const place = {
+  word: text.optional(),
+  start: number.int().min(0).optional(),
+  end: number.int().min(0).optional(),
+};
 const suggestion = z.strictObject({ label: text, words: text });
 export const refusalSchema = z.discriminatedUnion('code', [
   z.strictObject({

@@ -222,7 +222,7 @@ export const BAD: readonly BadLine[] = [
   ['in', '1.0 straight 21tpi 🙂', 'unreadable', { word: '🙂', nearest: [] }],
   ['in', '1e99 straight 21tpi', 'unreadable', { word: '1e99' }],
   ['in', 'NaN straight 21tpi', 'unreadable', { word: 'NaN' }],
-  ['in', '1.234,5 straight 21tpi', 'unclear', { what: 'diameter' }],
+  ['in', '1.234,5 straight 21tpi', 'outOfRange', { what: 'diameter' }],
   ['in', '1.0 straight 21tpi 12l15', 'unreadable', { word: '12l15', nearest: [] }],
   // It once threw: the word is also a name of the language the program is written in.
   ['in', 'constructor straight 21tpi', 'unreadable', { word: 'constructor' }],

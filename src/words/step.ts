@@ -1,0 +1,75 @@
+import { byPhrase, keywordAlone, type Weighed } from './announced.ts';
+import { byQuantity } from './bare.ts';
+import { betweenTwo } from './between.ts';
+import { type Cursor, moved, textAt } from './cursor.ts';
+import { type Ear, isFound, type Step, stepOf } from './ear.ts';
+import { quantityAt } from './quantity.ts';
+import { unitOf } from './unit.ts';
+import { unreadable } from './unreadable.ts';
+
+/** Words people put between the ones that count. */
+const FILLERS = new Set(
+  [
+    'a an the of for with and please pls thanks knurl knurls knurling knurled set up setup make do',
+    'i me my we our us want need give get can you just have got using use is it this that be',
+    'bar bars round rod shaft stock piece part blank size od outside pattern material matl mat',
+    'dia diameter at to in by on',
+  ].flatMap((line) => line.split(' ')),
+);
+/** Signs that part words or head a list. */
+const MARKS = /^(?:[-/•·@→+]+|->|\.+|…)$/u;
+
+/** The parameter that reads what stands here without being announced; the longest reading. */
+const byItself = (cursor: Cursor, ear: Ear): Weighed | null => {
+  let best: Weighed | null = null;
+  for (const parameter of ear.vocabulary.free) {
+    const reading = (parameter.free ?? parameter.unannounced)?.(cursor, ear.names) ?? null;
+    if (reading === null) continue;
+    const words = 'refusal' in reading ? 1 : reading.used;
+    if (words > (best?.words ?? 0)) best = { step: stepOf(cursor, parameter, reading), words };
+  }
+  return best;
+};
+
+/** The x of `1.0 x 21tpi` parts a size from what says itself what it is. */
+const isPart = (cursor: Cursor, ear: Ear): boolean => {
+  if (textAt(cursor) !== 'x' || cursor.at === 0) return false;
+  const next = ear.step(moved(cursor, 1));
+  return isFound(next) && next.found.parameter.bare !== true;
+};
+
+/** A sign between two words; before a number it may be the number's own. */
+const isMark = (cursor: Cursor): boolean => {
+  const word = textAt(cursor);
+  return MARKS.test(word) && !(word === '+' && quantityAt(moved(cursor, 1)) !== null);
+};
+
+/** A unit without a number: what it measures is missing. */
+const loneUnit = (cursor: Cursor, ear: Ear): Step | null => {
+  const measure = unitOf(textAt(cursor))?.measure;
+  const parameter = ear.vocabulary.parameters.find((each) =>
+    (each.measures ?? []).some((own) => own === measure),
+  );
+  if (measure === undefined || parameter === undefined || parameter.bare === true) return null;
+  return keywordAlone(cursor, parameter, 1);
+};
+
+/** What stands at a place of the line. */
+const stepAt = (cursor: Cursor, ear: Ear): Step => {
+  const between = betweenTwo(cursor, ear);
+  if (between !== null) return between;
+  const phrase = byPhrase(cursor, ear);
+  const own = byItself(cursor, ear);
+  if (own !== null && own.words > (phrase?.words ?? 0)) return own.step;
+  if (phrase !== null) return phrase.step;
+  const quantity = byQuantity(cursor, ear);
+  if (quantity !== null) return quantity;
+  if (FILLERS.has(textAt(cursor)) || isMark(cursor) || isPart(cursor, ear)) return { skip: 1 };
+  return loneUnit(cursor, ear) ?? unreadable(cursor, ear.vocabulary.words);
+};
+
+/** What listens to a line with this vocabulary, in a shop with these names. */
+export const earFor = (vocabulary: Ear['vocabulary'], names: Ear['names']): Ear => {
+  const ear: Ear = { vocabulary, names, step: (cursor) => stepAt(cursor, ear) };
+  return ear;
+};
