@@ -6,16 +6,14 @@ import { FLEET } from '../commands/index.ts';
 import { runChannel, widthOf, writePictures } from './adapters/terminal/index.ts';
 import { ChatFault, sentencesFor, startChats } from './chats.ts';
 import { type Config, configOf } from './config.ts';
-import { openDesk, openRecordsDesk, plainShop } from './desk/index.ts';
+import { openRecordsDesk } from './desk/index.ts';
 import { openRenderer } from './drawing/index.ts';
 import { openLog } from './log.ts';
 import { en } from './phrases/index.ts';
 import { recordsFault, recordsPlace } from './records.ts';
 import { openStore } from './store/index.ts';
 
-const { values } = parseArgs({
-  options: { phone: { type: 'boolean', default: false }, units: { type: 'string', default: 'in' } },
-});
+const { values } = parseArgs({ options: { phone: { type: 'boolean', default: false } } });
 
 // A reader that goes away (`| head`) is the end of the conversation, not a fault.
 process.stdout.on('error', (error: NodeJS.ErrnoException) => {
@@ -75,9 +73,16 @@ const chat = async (config: Config): Promise<void> => {
   process.once('SIGTERM', stop);
 };
 
-const terminal = (): Promise<void> =>
-  runChannel({
-    desk: openDesk(FLEET, plainShop(values.units === 'mm' ? 'mm' : 'in')),
+/** The local channel is a shop of its own, with records like any other. */
+const terminal = async (): Promise<void> => {
+  const store = await openStore(recordsPlace());
+  await runChannel({
+    desk: openRecordsDesk(FLEET, store, {
+      platform: 'terminal',
+      program: process.env['npm_package_version'] ?? '',
+      now: Date.now,
+      onFault: (error) => process.stderr.write(`${String(error)}\n`),
+    }),
     book: en,
     input: process.stdin,
     output: process.stdout,
@@ -94,14 +99,18 @@ const terminal = (): Promise<void> =>
       );
     },
   });
+  await store.close();
+};
 
 loadEnvironment({ quiet: true });
 const found = configOf(process.env);
 if ('faults' in found) refuse(sentencesFor(en, found.faults));
-else if (found.config.discord === null && found.config.slack === null) await terminal();
-else
-  await chat(found.config).catch((error: unknown) => {
+else {
+  const { config } = found;
+  const isLocal = config.discord === null && config.slack === null;
+  await (isLocal ? terminal() : chat(config)).catch((error: unknown) => {
     const sentence = error instanceof ChatFault ? error.message : recordsFault(error);
     if (sentence === null) throw error;
     refuse([sentence]);
   });
+}

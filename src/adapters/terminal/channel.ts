@@ -1,3 +1,4 @@
+import { randomUUID } from 'node:crypto';
 import { createInterface } from 'node:readline';
 import type { Readable, Writable } from 'node:stream';
 import type { Answer, Call, Desk } from '../../desk/index.ts';
@@ -13,12 +14,15 @@ export const PHONE_WIDTH = 48;
 export const widthOf = (columns: number | undefined, phone: boolean): number =>
   phone ? PHONE_WIDTH : Math.min(columns ?? READABLE_WIDTH, READABLE_WIDTH);
 
+/** Tells the lines of this run from those of every other: each acts once. */
+const RUN = randomUUID();
+
 /** A line typed in the terminal, as the desk takes it. */
 export const terminalCall = (words: string, number: number): Call => ({
   shop: 'terminal',
   person: { id: 'terminal', name: 'terminal' },
   place: { channel: 'terminal', thread: null, isPrivate: false },
-  interactionId: `terminal-${String(process.pid)}-${String(number)}`,
+  interactionId: `${RUN}-${String(number)}`,
   given: { words },
 });
 
