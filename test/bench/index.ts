@@ -1,0 +1,59 @@
+/**
+ * What things cost, as numbers of this machine and as ratios in one run. Nothing is asserted: a
+ * time says little by itself, a ratio that changes says something.
+ */
+import { performance } from 'node:perf_hooks';
+import { FLEET } from '../../commands/index.ts';
+import { cardText, PHONE_WIDTH, spoken, terminalCall } from '../../src/adapters/terminal/index.ts';
+import { openDesk, plainShop } from '../../src/desk/index.ts';
+import { en } from '../../src/phrases/index.ts';
+import { MATERIAL_PHRASES, readLine, vocabularyOf } from '../../src/words/index.ts';
+import { benchPictures, MOST_DELAY_MS } from './pictures.ts';
+
+const LINES = [
+  '1.000 straight 21tpi 1018',
+  '19mm diamond 1.0 pitch 304 long 30mm out 60mm',
+  '7/8 diagonal left 96dp brass',
+  'finish 0.995-1.005 straight 96dp 303',
+  '20mm RGE 0.8 6061 wheel 20x8x6 bevel 1 fill 85%',
+];
+const ROUNDS = 600;
+/** One in so many rounds is not measured: the engine is still warming up. */
+const WARM_UP = 60;
+
+const perSecond = async (work: (line: string) => unknown): Promise<number> => {
+  for (let i = 0; i < WARM_UP; i += 1) for (const line of LINES) await work(line);
+  const start = performance.now();
+  for (let i = 0; i < ROUNDS; i += 1) for (const line of LINES) await work(line);
+  return (1000 * ROUNDS * LINES.length) / (performance.now() - start);
+};
+
+const vocabulary = vocabularyOf(
+  FLEET.find((command) => command.path.join(' ') === 'knurl setup')?.parameters ?? [],
+  MATERIAL_PHRASES,
+);
+const desk = openDesk(FLEET, plainShop('in'));
+const card = async (line: string): Promise<string> =>
+  cardText(spoken(await desk.answer(terminalCall(line, 1)), en), PHONE_WIDTH);
+
+// The least a bot does for a message of this size: take it apart and put it together again.
+const sample = JSON.stringify({ text: await card(LINES[0] ?? '') });
+const rows: readonly (readonly [name: string, perSecond: number])[] = [
+  [
+    'a message of this size, parsed and written',
+    await perSecond(() => JSON.stringify(JSON.parse(sample))),
+  ],
+  ['lines read', await perSecond((line) => readLine(line, vocabulary, 'in'))],
+  ['cards: read, worked out and written', await perSecond(card)],
+];
+const [, least] = rows[0] ?? ['', 1];
+
+const print = (line: string): void => {
+  process.stdout.write(`${line}\n`);
+};
+for (const [name, rate] of rows)
+  print(
+    `${name.padEnd(44)} ${rate.toFixed(0).padStart(9)} a second, ${(least / rate).toFixed(1)} times a bare message`,
+  );
+print(`pictures (event loop asked to stay under ${String(MOST_DELAY_MS)} ms behind):`);
+print(JSON.stringify(await benchPictures(), null, 2));
