@@ -16,7 +16,7 @@ import {
 } from '../../src/desk/index.ts';
 import { afterCard, blankCard, seamCard } from './checkCards.ts';
 import { type CheckWords, checkFields } from './checkFields.ts';
-import { requestOf } from './request.ts';
+import { shopRequestOf } from './shopRequest.ts';
 import { reworded } from './words.ts';
 
 const isAfter = (said: CheckWords): boolean =>
@@ -113,9 +113,10 @@ export const check = defineCommand({
     'scrap',
   ],
   allowed: 'operator',
-  run: (context, said) => {
-    const built = requestOf(context, said);
+  run: async (context, said) => {
+    const built = await shopRequestOf(context, said);
     if ('refusal' in built) return refuse(built.refusal, built.choices);
-    return checked(context, said, built.request);
+    const reply = checked(context, said, built.request);
+    return 'card' in reply ? { ...reply, about: built.about } : reply;
   },
 });

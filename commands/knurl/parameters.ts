@@ -51,7 +51,7 @@ const USUAL_DIAMETERS = { in: [0.06, 8], mm: [2, 200] } as const;
 export const diameter = said<number>({
   name: 'diameter',
   read: lengthOf('diameter', DIAMETERS, USUAL_DIAMETERS, ['mm', 'in', 'thou']),
-  keywords: ['ø', 'dia', 'diam', 'diameter', 'bar', 'stock'],
+  keywords: ['ø', 'dia', 'diam', 'diameter', 'bar', 'stock', 'd'],
   postfix: true,
   loose: true,
   measures: ['length'],
@@ -64,9 +64,11 @@ export const pattern = wordsOnly<PatternKind>({
   name: 'pattern',
   values: [
     ['straight', 'straight'],
+    ['str', 'straight'],
     ['axial', 'straight'],
     ['parallel', 'straight'],
     ['diagonal', 'diagonal'],
+    ['diag', 'diagonal'],
     ['helical', 'diagonal'],
     ['spiral', 'diagonal'],
     ['diamond', 'diamond'],
@@ -230,7 +232,7 @@ export const fill = said<number>({
 export const length = said<number>({
   name: 'length',
   read: lengthOf('length', [0.2, 2000], { in: [0.02, 12], mm: [0.8, 300] }),
-  keywords: ['long', 'length', 'knurl length'],
+  keywords: ['long', 'length', 'knurl length', 'lg', 'l'],
   postfix: true,
   examples: ['long 1.5'],
   metricExamples: ['long 30'],
@@ -383,7 +385,7 @@ export const speed = said<number>({
   // `speed 200 rpm` is a spindle speed.
   read: (cursor, names) =>
     quantityAt(cursor)?.unit?.measure === 'rotation' ? null : readSurfaceSpeed(cursor, names),
-  keywords: ['speed', 'surface speed', 'cutting speed', 'sfm'],
+  keywords: ['speed', 'surface speed', 'cutting speed', 'sfm', 'vc'],
   measures: ['speed'],
   examples: ['speed 60 sfm', 'speed 18 m/min'],
   metricExamples: ['speed 18 m/min', 'speed 60 sfm'],
@@ -392,7 +394,7 @@ export const speed = said<number>({
 export const rotation = said<number>({
   name: 'rotation',
   read: readRotation,
-  keywords: ['rpm', 'speed', 'spindle', 'spindle speed'],
+  keywords: ['rpm', 'speed', 'spindle', 'spindle speed', 'n'],
   measures: ['rotation'],
   examples: ['200 rpm'],
 });
@@ -400,7 +402,8 @@ export const rotation = said<number>({
 export const feed = said<number>({
   name: 'feed',
   read: rateOf('feed', [0.01, 2], 'feed', MM_PER_INCH),
-  keywords: ['feed'],
+  keywords: ['feed', 'feed rate', 'feedrate', 'f'],
+  postfix: true,
   measures: ['feed'],
   examples: ['feed 0.012'],
   metricExamples: ['feed 0.3'],
@@ -418,6 +421,7 @@ export const batch = said<number>({
   name: 'batch',
   read: countOf('batch', [1, 1_000_000], 'pieces'),
   keywords: ['batch', 'qty', 'quantity'],
+  postfix: true,
   measures: ['pieces'],
   examples: ['batch 50'],
 });

@@ -16,9 +16,10 @@ import {
   type Reply,
   refuse,
 } from '../../src/desk/index.ts';
+import { cribFor, listOf, WHEELS } from '../../src/shop/index.ts';
 import { planCard } from './planCard.ts';
 import { type CribKind, type PlanWords, planFields } from './planFields.ts';
-import { requestOf } from './request.ts';
+import { shopRequestOf } from './shopRequest.ts';
 import { reworded } from './words.ts';
 
 /** The wheel that was named, as the only one in the crib. */
@@ -36,13 +37,20 @@ const namedWheel = (request: SetupRequest): CribWheel => ({
   edge: request.edge,
 });
 
-const cribFor = (
+type Crib = { readonly crib: readonly CribWheel[]; readonly kind: CribKind };
+
+/** The wheel that was named, the shop's own, or those of the standards where it entered none. */
+const cribOf = async (
+  { visit }: Context,
   given: PlanWords,
   request: SetupRequest,
-): { crib: readonly CribWheel[]; kind: CribKind } =>
-  given.wheel === undefined
+): Promise<Crib> => {
+  if (given.wheel !== undefined) return { crib: [namedWheel(request)], kind: 'oneWheel' };
+  const own = visit === null ? [] : await listOf(visit.shop, WHEELS);
+  return own.length === 0
     ? { crib: [...dinCrib(), ...dpCrib()], kind: 'byStandard' }
-    : { crib: [namedWheel(request)], kind: 'oneWheel' };
+    : { crib: cribFor(own, request.pattern), kind: 'ofShop' };
+};
 
 const missingFinish = (context: Context): Reply => {
   const examples = context.units === 'in' ? ['finish 0.995-1.005'] : ['finish 19.8-20.0'];
@@ -55,10 +63,14 @@ const missingFinish = (context: Context): Reply => {
   );
 };
 
-const planned = (context: Context, given: PlanWords, request: SetupRequest): Reply => {
+const planned = async (
+  context: Context,
+  given: PlanWords,
+  request: SetupRequest,
+): Promise<Reply> => {
   const { finish } = request;
   if (finish === null || request.aimOnly === true) return missingFinish(context);
-  const { crib, kind } = cribFor(given, request);
+  const { crib, kind } = await cribOf(context, given, request);
   const wanted: PlanRequest = {
     job: request,
     limits: finish,
@@ -68,7 +80,7 @@ const planned = (context: Context, given: PlanWords, request: SetupRequest): Rep
     turningSpread: TURNING_SPREAD,
   };
   return cardReply(
-    planCard({ context, given, request, limits: finish, kind, plan: planFrom(wanted) }),
+    planCard({ context, given, request, limits: finish, kind, crib, plan: planFrom(wanted) }),
   );
 };
 
@@ -81,11 +93,11 @@ export const plan = defineCommand({
   ],
   parameters: planFields,
   allowed: 'operator',
-  run: (context, given) => {
+  run: async (context, given) => {
     if (given.finish === undefined) return missingFinish(context);
-    const built = requestOf(context, given, false);
+    const built = await shopRequestOf(context, given, false);
     return 'refusal' in built
       ? refuse(built.refusal, built.choices)
-      : planned(context, given, built.request);
+      : await planned(context, given, built.request);
   },
 });

@@ -1,5 +1,6 @@
 import {
   type Candidate,
+  type CribWheel,
   cribPitch,
   DEFAULT_INCLUDED,
   type Figures,
@@ -34,6 +35,7 @@ type Planned = {
   readonly request: SetupRequest;
   readonly limits: Window;
   readonly kind: CribKind;
+  readonly crib: readonly CribWheel[];
   readonly plan: Plan;
 };
 
@@ -156,13 +158,24 @@ const headline = (p: Planned): Line => {
   return change === undefined ? line('planNone', { limits: p.limits }) : changeLine(change);
 };
 
+const cribLine = (kind: CribKind, wheels: number): Line => {
+  switch (kind) {
+    case 'byStandard':
+      return line('planCribByStandard', {});
+    case 'ofShop':
+      return line('planCribOfShop', { wheels });
+    case 'oneWheel':
+      return line('planCribOneWheel', {});
+  }
+};
+
 const firstLines = (p: Planned): readonly Line[] => [
   ...(bestOf(p) === undefined && otherChanges(p).length > 0
     ? [line('planNone', { limits: p.limits })]
     : []),
   line('planFor', { limits: p.limits, wheels: p.plan.fittingWheels }),
   ...(isOffMiddle(p) ? [line('planOffMiddle', {})] : []),
-  p.kind === 'byStandard' ? line('planCribByStandard', {}) : line('planCribOneWheel', {}),
+  cribLine(p.kind, p.crib.length),
 ];
 
 /** The changes that the headline does not tell already. */

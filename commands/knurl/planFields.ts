@@ -51,4 +51,4 @@ export const planFields = z.object({
 });
 export type PlanWords = z.infer<typeof planFields>;
 
-export type CribKind = 'byStandard' | 'oneWheel';
+export type CribKind = 'byStandard' | 'ofShop' | 'oneWheel';

@@ -1,8 +1,8 @@
 import { setUp } from '../../src/calc/index.ts';
 import { cardReply, defineCommand, refuse } from '../../src/desk/index.ts';
-import { requestOf } from './request.ts';
 import { setupCard } from './setupCard.ts';
 import { setupParameters } from './setupParameters.ts';
+import { shopRequestOf } from './shopRequest.ts';
 
 /** What an operator asks for at the machine. */
 export const setup = defineCommand({
@@ -14,10 +14,10 @@ export const setup = defineCommand({
   ],
   parameters: setupParameters,
   allowed: 'operator',
-  run: (context, said) => {
-    const built = requestOf(context, said);
+  run: async (context, said) => {
+    const built = await shopRequestOf(context, said);
     if ('refusal' in built) return refuse(built.refusal, built.choices);
     const result = setUp(built.request);
-    return cardReply(setupCard({ ...built, context, said, result }));
+    return cardReply(setupCard({ ...built, context, said, result }), [], built.about);
   },
 });

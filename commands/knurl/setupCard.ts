@@ -25,6 +25,7 @@ import {
   row,
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
+import { type Machine, onDial } from '../../src/shop/index.ts';
 import { partOf } from '../../src/words/index.ts';
 import { setupPictures } from './pictures.ts';
 import type { SetupWords } from './setupParameters.ts';
@@ -37,6 +38,8 @@ export type Worked = {
   readonly request: SetupRequest;
   readonly result: SetupResult;
   readonly materialAssumed: boolean;
+  /** The shop's machine that was named. */
+  readonly machine: Machine | null;
 };
 
 /** Cautions shown by name; the standing ones follow in short. */
@@ -182,10 +185,28 @@ const runRows = (w: Worked): readonly Row[] => {
   return [row('run', { spindleSpeed, surfaceSpeed }), ...motionRows(w)];
 };
 
+/** Machine numbers as the machine shows them. */
+const dialRows = ({ machine, result }: Worked): readonly Row[] => {
+  const { firstBite } = result.figures;
+  if (machine === null || firstBite === null) return [];
+  const [infeed, bite] = [result.blank.tooth.infeed, mm(firstBite.value)].map((each) =>
+    onDial(machine, each),
+  );
+  if (infeed === undefined || bite === undefined) return [];
+  return [row('dial', { machine: machine.name, dial: machine.dial, infeed, firstBite: bite })];
+};
+
 const rows = (w: Worked): readonly Row[] => {
   const [feedIn, firstTurn, stopWhen, ...more] = toothRows(w);
   const first = [feedIn, firstTurn, stopWhen].filter((each) => each !== undefined);
-  return [...first, ...runRows(w), ...more, row('material', w.request.material)];
+  return [
+    ...first.slice(0, 2),
+    ...dialRows(w),
+    ...first.slice(2),
+    ...runRows(w),
+    ...more,
+    row('material', w.request.material),
+  ];
 };
 
 const wheelLines = ({ request, result, said }: Worked): readonly Line[] => {

@@ -17,7 +17,7 @@ import {
   type Reply,
   refuse,
 } from '../../src/desk/index.ts';
-import { requestOf } from './request.ts';
+import { shopRequestOf } from './shopRequest.ts';
 import { troubleCard } from './troubleCard.ts';
 import { type TroubleWords, troubleFields } from './troubleFields.ts';
 import { reworded } from './words.ts';
@@ -101,10 +101,10 @@ export const trouble = defineCommand({
     'flats',
   ],
   allowed: 'operator',
-  run: (context, said) => {
+  run: async (context, said) => {
     if (said.symptom === undefined) return missingSymptom(context);
     if (wordsAlone(said)) return ranked(context, said, said.symptom, NO_FACTS);
-    const built = requestOf(context, said);
+    const built = await shopRequestOf(context, said);
     return 'refusal' in built
       ? refuse(built.refusal, built.choices)
       : ranked(context, said, said.symptom, factsOf(said, built.request));

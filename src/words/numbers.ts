@@ -33,11 +33,16 @@ const FRACTION = /^(?:(\d+)-)?(\d+)\/(\d+)$/u;
 const IS_GROUPED = new RegExp(`^(?:${GROUPED})$`, 'u');
 const EITHER = /^([1-9]\d{0,2})[.,](\d{3})$/u;
 
+/** Fractions of an inch are halved and halved again; 30/30 is two helices, not one. */
+const isHalved = (bottom: number): boolean => bottom >= 2 && Number.isInteger(Math.log2(bottom));
+
 const fraction = (text: string): number | null => {
   const match = FRACTION.exec(text);
   if (match === null) return null;
   const [, whole = '0', top = '', bottom = ''] = match;
-  return Number(whole) + Number(top) / Number(bottom);
+  const share = Number(top) / Number(bottom);
+  if (share >= 1 && !(isHalved(Number(bottom)) && whole === '0')) return Number.NaN;
+  return Number(whole) + share;
 };
 
 const vulgar = (text: string): number | null => {

@@ -2,11 +2,12 @@ import type { Refusal, Suggestion } from '../refusal.ts';
 import { type Cursor, cursorOf, moved, type ShopUnits, spanOf } from './cursor.ts';
 import { type Ear, type Found, isUnreadable, type Step } from './ear.ts';
 import { partOf, readAs, withMore, without } from './edit.ts';
+import { numberOf } from './numbers.ts';
 import { outOfRange, placeOf } from './range.ts';
 import { type Names, NO_NAMES } from './reading.ts';
 import { earFor } from './step.ts';
 import type { Span } from './tokens.ts';
-import type { Vocabulary } from './vocabulary.ts';
+import type { AnyParameter, Vocabulary } from './vocabulary.ts';
 
 /** A line longer than this is a letter, not a request. Judgement. */
 export const LONGEST_LINE = 1000;
@@ -32,14 +33,31 @@ type Fault = Extract<Step, { readonly refusal: Refusal }>;
 
 type Progress = { readonly values: Map<string, unknown>; readonly spans: Map<string, Span[]> };
 
+/** What the second of two bare sizes may have been meant for instead: the 1mm of `25 straight 1mm`. */
+const otherwise = (cursor: Cursor, second: Span, ear: Ear): readonly Suggestion[] => {
+  const typed = partOf(cursor.text, second);
+  const isBare = numberOf(typed) !== null;
+  return ear.vocabulary.parameters
+    .flatMap((parameter) => parameter.mayBe?.(typed.replace(/ ?mm$/iu, '')) ?? [])
+    .filter((unit) => isBare || unit === 'pitch')
+    .map((unit) => readAs(cursor.text, second, `${typed} ${unit}`));
+};
+
 /** The same thing said twice and differently: which one is asked. */
-const twice = (cursor: Cursor, name: string, first: Span, second: Span): Refusal => ({
+const twice = (
+  cursor: Cursor,
+  { name, bare }: AnyParameter,
+  first: Span,
+  second: Span,
+  ear: Ear,
+): Refusal => ({
   code: 'unclear',
   what: name,
   because: 'saidTwice',
   readings: [
     { label: partOf(cursor.text, first), words: without(cursor.text, second) },
     { label: partOf(cursor.text, second), words: without(cursor.text, first) },
+    ...(bare === true ? otherwise(cursor, second, ear) : []),
   ],
   ...placeOf(cursor, second),
 });
@@ -53,7 +71,7 @@ const same = (a: unknown, b: unknown): boolean =>
     : JSON.stringify(a) === JSON.stringify(b);
 
 /** Puts a value in its place, or says why it cannot stand beside what was said before. */
-const put = (progress: Progress, cursor: Cursor, found: Found): Refusal | null => {
+const put = (progress: Progress, cursor: Cursor, found: Found, ear: Ear): Refusal | null => {
   const { name, merge } = found.parameter;
   const span = spanOf(cursor, found.used);
   const earlier = progress.spans.get(name) ?? [];
@@ -61,7 +79,7 @@ const put = (progress: Progress, cursor: Cursor, found: Found): Refusal | null =
   if (first !== undefined) {
     const before = progress.values.get(name);
     const together = merge?.(before, found.value) ?? (same(before, found.value) ? before : null);
-    if (together === null) return twice(cursor, name, first, span);
+    if (together === null) return twice(cursor, found.parameter, first, span, ear);
     progress.values.set(name, together);
   } else progress.values.set(name, found.value);
   progress.spans.set(name, [...earlier, span]);
@@ -78,7 +96,7 @@ const listen = (start: Cursor, ear: Ear): { readonly read: ReadLine } | Fault =>
     if ('skip' in next) cursor = moved(cursor, next.skip);
     else {
       if (next.found.used < 1) throw new Error(`${next.found.parameter.name} read no word`);
-      const refusal = put(progress, cursor, next.found);
+      const refusal = put(progress, cursor, next.found, ear);
       if (refusal !== null) return { refusal };
       cursor = moved(cursor, next.found.used);
     }
@@ -111,8 +129,9 @@ const choicesOf = (
   }
 };
 
-const isTwice = (refusal: Refusal): boolean =>
-  refusal.code === 'unclear' && refusal.because === 'saidTwice';
+/** What is asked because it was said twice, if that is why. */
+const saidTwice = (refusal: Refusal): string | null =>
+  refusal.code === 'unclear' && refusal.because === 'saidTwice' ? refusal.what : null;
 
 /** Whether a line gets past the words that were not clear in another. */
 const isBetter = (words: string, fault: Refusal, start: Cursor, ear: Ear): boolean => {
@@ -120,7 +139,9 @@ const isBetter = (words: string, fault: Refusal, start: Cursor, ear: Ear): boole
   const outcome = listen(cursorOf(words, start.units, start.at), ear);
   if ('read' in outcome) return true;
   const { refusal } = outcome;
-  if (isTwice(refusal) && !isTwice(fault)) return false;
+  // Of three sizes, one may go at a time; but nothing new may be said twice.
+  const again = saidTwice(refusal);
+  if (again !== null && again !== saidTwice(fault)) return false;
   return 'start' in refusal && words.length - refusal.start <= left;
 };
 

@@ -14,6 +14,18 @@ const OTHER_SCALES = /^(?:hr[abdefg]|hv|vickers|hrb?w|shore)\d*$/u;
 
 const UNITS = [...UNIT_WORDS.keys()].filter((unit) => unit.length > 1 && !unit.includes(' '));
 
+/** Numbers said in words: offered in figures, and two equal helices as the helix they are. */
+const IN_FIGURES: ReadonlyMap<string, string> = new Map([
+  ['one', '1'],
+  ['two', '2'],
+  ['three', '3'],
+  ['four', '4'],
+  ['half', '1/2'],
+  ['quarter', '1/4'],
+  ['30/30', 'helix 30'],
+  ['45/45', 'helix 45'],
+]);
+
 /** A number is certain; what is grown onto it may be two words, or a slip in its unit. */
 const withNumber = (word: string, known: ReadonlySet<string>): readonly string[] => {
   const [, number = '', tail = ''] = NUMBER_THEN_WORD.exec(word) ?? [];
@@ -32,9 +44,15 @@ const withNumber = (word: string, known: ReadonlySet<string>): readonly string[]
 
 /** What a word that cannot be read may have been meant for. */
 const nearestTo = (word: string, known: readonly string[]): readonly string[] => {
+  const figures = IN_FIGURES.get(word);
+  if (figures !== undefined) return [figures];
   if (OTHER_SCALES.test(word)) return [];
   const split = /\d/u.test(word) ? withNumber(word, new Set(known)) : [];
-  return split.length > 0 || /^\d/u.test(word) ? split : nearestOf(word, known);
+  if (split.length > 0 || /^\d/u.test(word)) return split;
+  return nearestOf(
+    word,
+    known.filter((each) => each.length > 2 || UNIT_WORDS.has(each)),
+  );
 };
 
 /** A sign or a picture without letters or digits may be left out; a word never is. */

@@ -56,7 +56,7 @@ export const vocabularyOf = (
     phrases,
     free: parameters.filter(({ free, unannounced }) => (free ?? unannounced) !== undefined),
     bare: parameters.find((parameter) => parameter.bare === true) ?? null,
-    words: [...new Set([...words, ...single])].filter((word) => word.length > 1 && word !== 'in'),
+    words: [...new Set([...words, ...single])].filter((word) => word !== 'in'),
   };
 };
 
