@@ -186,14 +186,21 @@ const runRows = (w: Worked): readonly Row[] => {
 };
 
 /** Machine numbers as the machine shows them. */
-const dialRows = ({ machine, result }: Worked): readonly Row[] => {
+const dialRows = ({ context, machine, result }: Worked): readonly Row[] => {
   const { firstBite } = result.figures;
   if (machine === null || firstBite === null) return [];
   const [infeed, bite] = [result.blank.tooth.infeed, mm(firstBite.value)].map((each) =>
     onDial(machine, each),
   );
   if (infeed === undefined || bite === undefined) return [];
-  return [row('dial', { machine: machine.name, dial: machine.dial, infeed, firstBite: bite })];
+  return [
+    row('onDial', {
+      dial: machine.dial,
+      units: machine.units ?? context.units,
+      infeed,
+      firstBite: bite,
+    }),
+  ];
 };
 
 const rows = (w: Worked): readonly Row[] => {

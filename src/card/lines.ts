@@ -86,13 +86,6 @@ export type Rows = CheckRows &
     material: { readonly name: string; readonly condition: string };
     feedIn: { readonly infeed: Mm; readonly cut: boolean };
     firstTurn: { readonly firstBite: Mm };
-    /** What the cross-slide's dial of this machine goes through. */
-    dial: {
-      readonly machine: string;
-      readonly dial: 'diameter' | 'radius';
-      readonly infeed: Mm;
-      readonly firstBite: Mm;
-    };
     stopWhen: {
       readonly crestFlat: Mm;
       readonly crest: Mm;

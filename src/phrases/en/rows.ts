@@ -26,10 +26,6 @@ export const rows: Book['rows'] = {
     label: 'First turn',
     text: `${show.length(firstBite, 'up')} or more [${show.other(firstBite, 'up')}]`,
   }),
-  dial: ({ machine, dial, infeed, firstBite }, show) => ({
-    label: 'Dial',
-    text: `${show.length(infeed)} past touch, first turn ${show.length(firstBite, 'up')} [${show.other(infeed)}, ${show.other(firstBite, 'up')}]: ${machine} reads ${dial}`,
-  }),
   stopWhen: ({ crestFlat, crest, low, high, cut }, show) => ({
     label: 'Stop',
     text: cut
