@@ -152,11 +152,13 @@ export const process = wordsOnly<Process>({
   examples: ['form', 'cut'],
 });
 
+const readFinish = limitsOf('finish', DIAMETERS, USUAL_DIAMETERS);
+
 export const finish = said({
   name: 'finish',
-  read: limitsOf('finish', DIAMETERS, USUAL_DIAMETERS),
+  read: readFinish,
   keywords: ['finish', 'finished', 'print', 'finish size', 'finished size'],
-  unannounced: unannouncedLimits('finish', 'finish'),
+  unannounced: unannouncedLimits(['finish', 'finished'], readFinish),
   examples: ['finish 0.995-1.005', 'finish 1.000 +0 -0.010'],
   metricExamples: ['finish 19.9-20.1', 'finish 20 +0 -0.2'],
 });

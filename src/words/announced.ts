@@ -35,14 +35,22 @@ export const keywordAlone = (cursor: Cursor, parameter: AnyParameter, used: numb
   };
 };
 
-/** What stands behind a loose keyword goes before it, where it says by itself what it is. */
-const saysItself = (cursor: Cursor, ear: Ear): boolean => {
-  if (tokenAt(cursor) === undefined) return true;
-  const next = ear.step(cursor);
-  return 'skip' in next || (isFound(next) && next.found.parameter.bare !== true);
+/**
+ * Whether a loose keyword only stands before something else: `bar 304`, `on a 1.0 bar`. A bare
+ * number belongs to the keyword, unless the keyword wants a name.
+ */
+const isFillerOnly = (cursor: Cursor, refused: Step, ear: Ear): boolean => {
+  let next = cursor;
+  while (tokenAt(next) !== undefined) {
+    const step = ear.step(next);
+    if (isFound(step)) return step.found.parameter.bare !== true || isNotFound(refused);
+    if ('refusal' in step) return false;
+    next = moved(next, step.skip);
+  }
+  return true;
 };
 
-const isRefused = (step: Step): boolean => 'refusal' in step;
+const isNotFound = (step: Step): boolean => 'refusal' in step && step.refusal.code === 'notFound';
 
 /** One word may announce two parameters (`square` edges, `square` patterns): the first that reads. */
 const announcedBy = (cursor: Cursor, phrases: Phrases, used: number, ear: Ear): Step | null => {
@@ -52,7 +60,7 @@ const announcedBy = (cursor: Cursor, phrases: Phrases, used: number, ear: Ear): 
     const reading = parameter.read(after, ear.names);
     const step = reading === null ? null : stepOf(cursor, parameter, reading, used);
     if (step === null) continue;
-    if (parameter.loose === true && isRefused(step) && saysItself(after, ear))
+    if (parameter.loose === true && 'refusal' in step && isFillerOnly(after, step, ear))
       return { skip: used };
     return step;
   }

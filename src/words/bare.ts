@@ -7,7 +7,7 @@ import { quantityAt } from './quantity.ts';
 import { ask } from './range.ts';
 import type { Quantity } from './unit.ts';
 import type { AnyParameter } from './vocabulary.ts';
-import { timesAt } from './wheel.ts';
+import { type Sizes, timesAt } from './wheel.ts';
 
 /** 30° may be a helix, a swivel or a tooth angle: whichever it can be is offered. */
 const unclearAngle = (cursor: Cursor, quantity: Quantity, ear: Ear): Step | null => {
@@ -25,6 +25,32 @@ const unclearAngle = (cursor: Cursor, quantity: Quantity, ear: Ear): Step | null
   return 'refusal' in asked ? asked : null;
 };
 
+/** Units in which a number without one may also have been meant. */
+const otherUnits = (number: string, ear: Ear): readonly string[] =>
+  ear.vocabulary.parameters.flatMap((parameter) => parameter.mayBe?.(number) ?? []);
+
+/** What else a number without a unit may have been meant for, beside the sizes it could be. */
+const otherMeanings = (cursor: Cursor, { number }: Quantity, ear: Ear): readonly Suggestion[] => {
+  const typed = partOf(cursor.text, number);
+  return otherUnits(partOf(plainOf(cursor), number), ear).map((unit) =>
+    readAs(cursor.text, number, `${typed} ${unit}`),
+  );
+};
+
+/** What two or three sizes with an x between them may be of. */
+const sizeReadings = (cursor: Cursor, { sizes, used }: Sizes, ear: Ear): readonly string[] => {
+  const typed = partOf(cursor.text, spanOf(cursor, used));
+  const wheel = `wheel ${typed}`;
+  if (sizes.length > 2) return [wheel];
+  const [first = '', other = ''] = typed.split(/[x×✕]/iu).map((part) => part.trim());
+  const long = ['length', 'stockLength']
+    .map((name) => ear.vocabulary.parameters.find((each) => each.name === name)?.keywords?.[0])
+    .filter((keyword) => keyword !== undefined)
+    .map((keyword) => `${first} ${keyword} ${other}`);
+  const pitches = otherUnits(other, ear).map((unit) => `${first}, ${other} ${unit}`);
+  return [...pitches, ...long, wheel];
+};
+
 /** `1.0 x 1.5`, `20x8x6`: sizes of the bar, of the knurl or of a wheel. */
 const unclearSizes = (cursor: Cursor, ear: Ear): Step | null => {
   const times = timesAt(cursor);
@@ -33,24 +59,8 @@ const unclearSizes = (cursor: Cursor, ear: Ear): Step | null => {
   // In `1.0 x 21tpi` and `1.0 x 1.5 long` what follows says itself what it is.
   if (isFound(second) && second.found.parameter.bare !== true) return null;
   const span = spanOf(cursor, times.used);
-  const [first = '', other = ''] = partOf(plainOf(cursor), span).split('x');
-  const long = ['length', 'stockLength']
-    .map((name) => ear.vocabulary.parameters.find((each) => each.name === name)?.keywords?.[0])
-    .filter((keyword) => keyword !== undefined)
-    .map((keyword) => `${first.trim()} ${keyword} ${other.trim()}`);
-  const wheel = `wheel ${partOf(cursor.text, span)}`;
-  const readings = times.sizes.length > 2 ? [wheel] : [...long, wheel];
-  const asked = ask(cursor, 'size', 'sizeByWhat', span, readings);
+  const asked = ask(cursor, 'size', 'sizeByWhat', span, sizeReadings(cursor, times, ear));
   return 'refusal' in asked ? asked : null;
-};
-
-/** What else a number without a unit may have been meant for, beside the sizes it could be. */
-const otherMeanings = (cursor: Cursor, quantity: Quantity, ear: Ear): readonly Suggestion[] => {
-  const typed = partOf(cursor.text, quantity.number);
-  const plain = partOf(plainOf(cursor), quantity.number);
-  return ear.vocabulary.parameters
-    .flatMap((parameter) => parameter.mayBe?.(plain) ?? [])
-    .map((unit) => readAs(cursor.text, quantity.number, `${typed} ${unit}`));
 };
 
 /** A bare number that is no likely size: perhaps its unit is misspelt, perhaps it is something else. */

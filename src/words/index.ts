@@ -12,7 +12,8 @@ export { partOf, readAs, replaced, withMore } from './edit.ts';
 export { type HardnessWords, readHardness } from './hardness.ts';
 export * from './kinds.ts';
 export { type BareRange, hardwareOf, lengthOf, smallLengthOf } from './length.ts';
-export { type Limits, limitsOf, unannouncedLimits } from './limits.ts';
+export type { Limits } from './limitShapes.ts';
+export { limitsOf, unannouncedLimits } from './limits.ts';
 export {
   freeMaterial,
   MATERIAL_OFFERS,

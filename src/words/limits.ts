@@ -1,229 +1,155 @@
-import { MM_PER_INCH } from '../calc/units.ts';
-import type { Refusal } from '../refusal.ts';
-import { type Cursor, plainOf, tokenAt } from './cursor.ts';
-import { partOf, readAs } from './edit.ts';
+import { type Cursor, isAfterComma, moved, plainOf, textAt, tokenAt } from './cursor.ts';
+import { partOf } from './edit.ts';
 import { type BareRange, factorOf } from './length.ts';
-import { NUMBER, numberOf } from './numbers.ts';
+import { type Limits, limitsAt, type Said } from './limitShapes.ts';
+import { quantityAt } from './quantity.ts';
 import { ask, isIn, outOfRange, placeOf, type Range } from './range.ts';
 import { type Reader, type Reading, refused, took } from './reading.ts';
-import type { Span } from './tokens.ts';
-import { UNIT_WORDS, unitOf } from './unit.ts';
+import { unitOf } from './unit.ts';
 
-/** The print's limits, or a nominal size whose tolerance was not said. */
-export type Limits = {
-  readonly low: number;
-  readonly high: number;
-  /** Only one size was said. */
-  readonly nominalOnly: boolean;
-};
+type Wanted = { readonly what: string; readonly range: Range; readonly bare: BareRange };
 
-/** Units of a size or of a tolerance; those that mean two things are not taken here. */
-const UNITS = [...UNIT_WORDS]
-  .filter(
-    ([word, unit]) => unit.measure === 'length' && unit.either === undefined && word.length > 1,
-  )
-  .map(([word]) => word)
-  .sort((a, b) => b.length - a.length)
-  .join('|');
-/**
- * A size: its number and its unit, each in a group of this name. The number is looked at first and
- * then taken whole, so that 7/8 is never a 7 with something behind it.
- */
-const size = (name: string): string =>
-  String.raw`(?=(?<${name}>\d{1,2}\s(?:\d+/\d+|[½¼¾⅛⅜⅝⅞])|${NUMBER}))\k<${name}>(?:\s?(?<${name}Unit>(?:${UNITS})(?!\p{L})|"))?`;
-const BOTH = String.raw`\s*(?:±|\+\s?/\s?-|\+-|-/\+)\s*`;
-const SIGN = String.raw`[+-]`;
-const TO = String.raw`\s*(?:-|to|\.{2,}|…|/)\s*`;
-
-const shape = (source: string): RegExp => new RegExp(source, 'uy');
-/** `25 ±0.1`, `1.000 +/-.005` */
-const PLUS_MINUS = shape(`${size('nominal')}${BOTH}${size('tolerance')}`);
-/** `1.000 +0 -0.010`, `1.000 +.000/-.010`, `1.000 (+0, -.010)` */
-const TWO_SIGNS = shape(
-  String.raw`${size('nominal')}\s*\(?\s*(?<sign>${SIGN})\s*${size('tolerance')}\s*[/,]?\s*(?<otherSign>${SIGN})\s*${size('other')}`,
-);
-/** `1.000 -.010`, `1.000 +.005` */
-const ONE_SIGN = shape(String.raw`${size('nominal')}\s*(?<sign>${SIGN})\s*${size('tolerance')}`);
-/** `0.995-1.005`, `0.995 to 1.005 in` */
-const RANGE = shape(`${size('nominal')}${TO}${size('to')}`);
-const NOMINAL = shape(size('nominal'));
-
-type Groups = Readonly<Record<string, string | undefined>>;
-type Found = {
-  readonly groups: Groups;
-  readonly span: Span;
-  readonly used: number;
-};
-
-/** A shape that begins here and ends where a word ends. */
-const match = (cursor: Cursor, wanted: RegExp): Found | null => {
-  const start = tokenAt(cursor)?.start;
-  if (start === undefined) return null;
-  wanted.lastIndex = start;
-  const found = wanted.exec(plainOf(cursor));
-  if (found === null) return null;
-  const end = start + found[0].length;
-  let used = 0;
-  while ((tokenAt(cursor, used)?.start ?? end) < end) used += 1;
-  if ((tokenAt(cursor, used - 1)?.end ?? 0) !== end) return null;
-  return { groups: found.groups ?? {}, span: { start, end }, used };
-};
-
-const valueOf = (text: string | undefined): number | null =>
-  text === undefined ? null : numberOf(text.replace(/\s(?=\d+\/)/u, '-').replaceAll(/\s/gu, ''));
-
-/** A full-size unit speaks for everything that has none; a thou or a micron for tolerances only. */
-const SMALL = new Set([MM_PER_INCH / 1000, 0.001]);
-
-type Scale = { readonly size: number; readonly tolerance: number; readonly bare: boolean };
-
-const scaleOf = (cursor: Cursor, groups: Groups): Scale => {
-  const factor = (name: string): number | null =>
-    unitOf(groups[`${name}Unit`] ?? '')?.factor ?? null;
-  const all = ['nominal', 'to', 'tolerance', 'other'].map(factor).filter((each) => each !== null);
-  const small = all.find((each) => SMALL.has(each)) ?? null;
-  const full = factor('nominal') ?? factor('to') ?? all.find((each) => !SMALL.has(each)) ?? null;
-  const own = full ?? factorOf(cursor.units);
-  return { size: own, tolerance: small ?? own, bare: full === null };
-};
-
-/** Each of the sizes, its own unit going before what speaks for it. */
-const inMm = (groups: Groups, name: string, factor: number): number | null => {
-  const value = valueOf(groups[name]);
-  return value === null ? null : value * (unitOf(groups[`${name}Unit`] ?? '')?.factor ?? factor);
-};
-
-/** A lone minus makes limits of two sizes alike, and a tolerance of a small one: `1.000-.010`. */
-const ALIKE = 0.5;
-
-type Offsets = readonly number[];
-
-const between = (low: number, high: number, nominalOnly = false): Limits => ({
-  low,
-  high,
-  nominalOnly,
-});
-
-const spread = (nominal: number, offsets: Offsets): Limits =>
-  between(nominal + Math.min(...offsets), nominal + Math.max(...offsets));
-
-const signedBy = (sign: string | undefined, amount: number): number =>
-  sign === '-' ? -amount : amount;
-
-/** What one of the shapes says, or null where it does not say limits. */
-const say = (cursor: Cursor, { groups }: Found): Limits | null => {
-  const scale = scaleOf(cursor, groups);
-  const nominal = inMm(groups, 'nominal', scale.size);
-  const to = inMm(groups, 'to', scale.size);
-  const tolerance = inMm(groups, 'tolerance', scale.tolerance);
-  const other = inMm(groups, 'other', scale.tolerance);
-  if (nominal === null) return null;
-  if (to !== null) return to < nominal * ALIKE ? null : between(nominal, to);
-  if (tolerance === null) return between(nominal, nominal, true);
-  if (other !== null)
-    return spread(nominal, [
-      signedBy(groups['sign'], tolerance),
-      signedBy(groups['otherSign'], other),
-    ]);
-  if (groups['sign'] === undefined) return spread(nominal, [-tolerance, tolerance]);
-  return tolerance > nominal * ALIKE
-    ? null
-    : spread(nominal, [0, signedBy(groups['sign'], tolerance)]);
-};
-
-const SHAPES = [PLUS_MINUS, TWO_SIGNS, RANGE, ONE_SIGN, NOMINAL] as const;
-
-type Said = Found & { readonly limits: Limits; readonly bare: boolean };
-
-/** The first shape that stands here and says limits. */
-const limitsAt = (cursor: Cursor): Said | null => {
-  for (const wanted of SHAPES) {
-    const found = match(cursor, wanted);
-    const limits = found === null ? null : say(cursor, found);
-    if (found !== null && limits !== null)
-      return { ...found, limits, bare: scaleOf(cursor, found.groups).bare };
-  }
-  return null;
-};
-
-const reversed = (cursor: Cursor, what: string, { groups, span, bare }: Said): Refusal => {
-  const usual = bare ? cursor.units : '';
+/** The two sizes the other way round, each with its unit. */
+const reversed = (cursor: Cursor, what: string, { groups, span, unit }: Said): Reading<Limits> => {
+  const usual = unit === '' ? cursor.units : '';
   const typed = (name: string): string =>
     `${groups[name] ?? ''} ${groups[`${name}Unit`] ?? usual}`.trim();
   const sorted = `${typed('to')} to ${typed('nominal')}`;
-  return {
-    code: 'unclear',
-    what,
-    because: 'limitsReversed',
-    readings: [readAs(cursor.text, span, sorted)],
-    ...placeOf(cursor, span),
-  };
+  return ask(cursor, what, 'limitsReversed', span, [sorted]);
+};
+
+const isWithin = ({ low, high }: Limits, [least, most]: Range, factor = 1): boolean =>
+  Math.min(low, high) >= least * factor && Math.max(low, high) <= most * factor;
+
+const outside = (
+  cursor: Cursor,
+  { what, range }: Wanted,
+  { limits, span }: Said,
+): Reading<Limits> => {
+  const value = isIn(limits.low, range) ? limits.high : limits.low;
+  return refused({ ...outOfRange(what, value, range, 'mm'), ...placeOf(cursor, span) });
 };
 
 /** Sizes without a unit that are no likely ones in the shop's: asked. */
-const unlikely = (
-  cursor: Cursor,
-  what: string,
-  { limits, span }: Said,
-  range: Range,
-): Reading<Limits> => {
+const unlikely = (cursor: Cursor, wanted: Wanted, said: Said): Reading<Limits> => {
   const own = factorOf(cursor.units);
-  const fit = (['mm', 'in'] as const).filter((unit) =>
-    [limits.low, limits.high].every((value) => isIn((value / own) * factorOf(unit), range)),
-  );
-  if (fit.length === 0) return refused(outOfRange(what, limits.low, range, 'mm'));
+  const typed = partOf(cursor.text, said.span);
+  const { low, high } = said.limits;
+  const readings = (['mm', 'in'] as const)
+    .filter((unit) => {
+      const other = { low: (low / own) * factorOf(unit), high: (high / own) * factorOf(unit) };
+      return isWithin({ ...other, nominalOnly: false }, wanted.range);
+    })
+    .map((unit) => `${typed} ${unit}`);
+  return readings.length === 0
+    ? outside(cursor, wanted, said)
+    : ask(cursor, wanted.what, 'noUnit', said.span, readings);
+};
+
+/** `1.000 ±5`: a tolerance that size can only be in the smaller unit, and is asked. */
+const smallTolerance = (cursor: Cursor, { what }: Wanted, said: Said): Reading<Limits> | null => {
+  const { groups, span } = said;
+  const hasUnit = (groups['toleranceUnit'] ?? groups['otherUnit']) !== undefined;
+  if (groups['tolerance'] === undefined || hasUnit) return null;
+  const inInches = said.unit === '' ? cursor.units === 'in' : unitOf(said.unit)?.factor !== 1;
   const typed = partOf(cursor.text, span);
-  return ask(
-    cursor,
-    what,
-    'noUnit',
-    span,
-    fit.map((unit) => `${typed} ${unit}`),
+  return ask(cursor, what, 'noUnit', span, [`${typed} ${inInches ? 'thou' : 'um'}`]);
+};
+
+/** `.995 1.005`: limits without a sign between them, or a size and the bar? */
+const twoSizes = (cursor: Cursor, { what }: Wanted, said: Said): Reading<Limits> | null => {
+  const next = moved(cursor, said.used);
+  const second = isAfterComma(next) ? null : quantityAt(next);
+  if (!said.limits.nominalOnly || second === null || second.mixed || second.sign !== '')
+    return null;
+  if (second.unit !== null && second.unit.measure !== 'length') return null;
+  const value = second.value * (second.unit?.factor ?? factorOf(cursor.units));
+  const { low } = said.limits;
+  if (!(Math.max(low, value) <= Math.min(low, value) * WIDEST)) return null;
+  const span = {
+    start: said.span.start,
+    end: tokenAt(next, second.used - 1)?.end ?? said.span.end,
+  };
+  const [first, other] = [said.span, { start: said.span.end, end: span.end }].map((part) =>
+    partOf(cursor.text, part).trim(),
   );
+  return ask(cursor, what, 'sizeByWhat', span, [
+    `${first ?? ''} to ${other ?? ''}`,
+    `${first ?? ''}, ${other ?? ''}`,
+  ]);
+};
+
+/** Small words between the keyword and the sizes. */
+const LINKS = new Set(['is', 'of', 'from', 'between', 'at', 'to', 'ø', 'dia', 'diameter', 'size']);
+
+const judged = (cursor: Cursor, wanted: Wanted, said: Said, used: number): Reading<Limits> => {
+  const { limits } = said;
+  const factor = factorOf(cursor.units);
+  const two = twoSizes(cursor, wanted, said);
+  if (two !== null) return two;
+  if (!isWithin(limits, wanted.range)) {
+    const small = smallTolerance(cursor, wanted, said);
+    if (small !== null) return small;
+  }
+  if (said.unit === '' && !isWithin(limits, wanted.bare[cursor.units], factor))
+    return unlikely(cursor, wanted, said);
+  if (!isWithin(limits, wanted.range)) return outside(cursor, wanted, said);
+  return limits.low > limits.high ? reversed(cursor, wanted.what, said) : took(limits, used);
 };
 
 /** `0.995-1.005`, `0.995 to 1.005 in`, `1.000 +0 -0.010`, `25 ±0.1`, or one nominal size. */
 export const limitsOf =
   (what: string, range: Range, bare: BareRange): Reader<Limits> =>
   (cursor) => {
-    const said = limitsAt(cursor);
-    if (said === null) return null;
-    const { low, high } = said.limits;
-    const [least, most] = bare[cursor.units].map((each) => each * factorOf(cursor.units));
-    if (said.bare && !(Math.min(low, high) >= (least ?? 0) && Math.max(low, high) <= (most ?? 0)))
-      return unlikely(cursor, what, said, range);
-    const outside = [low, high].find((value) => !isIn(value, range));
-    if (outside !== undefined) return refused(outOfRange(what, outside, range, 'mm'));
-    return low > high ? refused(reversed(cursor, what, said)) : took(said.limits, said.used);
+    let linked = 0;
+    while (LINKS.has(textAt(cursor, linked))) linked += 1;
+    const start = moved(cursor, linked);
+    const said = limitsAt(start);
+    return said === null ? null : judged(start, { what, range, bare }, said, said.used + linked);
   };
 
 /** Two sizes that differ by more than this are hardly limits of one part. */
 const WIDEST = 1.25;
 /** Most numbers of a line have nothing of the kind near them. */
-const MAY_FOLLOW = /^.{1,12}?(?:[±+…]|-[\s(.\d]|\.\.|to|\/[\s.\d+-])/u;
+const MAY_FOLLOW = /^.{1,12}?(?:[±+…]|-[\s(.\d]|\.\.|to|and|\/[\s.\d+-])/u;
 const LOOKS_LIKE_SIZES = /[.,½¼¾⅛⅜⅝⅞±]|\d\/\d|mm|in|"/u;
+const DIAMETER = /^(?:ø|d|dia|diam|diameter)$/u;
+
+/** Limits of one part that stand here, at least a tolerance or two sizes. */
+const twoLimits = (cursor: Cursor): Said | null => {
+  const start = tokenAt(cursor)?.start ?? plainOf(cursor).length;
+  if (!MAY_FOLLOW.test(plainOf(cursor).slice(start))) return null;
+  const said = limitsAt(cursor);
+  if (said === null || said.limits.nominalOnly) return null;
+  const { low, high } = said.limits;
+  const isWide = Math.max(low, high) > Math.min(low, high) * WIDEST;
+  return isWide || !LOOKS_LIKE_SIZES.test(partOf(plainOf(cursor), said.span)) ? null : said;
+};
+
+const nominalOf = (cursor: Cursor, { groups, span, unit }: Said): string => {
+  const end = span.start + (groups['nominal'] ?? '').length;
+  return `${partOf(cursor.text, { start: span.start, end })} ${unit}`.trim();
+};
 
 /**
  * Limits that nothing announces: of the finished part, or of the bar? The size alone is offered
- * as well.
+ * as well. With the keyword behind them, as in `0.995-1.005 finished`, there is no question.
  */
 export const unannouncedLimits =
-  (what: string, keyword: string): Reader<Limits> =>
-  (cursor) => {
-    const start = tokenAt(cursor)?.start ?? plainOf(cursor).length;
-    if (!MAY_FOLLOW.test(plainOf(cursor).slice(start))) return null;
-    const said = limitsAt(cursor);
-    if (said === null || said.limits.nominalOnly) return null;
-    const { limits, span, groups } = said;
-    const typed = partOf(cursor.text, span);
-    if (limits.high > limits.low * WIDEST || limits.low > limits.high * WIDEST) return null;
-    if (!LOOKS_LIKE_SIZES.test(typed)) return null;
-    const nominal = groups['to'] === undefined ? [nominalOf(cursor, groups, span)] : [];
-    return ask(cursor, what, 'limitsOfWhat', span, [`${keyword} ${typed}`, ...nominal]);
+  (keywords: readonly string[], read: Reader<Limits>): Reader<Limits> =>
+  (cursor, names) => {
+    const start = moved(cursor, DIAMETER.test(textAt(cursor)) ? 1 : 0);
+    const said = twoLimits(start);
+    if (said === null) return null;
+    const used = said.used + start.at - cursor.at;
+    const next = moved(cursor, used);
+    if (keywords.includes(textAt(next)) && limitsAt(moved(next, 1)) === null) {
+      const reading = read(start, names);
+      return reading !== null && 'value' in reading ? took(reading.value, used + 1) : reading;
+    }
+    const typed = partOf(cursor.text, said.span);
+    const nominal = said.groups['to'] === undefined ? [nominalOf(cursor, said)] : [];
+    const [keyword = ''] = keywords;
+    const span = { start: tokenAt(cursor)?.start ?? said.span.start, end: said.span.end };
+    return ask(cursor, keyword, 'limitsOfWhat', span, [`${keyword} ${typed}`, ...nominal]);
   };
-
-const nominalOf = (cursor: Cursor, groups: Groups, { start }: Span): string => {
-  const unit = groups['nominalUnit'] ?? groups['toleranceUnit'] ?? '';
-  const number = partOf(cursor.text, { start, end: start + (groups['nominal'] ?? '').length });
-  return `${number} ${unit}`.trim();
-};

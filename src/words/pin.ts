@@ -5,7 +5,8 @@ import type { Range } from './range.ts';
 import { either, type Reader, took } from './reading.ts';
 
 const PIN: Range = [1, 25];
-const PIN_SIZES: BareRange = { in: [0.04, 0.99], mm: [1, 25] };
+/** Bare sizes. A pin of 1 mm carries no knurling wheel, so a bare 1.0 is none. */
+const PIN_SIZES: BareRange = { in: [0.04, 0.99], mm: [2, 25] };
 
 /** The pin the wheel turns on. */
 export type PinWords = {

@@ -1,5 +1,5 @@
 import type { UnitName } from '../calc/units.ts';
-import type { Doubt, OutOfRangeRefusal } from '../refusal.ts';
+import type { Contradiction, Doubt, OutOfRangeRefusal } from '../refusal.ts';
 import type { Cursor } from './cursor.ts';
 import { partOf, readAs } from './edit.ts';
 import { type Reading, refused, took } from './reading.ts';
@@ -36,7 +36,7 @@ export const placeOf = (cursor: Cursor, span: Span) => ({
 export const ask = (
   cursor: Cursor,
   what: string,
-  because: Doubt,
+  because: Contradiction | Doubt,
   span: Span,
   readings: readonly string[],
 ): Reading<never> =>

@@ -1,7 +1,8 @@
+import type { Refusal } from '../refusal.ts';
 import { byPhrase, keywordAlone, type Weighed } from './announced.ts';
 import { byQuantity } from './bare.ts';
 import { betweenTwo } from './between.ts';
-import { type Cursor, moved, textAt } from './cursor.ts';
+import { type Cursor, moved, textAt, tokenAt } from './cursor.ts';
 import { type Ear, isFound, type Step, stepOf } from './ear.ts';
 import { quantityAt } from './quantity.ts';
 import { unitOf } from './unit.ts';
@@ -19,13 +20,21 @@ const FILLERS = new Set(
 /** Signs that part words or head a list. */
 const MARKS = /^(?:[-/•·@→+]+|->|\.+|…)$/u;
 
+/** How many words a refusal is about; one where it does not say. */
+const wordsOf = (cursor: Cursor, refusal: Refusal): number => {
+  const end = 'end' in refusal ? refusal.end : undefined;
+  let words = 1;
+  while ((tokenAt(cursor, words)?.start ?? Number.MAX_VALUE) < (end ?? 0)) words += 1;
+  return words;
+};
+
 /** The parameter that reads what stands here without being announced; the longest reading. */
 const byItself = (cursor: Cursor, ear: Ear): Weighed | null => {
   let best: Weighed | null = null;
   for (const parameter of ear.vocabulary.free) {
     const reading = (parameter.free ?? parameter.unannounced)?.(cursor, ear.names) ?? null;
     if (reading === null) continue;
-    const words = 'refusal' in reading ? 1 : reading.used;
+    const words = 'refusal' in reading ? wordsOf(cursor, reading.refusal) : reading.used;
     if (words > (best?.words ?? 0)) best = { step: stepOf(cursor, parameter, reading), words };
   }
   return best;

@@ -9,8 +9,11 @@ import { UNIT_WORDS } from './unit.ts';
 const NUMBER_THEN_WORD = new RegExp(`^(${NUMBER})-?([^\\d.,/].*)$`, 'u');
 const WORD_THEN_NUMBER = new RegExp(`^(\\p{L}[^\\d.,/]*?)[-.]?(${NUMBER})(\\D*)$`, 'u');
 
-/** Hardness scales that are not read. Another scale's number beside them would be a wrong one. */
-const OTHER_SCALES = /^(?:hr[abdefg]|hv|vickers|hrb?w|shore)\d*$/u;
+/**
+ * Words that mean something of their own: hardness scales that are not read, whose numbers another
+ * scale would make wrong, and limits. What is spelt like them is not what they mean.
+ */
+const OWN_MEANING = /^(?:hr[abdefg]\d*|hv\d*|vickers|shore|max|min|not?|over|under)$/u;
 
 const UNITS = [...UNIT_WORDS.keys()].filter((unit) => unit.length > 1 && !unit.includes(' '));
 
@@ -46,7 +49,7 @@ const withNumber = (word: string, known: ReadonlySet<string>): readonly string[]
 const nearestTo = (word: string, known: readonly string[]): readonly string[] => {
   const figures = IN_FIGURES.get(word);
   if (figures !== undefined) return [figures];
-  if (OTHER_SCALES.test(word)) return [];
+  if (OWN_MEANING.test(word)) return [];
   const split = /\d/u.test(word) ? withNumber(word, new Set(known)) : [];
   if (split.length > 0 || /^\d/u.test(word)) return split;
   return nearestOf(

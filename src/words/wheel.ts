@@ -6,7 +6,7 @@ import { knownName, nameOf } from './names.ts';
 import { NUMBER, numberOf } from './numbers.ts';
 import { quantityAt } from './quantity.ts';
 import { isIn, outOfRange, type Range } from './range.ts';
-import { either, type Reader, type Reading, refused, took } from './reading.ts';
+import { either, type Names, type Reader, type Reading, refused, took } from './reading.ts';
 import { type Unit, unitOf } from './unit.ts';
 
 /** Sizes wheels come in. The inch and metric ranges do not overlap, so a bare size is clear. */
@@ -158,21 +158,43 @@ export const readWheel: Reader<WheelWords> = (cursor, names) => {
 
 const WHEEL = /^wheels?$/u;
 
-/** `20x8x6 wheel`, `20mm wheel 63 teeth`, `63 tooth wheel`: the word comes after. */
+type Described = { readonly wheel: WheelWords; readonly used: number };
+
+/** A size alone, `20x8x6` or `3/4`, where one stands here. */
+const sizeAlone = (cursor: Cursor, names: Names): Described | null => {
+  const sizes = sizesAt(cursor);
+  if (sizes !== null) return 'value' in sizes ? { wheel: sizes.value, used: sizes.used } : null;
+  const diameter = diameterAt(cursor, names);
+  return diameter !== null && 'value' in diameter
+    ? { wheel: { ...NO_WHEEL, diameter: diameter.value }, used: diameter.used }
+    : null;
+};
+
+/** What stands before the word wheel: its name, its size, its count, or its count and its size. */
+const describedAt = (cursor: Cursor, names: Names): Described | null => {
+  const known = named(cursor, names);
+  if (known !== null && 'value' in known)
+    return { wheel: { ...NO_WHEEL, name: known.value }, used: known.used };
+  const teeth = teethAt(cursor);
+  if (teeth === null || 'refusal' in teeth) return sizeAlone(cursor, names);
+  const counted = { ...NO_WHEEL, teeth: teeth.value };
+  const size = sizeAlone(moved(cursor, teeth.used), names);
+  if (size === null || !WHEEL.test(textAt(cursor, teeth.used + size.used)))
+    return { wheel: counted, used: teeth.used };
+  return { wheel: { ...size.wheel, teeth: teeth.value }, used: teeth.used + size.used };
+};
+
+/** `20x8x6 wheel`, `20mm wheel 63 teeth`, `63 tooth wheel`, `the blue wheel`: the word comes after. */
 export const wheelFirst: Reader<WheelWords> = (cursor, names) => {
-  const token = tokenAt(cursor);
-  if (token === undefined || !/^[\d.,½¼¾⅛⅜⅝⅞]/u.test(token.text)) return null;
-  const quantity = quantityAt(cursor);
-  const length = timesAt(cursor)?.used ?? quantity?.used ?? 0;
-  if (!WHEEL.test(textAt(cursor, length)) || isAfterComma(cursor, length)) return null;
-  const measured = measuredAt(cursor, names);
-  if (measured === null || 'refusal' in measured || measured.used !== length) return null;
-  const next = moved(cursor, length + 1);
-  if (isAfterComma(next)) return took(measured.value, length + 1);
+  const described = describedAt(cursor, names);
+  if (described === null) return null;
+  const { wheel, used } = described;
+  if (!WHEEL.test(textAt(cursor, used)) || isAfterComma(cursor, used)) return null;
+  const next = moved(cursor, used + 1);
+  if (wheel.teeth !== null || isAfterComma(next)) return took(wheel, used + 1);
   // In `1.0 wheel 20x8x6` the word belongs to what follows.
-  const after = measuredAt(next, names);
-  const own = after !== null && 'value' in after && after.value.diameter !== null;
-  return own ? null : sizeThenTeeth(cursor, measured.value, length + 1);
+  if (wheel.name === null && sizeAlone(next, names) !== null) return null;
+  return sizeThenTeeth(cursor, wheel, used + 1);
 };
 
 /** A wheel said in two places, as far as they agree. */
