@@ -1,6 +1,6 @@
 import { MM_PER_INCH } from '../calc/units.ts';
 import type { Refusal } from '../refusal.ts';
-import { type Cursor, isAfterComma, moved, textAt, tokenAt } from './cursor.ts';
+import { type Cursor, isAfterComma, moved, textAt } from './cursor.ts';
 import { type BareRange, hardwareOf } from './length.ts';
 import { knownName, nameOf } from './names.ts';
 import { NUMBER, numberOf } from './numbers.ts';
