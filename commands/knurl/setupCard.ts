@@ -48,6 +48,19 @@ const SHOWN_CAUTIONS = 3;
 /** Words that a choice of another blank takes back. */
 const BLANK_WORDS = ['teeth', 'asIs'] as const;
 
+/** One change may lift several stops: it is told once. */
+const eachRemedy = ({ remedies }: SetupResult): SetupResult['remedies'] =>
+  remedies.filter(
+    (remedy, index) => remedies.findIndex(({ words }) => words === remedy.words) === index,
+  );
+
+/** What lifts the stop that the headline names; another stop has changes of its own. */
+const liftingLines = (result: SetupResult): readonly Line[] => {
+  const stop = worstStop(result.checks);
+  const remedies = eachRemedy(result).filter(({ check }) => check === stop?.name);
+  return remedies.length === 0 ? [] : [line('passesWith', { remedies })];
+};
+
 /** What a remedy's words take the place of. */
 const REMEDY_REPLACES: { readonly [K in RemedyKind]: readonly string[] } = {
   stickout: ['stickout'],
@@ -76,10 +89,7 @@ const blankLines = (w: Worked): readonly Line[] => {
   const { diameter: blankDiameter, teeth: toothCount } = result.blank;
   const lines: Line[] = [];
   if (worstStop(result.checks) !== null)
-    lines.push(
-      ...(result.remedies.length > 0 ? [line('passesWith', { remedies: result.remedies })] : []),
-      line('wouldTurnTo', { blankDiameter, toothCount }),
-    );
+    lines.push(...liftingLines(result), line('wouldTurnTo', { blankDiameter, toothCount }));
   lines.push(line('windowTracks', result.window));
   if (request.knurlClass !== null)
     lines.push(line('classWindow', { knurlClass: request.knurlClass }));
@@ -252,7 +262,7 @@ const blankChoices = (w: Worked): readonly Choice[] => {
 
 /** A stop comes with the smallest changes that pass, as lines to send. */
 const remedyChoices = ({ context, result }: Worked): readonly Choice[] =>
-  result.remedies.map(({ kind, number, words }) => ({
+  eachRemedy(result).map(({ kind, number, words }) => ({
     label: label('remedy', { kind, number }),
     words: reworded(context, REMEDY_REPLACES[kind], words),
   }));

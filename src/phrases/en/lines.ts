@@ -35,7 +35,7 @@ export const lines: Book['lines'] = {
     `Leave it at ${show.length(blankDiameter)}: ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
   stopped: ({ check }, show) => `Do not run this. ${stopText(check, show)}`,
   passesWith: ({ remedies }, show) =>
-    `Would pass: ${remedies.map(({ kind, number }) => inSentence(remedyLabel(kind, number, show))).join('; or ')}.`,
+    `Would lift it: ${remedies.map(({ kind, number }) => inSentence(remedyLabel(kind, number, show))).join('; or ')}.`,
   wouldTurnTo: ({ blankDiameter, toothCount }, show) =>
     `Worked out for ${show.length(blankDiameter)}, ${teeth(toothCount)}   [${show.other(blankDiameter)}]`,
   windowTracks: ({ low, high }, show) => `${show.span(low, high)} tracks.`,
