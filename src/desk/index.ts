@@ -19,7 +19,7 @@ export {
   plainShop,
   type ShopFacts,
 } from './desk.ts';
-export type { Effect, MessageAddress } from './effect.ts';
+export type { Effect, MessageAddress, Ring, Target } from './effect.ts';
 export { type KeptAnswers } from './kept.ts';
 export { openRecordsDesk, type RecordsDeskOptions } from './records.ts';
 export { ROLES, type Role } from './role.ts';

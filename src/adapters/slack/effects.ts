@@ -1,11 +1,11 @@
 import { z } from 'zod';
 import { unreachable } from '../../card/index.ts';
-import type { Effect, MessageAddress } from '../../desk/index.ts';
+import type { Effect, MessageAddress, Ring, Target } from '../../desk/index.ts';
 import { type Book, type SpokenCard, speakCard } from '../../phrases/index.ts';
 import type { Delivering, Delivery } from '../common/delivery.ts';
 import { sentence } from '../common/spoken.ts';
 import { faultText, isRefused } from './faults.ts';
-import { type Message, render } from './render.ts';
+import { type Message, render, type Ring as SlackRing } from './render.ts';
 import type { Sender, Sent, Where } from './send.ts';
 
 /** A place as the records name it: a channel, and a thread in it. */
@@ -25,8 +25,20 @@ const sentOf = ({ place, message }: MessageAddress): Sent => ({
 
 const address = z.object({ place: z.string(), message: z.string() });
 
-const messagesOf = (key: string, card: SpokenCard): readonly Message[] =>
-  render({ card, of: key, wasPrivate: false });
+/** The message that is meant: it stands already, or the effect before this one left it. */
+const addressedBy = ({ message }: Target, earlier: unknown): MessageAddress =>
+  message ?? address.parse(earlier);
+
+const ringsOf = ({ people, groups }: Ring): readonly SlackRing[] => [
+  ...people.map((user) => ({ user })),
+  ...groups.map((group) => ({ group })),
+];
+
+const messagesOf = (
+  key: string,
+  card: SpokenCard,
+  ring: Ring = { people: [], groups: [] },
+): readonly Message[] => render({ card, of: key, wasPrivate: false, rings: ringsOf(ring) });
 
 /** Each post has a key of its own, so that a second try finds the first. */
 const postAll = async (
@@ -53,15 +65,18 @@ const act = async (
 ): Promise<unknown> => {
   switch (effect.effect) {
     case 'post': {
-      const messages = messagesOf(effect.key, speakCard(book, effect.card));
-      return await postAll(sender, whereOf(effect.place), effect.key, messages, firstTried);
+      const messages = messagesOf(effect.key, speakCard(book, effect.card), effect.ring);
+      const place = effect.place ?? address.parse(earlier).place;
+      return await postAll(sender, whereOf(place), effect.key, messages, firstTried);
     }
     case 'pin':
       await sender.pin(sentOf(address.parse(earlier)));
       return earlier;
-    case 'unpin':
-      await sender.unpin(sentOf(effect.message));
-      return effect.message;
+    case 'unpin': {
+      const message = addressedBy(effect, earlier);
+      await sender.unpin(sentOf(message));
+      return message;
+    }
     case 'thread': {
       // A thread begins with what is said in it.
       const above = address.parse(earlier);
@@ -87,9 +102,10 @@ const act = async (
       return null;
     }
     case 'edit': {
+      const standing = addressedBy(effect, earlier);
       const [message] = messagesOf(effect.key, speakCard(book, effect.card));
-      if (message !== undefined) await sender.edit(sentOf(effect.message), message);
-      return effect.message;
+      if (message !== undefined) await sender.edit(sentOf(standing), message);
+      return standing;
     }
     default:
       return unreachable(effect);

@@ -130,8 +130,16 @@ test('effects: post once, pin, thread under it, edit, take the pin off, tell one
       delivered: true,
     });
   expect(bot.platform.pins).toHaveLength(1);
-  await slack.deliver({ effect: 'thread', key: 'k3', of: 'k1', title: 'Which wheel?' }, after);
+  const thread = { effect: 'thread', key: 'k3', of: 'k1', title: 'Which wheel?' } as const;
+  const opened = await slack.deliver(thread, after);
+  if (!opened.delivered) throw new Error(opened.fault);
   expect(bot.platform.posted[1]?.thread).toBe(bot.platform.posted[0]?.ts);
+  const ring = { people: ['U0ENGINEER'], groups: ['S0ENGINEERS'] };
+  bot.platform.allowRinging('@U0ENGINEER', '!subteam^S0ENGINEERS');
+  const inThread = { effect: 'post', key: 'k3-1', of: 'k3', ring, card } as const;
+  await slack.deliver(inThread, { ...first, earlier: opened.outcome });
+  expect(bot.platform.posted[2]?.thread).toBe(bot.platform.posted[0]?.ts);
+  expect(JSON.stringify(bot.platform.posted[2])).toContain('<@U0ENGINEER> <!subteam^S0ENGINEERS>');
   const message = posted.outcome as { place: string; message: string };
   await slack.deliver({ effect: 'edit', key: 'k4', message, card }, first);
   for (let turn = 0; turn < 2; turn += 1)
