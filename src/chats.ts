@@ -3,6 +3,7 @@ import type { Log } from './adapters/common/log.ts';
 import { TokenRefused as DiscordTokenRefused, openDiscord } from './adapters/discord/index.ts';
 import { openSlack, TokenRefused as SlackTokenRefused } from './adapters/slack/index.ts';
 import type { Config, ConfigFault } from './config.ts';
+import type { Deliverer } from './deliveries.ts';
 import type { Desk } from './desk/index.ts';
 import type { Renderer } from './drawing/index.ts';
 import type { Book } from './phrases/index.ts';
@@ -16,7 +17,11 @@ export type Chats = {
   readonly print: (line: string) => void;
 };
 
-export type Running = { readonly stop: () => Promise<void> };
+type Started = { readonly stop: () => Promise<void> };
+export type Running = Started & {
+  /** What takes effects to the platforms that are running. */
+  readonly deliverers: readonly Deliverer[];
+};
 
 /** A platform that could not be started, in a sentence. */
 export class ChatFault extends Error {}
@@ -27,14 +32,15 @@ export const sentencesFor = (book: Book, faults: readonly ConfigFault[]): readon
 
 const nameOf = (error: unknown): string => (error instanceof Error ? error.name : 'unknown fault');
 
-const started = async <T extends Running & { readonly shops: number }>(
+const started = async <T extends Started>(
   { book, print }: Chats,
   platform: string,
   opening: Promise<T>,
+  shopsOf: (running: T) => number,
 ): Promise<T> => {
   try {
     const running = await opening;
-    print(book.chat.connected(platform, running.shops));
+    print(book.chat.connected(platform, shopsOf(running)));
     return running;
   } catch (error) {
     if (error instanceof SlackTokenRefused)
@@ -49,25 +55,28 @@ const started = async <T extends Running & { readonly shops: number }>(
 export const startChats = async (chats: Chats, { discord, slack }: Config): Promise<Running> => {
   const { book, deskFor, render, log } = chats;
   const draw = openDraw(book, render, (error) => log.fault('drawing', { error }));
-  const running: Running[] = [];
+  const running: Started[] = [];
+  const deliverers: Deliverer[] = [];
   const stop = async (): Promise<void> => {
     await Promise.allSettled(running.map((each) => each.stop()));
   };
   try {
     if (slack !== null) {
       const desk = deskFor('slack');
-      running.push(await started(chats, 'Slack', openSlack({ ...slack, desk, book, log, draw })));
+      const opening = openSlack({ ...slack, desk, book, log, draw });
+      const opened = await started(chats, 'Slack', opening, ({ teams }) => teams.length);
+      running.push(opened);
+      deliverers.push({ platform: 'slack', shops: opened.teams, deliver: opened.deliver });
     }
     if (discord !== null) {
       const { token, api } = discord;
       const desk = deskFor('discord');
-      running.push(
-        await started(chats, 'Discord', openDiscord({ token, api, desk, book, log, draw })),
-      );
+      const opening = openDiscord({ token, api, desk, book, log, draw });
+      running.push(await started(chats, 'Discord', opening, ({ shops }) => shops));
     }
   } catch (error) {
     await stop();
     throw error;
   }
-  return { stop };
+  return { deliverers, stop };
 };

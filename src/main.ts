@@ -6,6 +6,7 @@ import { FLEET } from '../commands/index.ts';
 import { runChannel, widthOf, writePictures } from './adapters/terminal/index.ts';
 import { ChatFault, sentencesFor, startChats } from './chats.ts';
 import { type Config, configOf } from './config.ts';
+import { openDeliveries } from './deliveries.ts';
 import { openRecordsDesk } from './desk/index.ts';
 import { openRenderer } from './drawing/index.ts';
 import { openLog } from './log.ts';
@@ -41,6 +42,9 @@ const refuse = (sentences: readonly string[]): never => {
 const chat = async (config: Config): Promise<void> => {
   const log = openLog((line) => process.stderr.write(line));
   const store = await openStore(recordsPlace());
+  const onFault = (error: unknown): void => log.fault('records', { error });
+  // Nothing is delivered before there is a platform to deliver it to.
+  let nudge = (): void => undefined;
   const running = await startChats(
     {
       book: en,
@@ -49,7 +53,8 @@ const chat = async (config: Config): Promise<void> => {
           platform,
           program: process.env['npm_package_version'] ?? '',
           now: Date.now,
-          onFault: (error) => log.fault('records', { error }),
+          onAnswered: () => nudge(),
+          onFault,
         }),
       render,
       log,
@@ -60,9 +65,13 @@ const chat = async (config: Config): Promise<void> => {
     await store.close();
     throw error;
   });
+  const deliveries = openDeliveries(store, running.deliverers, { now: Date.now, onFault });
+  nudge = deliveries.nudge;
+  deliveries.start();
   const stop = (): void => {
-    running
+    deliveries
       .stop()
+      .then(() => running.stop())
       .then(() => store.close())
       .then(
         () => process.exit(0),

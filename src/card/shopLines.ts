@@ -80,7 +80,11 @@ export type ShopLines = {
   wheelInState: { readonly wheel: string; readonly state: string };
   shopMaterialTaken: { readonly material: string; readonly hardness: number | null };
   undelivered: { readonly count: number; readonly fault: string };
-  givenUp: { readonly attempts: number; readonly fault: string };
+  givenUp: {
+    readonly what: 'post' | 'pin' | 'unpin' | 'thread' | 'notify' | 'edit';
+    readonly attempts: number;
+    readonly fault: string;
+  };
   planCribOfShop: { readonly wheels: number };
   invented: Nothing;
 };

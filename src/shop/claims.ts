@@ -1,9 +1,20 @@
-import { type EffectTable, literally, type Store, type Tx } from '../store/index.ts';
+import { type EffectTable, literally, type Reader, type Store, type Tx } from '../store/index.ts';
 import { type QueuedEffect, queueEffects } from './effects.ts';
+import type { ShopView } from './view.ts';
+
+/** Shops that a process can reach. What is queued for others is left to the processes of theirs. */
+export type Carried = {
+  readonly platform: string;
+  /** The shops' own ids there; null: every shop of the platform. */
+  readonly shops: readonly string[] | null;
+};
 
 /** An effect that this process has taken on, for as long as its lease lasts. */
 export type Claimed = {
   readonly shop: string;
+  /** Where the shop talks, and its own id there. */
+  readonly platform: string;
+  readonly outside: string;
   readonly id: string;
   readonly key: string;
   readonly effect: unknown;
@@ -21,6 +32,8 @@ export type ClaimOptions = {
   readonly at: number;
   readonly leaseMs: number;
   readonly most: number;
+  /** Everybody's, where not said. */
+  readonly carried?: readonly Carried[] | undefined;
 };
 
 /**
@@ -32,18 +45,31 @@ export const claimEffects = async (
   options: ClaimOptions,
 ): Promise<readonly Claimed[]> => {
   // A look costs nothing; a change takes its place in the line of those who write.
-  const due = await dueRows(store.read, options).select('id').limit(1).executeTakeFirst();
+  const due = await dueRows(store.read, options).select('effect.id').limit(1).executeTakeFirst();
   if (due === undefined) return [];
   return await store.transact((tx) => takeOn(tx, store.engine, options));
 };
 
-const dueRows = (db: Pick<Tx, 'selectFrom'>, { at }: ClaimOptions) =>
+/** The engine goes through what is due and looks up whose it is, never the other way round. */
+const dueRows = (db: Pick<Reader, 'selectFrom'>, { at, carried }: ClaimOptions) =>
   db
     .selectFrom('effect')
-    .where('state', '=', literally('waiting'))
-    .where('due_at', '<=', at)
-    .orderBy('due_at')
-    .orderBy('id');
+    .crossJoin('shop')
+    .whereRef('shop.id', '=', 'effect.shop')
+    .where('effect.state', '=', literally('waiting'))
+    .where('effect.due_at', '<=', at)
+    .$if(carried !== undefined, (query) =>
+      query.where((eb) =>
+        eb.or(
+          (carried ?? []).map(({ platform, shops }) => {
+            const there = eb('shop.platform', '=', platform);
+            return shops === null ? there : eb.and([there, eb('shop.outside', 'in', [...shops])]);
+          }),
+        ),
+      ),
+    )
+    .orderBy('effect.due_at')
+    .orderBy('effect.id');
 
 const takeOn = async (
   tx: Tx,
@@ -51,9 +77,13 @@ const takeOn = async (
   options: ClaimOptions,
 ): Promise<readonly Claimed[]> => {
   const { worker, at, leaseMs, most } = options;
-  const wanted = dueRows(tx, options).selectAll().limit(most);
+  const wanted = dueRows(tx, options)
+    .selectAll('effect')
+    .select(['shop.platform', 'shop.outside'])
+    .limit(most);
   // On a server another process may be taking on the same ones: what it holds is passed over.
-  const rows = await (engine === 'postgres' ? wanted.forUpdate().skipLocked() : wanted).execute();
+  const locked = engine === 'postgres' ? wanted.forUpdate('effect').skipLocked() : wanted;
+  const rows = await locked.execute();
   const claimed: Claimed[] = [];
   for (const row of rows) {
     const attempt = row.attempts + 1;
@@ -63,6 +93,8 @@ const takeOn = async (
       .execute();
     claimed.push({
       shop: row.shop,
+      platform: row.platform,
+      outside: row.outside,
       id: row.id,
       key: row.key,
       effect: JSON.parse(row.effect),
@@ -134,7 +166,11 @@ export const effectPostponed = async (
 };
 
 /** What is to happen because an effect was given up: the visible note. */
-export type NoteOf = (givenUp: Claimed, fault: string) => QueuedEffect | null;
+export type NoteOf = (
+  givenUp: Claimed,
+  fault: string,
+  of: Pick<ShopView, 'id' | 'db'>,
+) => Promise<QueuedEffect | null> | QueuedEffect | null;
 
 /** Not at all. What waited for it is given up with it, and a note takes its place. */
 export const effectGivenUp = async (
@@ -164,7 +200,8 @@ export const effectGivenUp = async (
         .execute();
       keys = held.map(({ key }) => key);
     }
-    const note = noteOf(claimed, fault);
-    if (note !== null) await queueEffects({ id: claimed.shop, db: tx, at }, [note]);
+    const of = { id: claimed.shop, db: tx };
+    const note = await noteOf(claimed, fault, of);
+    if (note !== null) await queueEffects({ ...of, at }, [note]);
   });
 };

@@ -8,7 +8,7 @@ export {
   keepCard,
   latestCards,
 } from './cards.ts';
-export { type Claimed, claimEffects, type NoteOf } from './claims.ts';
+export { type Carried, type Claimed, claimEffects, type NoteOf } from './claims.ts';
 export { CODE_SIGNS, readCode } from './codes.ts';
 export { canLeave, cribFor, sizeOf } from './crib.ts';
 export {

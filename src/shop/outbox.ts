@@ -1,6 +1,7 @@
 import PQueue from 'p-queue';
 import type { Store } from '../store/index.ts';
 import {
+  type Carried,
   type Claimed,
   claimEffects,
   effectDelivered,
@@ -28,6 +29,8 @@ export type Deliver = (effect: Claimed, signal: AbortSignal) => Promise<Attempt>
 export type OutboxOptions = {
   readonly worker: string;
   readonly deliver: Deliver;
+  /** Whose effects it takes on; everybody's, where not said. */
+  readonly carried?: readonly Carried[];
   readonly now: () => number;
   readonly noteOf?: NoteOf;
   /** For the log: the records or the delivery could not be reached. */
@@ -78,10 +81,10 @@ export const openOutbox = (store: Store, options: OutboxOptions): Outbox => {
   let round: Promise<unknown> = Promise.resolve();
 
   const takeOn = async (): Promise<number> => {
-    const { worker, now, leaseMs = LEASE_MS } = options;
+    const { worker, carried, now, leaseMs = LEASE_MS } = options;
     const most = concurrency - queue.pending - queue.size;
     if (most <= 0) return 0;
-    const claimed = await claimEffects(store, { worker, at: now(), leaseMs, most });
+    const claimed = await claimEffects(store, { worker, carried, at: now(), leaseMs, most });
     for (const effect of claimed) {
       queue.add(() => attempt(store, options, effect)).catch(onFault);
     }

@@ -43,7 +43,7 @@ export type Settings = { readonly [N in SettingName]: z.infer<(typeof SETTINGS)[
 export const SETTING_NAMES = Object.keys(SETTINGS) as readonly SettingName[];
 
 /** Everything a shop has set, and the usual where it has not. */
-export const settingsOf = async (view: ShopView): Promise<Settings> => {
+export const settingsOf = async (view: Pick<ShopView, 'id' | 'db'>): Promise<Settings> => {
   const rows = await view.db
     .selectFrom('setting')
     .select(['name', 'value'])

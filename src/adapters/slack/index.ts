@@ -41,8 +41,8 @@ export type SlackOptions = {
 };
 
 export type Slack = {
-  /** How many workspaces it is in. */
-  readonly shops: number;
+  /** The workspaces it is in. */
+  readonly teams: readonly string[];
   /** Makes an effect happen that was queued with a change. */
   readonly deliver: (effect: Effect, delivering: Delivering) => Promise<Delivery>;
   readonly stop: () => Promise<void>;
@@ -93,7 +93,7 @@ export const openSlack = async (options: SlackOptions): Promise<Slack> => {
   });
   await connection.start();
   return {
-    shops: installations.length,
+    teams: installations.map(({ team }) => team),
     deliver: async (effect, delivering) => {
       const found = installations.find(({ team }) => team === delivering.shop);
       if (found === undefined) return { delivered: false, fault: 'no such workspace', final: true };

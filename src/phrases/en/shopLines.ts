@@ -61,6 +61,15 @@ const fileText = (fault: FileFault): string => {
   }
 };
 
+const GIVEN_UP: Readonly<Record<ShopLines['givenUp']['what'], string>> = {
+  post: 'A message could not be posted',
+  pin: 'A message could not be pinned',
+  unpin: 'A pin could not be taken off',
+  thread: 'A thread could not be opened',
+  notify: 'Somebody could not be told',
+  edit: 'A message could not be brought up to date',
+};
+
 export const shopLines: {
   readonly [K in keyof ShopLines]: (values: ShopLines[K], show: Show) => string;
 } = {
@@ -109,8 +118,10 @@ export const shopLines: {
     count === 1
       ? `One message could not be delivered: ${fault}.`
       : `${String(count)} messages could not be delivered; the last because: ${fault}.`,
-  givenUp: ({ attempts, fault }) =>
-    `A message could not be delivered after ${String(attempts)} ${attempts === 1 ? 'attempt' : 'attempts'}: ${fault}.`,
+  givenUp: ({ what, attempts, fault }) =>
+    attempts === 1
+      ? `${GIVEN_UP[what]}: ${fault}.`
+      : `${GIVEN_UP[what]}, ${String(attempts)} times tried: ${fault}.`,
   planCribOfShop: ({ wheels }) => `From ${counted('wheel', wheels)} of the shop's own crib.`,
   invented: () => 'This shop, its people and its parts are invented.',
 };
