@@ -1,4 +1,15 @@
-import type { Form, Mm, Process, Rad, State, Support, Travel, Window } from '../calc/index.ts';
+import type {
+  Form,
+  MaterialGroup,
+  Mm,
+  Pattern,
+  Process,
+  Rad,
+  State,
+  Support,
+  Travel,
+  Window,
+} from '../calc/index.ts';
 
 /** Section across the work: everything the tooth form is drawn from, lengths in millimetres. */
 export type ToothFormNumbers = {
@@ -75,12 +86,41 @@ export type PlanMapNumbers = {
   };
 };
 
+/** Measured growth of one part over what volume alone would give. */
+export type Share = {
+  readonly share: number;
+  /** Not learned from until somebody confirms it. */
+  readonly isDoubted: boolean;
+};
+
+/** What a shop has seen of one pattern in one family of materials. */
+export type FamilyRecord = {
+  readonly pattern: Pattern;
+  readonly material: MaterialGroup;
+  /** Parts that were learned from. */
+  readonly parts: number;
+  /** Share expected of the next part, and its 80 % interval. */
+  readonly mean: number;
+  readonly low: number;
+  readonly high: number;
+  /** One for each part that was measured. */
+  readonly shares: readonly Share[];
+};
+
+export type ShopRecordNumbers = {
+  /** Those that are shown first come first. */
+  readonly families: readonly FamilyRecord[];
+  /** What is expected before any result. */
+  readonly prior: { readonly mean: number; readonly low: number; readonly high: number };
+};
+
 export type PictureNumbers = {
   readonly toothForm: ToothFormNumbers;
   readonly trackingStrip: TrackingStripNumbers;
   readonly setupSketch: SetupSketchNumbers;
   readonly developedPattern: DevelopedPatternNumbers;
   readonly planMap: PlanMapNumbers;
+  readonly shopRecord: ShopRecordNumbers;
 };
 export type PictureKind = keyof PictureNumbers;
 export type PictureOf<K extends PictureKind> = {

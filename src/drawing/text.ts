@@ -126,7 +126,18 @@ export const textWidth = (text: string, size: number, weight: Weight = 'regular'
   Array.from(text).reduce((sum, letter) => sum + (TABLES[weight].get(letter) ?? WIDEST), 0) *
   (size / 1000);
 
-/** Broken at spaces into lines no wider than asked. */
+/** A word in pieces no wider than asked: one that a line holds stays whole. */
+const piecesOf = (word: string, width: number, size: number, weight: Weight): readonly string[] => {
+  const pieces: string[] = [''];
+  for (const letter of Array.from(word)) {
+    const longer = `${pieces.at(-1) ?? ''}${letter}`;
+    if (longer !== letter && textWidth(longer, size, weight) > width) pieces.push(letter);
+    else pieces[pieces.length - 1] = longer;
+  }
+  return pieces;
+};
+
+/** Broken at spaces into lines no wider than asked; a longer word is broken where it has to be. */
 export const linesOf = (
   text: string,
   width: number,
@@ -135,7 +146,7 @@ export const linesOf = (
 ): readonly string[] => {
   const lines: string[] = [];
   let line = '';
-  for (const word of text.split(' ')) {
+  for (const word of text.split(' ').flatMap((each) => piecesOf(each, width, size, weight))) {
     const longer = line === '' ? word : `${line} ${word}`;
     if (line !== '' && textWidth(longer, size, weight) > width) {
       lines.push(line);

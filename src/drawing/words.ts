@@ -52,4 +52,16 @@ export type WordsOf = {
     readonly states: string;
     readonly candidates: readonly string[];
   };
+  readonly shopRecord: {
+    readonly title: string;
+    readonly families: readonly Named[];
+    readonly share: (value: number) => string;
+    readonly measured: string;
+    readonly doubted: string;
+    readonly beyond: string;
+    readonly expected: string;
+    readonly prior: string;
+    readonly axis: string;
+    readonly more: (families: number) => string;
+  };
 };

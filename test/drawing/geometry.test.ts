@@ -175,7 +175,7 @@ describe('set-up sketch', () => {
       pitch: { system: 'metric', value: 0.2 },
       stock: mm(60),
       bore: mm(59),
-      material: materialById('brass-free') ?? requestOf().material,
+      material: materialById('brass360') ?? requestOf().material,
     });
     const [{ svg } = { svg: '' }] = drawn('setupSketch', request);
     expect(svg).toContain('Scale broken');

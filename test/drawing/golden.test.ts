@@ -7,11 +7,14 @@ import { fileURLToPath } from 'node:url';
 import { PNG } from 'pngjs';
 import { expect, test } from 'vitest';
 import { FLEET } from '../../commands/index.ts';
+import { recordPictures } from '../../commands/knurl/recordPictures.ts';
 import { sketchesOf } from '../../src/adapters/common/draw.ts';
 import { openDesk, plainShop } from '../../src/desk/index.ts';
 import { openRenderer } from '../../src/drawing/index.ts';
 import { en } from '../../src/phrases/index.ts';
 import { called } from './called.ts';
+import { RECORD_PARTS } from './recordParts.ts';
+import { spokenIn, svgOf } from './setups.ts';
 
 /** A phone held upright. */
 const PHONE = 400;
@@ -53,11 +56,14 @@ const PICTURES = [
 
 const render = openRenderer();
 
+const pngOf = async (svg: string): Promise<PNG> =>
+  PNG.sync.read(Buffer.from(await render(svg, PHONE)));
+
 const drawnFor = async (units: 'in' | 'mm', words: string, kind: string): Promise<PNG> => {
   const answer = await openDesk(FLEET, plainShop(units)).answer(called(words));
   const sketch = sketchesOf(answer, en).find(({ name }) => name.endsWith(kind));
   if (sketch === undefined) throw new Error(`${words} shows no ${kind}`);
-  return PNG.sync.read(Buffer.from(await render(sketch.svg, PHONE)));
+  return await pngOf(sketch.svg);
 };
 
 const shareOff = (a: PNG, b: PNG): number => {
@@ -74,12 +80,21 @@ const shareOff = (a: PNG, b: PNG): number => {
 const fileOf = (name: string): string =>
   fileURLToPath(new URL(`golden/${name.replaceAll(' ', '-')}.png`, import.meta.url));
 
-test.each(PICTURES)('%s looks as it did', async (name, units, words, kind) => {
-  const drawn = await drawnFor(units, words, kind);
+const looksAsItDid = (name: string, drawn: PNG): void => {
   if (process.env['UPDATE_PICTURES'] === '1') writeFileSync(fileOf(name), PNG.sync.write(drawn));
   const kept = PNG.sync.read(readFileSync(fileOf(name)));
   expect([drawn.width, drawn.height]).toEqual([kept.width, kept.height]);
   expect(shareOff(drawn, kept)).toBeLessThanOrEqual(DRIFT);
+};
+
+test.each(PICTURES)('%s looks as it did', async (name, units, words, kind) => {
+  looksAsItDid(name, await drawnFor(units, words, kind));
+});
+
+test('record of a shop looks as it did', async () => {
+  const [spoken] = spokenIn('mm', recordPictures(RECORD_PARTS));
+  if (spoken === undefined) throw new Error('no record is drawn');
+  looksAsItDid('record of a shop', await pngOf(svgOf(spoken)));
 });
 
 test('a mark that moved by a few dots is seen', async () => {

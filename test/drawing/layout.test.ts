@@ -1,11 +1,12 @@
 import { Resvg } from '@resvg/resvg-js';
 import { expect, test } from 'vitest';
+import type { Picture } from '../../src/card/index.ts';
 import { renderOptions } from '../../src/drawing/png.ts';
 import { textWidth } from '../../src/drawing/text.ts';
 import { type Box, boxOf, elementsOf, num, type Read, realWidth, textBox } from './read.ts';
-import { manySetups, spokenIn, svgOf } from './setups.ts';
+import { manyPlans, manyRecords, manySetups, spokenIn, svgOf } from './setups.ts';
 
-const SETUPS = 500;
+const MANY = 500;
 /** Half a unit: what two strokes of a letter may touch. */
 const TOUCH = 0.5;
 const meets = (a: Box, b: Box): boolean =>
@@ -47,19 +48,26 @@ const faultsOf = (svg: string): readonly string[] => {
   return [...outside, ...together, ...covered];
 };
 
-test('nothing overlaps or leaves the frame for 500 set-ups in both unit systems', () => {
-  const setups = manySetups(SETUPS);
-  expect(setups).toHaveLength(SETUPS);
-  const faults = setups.flatMap((pictures, i) =>
+const faultsIn = (list: readonly (readonly Picture[])[]): readonly string[] =>
+  list.flatMap((pictures, i) =>
     spokenIn(i % 2 === 0 ? 'in' : 'mm', pictures).flatMap((spoken) =>
       faultsOf(svgOf(spoken)).map((fault) => `${String(i)} ${spoken.kind}: ${fault}`),
     ),
   );
-  expect(faults).toEqual([]);
+
+test.each([
+  ['set-ups', manySetups],
+  ['plans', manyPlans],
+  ['records of a shop', manyRecords],
+] as const)('nothing overlaps or leaves the frame for 500 %s in both unit systems', (_, many) => {
+  const list = many(MANY);
+  expect(list).toHaveLength(MANY);
+  expect(list.every((pictures) => pictures.length > 0)).toBe(true);
+  expect(faultsIn(list)).toEqual([]);
 });
 
 test('every picture has alt text that says its numbers, and at most three go with a card', () => {
-  for (const pictures of manySetups(60)) {
+  for (const pictures of [...manySetups(60), ...manyPlans(20), ...manyRecords(20)]) {
     expect(pictures.length).toBeLessThanOrEqual(3);
     for (const { alt } of spokenIn('mm', pictures)) expect(alt).toMatch(/\d/u);
   }

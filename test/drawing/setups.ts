@@ -1,11 +1,19 @@
 /** Set-ups for the pictures: usual ones, and those at the ends of what is answered. */
 import fc from 'fast-check';
-import { setupPictures } from '../../commands/knurl/pictures.ts';
+import { planPictures, setupPictures } from '../../commands/knurl/pictures.ts';
+import { type MeasuredPart, recordPictures } from '../../commands/knurl/recordPictures.ts';
 import {
+  type CribWheel,
   degrees,
+  dinCrib,
+  dpCrib,
+  growthFamily,
+  MATERIALS,
   materialById,
   mm,
   OutOfRange,
+  type Pattern,
+  plan,
   type SetupRequest,
   setUp,
   wholeToothDiameter,
@@ -14,7 +22,8 @@ import type { Card, Picture } from '../../src/card/index.ts';
 import { drawPicture } from '../../src/drawing/index.ts';
 import { en, type SpokenPicture, speakPictures } from '../../src/phrases/index.ts';
 import { anySetup } from '../support/anySetup.ts';
-import { between, mulberry32, oneOf } from '../support/random.ts';
+import { planJob, planRequest, under } from '../support/planJob.ts';
+import { between, mulberry32, normalFrom, oneOf } from '../support/random.ts';
 import { requestOf } from '../support/setupRequest.ts';
 
 /** The pictures of a set-up; none where the set-up makes no sense. */
@@ -53,7 +62,7 @@ const extremes = (count: number, seed: number): readonly SetupRequest[] => {
       pitch: { system: 'metric', value: pitch },
       stock: mm(stock),
       asIs: random() < 0.4,
-      material: materialById('brass-free') ?? requestOf().material,
+      material: materialById('brass360') ?? requestOf().material,
       length: random() < 0.3 ? null : mm(length),
       stickout: random() < 0.3 ? null : mm(length + between(random, 0, 400)),
       support: oneOf(random, ['chuck', 'tailstock', 'centres'] as const),
@@ -74,4 +83,66 @@ export const manySetups = (count: number): readonly (readonly Picture[])[] => {
       .filter((each) => each !== null)
       .slice(0, count / 2);
   return [...drawn(usual), ...drawn(far)];
+};
+
+/** A wheel as a shop may name it: as its maker does, with all there is to say, or in one long word. */
+const named = (wheel: CribWheel, random: () => number): CribWheel => ({
+  ...wheel,
+  name: oneOf(random, [
+    wheel.name,
+    'A',
+    `${wheel.name}, bought in spring, top drawer of the red cabinet`,
+    'W'.repeat(60),
+  ]),
+});
+
+/** Maps of plans from prints of 3 to 300 mm, tight and wide, with whichever wheels are there. */
+export const manyPlans = (count: number): readonly (readonly Picture[])[] => {
+  const random = mulberry32(18);
+  const all = [...dinCrib(), ...dpCrib()];
+  const maps: (readonly Picture[])[] = [];
+  while (maps.length < count) {
+    const crib = Array.from({ length: 12 }, () => named(oneOf(random, all), random));
+    const job = planJob(oneOf(random, ['steel-lowC-CD', 'brass360']), {
+      pitch: null,
+      pattern: oneOf(random, PATTERNS),
+      length: mm(between(random, 1, 60)),
+    });
+    const size = oneOf(random, [3, 12, 25.4, 60, 300]) * between(random, 1, 1.2);
+    const limits = under(size, oneOf(random, [0.02, 0.13, 0.5]));
+    const { candidates } = plan(planRequest(job, { limits, crib }));
+    const pictures = planPictures(requestOf(), limits, candidates);
+    if (pictures.length > 0) maps.push(pictures);
+  }
+  return maps;
+};
+
+const PATTERNS: readonly Pattern[] = [
+  { kind: 'straight' },
+  { kind: 'diagonal', hand: 'left' },
+  { kind: 'diamond', points: 'raised' },
+  { kind: 'square', points: 'sunk' },
+];
+
+/** Records of shops with one part and with hundreds, steady and wild, a slip of the pen among them. */
+export const manyRecords = (count: number): readonly (readonly Picture[])[] => {
+  const random = mulberry32(28);
+  return Array.from({ length: count }, () => {
+    const spread = oneOf(random, [0, 0.03, 0.3]);
+    const kinds = Array.from({ length: Math.ceil(between(random, 0, 9)) }, () => {
+      const [pattern, { group: material }] = [oneOf(random, PATTERNS), oneOf(random, MATERIALS)];
+      return { pattern, material, family: growthFamily(pattern, material) };
+    });
+    const parts = Math.ceil(between(random, 0, oneOf(random, [2, 20, 300])));
+    return recordPictures(
+      Array.from({ length: parts }, (): MeasuredPart => {
+        const slip = random() < 0.05 ? oneOf(random, [-1, 2]) : 0;
+        return {
+          ...oneOf(random, kinds),
+          share: Math.min(5, Math.max(0, 0.92 + spread * normalFrom(random) + slip)),
+          confirmed: random() < 0.1,
+        };
+      }),
+    );
+  });
 };

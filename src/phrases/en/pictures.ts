@@ -1,6 +1,7 @@
 import type { PictureNumbers } from '../../drawing/index.ts';
 import type { PicturePhrases } from '../picturePhrases.ts';
 import type { Show } from '../show.ts';
+import { patternName } from './names.ts';
 
 const teeth = (count: number): string => `${String(count)} ${count === 1 ? 'tooth' : 'teeth'}`;
 
@@ -61,6 +62,25 @@ const candidateLines = (n: PictureNumbers['planMap'], show: Show): readonly stri
     (each) =>
       `${show.length(each.blankDiameter)}, ${teeth(each.toothCount)}, fill ${show.percent(each.fill)}, ${each.wheel}`,
   );
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+
+/** Whole per cents: a share of growth is not known any better. */
+const share = (value: number): string => `${String(Math.round(value * 100))} %`;
+const shares = ({ mean, low, high }: Record<'mean' | 'low' | 'high', number>): string =>
+  `${share(mean)}, ${String(Math.round(low * 100))} to ${share(high)}`;
+
+const familyWords = (n: PictureNumbers['shopRecord']) =>
+  n.families.map((family) => ({
+    name: capital(`${patternName(family.pattern)}, ${family.material}`),
+    value: `${family.parts === 1 ? '1 part' : `${String(family.parts)} parts`}; next ${shares(family)}`,
+  }));
+
+/** Kinds that are read out; a picture's words have to end somewhere. Judgement. */
+const SAID_ALOUD = 6;
+
+const doubtedParts = (n: PictureNumbers['shopRecord']): number =>
+  n.families.flatMap(({ shares }) => shares.filter(({ isDoubted }) => isDoubted)).length;
 
 export const pictures: PicturePhrases = {
   toothForm: {
@@ -137,5 +157,29 @@ export const pictures: PicturePhrases = {
     }),
     alt: (n, show) =>
       `Plan for a finished ${show.span(n.limits.low, n.limits.high)} ${show.units}: ${candidateLines(n, show).slice(0, 5).join('; ')}.`,
+  },
+  shopRecord: {
+    words: (n) => ({
+      title: 'Growth of your own parts',
+      families: familyWords(n),
+      share,
+      measured: 'A part as it was measured',
+      doubted: 'Doubted: not learned from until confirmed',
+      beyond: 'At the edge: further out than drawn',
+      expected: 'Expected of the next part, 8 in 10 within the line',
+      prior: `Before any result: ${shares(n.prior)}`,
+      axis: 'Across: growth as measured, as a share of what the volume alone gives',
+      more: (families) =>
+        families === 1
+          ? 'One more kind is not drawn'
+          : `${String(families)} more kinds are not drawn`,
+    }),
+    alt: (n) => {
+      const doubted = doubtedParts(n);
+      const lines = familyWords(n).map(({ name, value }) => `${name}: ${value}`);
+      const more =
+        lines.length > SAID_ALOUD ? ` And ${String(lines.length - SAID_ALOUD)} more.` : '';
+      return `Measured growth as a share of what the volume alone gives. ${lines.slice(0, SAID_ALOUD).join('. ')}.${more} Before any result: ${shares(n.prior)}.${doubted === 0 ? '' : ` Doubted and not learned from: ${String(doubted)}.`}`;
+    },
   },
 };
