@@ -200,6 +200,24 @@ describe('a finished part', () => {
     expect(found.figures.fillFromCrest).toBeNull();
   });
 
+  it('that was cut until its crests fell under the blank was cut too deep by half of that', () => {
+    // It once said: right, the same again.
+    const found = checkAfter(
+      straight({ process: 'cut', material: materialById('al6061-T6')! }),
+      partOf({ teeth: 77, crest: mm(19.7 - 0.2) }),
+    );
+    expect(found.right).toBe(false);
+    expect(found.off).toContain('fill');
+    expect(found.figures.fillMeasured?.value).toBeCloseTo(1 + 0.1 / HF, 9);
+    // Back to the fill that was planned, a flat and all.
+    expect(found.nextPart).toContainEqual({
+      id: 'feedLess',
+      number: expect.closeTo(0.1 + 0.1 * HF, 9) as number,
+      unit: 'mm',
+    });
+    expect(found.checks.find(({ name }) => name === 'fill')).toMatchObject({ reason: 'overFull' });
+  });
+
   it.each([
     ['0 teeth', { teeth: 0 }, /counted 0 1 is outside 25 to 231/],
     ['10 000 teeth', { teeth: 10_000 }, /counted 10000 1 is outside 25 to 231/],

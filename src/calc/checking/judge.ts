@@ -9,6 +9,8 @@ import { wholeCount } from './proven.ts';
 /** How well a diameter over crests and a tooth height are read, standard deviations. Judgement. */
 const CREST_READING: Mm = mm(0.01);
 const HEIGHT_READING: Mm = mm(0.01);
+/** Less than this under the blank, a crest that was cut is read as on it: three readings. Judgement. */
+const UNDER_BLANK: Mm = mm(3 * CREST_READING);
 /** Fill that a person stops within, standard deviation. Judgement. */
 const STOPS_WITHIN = 0.03;
 
@@ -66,9 +68,17 @@ const flatReading = (part: MeasuredPart, p: number): Reading | null => {
     : { fill: 1 - within('flat', seen, 0, p, 'mm') / p, sd: FLAT_READING / p };
 };
 
-/** Height and flat speak of one fill; the better reading counts for more. */
-const fillReading = (part: MeasuredPart, sharp: Mm, p: number): Reading | null => {
-  const readings = [heightReading(part, sharp), flatReading(part, p)].filter((r) => r !== null);
+/**
+ * A cut takes material away: crests under the blank are sharp, and by how much they are under it
+ * is how much deeper than its whole tooth the cut went.
+ */
+const cutDeeper = ({ blank, crest }: MeasuredPart, sharp: Mm): Reading | null =>
+  crest === null || blank - crest < UNDER_BLANK
+    ? null
+    : { fill: 1 + (blank - crest) / 2 / sharp, sd: CREST_READING / 2 / sharp };
+
+/** Height, flat and crest speak of one fill; the better reading counts for more. */
+const fillReading = (readings: readonly Reading[]): Reading | null => {
   if (readings.length === 0) return null;
   const weight = readings.reduce((sum, { sd }) => sum + sd ** -2, 0);
   const fill = readings.reduce((sum, r) => sum + r.fill * r.sd ** -2, 0) / weight;
@@ -150,9 +160,14 @@ export const judge = (request: SetupRequest, part: MeasuredPart): Judged => {
   const countExpected = Math.round(toothCount(part.blank, plan.pitch.transverse));
   if (part.teeth !== null) wholeCount(part.teeth, countExpected);
   const crest = crestSaid(part, plan, sharp);
-  const reading = fillReading(part, sharp, plan.pitch.normal);
-  const fillPlanned = plan.blank.tooth.fill;
   const cut = plan.process === 'cut';
+  const readings = [
+    heightReading(part, sharp),
+    flatReading(part, plan.pitch.normal),
+    cut ? cutDeeper(part, sharp) : null,
+  ];
+  const reading = fillReading(readings.filter((each) => each !== null));
+  const fillPlanned = plan.blank.tooth.fill;
   const grown = crest === null || cut ? null : mm(crest - part.blank);
   const fill = reading ?? { fill: fillPlanned, sd: STOPS_WITHIN };
   const growth = grown === null ? null : growthOff({ request, plan, sharp, growth: grown, fill });

@@ -93,10 +93,14 @@ const nextForCount = (seen: Seen): PartMove<NextPartMoveId>[] => {
   }
 };
 
+/** What is formed beyond a whole tooth only packs the wheel; what is cut goes on getting deeper. */
+const deepestMeant = ({ judged }: Seen, fill: number): number =>
+  judged.plan.process === 'cut' ? fill : Math.min(1, fill);
+
 const nextForFill = (seen: Seen): PartMove<NextPartMoveId>[] => {
   const { fillMeasured, fillPlanned } = seen.judged;
   if (fillMeasured === null || !seen.off.includes('fill')) return [];
-  const more = infeedAt(seen, fillPlanned) - infeedAt(seen, Math.min(1, fillMeasured));
+  const more = infeedAt(seen, fillPlanned) - infeedAt(seen, deepestMeant(seen, fillMeasured));
   return [more > 0 ? move('feedMore', more) : move('feedLess', -more)];
 };
 

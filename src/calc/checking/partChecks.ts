@@ -97,7 +97,8 @@ export function partChecks(judged: Judged, request: SetupRequest): readonly Chec
   const checks: (Check | null)[] = [
     countCheck(judged),
     filledCheck(judged),
-    judged.fillMeasured === null ? null : fillCheck(judged.fillMeasured, materialFill),
+    // A cut deeper than its whole tooth is at least full.
+    judged.fillMeasured === null ? null : fillCheck(Math.min(1, judged.fillMeasured), materialFill),
     growthCheck(judged, request.growth.mean),
     finishOf(judged, request),
     judged.fade?.check ?? null,
