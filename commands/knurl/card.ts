@@ -10,21 +10,11 @@ import {
   said,
   type Visit,
 } from '../../src/desk/index.ts';
-import { findCard, type KeptCard, personById, readCode } from '../../src/shop/index.ts';
-import { type Reader, tokenAt } from '../../src/words/index.ts';
+import { findCard, type KeptCard, personById } from '../../src/shop/index.ts';
+import { tokenAt } from '../../src/words/index.ts';
+import { readCodeAt } from './codeWords.ts';
 
 const EXAMPLE = 'K7M2X';
-
-/** A code as it is written or said: `k7m2x`, `K7-M2X`, `k7 m2x`. */
-const readCodeAt: Reader<string> = (cursor) => {
-  const first = tokenAt(cursor)?.text;
-  if (first === undefined) return null;
-  const second = tokenAt(cursor, 1)?.text;
-  const both = second === undefined ? null : readCode(first + second);
-  if (readCode(first) === null && both !== null) return { value: both, used: 2 };
-  // What cannot be a code is looked for all the same, and then said not to be there.
-  return { value: first, used: 1 };
-};
 
 const code = said<string>({
   name: 'code',

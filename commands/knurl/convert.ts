@@ -1,8 +1,5 @@
 import {
-  type CribWheel,
   convertPitch,
-  dinCrib,
-  dpCrib,
   mm,
   type Pattern,
   PITCH_TOLERANCE,
@@ -22,6 +19,7 @@ import {
 } from '../../src/desk/index.ts';
 import { convertCard, type Near, SYSTEMS } from './convertCard.ts';
 import { type ConvertWords, convertFields } from './convertFields.ts';
+import { type Crib, cribOfShop } from './shopCrib.ts';
 import { contradiction, keeping, reworded } from './words.ts';
 
 const EXAMPLES = ['21tpi', '96dp', '0.8 pitch'] as const;
@@ -62,21 +60,34 @@ const disagreeing = (context: Context, what: 'pitch' | 'pattern'): Reply => {
   return refuse({ code: 'unclear', what, because: 'calloutAgainst', readings }, readings);
 };
 
-/** The crib of a shop that has entered no wheels, with pairs made up for diamonds. */
-const crib = (pattern: Pattern | null): readonly CribWheel[] =>
-  withPairs([...dinCrib(), ...dpCrib()]).filter(
+/** Every pattern that a wheel or a pair of wheels can leave. */
+const EVERY_PATTERN: readonly Pattern[] = [
+  { kind: 'straight' },
+  { kind: 'diagonal', hand: null },
+  { kind: 'diamond', points: 'raised' },
+  { kind: 'diamond', points: 'sunk' },
+];
+
+/** The wheels that suit the pattern, with pairs made up for diamonds; each once. */
+const cribFor = async (context: Context, pattern: Pattern | null): Promise<Crib> => {
+  const found = await cribOfShop(context, pattern === null ? EVERY_PATTERN : [pattern]);
+  if (found.kind === 'ofShop') return found;
+  const crib = withPairs(found.crib).filter(
     (wheel) => pattern === null || suitsPattern(wheel.pattern, pattern),
   );
+  return { ...found, crib };
+};
 
-const converted = (context: Context, said: ConvertWords, pitch: Pitch): Reply => {
+const converted = async (context: Context, said: ConvertWords, pitch: Pitch): Promise<Reply> => {
   const pattern = patternOf(said);
+  const crib = await cribFor(context, pattern);
   const helix =
     said.helix === undefined ? usualHelix(pattern ?? { kind: 'straight' }) : rad(said.helix);
   const systems = SYSTEMS.map((to) => convertPitch({ pitch, to, helix }));
   const normal = mm(convertPitch({ pitch, to: 'metric', helix }).exact.value);
   const tolerance = said.tolerance ?? PITCH_TOLERANCE;
   const near = (within: number): readonly Near[] =>
-    wheelsWithin({ normal, tolerance: within, crib: crib(pattern) }).map(
+    wheelsWithin({ normal, tolerance: within, crib: crib.crib }).map(
       ({ wheel, pitch: own, error }) => ({ wheel: wheel.name, pitch: own.normal, error }),
     );
   return cardReply(
@@ -88,6 +99,7 @@ const converted = (context: Context, said: ConvertWords, pitch: Pitch): Reply =>
       helix,
       tolerance,
       systems,
+      crib,
       straightTaken: pattern === null && said.helix === undefined,
       wheels: near(tolerance),
       nearest: near(ANY)[0] ?? null,

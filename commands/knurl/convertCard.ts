@@ -2,6 +2,7 @@ import type { Converted, Mm, Pitch, PitchSystem, Rad } from '../../src/calc/inde
 import { type Card, type Choice, type Line, label, line, row } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
 import type { ConvertWords } from './convertFields.ts';
+import { type Crib, cribLine } from './shopCrib.ts';
 import { reworded } from './words.ts';
 
 /** The systems a pitch is told in, the metric one first. */
@@ -20,6 +21,7 @@ type Converting = {
   /** No pattern was said: DP is told as for a straight knurl. */
   readonly straightTaken: boolean;
   readonly systems: readonly Converted[];
+  readonly crib: Crib;
   readonly wheels: readonly Near[];
   /** The wheel that comes nearest of all, whatever the tolerance. */
   readonly nearest: Near | null;
@@ -70,7 +72,7 @@ export const convertCard = (c: Converting): Card => ({
       ],
     },
     { part: 'rows', rows: c.systems.map((each) => row('inSystem', each)) },
-    { part: 'lines', lines: [...wheelLines(c), line('planCribByStandard', {})] },
+    { part: 'lines', lines: [...wheelLines(c), cribLine(c.crib)] },
     {
       part: 'rows',
       rows: c.wheels

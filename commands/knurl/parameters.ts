@@ -116,7 +116,7 @@ export const pitch = said({
   mayBe: pitchesOf,
   merge: samePitch,
   examples: ['21tpi', '96dp', '1.0 pitch'],
-  metricExamples: ['1.0 pitch', '21tpi', 'RGE 0.8'],
+  metricExamples: ['1.0 pitch', '0.8 pitch', 'm0.3'],
 });
 
 export const rim = wordsOnly<true>({

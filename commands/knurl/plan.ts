@@ -1,8 +1,6 @@
 import {
   type CribWheel,
   DEFAULT_INCLUDED,
-  dinCrib,
-  dpCrib,
   PITCH_TOLERANCE,
   type PlanRequest,
   plan as planFrom,
@@ -16,10 +14,10 @@ import {
   type Reply,
   refuse,
 } from '../../src/desk/index.ts';
-import { cribFor, listOf, WHEELS } from '../../src/shop/index.ts';
 import { planCard } from './planCard.ts';
 import { type CribKind, type PlanWords, planFields } from './planFields.ts';
-import { shopRequestOf } from './shopRequest.ts';
+import { cribOfShop } from './shopCrib.ts';
+import { type ShopBuilt, shopRequestOf } from './shopRequest.ts';
 import { reworded } from './words.ts';
 
 /** The wheel that was named, as the only one in the crib. */
@@ -40,17 +38,10 @@ const namedWheel = (request: SetupRequest): CribWheel => ({
 type Crib = { readonly crib: readonly CribWheel[]; readonly kind: CribKind };
 
 /** The wheel that was named, the shop's own, or those of the standards where it entered none. */
-const cribOf = async (
-  { visit }: Context,
-  given: PlanWords,
-  request: SetupRequest,
-): Promise<Crib> => {
-  if (given.wheel !== undefined) return { crib: [namedWheel(request)], kind: 'oneWheel' };
-  const own = visit === null ? [] : await listOf(visit.shop, WHEELS);
-  return own.length === 0
-    ? { crib: [...dinCrib(), ...dpCrib()], kind: 'byStandard' }
-    : { crib: cribFor(own, request.pattern), kind: 'ofShop' };
-};
+const cribOf = async (context: Context, given: PlanWords, request: SetupRequest): Promise<Crib> =>
+  given.wheel === undefined
+    ? await cribOfShop(context, [request.pattern])
+    : { crib: [namedWheel(request)], kind: 'oneWheel' };
 
 const missingFinish = (context: Context): Reply => {
   const examples = context.units === 'in' ? ['finish 0.995-1.005'] : ['finish 19.8-20.0'];
@@ -63,10 +54,12 @@ const missingFinish = (context: Context): Reply => {
   );
 };
 
+type Asked = Exclude<ShopBuilt, { readonly refusal: unknown }>;
+
 const planned = async (
   context: Context,
   given: PlanWords,
-  request: SetupRequest,
+  { request, machine, about }: Asked,
 ): Promise<Reply> => {
   const { finish } = request;
   if (finish === null || request.aimOnly === true) return missingFinish(context);
@@ -77,10 +70,12 @@ const planned = async (
     pitchTolerance: given.tolerance ?? PITCH_TOLERANCE,
     included: request.included === DEFAULT_INCLUDED ? null : request.included,
     crib,
-    turningSpread: TURNING_SPREAD,
+    turningSpread: machine?.turningSpread ?? TURNING_SPREAD,
   };
   return cardReply(
     planCard({ context, given, request, limits: finish, kind, crib, plan: planFrom(wanted) }),
+    [],
+    about,
   );
 };
 
@@ -98,6 +93,6 @@ export const plan = defineCommand({
     const built = await shopRequestOf(context, given, false);
     return 'refusal' in built
       ? refuse(built.refusal, built.choices)
-      : await planned(context, given, built.request);
+      : await planned(context, given, built);
   },
 });

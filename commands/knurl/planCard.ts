@@ -27,6 +27,7 @@ import {
 import type { Context } from '../../src/desk/index.ts';
 import { planPictures } from './pictures.ts';
 import type { CribKind, PlanWords } from './planFields.ts';
+import { cribLine } from './shopCrib.ts';
 import { reworded } from './words.ts';
 
 type Planned = {
@@ -90,7 +91,14 @@ const pitchWords = (pitch: Pitch): string => {
 /** Words that the candidate's own take the place of. */
 const REPLACED = ['pitch', 'wheel', 'bevel', 'edge', 'oneWheel', 'angle', 'process', 'tolerance'];
 
-const wheelWords = ({ wheel }: Candidate): string => {
+/** A diamond that no single wheel leaves comes from two, which have no record of their own. */
+const isPair = ({ wheel }: Candidate): boolean =>
+  wheel.pattern.kind === 'diamond' && !wheel.onePiece;
+
+const wheelWords = (kind: CribKind, candidate: Candidate): string => {
+  const { wheel } = candidate;
+  // By its name the shop's wheel comes with all that is known of it.
+  if (kind === 'ofShop' && !isPair(candidate)) return `wheel ${wheel.name}`;
   const { diameter, face, bore, bevel } = wheel.size;
   const size = [diameter, face, bore].map((each) => String(Number(each.toFixed(4)))).join('x');
   return [
@@ -114,7 +122,7 @@ const setupWords = (
 ): string => {
   const { wheel, process, toothCount, fill } = candidate;
   const more = [
-    wheelWords(candidate),
+    wheelWords(p.kind, candidate),
     // The word first: behind a wheel's size the number would be the wheel's own teeth.
     `teeth ${String(toothCount)}`,
     `fill ${String(Number((fill * 100).toFixed(2)))}%`,
@@ -158,16 +166,8 @@ const headline = (p: Planned): Line => {
   return change === undefined ? line('planNone', { limits: p.limits }) : changeLine(change);
 };
 
-const cribLine = (kind: CribKind, wheels: number): Line => {
-  switch (kind) {
-    case 'byStandard':
-      return line('planCribByStandard', {});
-    case 'ofShop':
-      return line('planCribOfShop', { wheels });
-    case 'oneWheel':
-      return line('planCribOneWheel', {});
-  }
-};
+const lookedThrough = (kind: CribKind, crib: readonly CribWheel[]): Line =>
+  kind === 'oneWheel' ? line('planCribOneWheel', {}) : cribLine({ kind, crib });
 
 const firstLines = (p: Planned): readonly Line[] => [
   ...(bestOf(p) === undefined && otherChanges(p).length > 0
@@ -175,7 +175,7 @@ const firstLines = (p: Planned): readonly Line[] => [
     : []),
   line('planFor', { limits: p.limits, wheels: p.plan.fittingWheels }),
   ...(isOffMiddle(p) ? [line('planOffMiddle', {})] : []),
-  cribLine(p.kind, p.crib.length),
+  lookedThrough(p.kind, p.crib),
 ];
 
 /** The changes that the headline does not tell already. */

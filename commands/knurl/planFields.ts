@@ -32,6 +32,7 @@ export const planFields = z.object({
   helix: words.helix,
   angle: words.angle,
   wheel: words.wheel,
+  machine: words.machine,
   bevel: words.bevel,
   edge: words.edge,
   oneWheel: words.onePiece,

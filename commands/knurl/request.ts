@@ -115,12 +115,17 @@ const patternFor = (context: Context, said: SetupWords): Pattern => {
   if (called === null) return wordedPattern(context, said);
   const silent = said.pattern === undefined && said.hand === undefined && said.points === undefined;
   if (silent) return called;
-  const worded = patternOf(said.pattern ?? called.kind, {
+  const kind = said.pattern ?? called.kind;
+  // A hand beside a diamond, or points beside a straight one, would be dropped without a word.
+  const isIdle =
+    (said.hand !== undefined && kind !== 'diagonal') ||
+    (said.points !== undefined && !crossed(kind));
+  const worded = patternOf(kind, {
     ...said,
     points: said.points ?? ('points' in called ? called.points : undefined),
     hand: said.hand ?? ('hand' in called ? (called.hand ?? undefined) : undefined),
   });
-  if (JSON.stringify(worded) === JSON.stringify(called)) return called;
+  if (!isIdle && JSON.stringify(worded) === JSON.stringify(called)) return called;
   throw new Asks({
     code: 'unclear',
     what: 'pattern',
@@ -138,7 +143,7 @@ const patternFor = (context: Context, said: SetupWords): Pattern => {
 };
 
 const pitchExamples = ({ units }: Context): readonly string[] =>
-  units === 'in' ? ['21tpi', '96dp', '1.0 pitch'] : ['1.0 pitch', '21tpi', '96dp'];
+  units === 'in' ? ['21tpi', '96dp', '1.0 pitch'] : ['1.0 pitch', '0.8 pitch', '1.6 pitch'];
 
 const pitchFor = (context: Context, said: SetupWords, needed: boolean): Pitch | null => {
   const pitch = agreed(context, 'pitch', said.pitch, said.callout?.pitch ?? null);

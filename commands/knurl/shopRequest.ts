@@ -3,6 +3,7 @@ import type { About, Context } from '../../src/desk/index.ts';
 import type { Refusal, Suggestion } from '../../src/refusal.ts';
 import {
   findIn,
+  leaves,
   limitsOf,
   MACHINES,
   type Machine,
@@ -52,6 +53,19 @@ const wheelOf = async ({ visit }: Context, said: SetupWords): Promise<Given<Whee
     : { refusal: found.refusal, choices: [] };
 };
 
+/** What a wheel alone leaves on the work; nothing where its form leaves a choice. */
+const patternLeft = (said: SetupWords, wheel: Wheel): Pick<SetupWords, 'pattern' | 'hand'> => {
+  const isSaid =
+    said.pattern !== undefined ||
+    said.hand !== undefined ||
+    (said.callout?.pattern ?? null) !== null;
+  const [only, ...others] = leaves(wheel.form);
+  if (isSaid || only === undefined || others.length > 0) return {};
+  return 'hand' in only && only.hand !== null
+    ? { pattern: only.kind, hand: only.hand }
+    : { pattern: only.kind };
+};
+
 /** What the shop knows of its wheel, where the line did not say it itself. */
 const withWheel = (said: SetupWords, wheel: Wheel): SetupWords => {
   const { diameter, face, bore } = sizeOf(wheel);
@@ -60,6 +74,7 @@ const withWheel = (said: SetupWords, wheel: Wheel): SetupWords => {
   const known = pin.diameter === null && pin.material === null ? undefined : pin;
   return {
     ...said,
+    ...patternLeft(said, wheel),
     wheel: { name: wheel.name, diameter, face, bore, teeth: counted },
     pitch: said.pitch ?? wheel.pitch ?? undefined,
     rim: said.rim ?? (wheel.alongRim ? true : undefined),

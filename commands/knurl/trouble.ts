@@ -11,6 +11,7 @@ import {
   troubleFacts,
 } from '../../src/calc/index.ts';
 import {
+  type About,
   type Context,
   cardReply,
   defineCommand,
@@ -63,8 +64,13 @@ const ranked = (
   said: TroubleWords,
   symptom: SymptomId,
   facts: TroubleFacts,
+  about?: About,
 ): Reply =>
-  cardReply(troubleCard({ context, said, symptom, facts, causes: rankCauses(symptom, facts, {}) }));
+  cardReply(
+    troubleCard({ context, said, symptom, facts, causes: rankCauses(symptom, facts, {}) }),
+    [],
+    about,
+  );
 
 const SYMPTOM_EXAMPLES = ['double', 'flaking', 'shallow', 'pin seized'] as const;
 
@@ -107,6 +113,6 @@ export const trouble = defineCommand({
     const built = await shopRequestOf(context, said);
     return 'refusal' in built
       ? refuse(built.refusal, built.choices)
-      : ranked(context, said, said.symptom, factsOf(said, built.request));
+      : ranked(context, said, said.symptom, factsOf(said, built.request), built.about);
   },
 });

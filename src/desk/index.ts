@@ -1,4 +1,4 @@
-export { type Answer } from './answer.ts';
+export { type Answer, choicesIn } from './answer.ts';
 export type { Attached, Call, Options, Person, Place, Pressed } from './call.ts';
 export {
   type About,

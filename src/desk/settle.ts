@@ -35,7 +35,7 @@ const queued = (effect: Effect): QueuedEffect => ({
   key: effect.key,
   effect,
   // What is pinned, or gets a thread, has to be there first.
-  ...('of' in effect && effect.of !== undefined ? { after: effect.of } : {}),
+  ...('of' in effect ? { after: effect.of } : {}),
 });
 
 /** The shop's rules, the card kept under a code of its own, and that code on it. */

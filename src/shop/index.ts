@@ -10,7 +10,7 @@ export {
 } from './cards.ts';
 export { type Carried, type Claimed, claimEffects, type NoteOf } from './claims.ts';
 export { CODE_SIGNS, readCode } from './codes.ts';
-export { canLeave, cribFor, sizeOf } from './crib.ts';
+export { canLeave, cribFor, leaves, sizeOf } from './crib.ts';
 export {
   type Imported,
   type ImportOptions,

@@ -40,7 +40,7 @@ export {
   took,
 } from './reading.ts';
 export { leadingText, quoted, textOf } from './text.ts';
-export { type Span, tokensOf } from './tokens.ts';
+export { type Span, type Token, tokensOf } from './tokens.ts';
 export type { Quantity } from './unit.ts';
 export { unitOf } from './unit.ts';
 export { type AnyParameter, type Vocabulary, vocabularyOf } from './vocabulary.ts';

@@ -3,7 +3,7 @@ import { randomUUID } from 'node:crypto';
 import { describe, expect, it } from 'vitest';
 import { FLEET } from '../../../commands/index.ts';
 import { cardText, spoken } from '../../../src/adapters/terminal/index.ts';
-import { type Answer, type Call, openRecordsDesk } from '../../../src/desk/index.ts';
+import { type Answer, type Call, choicesIn, openRecordsDesk } from '../../../src/desk/index.ts';
 import { en } from '../../../src/phrases/index.ts';
 import { ENGINES } from '../../support/places.ts';
 import { newRecords, START } from '../../support/records.ts';
@@ -64,6 +64,52 @@ describe.each(ENGINES)('a shop at work, %s', (engine) => {
     const own = textOf(await ask(line));
     expect(own).toContain('A1');
     expect(own).not.toContain('DIN 403');
+    // Set up from there, the card knows which of the shop's wheels it is of.
+    const setUp = choicesIn(await ask(line)).find(({ words }) => words.includes('wheel A1'));
+    expect(textOf(await ask(setUp?.words ?? ''))).toContain('counted');
+  });
+
+  it('looks for the nearest wheel in its own crib once it has entered some', async () => {
+    const ask = await shopAt(engine);
+    expect(textOf(await ask('/knurl convert 1.0 pitch'))).toContain('No wheels are entered yet');
+    await ask('/shop wheels add A1 straight 1.0 pitch teeth 63 diameter 20mm');
+    await ask('/shop wheels add B7 left 2.0 pitch');
+    const own = textOf(await ask('/knurl convert 1.0 pitch'));
+    expect(own).toContain('A1');
+    expect(own).not.toContain('B7');
+    expect(own).not.toContain('DIN 403');
+    expect(textOf(await ask('/knurl convert 1.0 pitch diagonal'))).toContain('No wheel');
+  });
+
+  it('takes the pattern that its wheel leaves, where nobody named one', async () => {
+    const ask = await shopAt(engine);
+    await ask('/shop wheels add A1 straight teeth 63 diameter 20mm');
+    await ask('/shop wheels add L1 left 1.0 pitch');
+    await ask('/shop wheels add X1 crossed raised 1.0 pitch');
+    const worded = await ask('1.000 straight 1018 wheel A1');
+    expect(await ask('1.000 1018 wheel A1')).toMatchObject({
+      card: { figures: worded.kind === 'card' ? worded.card.figures : null },
+    });
+    // The work is the mirror of the wheel.
+    expect(textOf(await ask('1.000 1018 wheel L1'))).toContain('right');
+    // Of a crossed wheel it is not known whether it leaves diamonds or squares.
+    expect(await ask('1.000 1018 wheel X1')).toMatchObject({
+      refusal: { code: 'missing', parameter: 'pattern' },
+    });
+  });
+
+  it('plans with how closely its machine is known to turn', async () => {
+    const ask = await shopAt(engine);
+    await ask('/shop wheels add A1 straight teeth 63 diameter 20mm');
+    await ask('/shop machines add close spread 0.002mm');
+    await ask('/shop machines add loose spread 0.05mm');
+    const chance = async (machine: string): Promise<number> => {
+      const answer = await ask(
+        `/knurl plan finish 0.995-1.005 straight 1018 long 0.2 on ${machine}`,
+      );
+      return figureOf(answer, 'chanceTracks');
+    };
+    expect(await chance('close')).toBeGreaterThan(await chance('loose'));
   });
 
   it('keeps a card and shows it again by its code', async () => {
@@ -74,6 +120,11 @@ describe.each(ENGINES)('a shop at work, %s', (engine) => {
     expect(code).not.toMatch(/[01OI]/u);
     const again = textOf(await ask(`/knurl card ${code.toLowerCase()}`));
     expect(again).toContain('0.9852 in');
+    // `9X2T4` once was read as nine by two.
+    const code9 = '9X2T4';
+    expect(await ask(`/knurl card ${code9}`)).toMatchObject({
+      refusal: { code: 'notFound', word: code9 },
+    });
     const unknown = await ask('/knurl card zzzzz');
     expect(unknown).toMatchObject({ kind: 'refusal', refusal: { code: 'notFound', what: 'card' } });
   });
