@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import type { Figure, FigureName, Figures } from '../../src/calc/index.ts';
-import { type Card, label, line, type Part, row } from '../../src/card/index.ts';
+import { type Card, codedChoices, label, line, type Part, row } from '../../src/card/index.ts';
 import {
   type Context,
   cardReply,
@@ -62,7 +62,7 @@ const shownAgain = async (context: Context, visit: Visit, kept: KeptCard): Promi
   return cardReply({
     ...card,
     parts: [{ part: 'lines', lines: [again] }, ...(await today(context, kept)), ...card.parts],
-    choices: [isWordsOfToday, ...card.choices],
+    choices: [isWordsOfToday, ...codedChoices(card.choices, of)],
   });
 };
 

@@ -133,7 +133,14 @@ export function measuredGrowthShare(of: {
   return (of.crestDiameter - of.blankDiameter) / growth;
 }
 
-/** How many parts of a family were seen, and their shares added up. */
+/** The results of one family that are learned from, added up. */
+export type FamilyTally = {
+  readonly family: string;
+  readonly count: number;
+  /** Of the measured shares. */
+  readonly sum: number;
+};
+
 type Tally = { readonly count: number; readonly sum: number };
 type Tallies = ReadonlyMap<string, Tally>;
 
@@ -173,15 +180,17 @@ export type LearnedGrowth = {
   readonly doubted: readonly GrowthResult[];
 };
 
+/** Whether a share is so far from what was expected that it waits for a word. */
+const isOdd = (share: number, { mean, sd }: { readonly mean: number; readonly sd: number }) =>
+  Math.abs(within('growthShare', share, -10, 10) - mean) > DOUBTED_BEYOND * sd;
+
 const sift = (results: readonly GrowthResult[]): LearnedGrowth & { readonly tallies: Tallies } => {
   const tallies = new Map<string, Tally>();
   const learned: GrowthResult[] = [];
   const doubted: GrowthResult[] = [];
   for (const result of results) {
     const { family, share, confirmed } = result;
-    const { mean, sd } = predictive(tallies, family);
-    const odd = Math.abs(within('growthShare', share, -10, 10) - mean) > DOUBTED_BEYOND * sd;
-    if (odd && !confirmed) {
+    if (isOdd(share, predictive(tallies, family)) && !confirmed) {
       doubted.push(result);
       continue;
     }
@@ -191,6 +200,9 @@ const sift = (results: readonly GrowthResult[]): LearnedGrowth & { readonly tall
   }
   return { learned, doubted, tallies };
 };
+
+const listed = (tallies: Tallies): readonly FamilyTally[] =>
+  [...tallies].map(([family, { count, sum }]) => ({ family, count, sum }));
 
 /**
  * Which results are learned from and which wait until someone confirms them.
@@ -242,11 +254,79 @@ export type FamilyGrowth = GrowthBelief & {
  * @example growthBelief([{ family: 'straight × steel', share: 0.85, confirmed: false }], 'straight × steel').mean // 0.8738
  */
 export function growthBelief(results: readonly GrowthResult[], family: string): FamilyGrowth {
-  const { learned, doubted, tallies } = sift(results);
+  const { doubted, tallies } = sift(results);
+  return growthFromTallies(listed(tallies), family, doubted.length);
+}
+
+/**
+ * What the results that are learned from add up to, family by family.
+ *
+ *     n_f, Σ g_fj  over the results that are learned from
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | results | the shop's results, the oldest first | - | |
+ * | → family, count, sum | each family that was seen, in the order of its first result | - | |
+ *
+ * Assumes each result is held against what the shop knew before it.
+ *
+ * @source growth-learned (all that the linear solve needs of the results)
+ * @example tallyGrowth([{ family: 'straight × steel', share: 0.9, confirmed: false }, { family: 'straight × steel', share: 0.94, confirmed: false }])[0].sum // 1.84
+ */
+export function tallyGrowth(results: readonly GrowthResult[]): readonly FamilyTally[] {
+  return listed(sift(results).tallies);
+}
+
+/**
+ * The share to expect of the next part of a family, from what the results add up to.
+ *
+ *     growthBelief, with n_f and Σ g_fj in place of the results
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | tallies | count and sum of each family, in the order of its first result | - | |
+ * | f (family) | pattern and material of the next part | - | |
+ * | doubted | results that wait to be confirmed | - | ≥ 0 |
+ * | → mean, sd | expected share and its standard deviation | - | |
+ * | → results, ofFamily, doubted | results learned from, those of this family, those that wait | - | |
+ *
+ * Assumes the tallies are those of tallyGrowth.
+ *
+ * @source growth-learned (jointly normal, one linear solve)
+ * @source growth-prior (the five numbers are judgements)
+ * @example growthFromTallies([{ family: 'straight × steel', count: 1, sum: 0.85 }], 'straight × steel', 0).mean // 0.8738
+ */
+export function growthFromTallies(
+  tallies: readonly FamilyTally[],
+  family: string,
+  doubted: number,
+): FamilyGrowth {
+  const byFamily = new Map(tallies.map((tally) => [tally.family, tally]));
   return {
-    ...predictive(tallies, family),
-    results: learned.length,
-    ofFamily: tallies.get(family)?.count ?? 0,
-    doubted: doubted.length,
+    ...predictive(byFamily, family),
+    results: tallies.reduce((sum, { count }) => sum + count, 0),
+    ofFamily: byFamily.get(family)?.count ?? 0,
+    doubted,
   };
+}
+
+/**
+ * Whether a part is so far from what was expected that it waits until someone confirms it.
+ *
+ *     |g − ḡ| > 3 sd
+ *
+ * | symbol | meaning | unit | range |
+ * | --- | --- | --- | --- |
+ * | g (share) | measured over static growth | - | -10 to 10 |
+ * | belief | ḡ and sd of the part that was expected | - | |
+ * | → doubted | it waits | - | |
+ *
+ * Assumes the expectation is that of before the part.
+ *
+ * @source growth-learned (three standard deviations of the predictive)
+ * @example isDoubted(1.3, growthBeforeResults()) // true
+ * @example isDoubted(1.2, growthBeforeResults()) // false
+ */
+export function isDoubted(share: number, belief: GrowthBelief): boolean {
+  return isOdd(share, belief);
 }

@@ -8,7 +8,15 @@ export type Choice = {
   readonly words: string;
   /** Parameters of that line that have to be said first; a platform asks for them in a form. */
   readonly ask?: readonly string[];
+  /** Its line ends in the code of the card it stands on, which is known once that is kept. */
+  readonly ofCard?: true;
 };
+
+/** The choices of a card that is kept under a code, ready to be sent. */
+export const codedChoices = (choices: readonly Choice[], code: string): readonly Choice[] =>
+  choices.map(({ ofCard, ...choice }) =>
+    ofCard === true ? { ...choice, words: `${choice.words} ${code}` } : choice,
+  );
 
 /** A drawing that answers the card's question; its words are said by the phrase book. */
 export type { Picture } from '../drawing/index.ts';

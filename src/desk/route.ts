@@ -7,6 +7,8 @@ import type { Command } from './command.ts';
 const DEFAULT_ROOT = 'knurl';
 const DEFAULT_VERB = 'setup';
 const LIST = 'list';
+/** What is done in a group of verbs where none of them is said: `/knurl result good`. */
+const LOG = 'log';
 const HELP: readonly string[] = [DEFAULT_ROOT, 'help'];
 
 export type Route =
@@ -55,6 +57,8 @@ export const route = (text: string, fleet: readonly Command[]): Route => {
   const asked = isRoot ? root : DEFAULT_ROOT;
   const found = rest.length > 0 ? named(fleet, asked, rest) : null;
   if (found !== null) return { command: found.command, skip: before + found.skip };
+  const log = find(fleet, [asked, rest[0] ?? '', LOG]);
+  if (log !== undefined) return { command: log, skip: before + 1 };
   // A list is shown where nothing is said to be done with it: `/shop wheels`.
   const list = find(fleet, [asked, rest[0] ?? '', LIST]);
   if (list !== undefined) return { command: list, skip: before + 1 };

@@ -1,4 +1,4 @@
-import { type Card, line, type Part } from '../card/index.ts';
+import { type Card, codedChoices, line, type Part } from '../card/index.ts';
 import {
   givenUp,
   givenUpSeen,
@@ -60,7 +60,8 @@ const keptCard = async (
     machine: about.machine,
     material: about.material,
   });
-  return beforeFooting(ruled, { part: 'lines', lines: [line('cardCode', { code })] });
+  const coded = { ...ruled, choices: codedChoices(ruled.choices, code) };
+  return beforeFooting(coded, { part: 'lines', lines: [line('cardCode', { code })] });
 };
 
 /** What could not be delivered is said once, on whatever card comes next. */

@@ -100,6 +100,12 @@ export const findCard = async (view: ShopView, typed: string): Promise<Done<Kept
   });
 };
 
+/** The card of an id that the records themselves name. */
+export const cardById = async (view: ShopView, id: string): Promise<KeptCard | null> => {
+  const row = await rowsOf(view).where('id', '=', id).executeTakeFirst();
+  return row === undefined ? null : cardOf(row);
+};
+
 const codesNear = async (view: ShopView, code: string): Promise<readonly string[]> => {
   const near = misheard(code);
   if (near.length === 0) return [];

@@ -9,7 +9,8 @@ export type Subject =
   | 'person'
   | 'group'
   | 'setting'
-  | 'effect';
+  | 'effect'
+  | 'result';
 export type Verb = 'added' | 'changed' | 'removed';
 
 export type HistoryLine = {

@@ -3,6 +3,7 @@ export { type Store, StoreUnavailable } from '../store/index.ts';
 export {
   type CardDraft,
   type CardsWanted,
+  cardById,
   findCard,
   type KeptCard,
   keepCard,
@@ -75,6 +76,29 @@ export {
   removeFrom,
 } from './register.ts';
 export type { Done } from './result.ts';
+export {
+  type Compared,
+  causeCounts,
+  confirmResult,
+  correctResult,
+  findResult,
+  growthIn,
+  growthTallies,
+  type KeptResult,
+  type Logged,
+  latestResults,
+  logResult,
+  type NoGrowth,
+  OUTCOMES,
+  type Outcome,
+  type ResultContent,
+  type ResultsWanted,
+  type ResultWanted,
+  resultName,
+  type Standing,
+  symptomOf,
+  withdrawResult,
+} from './results/index.ts';
 export { atLeast, ROLES, type Role } from './roles.ts';
 export { addRule, RULES, type Rule, type RuleScope, rulesOnCard } from './rules.ts';
 export {

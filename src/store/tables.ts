@@ -138,6 +138,51 @@ export type CardTable = OfShop & {
   material: string | null;
 };
 
+export type ResultTable = OfShop & {
+  id: string;
+  /** Counts the results of a shop: what people call it by. */
+  number: number;
+  card: string;
+  wheel: string | null;
+  /** The row of the table of materials that the card was worked out for. */
+  base: string | null;
+  version: number;
+  made_at: Moment;
+  made_by: string;
+  changed_at: Moment;
+  changed_by: string;
+  withdrawn_at: Moment | null;
+  withdrawn_by: string | null;
+  outcome: string;
+  /** What was seen on the part, in the terms of a trouble. */
+  symptom: string | null;
+  teeth: number | null;
+  blank: number | null;
+  crest: number | null;
+  tooth_height: number | null;
+  flat: number | null;
+  parts_run: number;
+  cause: string | null;
+  note: string | null;
+  /** Pattern and material whose growth it speaks of, where it does. */
+  family: string | null;
+  /** Measured over static growth. */
+  share: number | null;
+  /** 1: the cards learn from it. */
+  learned: number;
+  confirmed_at: Moment | null;
+  confirmed_by: string | null;
+};
+
+/** The learned results of one family, added up. */
+export type GrowthTable = OfShop & {
+  family: string;
+  count: number;
+  sum: number;
+  /** The id of the oldest of them: families stand in the order in which they were first seen. */
+  first: string;
+};
+
 export type InteractionTable = OfShop & {
   id: string;
   at: Moment;
@@ -190,6 +235,8 @@ export type Tables = {
   material: MaterialTable;
   rule: RuleTable;
   card: CardTable;
+  result: ResultTable;
+  growth: GrowthTable;
   interaction: InteractionTable;
   effect: EffectTable;
   history: HistoryTable;
@@ -219,6 +266,8 @@ export const TABLES: readonly TableFacts[] = [
   { name: 'material', shop: 'shop', key: 'id', json: [] },
   { name: 'rule', shop: 'shop', key: 'id', json: [] },
   { name: 'card', shop: 'shop', key: 'id', json: ['request', 'figures', 'card'] },
+  { name: 'result', shop: 'shop', key: 'id', json: [] },
+  { name: 'growth', shop: 'shop', key: 'family', json: [] },
   { name: 'interaction', shop: 'shop', key: 'id', json: ['answer'] },
   { name: 'effect', shop: 'shop', key: 'id', json: ['effect', 'outcome'] },
   { name: 'history', shop: 'shop', key: 'id', json: ['before', 'after'] },

@@ -2,6 +2,7 @@ import type { Kysely, Migration } from 'kysely';
 import { shopAndPeople } from './0001-shop-and-people.ts';
 import { registers } from './0002-registers.ts';
 import { cardsAndEffects } from './0003-cards-and-effects.ts';
+import { results } from './0004-results.ts';
 import { type Columns, columnsOf, type Engine } from './columns.ts';
 
 type Step = (db: Kysely<unknown>, columns: Columns) => Promise<void>;
@@ -11,6 +12,7 @@ const STEPS: Readonly<Record<string, Step>> = {
   '0001-shop-and-people': shopAndPeople,
   '0002-registers': registers,
   '0003-cards-and-effects': cardsAndEffects,
+  '0004-results': results,
 };
 
 export const stepNames: readonly string[] = Object.keys(STEPS).sort();

@@ -9,6 +9,7 @@ import { isolation } from './isolation.ts';
 import { lists } from './lists.ts';
 import { outbox } from './outbox.ts';
 import { people } from './people.ts';
+import { results } from './results.ts';
 import { settings } from './settings.ts';
 
 export const shopContract = (engine: Engine): void => {
@@ -17,6 +18,7 @@ export const shopContract = (engine: Engine): void => {
     people(engine);
     settings(engine);
     cards(engine);
+    results(engine);
     interactions(engine);
     outbox(engine);
     csv(engine);
