@@ -3,7 +3,16 @@ import { join } from 'node:path';
 import { parseArgs } from 'node:util';
 import { config as loadEnvironment } from 'dotenv';
 import { FLEET } from '../commands/index.ts';
-import { runChannel, widthOf, writePictures } from './adapters/terminal/index.ts';
+import {
+  deliverBy,
+  personId,
+  runChannel,
+  sentenceText,
+  speakerCalled,
+  widthOf,
+  writePictures,
+  written,
+} from './adapters/terminal/index.ts';
 import { ChatFault, sentencesFor, startChats } from './chats.ts';
 import { type Config, configOf } from './config.ts';
 import { openDeliveries } from './deliveries.ts';
@@ -14,7 +23,9 @@ import { en } from './phrases/index.ts';
 import { recordsFault, recordsPlace } from './records.ts';
 import { openStore } from './store/index.ts';
 
-const { values } = parseArgs({ options: { phone: { type: 'boolean', default: false } } });
+const { values } = parseArgs({
+  options: { phone: { type: 'boolean', default: false }, as: { type: 'string' } },
+});
 
 // A reader that goes away (`| head`) is the end of the conversation, not a fault.
 process.stdout.on('error', (error: NodeJS.ErrnoException) => {
@@ -85,29 +96,46 @@ const chat = async (config: Config): Promise<void> => {
 /** The local channel is a shop of its own, with records like any other. */
 const terminal = async (): Promise<void> => {
   const store = await openStore(recordsPlace());
+  const width = (): number => widthOf(process.stdout.columns, values.phone);
+  const onFault = (error: unknown): void => {
+    process.stderr.write(
+      `${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`,
+    );
+  };
+  const deliver = deliverBy(en, (line) =>
+    written(process.stdout, `${sentenceText(line, width())}\n`),
+  );
+  // One at a time: what happens is told in the order in which it was decided.
+  const deliveries = openDeliveries(store, [{ platform: 'terminal', shops: null, deliver }], {
+    now: Date.now,
+    onFault,
+    concurrency: 1,
+  });
+  // What is due later comes up by itself while somebody is there to read it.
+  if (interactive) deliveries.start();
   await runChannel({
     desk: openRecordsDesk(FLEET, store, {
       platform: 'terminal',
       program: process.env['npm_package_version'] ?? '',
       now: Date.now,
-      onFault: (error) => process.stderr.write(`${String(error)}\n`),
+      outsideId: personId,
+      onFault,
     }),
     book: en,
     input: process.stdin,
     output: process.stdout,
     interactive,
+    ...(values.as === undefined ? {} : { speaker: speakerCalled(values.as) }),
     pictures:
       folder === null
         ? null
         : (answer, line) =>
             writePictures(answer, { folder, prefix: `${String(line)}-` }, { book: en, render }),
-    width: () => widthOf(process.stdout.columns, values.phone),
-    onFault: (error) => {
-      process.stderr.write(
-        `${error instanceof Error ? (error.stack ?? error.message) : String(error)}\n`,
-      );
-    },
+    width,
+    onFault,
+    settle: deliveries.deliverDue,
   });
+  await deliveries.stop();
   await store.close();
 };
 

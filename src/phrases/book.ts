@@ -46,6 +46,17 @@ export type Book = {
 export type TerminalPhrases = {
   readonly opening: readonly string[];
   readonly prompt: string;
+  /** Who speaks now, and where. */
+  readonly speaks: (name: string, place: string) => string;
+  readonly tooLong: string;
+  readonly noChannel: (typed: string) => string;
+  /** What happened besides the answer. */
+  readonly posted: (place: string, rung: readonly string[], says: string) => string;
+  readonly pinned: (place: string, says: string) => string;
+  readonly unpinned: (place: string, says: string) => string;
+  readonly threadOpened: (place: string, title: string) => string;
+  readonly told: (people: readonly string[], says: string) => string;
+  readonly edited: (place: string, says: string) => string;
   readonly usage: string;
   readonly unitsArgument: string;
   readonly fault: string;

@@ -1,4 +1,4 @@
-export type { Book, LabelledText } from './book.ts';
+export type { Book, LabelledText, TerminalPhrases } from './book.ts';
 export type { ChatPhrases, ConfigPhrases, RegistrationPhrases } from './chat.ts';
 export { en } from './en/index.ts';
 export { type SpokenPicture, speakPictures } from './pictures.ts';

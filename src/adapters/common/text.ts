@@ -1,7 +1,7 @@
 import type { SpokenCard, SpokenPart } from '../../phrases/index.ts';
 
 /** Characters a terminal shows, control characters made visible as a space. */
-const printable = (text: string): string => text.replaceAll(/\p{Cc}/gu, ' ');
+export const printable = (text: string): string => text.replaceAll(/\p{Cc}/gu, ' ');
 
 /** Breaks a text at spaces; a word longer than the line is broken where it has to be. */
 export const wrapped = (text: string, width: number, indent = ''): readonly string[] => {

@@ -4,7 +4,8 @@ import type { Readable, Writable } from 'node:stream';
 import type { Answer, Call, Desk } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
 import { spoken } from '../common/spoken.ts';
-import { cardText } from '../common/text.ts';
+import { cardText, printable, wrapped } from '../common/text.ts';
+import { FIRST, moved, promptFor, type Speaker } from './speaker.ts';
 
 /** Widest card that is still read at a glance, where the terminal would allow more. */
 const READABLE_WIDTH = 100;
@@ -18,10 +19,14 @@ export const widthOf = (columns: number | undefined, phone: boolean): number =>
 const RUN = randomUUID();
 
 /** A line typed in the terminal, as the desk takes it. */
-export const terminalCall = (words: string, number: number): Call => ({
+export const terminalCall = (
+  words: string,
+  number: number,
+  { person, place }: Speaker = FIRST,
+): Call => ({
   shop: 'terminal',
-  person: { id: 'terminal', name: 'terminal' },
-  place: { channel: 'terminal', thread: null, isPrivate: false },
+  person,
+  place,
   interactionId: `${RUN}-${String(number)}`,
   given: { words },
 });
@@ -31,20 +36,29 @@ export type ChannelOptions = {
   readonly book: Book;
   readonly input: Readable;
   readonly output: Writable;
-  /** A person is typing: prompt and keep the conversation apart from the cards. */
+  /** A person is typing and sees it; what comes from a file is shown before its answer. */
   readonly interactive: boolean;
+  /** Who speaks until somebody else does. */
+  readonly speaker?: Speaker;
   readonly width: () => number;
   readonly onFault: (error: unknown) => void;
   /** Writes the pictures of the answer to a line and says where; null where none are wanted. */
   readonly pictures: ((answer: Answer, line: number) => Promise<readonly string[]>) | null;
+  /** Brings about what an answer left to be done, and says how much that was. */
+  readonly settle?: () => Promise<number>;
 };
 
-const written = (output: Writable, text: string): Promise<void> =>
+export const written = (output: Writable, text: string): Promise<void> =>
   new Promise((done) => {
     output.write(text, () => {
       done();
     });
   });
+
+/** A sentence no wider than asked, going on under itself. */
+export const sentenceText = (text: string, width: number): string =>
+  wrapped(text, width - INDENT.length).join(`\n${INDENT}`);
+const INDENT = '  ';
 
 const pictured = async (
   { pictures, book, output, onFault }: ChannelOptions,
@@ -62,27 +76,52 @@ const pictured = async (
   }
 };
 
+/** What happened besides stands under the card, before anything else is answered. */
+const settled = async ({ settle, output, onFault }: ChannelOptions): Promise<void> => {
+  try {
+    if (settle !== undefined && (await settle()) > 0) await written(output, '\n');
+  } catch (error) {
+    // It is kept, and done with the next answer.
+    onFault(error);
+  }
+};
+
+const answered = async (options: ChannelOptions, call: Call, line: number): Promise<void> => {
+  const { desk, book, output, width } = options;
+  try {
+    const answer = await desk.answer(call);
+    await written(output, `${cardText(spoken(answer, book), width())}\n\n`);
+    // The card stands already: nobody waits for a picture to read it.
+    await pictured(options, answer, line);
+  } catch (error) {
+    options.onFault(error);
+    await written(output, `${book.terminal.fault}\n\n`);
+  }
+  await settled(options);
+};
+
 /** The local channel: one card a line, until the input ends. */
 export const runChannel = async (options: ChannelOptions): Promise<void> => {
-  const { desk, book, input, output, interactive, width } = options;
-  await written(output, `${book.terminal.opening.join('\n')}\n\n`);
+  const { book, input, output, interactive, width } = options;
+  const { terminal } = book;
+  let { speaker = FIRST } = options;
+  const opening = terminal.opening.map((text) => sentenceText(text, width()));
+  await written(output, `${opening.join('\n')}\n\n`);
   const lines = createInterface({ input, crlfDelay: Number.POSITIVE_INFINITY });
-  const prompt = async (): Promise<void> => {
-    if (interactive) await written(output, book.terminal.prompt);
+  const prompt = async (typed: string): Promise<void> => {
+    await written(output, `${promptFor(speaker, terminal.prompt)}${typed}`);
   };
   let number = 0;
-  await prompt();
+  if (interactive) await prompt('');
   for await (const line of lines) {
     number += 1;
-    try {
-      const answer = await desk.answer(terminalCall(line, number));
-      await written(output, `${cardText(spoken(answer, book), width())}\n\n`);
-      // The card stands already: nobody waits for a picture to read it.
-      await pictured(options, answer, number);
-    } catch (error) {
-      options.onFault(error);
-      await written(output, `${book.terminal.fault}\n\n`);
+    if (!interactive) await prompt(`${printable(line)}\n`);
+    const move = moved(line, speaker, terminal);
+    if (move === null) await answered(options, terminalCall(line, number, speaker), number);
+    else {
+      speaker = move.speaker;
+      await written(output, `${sentenceText(move.said, width())}\n\n`);
     }
-    await prompt();
+    if (interactive) await prompt('');
   }
 };

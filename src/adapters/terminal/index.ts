@@ -1,5 +1,14 @@
 export { spoken } from '../common/spoken.ts';
 export { cardText } from '../common/text.ts';
-export { PHONE_WIDTH, runChannel, terminalCall, widthOf } from './channel.ts';
+export {
+  PHONE_WIDTH,
+  runChannel,
+  sentenceText,
+  terminalCall,
+  widthOf,
+  written,
+} from './channel.ts';
+export { deliverBy } from './effects.ts';
 export { answerJson } from './json.ts';
 export { writePictures } from './pictures.ts';
+export { personId, speakerCalled } from './speaker.ts';

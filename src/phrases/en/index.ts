@@ -14,6 +14,7 @@ import { remedyLabel } from './remedies.ts';
 import { rows } from './rows.ts';
 import { shopLabels } from './shopLines.ts';
 import { slack } from './slack.ts';
+import { terminal } from './terminal.ts';
 import { troubleLabels } from './troubleLines.ts';
 import { verbs } from './verbs.ts';
 import { whyLabels } from './whyLines.ts';
@@ -63,17 +64,5 @@ export const en: Book = {
   config,
   records,
   pictures,
-  terminal: {
-    opening: [
-      'Wholetooth, local channel: type a bar, a pattern and a pitch, such as 1.000 straight 21tpi 1018.',
-      'No chat platform is connected; the README says how to connect Slack or Discord.',
-    ],
-    prompt: '> ',
-    usage:
-      'Give one line in quotes, such as: npm run --silent ask -- "/knurl 1.000 straight 21tpi 1018"',
-    unitsArgument: '--units takes in or mm.',
-    fault: 'Something went wrong here, not in what you typed. Nothing was changed; send it again.',
-    pictureAt: (path) => `Picture: ${path}`,
-    noPicture: 'The picture could not be made. Nothing else is missing from the card.',
-  },
+  terminal,
 };

@@ -1,0 +1,53 @@
+/** The local channel as it runs from a pipe: lines go in, everything that is shown comes back. */
+import { PassThrough } from 'node:stream';
+import {
+  deliverBy,
+  PHONE_WIDTH,
+  personId,
+  runChannel,
+  sentenceText,
+  written,
+} from '../../src/adapters/terminal/index.ts';
+import { openDeliveries } from '../../src/deliveries.ts';
+import { type Command, openRecordsDesk } from '../../src/desk/index.ts';
+import { en } from '../../src/phrases/index.ts';
+import type { Store } from '../../src/store/index.ts';
+
+export type Played = {
+  readonly store: Store;
+  readonly fleet: readonly Command[];
+  readonly lines: readonly string[];
+  readonly now?: () => number;
+};
+
+export const play = async ({ store, fleet, lines, now = Date.now }: Played): Promise<string> => {
+  const input = new PassThrough();
+  const output = new PassThrough();
+  const said: Buffer[] = [];
+  output.on('data', (chunk: Buffer) => said.push(chunk));
+  const faults: unknown[] = [];
+  const onFault = (fault: unknown): void => void faults.push(fault);
+  const deliver = deliverBy(en, (line) => written(output, `${sentenceText(line, PHONE_WIDTH)}\n`));
+  const terminal = { platform: 'terminal', shops: null, deliver };
+  const { deliverDue } = openDeliveries(store, [terminal], { now, onFault, concurrency: 1 });
+  input.end(lines.map((line) => `${line}\n`).join(''));
+  await runChannel({
+    desk: openRecordsDesk(fleet, store, {
+      platform: 'terminal',
+      program: 'test',
+      now,
+      outsideId: personId,
+      onFault,
+    }),
+    book: en,
+    input,
+    output,
+    interactive: false,
+    pictures: null,
+    width: () => PHONE_WIDTH,
+    onFault,
+    settle: deliverDue,
+  });
+  if (faults.length > 0) throw new Error(`faults: ${faults.map(String).join('\n')}`);
+  return Buffer.concat(said).toString();
+};
