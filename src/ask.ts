@@ -3,6 +3,7 @@ import { FLEET } from '../commands/index.ts';
 import {
   answerJson,
   cardText,
+  pictureLines,
   spoken,
   terminalCall,
   widthOf,
@@ -50,13 +51,12 @@ const desk = openDesk(FLEET, plainShop(units === 'mm' ? 'mm' : 'in'));
 const answer = await desk.answer(terminalCall(positionals.join(' '), 1));
 /** Where the pictures were written, or that nothing but them is missing. */
 const pictured = async (folder: string): Promise<string> => {
-  try {
-    const to = { folder, prefix: '' };
-    const paths = await writePictures(answer, to, { book: en, render: openRenderer() });
-    return paths.map((path) => `${en.terminal.pictureAt(path)}\n`).join('');
-  } catch {
-    return `${en.terminal.noPicture}\n`;
-  }
+  // The line about it is all there is to say: nobody reads a log of one answer.
+  const writing = { book: en, render: openRenderer(), onFault: () => undefined };
+  const paths = await writePictures(answer, { folder, prefix: '' }, writing).catch(() => []);
+  return pictureLines(answer, paths, en)
+    .map((line) => `${line}\n`)
+    .join('');
 };
 
 const written = (stream: NodeJS.WriteStream, text: string): Promise<void> =>

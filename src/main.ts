@@ -130,7 +130,11 @@ const terminal = async (): Promise<void> => {
       folder === null
         ? null
         : (answer, line) =>
-            writePictures(answer, { folder, prefix: `${String(line)}-` }, { book: en, render }),
+            writePictures(
+              answer,
+              { folder, prefix: `${String(line)}-` },
+              { book: en, render, onFault },
+            ),
     width,
     onFault,
     settle: deliveries.deliverDue,

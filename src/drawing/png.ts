@@ -33,8 +33,15 @@ const MOST_KEPT = 200;
 
 export type Renderer = (svg: string, width?: number) => Promise<Uint8Array>;
 
-/** Makes pictures off the main thread, a few at a time, and the same one only once. */
-export const openRenderer = (): Renderer => {
+/** One picture, drawn and packed off the main thread. */
+const made: Renderer = async (svg, wide = PNG_WIDTH) => {
+  const image = await renderAsync(svg, renderOptions(wide));
+  const { width, height, pixels } = image;
+  return await pngOf({ width, height, pixels });
+};
+
+/** Makes pictures a few at a time, and the same one only once. */
+export const openRenderer = (make: Renderer = made): Renderer => {
   const queue = new PQueue({ concurrency: AT_ONCE });
   const kept = new Map<string, Promise<Uint8Array>>();
   return (svg, width = PNG_WIDTH) => {
@@ -43,11 +50,7 @@ export const openRenderer = (): Renderer => {
       .digest('hex');
     const known = kept.get(key);
     if (known !== undefined) return known;
-    const making = queue.add(async () => {
-      const image = await renderAsync(svg, renderOptions(width));
-      const { width: across, height } = image;
-      return await pngOf({ width: across, height, pixels: image.pixels });
-    });
+    const making = queue.add(() => make(svg, width));
     kept.set(key, making);
     // One that failed is tried again the next time it is asked for.
     making.catch(() => kept.delete(key));

@@ -53,6 +53,37 @@ describe('ask', () => {
     expect(object.refusal).toBeNull();
   });
 
+  it('writes the pictures of one answer as SVG and PNG, and says where', async () => {
+    const folder = path.join(data, 'pictures');
+    const ran = await ask('--pictures', folder, '/knurl 1.000 straight 21tpi 1018');
+    expect(ran.code).toBe(0);
+    const names = ['1-toothForm', '2-trackingStrip', '3-setupSketch'];
+    expect(fs.readdirSync(folder).sort()).toEqual(
+      names.flatMap((name) => [`${name}.png`, `${name}.svg`]),
+    );
+    for (const name of names) {
+      const file = path.join(folder, name);
+      expect(ran.said).toContain(`Picture: ${file}.png`);
+      // evidence: PNG, third edition, 5.2: the eight bytes every such file begins with
+      expect(fs.readFileSync(`${file}.png`).subarray(0, 8).toString('hex')).toBe(
+        '89504e470d0a1a0a',
+      );
+      expect(fs.readFileSync(`${file}.svg`, 'utf8')).toMatch(/^<svg xmlns=/u);
+    }
+    const json = await ask('--json', '--pictures', folder, '/knurl 1.000 straight 21tpi 1018');
+    expect(answerSchema.parse(JSON.parse(json.said)).refusal).toBeNull();
+    expect(json.faults).toContain('Picture: ');
+  });
+
+  it('gives the whole card where the folder cannot be written', async () => {
+    const file = path.join(data, 'no-folder');
+    fs.writeFileSync(file, '');
+    const ran = await ask('--pictures', file, '/knurl 1.000 straight 21tpi 1018');
+    expect(ran.code).toBe(0);
+    expect(ran.said).toContain('Turn to 0.9852 in: 65 teeth');
+    expect(ran.said).toContain('Nothing else is missing from the card.');
+  });
+
   it('prints one JSON object for a refusal, and ends with 1', async () => {
     const ran = await ask('--json', '/knurl 1.0 straigt 21tpi');
     expect(ran.code).toBe(1);

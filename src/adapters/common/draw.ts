@@ -15,6 +15,10 @@ export const sketchesOf = (answer: Answer, book: Book): readonly Sketch[] =>
       }))
     : [];
 
+/** How many pictures an answer has: where fewer are shown, the card says what is missing. */
+export const picturesWanted = (answer: Answer): number =>
+  answer.kind === 'card' ? answer.card.pictures.length : 0;
+
 /** Draws what an answer shows; a picture that fails is told to whoever keeps count, and left out. */
 export const openDraw =
   (book: Book, render: Renderer, onFault: (error: unknown) => void) =>

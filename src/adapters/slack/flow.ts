@@ -1,23 +1,21 @@
 import type { Answer, Call, Desk } from '../../desk/index.ts';
 import type { Book, SpokenCard } from '../../phrases/index.ts';
 import type { Log } from '../common/log.ts';
-import type { Drawn } from '../common/pieces.ts';
 import { hasMoreCautions, sentence, spoken } from '../common/spoken.ts';
 import { faultText, isRefused } from './faults.ts';
 import { LIMITS } from './limits.ts';
 import type { StandingOf } from './people.ts';
+import { change, type Draw, sendPictures, withoutPicture } from './pictures.ts';
 import type { Handle } from './receive.ts';
 import { controlButton, type ExtraButton, type Message, render } from './render.ts';
-import type { Sender, Where } from './send.ts';
-
-/** Draws what an answer shows; nothing where it shows nothing. */
-export type Draw = (answer: Answer) => Promise<readonly Drawn[]>;
+import type { Sender, Sent, Where } from './send.ts';
 
 export type FlowOptions = {
   readonly desk: Desk;
   readonly book: Book;
   readonly log: Log;
-  readonly draw: Draw;
+  /** Null where no pictures are wanted. */
+  readonly draw: Draw | null;
   readonly standingOf: StandingOf;
 };
 
@@ -26,10 +24,11 @@ type Reply = {
   readonly card: SpokenCard;
   readonly isPrivate: boolean;
   readonly extra: readonly ExtraButton[];
-  readonly pictures: () => Promise<readonly Drawn[]>;
+  /** What its pictures are drawn from; null where the bot says something of its own. */
+  readonly answer: Answer | null;
 };
 
-const NO_PICTURES = () => Promise.resolve([]);
+type Standing = { readonly sent: Sent; readonly message: Message };
 
 const extrasOf = (answer: Answer, call: Call, book: Book): readonly ExtraButton[] => {
   const common = { of: call.interactionId, isPrivate: call.place.isPrivate };
@@ -60,7 +59,7 @@ export const openFlow = ({ desk, book, log, draw, standingOf }: FlowOptions) => 
     card,
     isPrivate: true,
     extra,
-    pictures: NO_PICTURES,
+    answer: null,
   });
 
   const replyOf = (call: Call, answer: Answer): Reply => ({
@@ -68,7 +67,7 @@ export const openFlow = ({ desk, book, log, draw, standingOf }: FlowOptions) => 
     // A refusal is between the bot and whoever asked.
     isPrivate: call.place.isPrivate || answer.kind === 'refusal',
     extra: extrasOf(answer, call, book),
-    pictures: () => draw(answer),
+    answer,
   });
 
   const replyFor = async (call: Call, asked: Promise<Answer>): Promise<Reply> => {
@@ -116,15 +115,16 @@ export const openFlow = ({ desk, book, log, draw, standingOf }: FlowOptions) => 
     }
   };
 
+  /** What stands where it was asked; null where it had to go another way. */
   const openly = async (
     sender: Sender,
     handle: Handle,
     call: Call,
     messages: readonly Message[],
-  ): Promise<boolean> => {
+  ): Promise<readonly Standing[] | null> => {
     const where = whereOf(handle);
     const { responseUrl: url, thread, person } = handle;
-    let isPosted = where !== null;
+    const standing: Standing[] = [];
     for (const [index, message] of messages.entries()) {
       const key = `${call.interactionId}-${String(index)}`;
       const direct = () => sender.direct(person.id, message, key);
@@ -133,34 +133,46 @@ export const openFlow = ({ desk, book, log, draw, standingOf }: FlowOptions) => 
         continue;
       }
       try {
-        await sender.post(where, message, key);
+        standing.push({ sent: await sender.post(where, message, key), message });
       } catch (error) {
         // Only where the bot may not write: after any other fault the post may stand already.
         if (!isRefused(error, 'notThere')) throw error;
-        isPosted = false;
         const respond = (address: string) => () =>
           sender.respond(address, message, { isPrivate: false, thread });
         await firstOpen(call, [...(url === null ? [] : [respond(url)]), direct]);
       }
     }
-    return isPosted;
+    return standing.length === messages.length ? standing : null;
   };
 
-  /** A card without its picture still says everything: a fault here is counted, not told. */
+  /**
+   * The card stands already and says everything; its pictures follow. Where one is missing, the
+   * card says that nothing else is.
+   */
   const pictures = async (
     sender: Sender,
     handle: Handle,
     call: Call,
     reply: Reply,
+    standing: readonly Standing[],
   ): Promise<void> => {
     const where = whereOf(handle);
-    if (where === null) return;
-    try {
-      for (const drawn of await reply.pictures()) await sender.picture(where, drawn);
-    } catch (error) {
+    if (where === null || draw === null || reply.answer === null) return;
+    const onFault = (error: unknown): void =>
       log.fault('picture', { interaction: call.interactionId, fault: faultText(error) });
+    try {
+      if (await sendPictures({ sender, where, draw, onFault }, reply.answer)) return;
+      const messages = messagesOf(call, { ...reply, card: withoutPicture(reply.card, book) });
+      await change(sender, standing, messages, (message, index) =>
+        sender.post(where, message, `${call.interactionId}-${String(index)}`),
+      );
+    } catch (error) {
+      onFault(error);
     }
   };
+
+  const messagesOf = (call: Call, { card, extra }: Reply): readonly Message[] =>
+    render({ card, of: call.interactionId, wasPrivate: call.place.isPrivate, extra });
 
   const deliver = async (
     sender: Sender,
@@ -168,17 +180,13 @@ export const openFlow = ({ desk, book, log, draw, standingOf }: FlowOptions) => 
     call: Call,
     reply: Reply,
   ): Promise<void> => {
-    const messages = render({
-      card: reply.card,
-      of: call.interactionId,
-      wasPrivate: call.place.isPrivate,
-      extra: reply.extra,
-    });
+    const messages = messagesOf(call, reply);
     if (reply.isPrivate) {
       await privately(sender, handle, call, messages, 0);
       return;
     }
-    if (await openly(sender, handle, call, messages)) await pictures(sender, handle, call, reply);
+    const standing = await openly(sender, handle, call, messages);
+    if (standing !== null) await pictures(sender, handle, call, reply, standing);
   };
 
   /** Nothing more than one short sentence is left to say, by whichever way is still open. */

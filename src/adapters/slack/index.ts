@@ -16,9 +16,10 @@ import {
 } from './connect.ts';
 import { deliverEffect } from './effects.ts';
 import { faultText } from './faults.ts';
-import { type Draw, openFlow } from './flow.ts';
+import { openFlow } from './flow.ts';
 import { listen } from './listen.ts';
 import { openStanding } from './people.ts';
+import type { Draw } from './pictures.ts';
 import { interactionOf } from './receive.ts';
 import { openSender } from './send.ts';
 
@@ -82,7 +83,7 @@ export const openSlack = async (options: SlackOptions): Promise<Slack> => {
       .finally(() => busy.delete(watched));
     busy.add(watched);
   };
-  const draw = options.draw ?? (() => Promise.resolve([]));
+  const draw = options.draw ?? null;
   const formPatienceMs = options.formPatienceMs ?? FORM_PATIENCE_MS;
   const flow = openFlow({ desk, book, log, draw, standingOf: openStanding(log) });
   onlyOnce(connection, once, log);

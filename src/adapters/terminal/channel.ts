@@ -5,6 +5,7 @@ import type { Answer, Call, Desk } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
 import { spoken } from '../common/spoken.ts';
 import { cardText, printable, wrapped } from '../common/text.ts';
+import { pictureLines } from './pictures.ts';
 import { FIRST, moved, promptFor, type Speaker } from './speaker.ts';
 
 /** Widest card that is still read at a glance, where the terminal would allow more. */
@@ -66,14 +67,12 @@ const pictured = async (
   line: number,
 ): Promise<void> => {
   if (pictures === null) return;
-  try {
-    const paths = await pictures(answer, line);
-    if (paths.length > 0)
-      await written(output, `${paths.map(book.terminal.pictureAt).join('\n')}\n\n`);
-  } catch (error) {
+  const paths = await pictures(answer, line).catch((error: unknown) => {
     onFault(error);
-    await written(output, `${book.terminal.noPicture}\n\n`);
-  }
+    return [];
+  });
+  const lines = pictureLines(answer, paths, book);
+  if (lines.length > 0) await written(output, `${lines.join('\n')}\n\n`);
 };
 
 /** What happened besides stands under the card, before anything else is answered. */

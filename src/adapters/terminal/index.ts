@@ -10,5 +10,5 @@ export {
 } from './channel.ts';
 export { deliverBy } from './effects.ts';
 export { answerJson } from './json.ts';
-export { writePictures } from './pictures.ts';
+export { pictureLines, writePictures } from './pictures.ts';
 export { personId, speakerCalled } from './speaker.ts';

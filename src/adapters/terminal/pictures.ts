@@ -3,23 +3,45 @@ import { join } from 'node:path';
 import type { Answer } from '../../desk/index.ts';
 import type { Renderer } from '../../drawing/index.ts';
 import type { Book } from '../../phrases/index.ts';
-import { sketchesOf } from '../common/draw.ts';
+import { picturesWanted, sketchesOf } from '../common/draw.ts';
 
-/** Writes the pictures of an answer as SVG and PNG, and gives the paths of the PNGs. */
+export type Writing = {
+  readonly book: Book;
+  readonly render: Renderer;
+  readonly onFault: (error: unknown) => void;
+};
+
+/** Writes the pictures of an answer as SVG and PNG, and gives the paths of the PNGs that were. */
 export const writePictures = async (
   answer: Answer,
   to: { readonly folder: string; readonly prefix: string },
-  { book, render }: { readonly book: Book; readonly render: Renderer },
+  { book, render, onFault }: Writing,
 ): Promise<readonly string[]> => {
   const sketches = sketchesOf(answer, book);
   if (sketches.length === 0) return [];
   await mkdir(to.folder, { recursive: true });
-  return await Promise.all(
+  const written = await Promise.all(
     sketches.map(async ({ name, svg }) => {
       const path = join(to.folder, `${to.prefix}${name}`);
-      await writeFile(`${path}.svg`, svg);
-      await writeFile(`${path}.png`, await render(svg));
-      return `${path}.png`;
+      try {
+        await writeFile(`${path}.svg`, svg);
+        await writeFile(`${path}.png`, await render(svg));
+        return [`${path}.png`];
+      } catch (error) {
+        onFault(error);
+        return [];
+      }
     }),
   );
+  return written.flat();
 };
+
+/** Where the pictures are, a line each; and where one is missing, that nothing else is. */
+export const pictureLines = (
+  answer: Answer,
+  paths: readonly string[],
+  { terminal }: Book,
+): readonly string[] => [
+  ...paths.map(terminal.pictureAt),
+  ...(paths.length < picturesWanted(answer) ? [terminal.noPicture] : []),
+];

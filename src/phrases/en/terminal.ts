@@ -28,5 +28,5 @@ export const terminal: TerminalPhrases = {
   unitsArgument: '--units takes in or mm.',
   fault: 'Something went wrong here, not in what you typed. Nothing was changed; send it again.',
   pictureAt: (path) => `Picture: ${path}`,
-  noPicture: 'The picture could not be made. Nothing else is missing from the card.',
+  noPicture: 'A picture could not be shown. Nothing else is missing from the card.',
 };

@@ -2,12 +2,14 @@
 import { afterAll, expect, test } from 'vitest';
 import type { Drawn } from '../../../src/adapters/common/pieces.ts';
 import { line } from '../../../src/card/index.ts';
+import { en } from '../../../src/phrases/index.ts';
 import { TEAMS } from '../../platforms/slack/platform.ts';
-import { openBot, until } from './bot.ts';
+import { openBot, readable, until } from './bot.ts';
 
 const PICTURE: Drawn = { name: 'tooth.png', bytes: new Uint8Array(2000), alt: 'a tooth to scale' };
 const bot = await openBot({
-  draw: (answer) => Promise.resolve(answer.kind === 'card' ? [PICTURE] : []),
+  draw: (answer) =>
+    Promise.resolve(answer.kind === 'card' ? answer.card.pictures.map(() => PICTURE) : []),
 });
 afterAll(async () => {
   expect(bot.platform.faults).toEqual([]);
@@ -15,6 +17,8 @@ afterAll(async () => {
 });
 
 const LINE = '1.000 1018 straight 21tpi';
+/** Pictures of the card to that line: tooth, diameters, set-up. */
+const EACH = 3;
 const PEOPLE = TEAMS.flatMap(({ id: team }) =>
   ['FLOOR', 'OPEN', 'CLOSED'].map((channel) => ({
     team,
@@ -26,7 +30,7 @@ const PEOPLE = TEAMS.flatMap(({ id: team }) =>
 
 test('a picture goes where its card is, with words; in private it stays out', async () => {
   await bot.people.slash(LINE);
-  await until(() => bot.platform.pictures.length === 1, 'a picture');
+  await until(() => bot.platform.pictures.length === EACH, 'the pictures');
   const [picture] = bot.platform.pictures;
   expect(picture).toMatchObject({ channel: 'C0FLOORSHOP', thread: null, alt: PICTURE.alt });
   expect(picture?.bytes).toBeGreaterThanOrEqual(PICTURE.bytes.length);
@@ -34,18 +38,23 @@ test('a picture goes where its card is, with words; in private it stays out', as
   await bot.people.slash(`${LINE} only me`);
   await until(() => bot.platform.posted.length > before, 'the private answer');
   await bot.people.mention(LINE, { thread: '1790000000.000500' });
-  await until(() => bot.platform.pictures.length === 2, 'the picture in the thread');
-  expect(bot.platform.pictures[1]?.thread).toBe('1790000000.000500');
+  await until(() => bot.platform.pictures.length === 2 * EACH, 'the pictures in the thread');
+  expect(bot.platform.pictures[EACH]?.thread).toBe('1790000000.000500');
   await new Promise((done) => setTimeout(done, 150));
-  expect(bot.platform.pictures).toHaveLength(2);
+  expect(bot.platform.pictures).toHaveLength(2 * EACH);
 });
 
-test('a picture that cannot be sent is counted, and the card stands', async () => {
+test('a picture that cannot be sent is counted, and the card says that nothing else is missing', async () => {
   const before = bot.platform.posted.length;
+  const pictures = bot.platform.pictures.length;
+  const card = () => readable(bot.platform.posted[before]?.body ?? '');
   bot.platform.meet('files.getUploadURLExternal', { error: 'missing_scope' });
   await bot.people.slash(LINE);
-  await until(() => bot.faults.length === 1, 'the counted fault');
+  await until(() => card().includes(en.terminal.noPicture), 'the sentence on the card');
+  expect(card()).toContain('Turn to 0.9852 in: 65 teeth');
   expect(bot.platform.posted.length).toBe(before + 1);
+  expect(bot.platform.pictures.length).toBe(pictures + EACH - 1);
+  expect(bot.faults.map(({ what }) => what)).toEqual(['picture']);
   bot.faults.length = 0;
 });
 
