@@ -15,6 +15,8 @@ export type Chats = {
   readonly render: Renderer;
   readonly log: Log;
   readonly print: (line: string) => void;
+  /** A platform is gone for good, in a sentence; nothing brings it back but another start. */
+  readonly onEnded: (sentence: string) => void;
 };
 
 type Started = { readonly stop: () => Promise<void> };
@@ -32,6 +34,12 @@ export const sentencesFor = (book: Book, faults: readonly ConfigFault[]): readon
 
 const nameOf = (error: unknown): string => (error instanceof Error ? error.name : 'unknown fault');
 
+const sentenceOf = (book: Book, platform: string, error: unknown): string => {
+  if (error instanceof SlackTokenRefused) return book.chat.tokenWrong(error.variable);
+  if (error instanceof DiscordTokenRefused) return book.chat.tokenWrong('DISCORD_TOKEN');
+  return book.chat.cannotStart(platform, nameOf(error));
+};
+
 const started = async <T extends Started>(
   { book, print }: Chats,
   platform: string,
@@ -43,11 +51,7 @@ const started = async <T extends Started>(
     print(book.chat.connected(platform, shopsOf(running)));
     return running;
   } catch (error) {
-    if (error instanceof SlackTokenRefused)
-      throw new ChatFault(book.chat.tokenWrong(error.variable));
-    if (error instanceof DiscordTokenRefused)
-      throw new ChatFault(book.chat.tokenWrong('DISCORD_TOKEN'));
-    throw new ChatFault(book.chat.cannotStart(platform, nameOf(error)));
+    throw new ChatFault(sentenceOf(book, platform, error));
   }
 };
 
@@ -71,8 +75,17 @@ export const startChats = async (chats: Chats, { discord, slack }: Config): Prom
     if (discord !== null) {
       const { token, api } = discord;
       const desk = deskFor('discord');
-      const opening = openDiscord({ token, api, desk, book, log, draw });
-      running.push(await started(chats, 'Discord', opening, ({ shops }) => shops));
+      const onEnded = (error: Error): void => {
+        chats.onEnded(
+          error instanceof DiscordTokenRefused
+            ? sentenceOf(book, 'Discord', error)
+            : book.chat.connectionEnded('Discord'),
+        );
+      };
+      const opening = openDiscord({ token, api, desk, book, log, draw, onEnded });
+      const opened = await started(chats, 'Discord', opening, ({ shops }) => shops);
+      running.push(opened);
+      deliverers.push({ platform: 'discord', shops: null, deliver: opened.deliver });
     }
   } catch (error) {
     await stop();

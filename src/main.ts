@@ -56,6 +56,7 @@ const chat = async (config: Config): Promise<void> => {
   const onFault = (error: unknown): void => log.fault('records', { error });
   // Nothing is delivered before there is a platform to deliver it to.
   let nudge = (): void => undefined;
+  let end = (): void => process.exit(1);
   const running = await startChats(
     {
       book: en,
@@ -70,6 +71,10 @@ const chat = async (config: Config): Promise<void> => {
       render,
       log,
       print: (line) => process.stdout.write(`${line}\n`),
+      onEnded: (sentence) => {
+        process.stderr.write(`${sentence}\n`);
+        end();
+      },
     },
     config,
   ).catch(async (error: unknown) => {
@@ -79,18 +84,19 @@ const chat = async (config: Config): Promise<void> => {
   const deliveries = openDeliveries(store, running.deliverers, { now: Date.now, onFault });
   nudge = deliveries.nudge;
   deliveries.start();
-  const stop = (): void => {
+  const stop = (code: number): void => {
     deliveries
       .stop()
       .then(() => running.stop())
       .then(() => store.close())
       .then(
-        () => process.exit(0),
+        () => process.exit(code),
         () => process.exit(1),
       );
   };
-  process.once('SIGINT', stop);
-  process.once('SIGTERM', stop);
+  end = () => stop(1);
+  process.once('SIGINT', () => stop(0));
+  process.once('SIGTERM', () => stop(0));
 };
 
 /** The local channel is a shop of its own, with records like any other. */

@@ -5,6 +5,7 @@ import {
   type Context,
   cardReply,
   defineCommand,
+  type Named,
   parameterOf,
   type Reply,
   ROLES,
@@ -23,6 +24,7 @@ import {
   removePerson,
   type ShopPerson,
 } from '../../src/shop/index.ts';
+import { nearestOf, plainText } from '../../src/words/index.ts';
 import { nameless, withWord } from './lists.ts';
 import { nameField, newName, type Others } from './named.ts';
 import { refused, shopCard, visiting } from './visit.ts';
@@ -74,12 +76,12 @@ const list = defineCommand({
 });
 
 const found = async (
-  { shop }: Visit,
+  { shop, outsideId }: Visit,
   called: string | undefined,
   then: (person: ShopPerson) => Promise<Reply>,
 ): Promise<Reply> => {
   if (called === undefined) return refused(nameless(NAME));
-  const person = await findPerson(shop, called);
+  const person = await findPerson(shop, outsideId(called));
   return person.ok ? await then(person.value) : refused(withWord(person.refusal, called));
 };
 
@@ -129,9 +131,10 @@ const add = defineCommand({
   lead,
   allowed: 'owner',
   run: (context, given) =>
-    visiting(context, async ({ shop, outsideId }) => {
+    visiting(context, async ({ shop, outsideId, directory }) => {
       if (given.name === undefined) return refused(nameless(NAME));
-      const who = { outside: outsideId(given.name), name: given.name };
+      const name = directory?.person(given.name)?.name ?? given.name;
+      const who = { outside: outsideId(given.name), name };
       const met = await meetPerson(shop, who, given.role ?? 'operator');
       return met.ok ? named(context, met.value.name, met.value.role) : refused(met.refusal);
     }),
@@ -181,6 +184,23 @@ const none = said<true>({
 });
 const groupOthers: Others = () => [parameterOf(role), parameterOf(none)];
 
+/** The group as the platform knows it; a platform that says nothing takes any name. */
+const groupCalled = ({ directory }: Visit, called: string): Named | null =>
+  directory === null ? { id: called, name: called } : directory.group(called);
+
+/** One that the platform has given up is still on the shop's own list. */
+const ungrouped = async (context: Context, visit: Visit, called: string): Promise<Reply> => {
+  const { shop } = visit;
+  const listed = (await listGroups(shop)).find(
+    ({ name: each }) => plainText(each) === plainText(called),
+  );
+  const outside = groupCalled(visit, called)?.id ?? listed?.outside ?? called;
+  const removed = await removeGroup(shop, outside);
+  if (!removed.ok) return refused(withWord(removed.refusal, called));
+  const headline = line('done', { did: 'removed', what: 'group', name: removed.value.name });
+  return cardReply(shopCard(context, { verb: 'people', headline }));
+};
+
 /** Gives the members of a platform's own group a role, or takes it from them. */
 const group = defineCommand({
   path: ['shop', 'people', 'group'],
@@ -189,18 +209,20 @@ const group = defineCommand({
   lead: { name: 'name', read: newName(groupOthers) },
   allowed: 'owner',
   run: (context, given) =>
-    visiting(context, async ({ shop }) => {
+    visiting(context, async (visit) => {
       const called = given.name;
       if (called === undefined) return refused(nameless('Leads'));
-      if (given.none === true) {
-        const removed = await removeGroup(shop, called);
-        if (!removed.ok) return refused(withWord(removed.refusal, called));
-        const headline = line('done', { did: 'removed', what: 'group', name: removed.value.name });
-        return cardReply(shopCard(context, { verb: 'people', headline }));
-      }
+      if (given.none === true) return await ungrouped(context, visit, called);
       if (given.role === undefined) return refused(roleless);
-      const result = await nameGroupRole(shop, { outside: called, name: called }, given.role);
-      return result.ok ? named(context, called, given.role) : refused(result.refusal);
+      const found = groupCalled(visit, called);
+      if (found === null) {
+        const names = (visit.directory?.groups() ?? []).map((each) => each.name);
+        const nearest = nearestOf(plainText(called), names);
+        return refused(withWord({ code: 'notFound', what: 'group', nearest }, called));
+      }
+      const { id: outside, name: its } = found;
+      const result = await nameGroupRole(visit.shop, { outside, name: its }, given.role);
+      return result.ok ? named(context, its, given.role) : refused(result.refusal);
     }),
 });
 

@@ -8,6 +8,16 @@ export type Person = {
   readonly manages?: boolean;
 };
 
+/** Somebody, or a group of people, by the platform's own id. */
+export type Named = { readonly id: string; readonly name: string };
+
+/** Whom the platform itself knows by what is typed: a mention, an id, a name. */
+export type Directory = {
+  readonly person: (called: string) => Named | null;
+  readonly group: (called: string) => Named | null;
+  readonly groups: () => readonly Named[];
+};
+
 /** A file that came with a request, as text. */
 export type Attached = { readonly name: string; readonly text: string };
 
@@ -27,6 +37,8 @@ export type Call = {
   /** One interaction acts once, however often the platform sends it. */
   readonly interactionId: string;
   readonly attached?: readonly Attached[];
+  /** Where not said, what is typed is the id. */
+  readonly directory?: Directory;
   readonly given: /** A line of plain words, with or without its slash command. */
     | { readonly words: string }
     /** Named options of a form: each is read with the same words as a line. */

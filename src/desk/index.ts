@@ -1,5 +1,14 @@
 export { type Answer, choicesIn } from './answer.ts';
-export type { Attached, Call, Options, Person, Place, Pressed } from './call.ts';
+export type {
+  Attached,
+  Call,
+  Directory,
+  Named,
+  Options,
+  Person,
+  Place,
+  Pressed,
+} from './call.ts';
 export {
   type About,
   type Command,

@@ -119,9 +119,11 @@ export const openRecordsDesk = (
           now(),
         );
         const settings = await settingsOf(shop);
-        const { outsideId = (called: string) => called } = options;
+        const { directory = null } = call;
+        const outsideId = (called: string): string =>
+          directory?.person(called)?.id ?? options.outsideId?.(called) ?? called;
         const { person: who, role } = entered;
-        return await act(shop, { shop, settings, person: who, role, outsideId });
+        return await act(shop, { shop, settings, person: who, role, outsideId, directory });
       },
       { repeatable: true },
     );

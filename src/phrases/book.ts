@@ -2,6 +2,7 @@ import type { CautionId, CheckName, CheckOf, State } from '../calc/index.ts';
 import type { LabelId, Labels, LineId, Lines, RowId, Rows } from '../card/index.ts';
 import type { Contradiction, Refusal } from '../refusal.ts';
 import type { ChatPhrases, ConfigPhrases } from './chat.ts';
+import type { DiscordPhrases } from './discord.ts';
 import type { PicturePhrases } from './picturePhrases.ts';
 import type { RecordsPhrases } from './records.ts';
 import type { Show } from './show.ts';
@@ -35,6 +36,7 @@ export type Book = {
   /** What a parameter is called, by its name. */
   readonly parameters: Readonly<Record<string, string>>;
   readonly chat: ChatPhrases;
+  readonly discord: DiscordPhrases;
   readonly slack: SlackPhrases;
   readonly config: ConfigPhrases;
   readonly records: RecordsPhrases;

@@ -24,6 +24,7 @@ export type ChatPhrases = {
   readonly connected: (platform: string, shops: number) => string;
   readonly tokenWrong: (variable: string) => string;
   readonly cannotStart: (platform: string, fault: string) => string;
+  readonly connectionEnded: (platform: string) => string;
   readonly registration: RegistrationPhrases;
 };
 

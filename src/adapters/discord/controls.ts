@@ -1,15 +1,17 @@
 import type { ButtonInteraction, ModalSubmitInteraction } from 'discord.js';
+import { unreachable } from '../../card/index.ts';
 import { type Answer, type Call, type Desk, route } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
 import { type ControlId, readId } from '../common/ids.ts';
-import { cautionsOf, parameterName, sentence } from '../common/spoken.ts';
+import { cautionsOf, sentence } from '../common/spoken.ts';
 import { within } from '../common/within.ts';
 import type { Flow } from './flow.ts';
+import { askingForm, correctionForm, filledIn, type ModalForm } from './form.ts';
+import { withMentions } from './mentions.ts';
 import { callOf, handleOf, WORDS_OPTION } from './receive.ts';
-import { formOfFields } from './render.ts';
-import type { Sender } from './send.ts';
+import type { Handle, Sender } from './send.ts';
 
-type Controls = {
+export type Controls = {
   readonly desk: Desk;
   readonly book: Book;
   readonly flow: Flow;
@@ -21,34 +23,83 @@ const RECALL_MS = 900;
 
 const NOTHING: Call['given'] = { words: '' };
 
-/** What a choice still has to be told before its line can be sent. */
-const askedBy = (answer: Answer | null, choice: number): readonly string[] =>
-  answer?.kind === 'card' ? (answer.card.choices[choice]?.ask ?? []) : [];
+type At = {
+  readonly handle: Handle;
+  readonly call: Call;
+  readonly since: number;
+};
 
 /** The form of a choice that needs more words: fields from its command's own parameters. */
 const choiceForm = (
   { desk, book }: Controls,
   control: Extract<ControlId, { control: 'press' }>,
   answer: Answer | null,
-) => {
-  const ask = askedBy(answer, control.choice);
-  if (answer?.kind !== 'card' || ask.length === 0) return null;
-  const way = route(answer.card.choices[control.choice]?.words ?? '', desk.fleet);
-  const parameters = 'command' in way ? way.command.parameters : [];
-  const fields = ask.map((name) => {
-    const parameter = parameters.find((each) => each.name === name);
-    const example = parameter?.examples.join(', ') ?? '';
-    return { name, label: parameterName(book, name), example };
-  });
-  return formOfFields(control, book.chat.formTitle, fields);
+): ModalForm | null => {
+  if (answer?.kind !== 'card') return null;
+  const { ask = [], words = '' } = answer.card.choices[control.choice] ?? {};
+  const way = route(words, desk.fleet);
+  return ask.length === 0 || !('command' in way)
+    ? null
+    : askingForm(book, control, way.command, ask);
 };
 
-const correctionForm = ({ book }: Controls, control: ControlId, answer: Answer | null) => {
-  if (answer?.kind !== 'refusal') return null;
-  const { correctTitle, correctField } = book.chat;
-  return formOfFields(control, correctTitle, [
-    { name: WORDS_OPTION, label: correctField, example: '', value: answer.text, long: true },
-  ]);
+/** In a direct message the button says whose it is; they have to be a member still. */
+const inItsShop = async (
+  { sender }: Controls,
+  call: Call,
+  control: ControlId | null,
+): Promise<Call | null> => {
+  const { shop } = control ?? {};
+  if (shop === undefined || call.shop !== '') return call;
+  const member = await within(sender.member(shop, call.person.id), RECALL_MS, null);
+  if (member === null) return null;
+  const person = { id: call.person.id, name: member.name, groups: member.roles };
+  return { ...call, shop, person };
+};
+
+const openForm = async ({ sender, flow }: Controls, { handle, call }: At, form: ModalForm) => {
+  const taken = await sender.form(handle, form);
+  if (taken === 'tooLate') await flow.formLate(handle, call);
+};
+
+/** What a button does that still has something behind it; false where it has not. */
+const act = async (controls: Controls, at: At, control: ControlId): Promise<boolean> => {
+  const { desk, book, flow } = controls;
+  const { handle, call, since } = at;
+  // A form cannot follow a deferral: records that are slow leave no time for one.
+  const recalled = await within(desk.recall(call, control.of), RECALL_MS, null);
+  switch (control.control) {
+    case 'cautions': {
+      const card = cautionsOf(recalled, book);
+      if (card === null) return false;
+      await flow.say(handle, call, card);
+      return true;
+    }
+    case 'correct': {
+      if (recalled?.kind !== 'refusal') return false;
+      await openForm(controls, at, correctionForm(book, control, recalled.text));
+      return true;
+    }
+    case 'show': {
+      if (recalled === null) return false;
+      await (control.person === call.person.id
+        ? flow.show(handle, call, recalled, control.of)
+        : flow.say(handle, call, sentence(book.discord.notYours)));
+      return true;
+    }
+    case 'press': {
+      const form = choiceForm(controls, control, recalled);
+      if (form !== null) {
+        await openForm(controls, at, form);
+        return true;
+      }
+      const given = { pressed: { of: control.of, choice: control.choice } };
+      await flow.answer(handle, { ...call, given }, since);
+      return true;
+    }
+    default:
+      return unreachable(control);
+  }
 };
 
 /** A button: of the newest answer or of one from weeks ago. */
@@ -56,69 +107,41 @@ export const pressed = async (
   controls: Controls,
   interaction: ButtonInteraction,
 ): Promise<void> => {
-  const { desk, book, flow, sender } = controls;
   const since = performance.now();
   const control = readId(interaction.customId);
   const handle = handleOf(interaction);
-  const call = callOf(interaction, NOTHING, control?.isPrivate ?? true);
-  const gone = () => flow.say(handle, call, sentence(book.chat.gone));
-  if (control === null) {
-    await gone();
-    return;
-  }
-  const { of } = control;
-  // A form cannot follow a deferral: records that are slow leave no time for one.
-  const recalled = within(desk.recall(call, of), RECALL_MS, null);
-  switch (control.control) {
-    case 'cautions': {
-      const card = cautionsOf(await recalled, book);
-      await (card === null ? gone() : flow.say(handle, call, card));
-      return;
-    }
-    case 'correct': {
-      const form = correctionForm(controls, control, await recalled);
-      await (form === null ? gone() : sender.form(handle, form));
-      return;
-    }
-    case 'press': {
-      const form = choiceForm(controls, control, await recalled);
-      if (form !== null) {
-        await sender.form(handle, form);
-        return;
-      }
-      const given = { pressed: { of, choice: control.choice } };
-      await flow.answer(handle, { ...call, given }, since);
-    }
-  }
+  const asked = callOf(interaction, NOTHING, control?.isPrivate ?? true);
+  const call = await inItsShop(controls, asked, control);
+  const isDone =
+    control !== null && call !== null && (await act(controls, { handle, call, since }, control));
+  if (!isDone) await controls.flow.say(handle, asked, sentence(controls.book.chat.gone));
 };
 
-/** The fields of a form that were filled in. */
-const filledIn = (interaction: ModalSubmitInteraction): Readonly<Record<string, string>> =>
-  Object.fromEntries(
-    [...interaction.fields.fields.values()].flatMap((field) => {
-      const typed = 'value' in field && typeof field.value === 'string' ? field.value.trim() : '';
-      return typed === '' ? [] : [[field.customId, typed] as const];
-    }),
-  );
+const givenBy = (
+  control: ControlId,
+  added: Readonly<Record<string, string>>,
+): Call['given'] | null => {
+  if (control.control === 'press')
+    return { pressed: { of: control.of, choice: control.choice, added } };
+  const words = added[WORDS_OPTION];
+  return control.control === 'correct' && words !== undefined ? { words } : null;
+};
 
 /** A form that was sent: the corrected line, or a choice with what it asked for. */
 export const submitted = async (
-  { book, flow }: Controls,
+  controls: Controls,
   interaction: ModalSubmitInteraction,
 ): Promise<void> => {
+  const { book, flow } = controls;
+  const since = performance.now();
   const control = readId(interaction.customId);
   const handle = handleOf(interaction);
-  const call = callOf(interaction, NOTHING, control?.isPrivate ?? true);
-  const added = filledIn(interaction);
-  if (control?.control === 'press') {
-    const given = { pressed: { of: control.of, choice: control.choice, added } };
-    await flow.answer(handle, { ...call, given });
+  const asked = callOf(interaction, NOTHING, control?.isPrivate ?? true);
+  const call = await inItsShop(controls, asked, control);
+  const given = control === null ? null : givenBy(control, filledIn(interaction));
+  if (given === null || call === null) {
+    await flow.say(handle, asked, sentence(book.chat.nothingToRead));
     return;
   }
-  const words = added[WORDS_OPTION];
-  if (control?.control !== 'correct' || words === undefined) {
-    await flow.say(handle, call, sentence(book.chat.nothingToRead));
-    return;
-  }
-  await flow.answer(handle, { ...call, given: { words } });
+  await flow.answer(handle, await withMentions({ ...call, given }, interaction.guild), since);
 };

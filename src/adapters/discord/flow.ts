@@ -2,16 +2,13 @@ import { setTimeout as pause } from 'node:timers/promises';
 import type { Answer, Call, Desk } from '../../desk/index.ts';
 import type { Book, SpokenCard } from '../../phrases/index.ts';
 import type { Log } from '../common/log.ts';
-import type { Drawn } from '../common/pieces.ts';
 import { hasMoreCautions, sentence, spoken } from '../common/spoken.ts';
-import { faultText, isRefused } from './faults.ts';
+import { faultText, isOver, isRefused } from './faults.ts';
 import { LIMITS } from './limits.ts';
-import { channelOf } from './receive.ts';
+import { addPictures, type Draw, type Standing } from './pictures.ts';
+import { channelOf } from './places.ts';
 import { type ExtraButton, type Message, render, type Shown } from './render.ts';
 import type { Acknowledged, Handle, Sender } from './send.ts';
-
-/** Draws what an answer shows; nothing where it shows nothing. */
-export type Draw = (answer: Answer) => Promise<readonly Drawn[]>;
 
 export type FlowOptions = {
   readonly desk: Desk;
@@ -27,12 +24,15 @@ export type FlowOptions = {
 type Reply = {
   readonly card: SpokenCard;
   readonly isPrivate: boolean;
-  readonly pictures: readonly Drawn[];
   readonly extra: readonly ExtraButton[];
+  /** The interaction whose answer it is. */
+  readonly of: string;
+  /** None where the adapter says something of its own. */
+  readonly answer: Answer | null;
 };
 
-const extrasOf = (answer: Answer, call: Call, book: Book): readonly ExtraButton[] => {
-  const common = { of: call.interactionId, isPrivate: call.place.isPrivate };
+const extrasOf = (answer: Answer, call: Call, of: string, book: Book): readonly ExtraButton[] => {
+  const common = { of, isPrivate: call.place.isPrivate };
   if (answer.kind === 'card')
     return hasMoreCautions(answer)
       ? [{ control: { ...common, control: 'cautions' }, label: book.chat.cautions }]
@@ -44,31 +44,44 @@ const extrasOf = (answer: Answer, call: Call, book: Book): readonly ExtraButton[
 };
 
 export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOptions) => {
-  const plain = (card: SpokenCard): Reply => ({ card, isPrivate: true, pictures: [], extra: [] });
+  const own = (call: Call, card: SpokenCard, extra: readonly ExtraButton[] = []): Reply => ({
+    card,
+    isPrivate: true,
+    extra,
+    of: call.interactionId,
+    answer: null,
+  });
+
+  const replyOf = (call: Call, answer: Answer, of = call.interactionId): Reply => ({
+    card: spoken(answer, book),
+    // A refusal is between the bot and whoever asked.
+    isPrivate: call.place.isPrivate || answer.kind === 'refusal',
+    extra: extrasOf(answer, call, of, book),
+    of,
+    answer,
+  });
 
   const replyFor = async (call: Call): Promise<Reply> => {
     try {
-      const answer = await desk.answer(call);
-      return {
-        card: spoken(answer, book),
-        // A refusal is between the bot and whoever asked.
-        isPrivate: call.place.isPrivate || answer.kind === 'refusal',
-        pictures: await draw(answer),
-        extra: extrasOf(answer, call, book),
-      };
+      return replyOf(call, await desk.answer(call));
     } catch (error) {
       log.fault('answer', { interaction: call.interactionId, fault: faultText(error), error });
-      return plain(sentence(book.chat.fault));
+      return own(call, sentence(book.chat.fault));
     }
   };
 
-  const shownAs = (call: Call, reply: Reply): Shown => ({
-    card: reply.card,
-    of: call.interactionId,
-    pictures: reply.pictures,
-    extra: reply.extra,
-    isPrivate: reply.isPrivate,
+  const shownAs = (call: Call, { card, of, extra, isPrivate }: Reply): Shown => ({
+    card,
+    of,
+    extra,
+    isPrivate,
     wasPrivate: call.place.isPrivate,
+  });
+
+  /** The answer was made and is kept: whoever asked can still have it. */
+  const showButton = ({ of }: Reply, call: Call): ExtraButton => ({
+    control: { control: 'show', of, isPrivate: true, person: call.person.id },
+    label: book.discord.showMe,
   });
 
   /** In the channel: what has no private side, or came too late for it. */
@@ -76,22 +89,35 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
     call: Call,
     messages: readonly Message[],
     { from = 0, replyTo }: { from?: number; replyTo?: string } = {},
-  ): Promise<void> => {
+  ): Promise<Standing | null> => {
     const place = channelOf(call.place);
+    let first: Standing | null = null;
     for (const [index, message] of messages.entries()) {
-      const nonce = `${call.interactionId}-${String(from + index)}`;
-      await sender.post(place, message, nonce, replyTo);
+      const key = `${call.interactionId} ${String(from + index)}`;
+      const sent = await sender.post(place, message, key, replyTo === undefined ? {} : { replyTo });
+      first ??= { message, change: (changed) => sender.edit(sent, changed) };
     }
+    return first;
   };
 
-  /** The interaction is over: what is not private is said in the channel to whoever asked. */
-  const late = async (handle: Handle, call: Call, reply: Reply): Promise<void> => {
+  /**
+   * The interaction is over. What is not private is said in the channel to whoever asked; of what
+   * is, only that it is ready.
+   */
+  const late = async (handle: Handle, call: Call, reply: Reply): Promise<Standing | null> => {
     const rings = { users: [handle.person] };
-    // A refusal may be said again when asked again; a private answer never becomes public.
-    const said = reply.isPrivate
-      ? { ...shownAs(call, plain(sentence(book.chat.tooLate))), isPrivate: false, rings }
-      : { ...shownAs(call, reply), rings, note: book.chat.lateAnswer };
-    await inChannel(call, render(said));
+    if (!reply.isPrivate) {
+      const shown = { ...shownAs(call, reply), rings, note: book.chat.lateAnswer };
+      return await inChannel(call, render(shown));
+    }
+    const kept = reply.answer !== null;
+    const ready = own(
+      call,
+      sentence(kept ? book.discord.answerReady : book.chat.tooLate),
+      kept ? [showButton(reply, call)] : [],
+    );
+    await inChannel(call, render({ ...shownAs(call, ready), isPrivate: false, rings }));
+    return null;
   };
 
   /** Messages after the first. */
@@ -116,56 +142,71 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
     }
   };
 
+  const original = (handle: Handle, message: Message): Standing => ({
+    message,
+    change: (changed) => sender.editOriginal(handle, changed),
+  });
+
   /** After a deferral: the reply takes the place of the waiting message, if it may be seen there. */
   const settle = async (
     handle: Handle,
     call: Call,
     reply: Reply,
     [first, ...rest]: readonly Message[],
-  ): Promise<void> => {
-    if (first === undefined) return;
+  ): Promise<Standing | null> => {
+    if (first === undefined) return null;
     if (reply.isPrivate && !call.place.isPrivate) {
       await sender.deleteOriginal(handle);
       await sender.followUp(handle, first);
-    } else await sender.editOriginal(handle, first);
+      await others(handle, call, rest, true);
+      return null;
+    }
+    await sender.editOriginal(handle, first);
     await others(handle, call, rest, reply.isPrivate);
+    return original(handle, first);
   };
 
-  const isOver = (error: unknown): boolean =>
-    isRefused(error, 'unknownInteraction', 'unknownWebhook', 'unknownMessage', 'expiredToken');
-
+  /** Sends a reply, and gives back the message that pictures can be added to. */
   const deliver = async (
     handle: Handle,
     call: Call,
     reply: Reply,
     deferred: Acknowledged | null,
-  ): Promise<void> => {
+  ): Promise<Standing | null> => {
     const messages = render(shownAs(call, reply));
     const [first, ...rest] = messages;
-    if (first === undefined) return;
-    if (deferred === 'before') return;
-    if (deferred === 'tooLate') {
-      await late(handle, call, reply);
-      return;
-    }
+    if (first === undefined || deferred === 'before') return null;
+    if (deferred === 'tooLate') return await late(handle, call, reply);
     if (deferred === 'taken') {
       try {
-        await settle(handle, call, reply, messages);
+        return await settle(handle, call, reply, messages);
       } catch (error) {
         if (!isOver(error)) throw error;
-        await late(handle, call, reply);
+        return await late(handle, call, reply);
       }
-      return;
     }
     const taken = await sender.reply(handle, first);
-    if (taken === 'tooLate') await late(handle, call, reply);
-    if (taken === 'taken') await others(handle, call, rest, reply.isPrivate);
+    if (taken === 'before') return null;
+    if (taken === 'tooLate') return await late(handle, call, reply);
+    await others(handle, call, rest, reply.isPrivate);
+    return original(handle, first);
   };
 
-  /** The last resort: one short sentence, by whichever way is still open. */
-  const excuse = async (handle: Handle, call: Call, error: unknown): Promise<void> => {
+  /** One short sentence: what was asked for is done and kept, or it failed and nothing changed. */
+  const excuseFor = (call: Call, reply: Reply): Reply =>
+    reply.answer === null
+      ? own(call, sentence(book.chat.fault))
+      : own(call, sentence(book.discord.unsent), [showButton(reply, call)]);
+
+  /** The last resort, by whichever way is still open. */
+  const excuse = async (
+    handle: Handle,
+    call: Call,
+    reply: Reply,
+    error: unknown,
+  ): Promise<void> => {
     log.fault('send', { interaction: call.interactionId, fault: faultText(error) });
-    const [message] = render(shownAs(call, plain(sentence(book.chat.fault))));
+    const [message] = render(shownAs(call, excuseFor(call, reply)));
     if (message === undefined) return;
     try {
       const taken = await sender.reply(handle, message);
@@ -173,6 +214,17 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
     } catch (second) {
       log.fault('excuse', { interaction: call.interactionId, fault: faultText(second) });
     }
+  };
+
+  const withPictures = async (
+    call: Call,
+    { answer }: Reply,
+    standing: Standing | null,
+  ): Promise<void> => {
+    if (answer === null || standing === null) return;
+    const onFault = (error: unknown): void =>
+      log.fault('picture', { interaction: call.interactionId, fault: faultText(error) });
+    await addPictures({ draw, noPicture: book.terminal.noPicture, onFault }, answer, standing);
   };
 
   /** Waits for an answer as long as the platform allows, and then without holding anybody up. */
@@ -184,14 +236,17 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
   ): Promise<void> => {
     const patience = new AbortController();
     const left = Math.max(0, deferAfterMs - (performance.now() - since));
+    const early = await Promise.race([making, pause(left, null, { signal: patience.signal })]);
+    patience.abort();
+    let standing: Standing | null = null;
     try {
-      const early = await Promise.race([making, pause(left, null, { signal: patience.signal })]);
-      patience.abort();
       const deferred = early === null ? await sender.defer(handle, call.place.isPrivate) : null;
-      await deliver(handle, call, early ?? (await making), deferred);
+      standing = await deliver(handle, call, early ?? (await making), deferred);
     } catch (error) {
-      await excuse(handle, call, error);
+      await excuse(handle, call, await making, error);
+      return;
     }
+    await withPictures(call, early ?? (await making), standing);
   };
 
   return {
@@ -201,24 +256,39 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
 
     /** Something said without asking the desk. */
     say: (handle: Handle, call: Call, card: SpokenCard): Promise<void> =>
-      answering(handle, call, Promise.resolve(plain(card)), performance.now()),
+      answering(handle, call, Promise.resolve(own(call, card)), performance.now()),
+
+    /** An answer that was given before, to whom it is for. */
+    show: (handle: Handle, call: Call, answer: Answer, of: string): Promise<void> =>
+      answering(handle, call, Promise.resolve(replyOf(call, answer, of)), performance.now()),
+
+    /** The platform gave no time for a form: said where everybody may see it, to whoever pressed. */
+    formLate: async (handle: Handle, call: Call): Promise<void> => {
+      const shown = shownAs(call, own(call, sentence(book.discord.formLate)));
+      const rings = { users: [handle.person] };
+      await inChannel(call, render({ ...shown, isPrivate: false, rings }));
+    },
 
     /** A message in a channel: there is nothing to acknowledge, and no private reply. */
     answerMessage: async (call: Call, message: string): Promise<void> => {
       const reply = await replyFor(call);
-      const shown = { ...shownAs(call, reply), isPrivate: false };
+      let standing: Standing | null = null;
       try {
-        await inChannel(call, render(shown), { replyTo: message });
+        const shown = { ...shownAs(call, reply), isPrivate: false };
+        standing = await inChannel(call, render(shown), { replyTo: message });
       } catch (error) {
         log.fault('send', { interaction: call.interactionId, fault: faultText(error) });
-        const excuseFor = shownAs(call, plain(sentence(book.chat.fault)));
-        await inChannel(call, render({ ...excuseFor, isPrivate: false }), { from: 9 }).catch(
-          (second: unknown) => {
-            log.fault('excuse', { interaction: call.interactionId, fault: faultText(second) });
-          },
-        );
+        const shown = { ...shownAs(call, excuseFor(call, reply)), isPrivate: false };
+        await inChannel(call, render(shown), { from: EXCUSE_FROM }).catch((second: unknown) => {
+          log.fault('excuse', { interaction: call.interactionId, fault: faultText(second) });
+        });
+        return;
       }
+      await withPictures(call, reply, standing);
     },
   };
 };
 export type Flow = ReturnType<typeof openFlow>;
+
+/** Apart from the messages of any card. */
+const EXCUSE_FROM = 900;

@@ -1,26 +1,18 @@
-import {
-  type AutocompleteInteraction,
-  type ChatInputCommandInteraction,
-  Client,
-  type Message as DiscordMessage,
-  Events,
-  GatewayIntentBits,
-  type Interaction,
-  type MessageContextMenuCommandInteraction,
-  Options,
-} from 'discord.js';
-import type { Desk } from '../../desk/index.ts';
+import { Client, Events, GatewayIntentBits, Options } from 'discord.js';
+import type { Desk, Effect } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
+import type { Delivering, Delivery } from '../common/delivery.ts';
 import type { Log } from '../common/log.ts';
-import { sentence } from '../common/spoken.ts';
-import { within } from '../common/within.ts';
-import { pressed, submitted } from './controls.ts';
+import { type Once, onceInProcess } from '../common/once.ts';
+import { login, watch } from './connect.ts';
+import { deliverEffect } from './effects.ts';
 import { faultText } from './faults.ts';
-import { type Draw, openFlow } from './flow.ts';
-import { LIMITS } from './limits.ts';
-import { callOf, focusedIn, handleOf, isForBot, messageCall, typedIn, wordsOf } from './receive.ts';
+import { openFlow } from './flow.ts';
+import { openListeners } from './listen.ts';
+import type { Draw } from './pictures.ts';
 import { openSender } from './send.ts';
 
+export { TokenRefused } from './connect.ts';
 export { register } from './register.ts';
 
 export type DiscordOptions = {
@@ -32,16 +24,19 @@ export type DiscordOptions = {
   readonly log: Log;
   readonly draw?: Draw;
   readonly deferAfterMs?: number;
+  /** Of the records, where several processes share the work. */
+  readonly once?: Once;
+  /** The connection is gone for good. */
+  readonly onEnded?: (error: Error) => void;
 };
 
 export type Discord = {
   /** How many servers it is in. */
   readonly shops: number;
+  /** Makes an effect happen that was queued with a change. */
+  readonly deliver: (effect: Effect, delivering: Delivering) => Promise<Delivery>;
   readonly stop: () => Promise<void>;
 };
-
-/** The token is none. */
-export class TokenRefused extends Error {}
 
 /** Judgement: of the three seconds there are, one for the answer and two for the way. */
 const DEFER_AFTER_MS = 1_000;
@@ -68,80 +63,19 @@ const clientOf = ({ api }: DiscordOptions): Client =>
     },
   });
 
-/** Puts the adapter together: what Discord sends becomes calls, what the desk answers messages. */
-const handlersOf = (client: Client<true>, options: DiscordOptions) => {
-  const { desk, book, log, deferAfterMs = DEFER_AFTER_MS } = options;
-  const sender = openSender(client.rest);
-  const draw = options.draw ?? (() => Promise.resolve([]));
-  const flow = openFlow({ desk, book, sender, log, draw, deferAfterMs });
-  const controls = { desk, book, flow, sender };
-
-  const asked = async (interaction: ChatInputCommandInteraction): Promise<void> => {
-    const { path, options: filled, isPrivate } = typedIn(interaction, desk.fleet);
-    const call = callOf(interaction, { path, options: filled }, isPrivate);
-    await flow.answer(handleOf(interaction), call);
-  };
-
-  const fromMessage = async (interaction: MessageContextMenuCommandInteraction): Promise<void> => {
-    const words = wordsOf(interaction.targetMessage.content, client.user.id);
-    const call = callOf(interaction, { words }, false);
-    const handle = handleOf(interaction);
-    await (words === ''
-      ? flow.say(handle, call, sentence(book.chat.nothingToRead))
-      : flow.answer(handle, call));
-  };
-
-  const suggest = async (interaction: AutocompleteInteraction): Promise<void> => {
-    const { path, options: filled } = typedIn(interaction, desk.fleet);
-    const command = desk.fleet.find((each) => each.path.join(' ') === path.join(' '));
-    const call = callOf(interaction, { path, options: filled }, true);
-    const found = desk.suggest(call, focusedIn(interaction, command));
-    const choices = (await within(found, deferAfterMs, []))
-      .filter(({ words }) => words.length <= LIMITS.choiceValue)
-      .slice(0, LIMITS.choices)
-      .map(({ label, words }) => ({ name: label.slice(0, LIMITS.choiceName), value: words }));
-    await sender.suggest(handleOf(interaction), choices);
-  };
-
-  const interaction = async (event: Interaction): Promise<void> => {
-    if (event.isAutocomplete()) await suggest(event);
-    else if (event.isChatInputCommand()) await asked(event);
-    else if (event.isMessageContextMenuCommand()) await fromMessage(event);
-    else if (event.isButton()) await pressed(controls, event);
-    else if (event.isModalSubmit()) await submitted(controls, event);
-  };
-
-  const message = async (event: DiscordMessage): Promise<void> => {
-    if (!isForBot(event, client.user.id)) return;
-    await flow.answerMessage(messageCall(event, client.user.id), event.id);
-  };
-
-  return { interaction, message };
-};
-
-const ready = (client: Client): Promise<Client<true>> =>
-  new Promise((done) => {
-    client.once(Events.ClientReady, done);
-  });
-
-const login = async (client: Client, token: string): Promise<Client<true>> => {
-  const isReady = ready(client);
-  try {
-    await client.login(token);
-  } catch (error) {
-    await client.destroy();
-    const code = error instanceof Error && 'code' in error ? String(error.code) : '';
-    const status = error instanceof Error && 'status' in error ? error.status : null;
-    if (code === 'TokenInvalid' || status === 401) throw new TokenRefused(code);
-    throw error;
-  }
-  return await isReady;
+/** The server of a channel that the client has heard of. */
+const guildIn = (client: Client, channel: string): string | null => {
+  const known = client.channels.cache.get(channel);
+  return known !== undefined && 'guildId' in known ? known.guildId : null;
 };
 
 /** Connects, and answers until stopped. */
 export const openDiscord = async (options: DiscordOptions): Promise<Discord> => {
-  const { token, log } = options;
+  const { token, log, desk, book, once = onceInProcess(), onEnded = () => undefined } = options;
+  const { draw = () => Promise.resolve([]), deferAfterMs = DEFER_AFTER_MS } = options;
   const client = clientOf(options);
+  const sender = openSender(client.rest);
+  const flow = openFlow({ desk, book, sender, log, draw, deferAfterMs });
   const busy = new Set<Promise<void>>();
   /** Nothing that happens to one event may end the program. */
   const kept = (what: string, work: Promise<void>): void => {
@@ -152,21 +86,33 @@ export const openDiscord = async (options: DiscordOptions): Promise<Discord> => 
       .finally(() => busy.delete(watched));
     busy.add(watched);
   };
-  client.on(Events.Error, (error) => log.fault('client', { fault: faultText(error) }));
-  client.on(Events.ShardError, (error) => log.fault('gateway', { fault: faultText(error) }));
-  client.on(Events.ShardReconnecting, (shard) => log.note('reconnecting', { shard }));
-  client.on(Events.ShardResume, (shard, replayed) => log.note('resumed', { shard, replayed }));
   client.once(Events.ClientReady, (connected) => {
-    const handlers = handlersOf(connected, options);
+    const controls = { desk, book, flow, sender };
+    const listening = { ...controls, client: connected, log, once, suggestMs: deferAfterMs };
+    const listeners = openListeners(listening);
     connected.on(Events.InteractionCreate, (event) =>
-      kept('interaction', handlers.interaction(event)),
+      kept('interaction', listeners.interaction(event)),
     );
-    connected.on(Events.MessageCreate, (event) => kept('message', handlers.message(event)));
+    connected.on(Events.MessageCreate, (event) => kept('message', listeners.message(event)));
   });
-  const connected = await login(client, token);
+  let isReady = false;
+  const ended = new Promise<never>((_, failed) => {
+    watch(client, log, (error) => {
+      failed(error);
+      if (isReady) onEnded(error);
+    });
+  });
+  // Whoever waits for it hears of it; once everything is there nobody does.
+  ended.catch(() => undefined);
+  const connected = await login(client, token, ended);
+  isReady = true;
   return {
     get shops() {
       return connected.guilds.cache.size;
+    },
+    deliver: (effect, delivering) => {
+      const guildOf = (channel: string): string | null => guildIn(connected, channel);
+      return deliverEffect({ sender, book, guildOf }, effect, delivering);
     },
     stop: async () => {
       await Promise.allSettled(busy);

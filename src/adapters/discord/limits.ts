@@ -27,6 +27,7 @@ export const LIMITS = {
   modalTitle: 45,
   modalLabel: 45,
   modalText: 4000,
+  placeholder: 100,
   nonce: 25,
   threadName: 100,
   /** Pins a channel holds. */
@@ -37,18 +38,23 @@ export const LIMITS = {
 
 /** Codes with which Discord refuses (topics/opcodes-and-status-codes), by what they mean here. */
 export const REFUSALS = {
-  unknownChannel: 10003,
-  unknownGuild: 10004,
-  unknownMessage: 10008,
-  unknownWebhook: 10015,
+  unknownChannel: [10003],
+  unknownGuild: [10004],
+  unknownMember: [10007],
+  unknownMessage: [10008],
+  unknownPerson: [10013],
+  unknownWebhook: [10015],
   /** The time to acknowledge is over. */
-  unknownInteraction: 10062,
-  pinsFull: 30003,
-  alreadyAcknowledged: 40060,
-  missingAccess: 50001,
-  cannotSendToPerson: 50007,
-  missingPermission: 50013,
+  unknownInteraction: [10062],
+  pinsFull: [30003],
+  alreadyAcknowledged: [40060],
+  missingAccess: [50001],
+  /** Their direct messages are closed, or no server is shared. */
+  cannotSendToPerson: [50007, 50278],
+  missingPermission: [50013],
+  /** Not in a channel of this kind, such as a thread in a thread; or no more threads at once. */
+  noThreadHere: [50024, 160006, 160007],
   /** The fifteen minutes of an interaction are over. */
-  expiredToken: 50027,
-  threadExists: 160004,
-} as const;
+  expiredToken: [50027],
+  threadExists: [160004],
+} as const satisfies Readonly<Record<string, readonly number[]>>;

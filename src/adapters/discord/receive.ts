@@ -4,9 +4,10 @@ import {
   type ChatInputCommandInteraction,
   type CommandInteractionOption,
   type Message as DiscordMessage,
+  PermissionFlagsBits,
   type RepliableInteraction,
 } from 'discord.js';
-import type { Call, Command, Options } from '../../desk/index.ts';
+import type { Call, Command, Options, Person } from '../../desk/index.ts';
 import type { Handle } from './send.ts';
 
 /** The option that takes a whole line, and the one that hides the reply. */
@@ -37,13 +38,29 @@ const placeOf = ({ channel, channelId }: Placed, isPrivate: boolean): Call['plac
   };
 };
 
-/** Where a reply to a place goes. */
-export const channelOf = ({ channel, thread }: Call['place']): string => thread ?? channel;
-
 const nameOf = (interaction: BaseInteraction): string => {
   const { member, user } = interaction;
   if (member === null) return user.displayName;
   return 'displayName' in member ? member.displayName : (member.nick ?? user.displayName);
+};
+
+/** Roles of the server, and whether it is theirs to manage; in a direct message there is neither. */
+const standingOf = ({
+  member,
+  memberPermissions,
+  guild,
+  guildId,
+  user,
+}: BaseInteraction): Pick<Person, 'groups' | 'manages'> => {
+  if (member === null) return {};
+  const roles = Array.isArray(member.roles) ? member.roles : [...member.roles.cache.keys()];
+  return {
+    // Everybody has the role that has the server's own id.
+    groups: roles.filter((id) => id !== guildId),
+    manages:
+      guild?.ownerId === user.id ||
+      memberPermissions?.has(PermissionFlagsBits.ManageGuild) === true,
+  };
 };
 
 /** What every call says of who asked and where. */
@@ -53,7 +70,7 @@ export const callOf = (
   isPrivate: boolean,
 ): Call => ({
   shop: interaction.guildId ?? '',
-  person: { id: interaction.user.id, name: nameOf(interaction) },
+  person: { id: interaction.user.id, name: nameOf(interaction), ...standingOf(interaction) },
   place: placeOf(interaction, isPrivate),
   interactionId: interaction.id,
   given,
@@ -127,6 +144,12 @@ export const messageCall = (message: DiscordMessage, bot: string): Call => ({
   person: {
     id: message.author.id,
     name: message.member?.displayName ?? message.author.displayName,
+    ...(message.member === null
+      ? {}
+      : {
+          groups: [...message.member.roles.cache.keys()].filter((id) => id !== message.guildId),
+          manages: message.member.permissions.has(PermissionFlagsBits.ManageGuild),
+        }),
   },
   place: placeOf(message, false),
   interactionId: message.id,

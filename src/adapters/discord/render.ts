@@ -1,12 +1,10 @@
 import {
   type APIButtonComponentWithCustomId,
   type APIMessageTopLevelComponent,
-  type APITextInputComponent,
   ButtonStyle,
   ComponentType,
   MessageFlags,
   type RawFile,
-  TextInputStyle,
 } from 'discord.js';
 import { unreachable } from '../../card/index.ts';
 import type { SpokenCard } from '../../phrases/index.ts';
@@ -43,11 +41,12 @@ export type Shown = {
   readonly card: SpokenCard;
   /** The interaction whose answer this is: what its buttons point at. */
   readonly of: string;
-  readonly pictures?: readonly Drawn[];
   readonly extra?: readonly ExtraButton[];
   readonly isPrivate: boolean;
   /** It was asked for in private: what its buttons do stays there. */
   readonly wasPrivate: boolean;
+  /** Whose it is, where the message itself does not tell: in a direct message. */
+  readonly shop?: string;
   /** The only ones whom this message may ring. */
   readonly rings?: Rings;
   /** In front of the card, beside those it rings. */
@@ -108,10 +107,44 @@ const galleryOf = (pictures: readonly Drawn[]): readonly APIMessageTopLevelCompo
           type: ComponentType.MediaGallery,
           items: pictures.map(({ name, alt }) => ({
             media: { url: `attachment://${name}` },
-            description: alt.slice(0, LIMITS.altText),
+            description: shortened(alt, LIMITS.altText),
           })),
         },
       ];
+
+const noteOf = (note: string | null): readonly APIMessageTopLevelComponent[] =>
+  note === null ? [] : [{ type: ComponentType.TextDisplay, content: `-# ${escaped(note)}` }];
+
+/** The same message with its pictures, or with a word about them, between its text and its buttons. */
+export const pictured = (
+  { body }: Message,
+  pictures: readonly Drawn[],
+  note: string | null,
+): Message => {
+  const buttons = body.components.findIndex(({ type }) => type === ComponentType.ActionRow);
+  const at = buttons < 0 ? body.components.length : buttons;
+  return {
+    body: {
+      ...body,
+      components: [
+        ...body.components.slice(0, at),
+        ...galleryOf(pictures),
+        ...noteOf(note),
+        ...body.components.slice(at),
+      ],
+      attachments: pictures.map(({ name, alt }, index) => ({
+        id: String(index),
+        filename: name,
+        description: shortened(alt, LIMITS.altText),
+      })),
+    },
+    files: pictures.map(({ name, bytes }) => ({
+      name,
+      data: Buffer.from(bytes),
+      contentType: 'image/png',
+    })),
+  };
+};
 
 const button = (control: ControlId, label: string): APIButtonComponentWithCustomId => ({
   type: ComponentType.Button,
@@ -129,11 +162,17 @@ const rowsOf = (
   }));
 
 const choiceButton = (
-  { of, wasPrivate }: Shown,
+  { of, wasPrivate, shop }: Shown,
   { index, label }: Extract<Piece, { piece: 'choice' }>,
 ) =>
   button(
-    { control: 'press', of, choice: index, isPrivate: wasPrivate },
+    {
+      control: 'press',
+      of,
+      choice: index,
+      isPrivate: wasPrivate,
+      ...(shop === undefined ? {} : { shop }),
+    },
     label.trim() === '' || label.length > LIMITS.buttonLabel ? String(index + 1) : label,
   );
 
@@ -149,7 +188,6 @@ const calling = ({ rings, note }: Shown): readonly APIMessageTopLevelComponent[]
 
 const messageOf = (shown: Shown, pieces: readonly Piece[]): Message => {
   const isFirst = pieces.some((piece) => piece.piece === 'headline');
-  const pictures = pieces.flatMap((piece) => (piece.piece === 'picture' ? [piece.drawn] : []));
   const buttons = [
     ...pieces.flatMap((piece) => (piece.piece === 'choice' ? [choiceButton(shown, piece)] : [])),
     // With the first message: that is the one whose headline they belong to.
@@ -162,25 +200,11 @@ const messageOf = (shown: Shown, pieces: readonly Piece[]): Message => {
       components: [
         ...(isFirst ? calling(shown) : []),
         ...textComponents(pieces),
-        ...galleryOf(pictures),
         ...rowsOf(buttons),
       ],
       allowed_mentions: { parse: [], ...shown.rings },
-      ...(pictures.length === 0
-        ? {}
-        : {
-            attachments: pictures.map(({ name, alt }, index) => ({
-              id: String(index),
-              filename: name,
-              description: alt.slice(0, LIMITS.altText),
-            })),
-          }),
     },
-    files: pictures.map(({ name, bytes }) => ({
-      name,
-      data: Buffer.from(bytes),
-      contentType: 'image/png',
-    })),
+    files: [],
   };
 };
 
@@ -200,11 +224,13 @@ const textLength = (components: readonly APIMessageTopLevelComponent[]): number 
     0,
   );
 
-const fits = ({ body, files }: Message): boolean =>
+/** Kept free in every message for a picture that comes later, or a word about one that does not. */
+const ROOM = { components: 2, text: 200 } as const;
+
+const fits = ({ body }: Message): boolean =>
   body.components.length > 0 &&
-  count(body.components) <= LIMITS.components &&
-  textLength(body.components) <= LIMITS.messageText &&
-  files.length <= LIMITS.galleryItems;
+  count(body.components) <= LIMITS.components - ROOM.components &&
+  textLength(body.components) <= LIMITS.messageText - ROOM.text;
 
 const formOf = (shown: Shown): Form<Message> => ({
   encode: (pieces) => messageOf(shown, pieces),
@@ -214,36 +240,4 @@ const formOf = (shown: Shown): Form<Message> => ({
 
 /** A card as the messages it takes: nearly always one. */
 export const render = (shown: Shown): readonly Message[] =>
-  fit(piecesOf(shown.card, shown.pictures), formOf(shown)).filter(
-    (message) => message.body.components.length > 0,
-  );
-
-/** One field of a form. */
-export type Field = {
-  readonly name: string;
-  readonly label: string;
-  readonly example: string;
-  readonly value?: string;
-  readonly long?: boolean;
-};
-
-const fieldOf = (field: Field): APITextInputComponent => ({
-  type: ComponentType.TextInput,
-  custom_id: field.name.slice(0, LIMITS.customId),
-  style: field.long === true ? TextInputStyle.Paragraph : TextInputStyle.Short,
-  max_length: LIMITS.modalText,
-  required: false,
-  ...(field.example === '' ? {} : { placeholder: field.example.slice(0, LIMITS.choiceName) }),
-  ...(field.value === undefined ? {} : { value: field.value.slice(0, LIMITS.modalText) }),
-});
-
-/** A form that asks for what a line still needs. */
-export const formOfFields = (control: ControlId, title: string, fields: readonly Field[]) => ({
-  custom_id: idOf(control),
-  title: shortened(title, LIMITS.modalTitle),
-  components: fields.slice(0, LIMITS.modalFields).map((field) => ({
-    type: ComponentType.Label as const,
-    label: shortened(field.label, LIMITS.modalLabel),
-    component: fieldOf(field),
-  })),
-});
+  fit(piecesOf(shown.card), formOf(shown)).filter((message) => message.body.components.length > 0);

@@ -205,6 +205,10 @@ const pressed = async (
       await openForm(listening, at, trigger, view, controlButton(control, book.slack.openForm));
       return;
     }
+    case 'show':
+      // Nothing that this platform is sent carries one.
+      await gone();
+      return;
     case 'press': {
       const asks = askedBy(desk, recalled, control.choice);
       if (asks === null) {

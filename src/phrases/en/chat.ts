@@ -24,6 +24,8 @@ export const chat: ChatPhrases = {
   tokenWrong: (variable) =>
     `${variable} is not a token that the platform takes. Copy it again from the application's page and start again.`,
   cannotStart: (platform, fault) => `${platform} could not be started: ${fault}.`,
+  connectionEnded: (platform) =>
+    `${platform} has ended the connection for good. Start again; if it ends again, look at the application's page.`,
   registration: {
     added: (name) => `+ ${name}`,
     changed: (name) => `~ ${name}`,

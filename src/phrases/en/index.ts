@@ -4,6 +4,7 @@ import { chat, config } from './chat.ts';
 import { checkLabels } from './checkLines.ts';
 import { checks } from './checks.ts';
 import { convertLabels } from './convertLines.ts';
+import { discord } from './discord.ts';
 import { lines } from './lines.ts';
 import { materialName, THINGS } from './names.ts';
 import { pictures } from './pictures.ts';
@@ -60,6 +61,7 @@ export const en: Book = {
   verbs,
   parameters: THINGS,
   chat,
+  discord,
   slack,
   config,
   records,
