@@ -72,6 +72,7 @@ test('a token that is none is told in one sentence, without the token', async ()
       render: () => Promise.resolve(new Uint8Array()),
       log: openLog((line) => void lines.push(line)),
       print: (line) => void lines.push(line),
+      onEnded: () => undefined,
     },
     { discord: null, slack: wrong },
   );
