@@ -14,7 +14,14 @@ import {
   spokenNames,
   viewShop,
 } from '../shop/index.ts';
-import { nearestOf, numberOf, plainText, type ShopUnits, unitOf } from '../words/index.ts';
+import {
+  materialNames,
+  nearestOf,
+  numberOf,
+  plainText,
+  type ShopUnits,
+  unitOf,
+} from '../words/index.ts';
 import { type Answer, choicesIn } from './answer.ts';
 import type { Call } from './call.ts';
 import type { Command } from './command.ts';
@@ -39,7 +46,7 @@ export type RecordsDeskOptions = {
 };
 
 /** Names of the shop's own are compared and guessed at as everything else that is typed. */
-const WORDS: ShopWords = { plainText, nearestOf, numberOf, unitOf };
+const WORDS: ShopWords = { plainText, nearestOf, numberOf, unitOf, materialNames };
 
 /** What is read of a shop that nobody has come into yet. */
 const UNKNOWN_UNITS: ShopUnits = 'in';

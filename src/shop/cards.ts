@@ -1,5 +1,7 @@
 import { type CardTable } from '../store/index.ts';
+import { cardTexts } from './cardTexts.ts';
 import { CODE_LENGTHS, misheard, newCode, readCode } from './codes.ts';
+import { putForFind } from './find/index.ts';
 import { type Done, done, refused } from './result.ts';
 import type { ShopChange, ShopView } from './view.ts';
 
@@ -30,7 +32,7 @@ export type KeptCard = CardDraft & {
   readonly madeBy: string;
 };
 
-/** Keeps a card and gives it its code. */
+/** Keeps a card, gives it its code, and lets it be found by its words. */
 export const keepCard = async (
   change: ShopChange,
   draft: CardDraft,
@@ -44,7 +46,11 @@ export const keepCard = async (
       .onConflict((oc) => oc.columns(['shop', 'code']).doNothing())
       .returning('id')
       .executeTakeFirst();
-    if (kept !== undefined) return { id: row.id, code };
+    if (kept === undefined) continue;
+    const texts = await cardTexts(change, draft);
+    const { id, made_at: at } = row;
+    await putForFind(change, { kind: 'card', id, code, at, approved: false, texts });
+    return { id, code };
   }
   throw new Error('no free code was found for a card');
 };

@@ -39,6 +39,16 @@ export {
   wheelsCsv,
 } from './export.ts';
 export {
+  dropFromFind,
+  type Findable,
+  type FindOptions,
+  type ForFind,
+  type Found,
+  findEntries,
+  nearestWords,
+  putForFind,
+} from './find/index.ts';
+export {
   listGroups,
   nameGroupRole,
   type RoleGroup,

@@ -13,6 +13,8 @@ export type ShopWords = {
   readonly numberOf: (text: string) => number | null;
   /** What a unit measures and its size in the program's own, or null. */
   readonly unitOf: (word: string) => { readonly measure: string; readonly factor: number } | null;
+  /** What people call a row of the table of materials. */
+  readonly materialNames: (id: string) => readonly string[];
 };
 
 /** One shop, to be read. Everything that is asked through it is asked of this shop alone. */

@@ -2,6 +2,7 @@
 export { backup } from './backup.ts';
 export { BackupFault, type BackupFaultCode } from './backupFaults.ts';
 export { RecordsTooNew, StoreUnavailable, type UnavailableReason } from './faults.ts';
+export { enterTerms, leaveTerms, termsIn } from './findIndex.ts';
 export { literally } from './literally.ts';
 export type { Engine } from './migrations/columns.ts';
 export { AddressWrong, type StorePlace, type StoreSettings, storePlace } from './place.ts';
@@ -15,6 +16,7 @@ export {
   writeRegister,
 } from './register.ts';
 export { type Restored, restore } from './restore.ts';
+export { spellingsOf } from './spellings.ts';
 export {
   migrate,
   openStore,

@@ -6,6 +6,7 @@ import { copyOfFile } from './backup.ts';
 import { BackupFault } from './backupFaults.ts';
 import { draftOf, putInPlace } from './durable.ts';
 import { RecordsTooNew, StoreUnavailable } from './faults.ts';
+import { enterAllTerms } from './findIndex.ts';
 import { bringUp, FORM_TABLES, KNOWN_FORM, stepsDone } from './form.ts';
 import { readHead, readPortions } from './lines.ts';
 import type { Engine } from './migrations/columns.ts';
@@ -13,7 +14,7 @@ import { stepNames } from './migrations/index.ts';
 import type { StorePlace } from './place.ts';
 import { openPostgres } from './postgres.ts';
 import { openSqlite, ours } from './sqlite.ts';
-import { TABLES, type Tables } from './tables.ts';
+import { MADE_TABLES, TABLES, type Tables } from './tables.ts';
 
 export type Restored = {
   /** Where the records went that were there before, or null where there were none. */
@@ -82,6 +83,9 @@ const bringDraftUp = async (draft: string, file: string, copied: boolean): Promi
   }
 };
 
+/** Steps are named so that they sort. */
+const FIRST_WITH_FIND = '0007';
+
 /** Reads lines into a database that holds no shop yet, in one change. */
 const linesInto = async (db: Kysely<Tables>, engine: Engine, file: string): Promise<void> => {
   const { form } = await readHead(file);
@@ -96,6 +100,7 @@ const linesInto = async (db: Kysely<Tables>, engine: Engine, file: string): Prom
         .values([...rows])
         .execute();
     }
+    if (form >= FIRST_WITH_FIND) await enterAllTerms(tx);
   });
   await bringUp(db, engine);
 };
@@ -115,7 +120,8 @@ const makeReady = async (
     if (shop !== undefined) throw new BackupFault('notEmpty', file);
   }
   if (done.at(-1) !== form && done.includes(form)) {
-    const names = [...TABLES.map(({ name }) => name as string).reverse(), ...FORM_TABLES];
+    const records = [...MADE_TABLES, ...TABLES.map(({ name }) => name).reverse()];
+    const names: readonly string[] = [...records, ...FORM_TABLES];
     for (const name of names) await db.schema.dropTable(name).ifExists().execute();
   }
   await bringUp(db, engine, form);

@@ -225,6 +225,28 @@ export type HistoryTable = OfShop & {
   after: Json | null;
 };
 
+/** Something that can be found by words: a card, a standard … */
+export type FindEntryTable = OfShop & {
+  /** Its kind and its own id together. */
+  id: string;
+  kind: string;
+  subject_id: string;
+  code: string | null;
+  at: Moment;
+  /** 1: the shop stands by it. */
+  approved: number;
+  /** Greater is shown first: approved before the others, the newest before older ones. */
+  place: number;
+  /** What it is found by, parted by spaces. */
+  terms: string;
+};
+
+/** The places of everything that is found by a term. Made from the entries. */
+export type FindTermTable = OfShop & { term: string; place: number };
+
+/** A term as it is, and with each of its letters left out. Made from the entries. */
+export type FindSpellingTable = OfShop & { spelling: string; term: string };
+
 export type Tables = {
   shop: ShopTable;
   setting: SettingTable;
@@ -240,6 +262,9 @@ export type Tables = {
   interaction: InteractionTable;
   effect: EffectTable;
   history: HistoryTable;
+  find_entry: FindEntryTable;
+  find_term: FindTermTable;
+  find_spelling: FindSpellingTable;
 };
 
 export type TableName = keyof Tables;
@@ -271,4 +296,8 @@ export const TABLES: readonly TableFacts[] = [
   { name: 'interaction', shop: 'shop', key: 'id', json: ['answer'] },
   { name: 'effect', shop: 'shop', key: 'id', json: ['effect', 'outcome'] },
   { name: 'history', shop: 'shop', key: 'id', json: ['before', 'after'] },
+  { name: 'find_entry', shop: 'shop', key: 'id', json: [] },
 ];
+
+/** Made from the rows of others: in no backup of lines and in no export, made again instead. */
+export const MADE_TABLES: readonly TableName[] = ['find_term', 'find_spelling'];

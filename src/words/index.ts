@@ -19,6 +19,7 @@ export {
   MATERIAL_OFFERS,
   MATERIAL_PHRASES,
   type MaterialWords,
+  materialNames,
   narrowed,
 } from './material.ts';
 export { knownName, nameOf } from './names.ts';

@@ -131,6 +131,10 @@ const BY_FIRST_WORD: ReadonlyMap<string, readonly Entry[]> = ENTRIES.reduce(
 /** Every word of a material's names, for offering the nearest. */
 export const MATERIAL_PHRASES: readonly string[] = ENTRIES.map((known) => known.phrase.join(' '));
 
+/** What people call a row of the table, its family's names among them. */
+export const materialNames = (id: string): readonly string[] =>
+  ENTRIES.filter(({ means }) => means.ids.includes(id)).map((known) => known.phrase.join(' '));
+
 const ROW_OF = new Map(
   MATERIALS.flatMap((row) => row.aliases.map((alias) => [alias, row] as const)),
 );

@@ -6,6 +6,8 @@ import {
   BackupFault,
   backup,
   type Engine,
+  enterTerms,
+  MADE_TABLES,
   openStore,
   RecordsTooNew,
   restore,
@@ -28,6 +30,20 @@ const fill = async (store: Store, wheels: number): Promise<void> => {
       const row = { ...wheelRow(`w${at}`), face: at / 7, place: at % 3 === 0 ? null : 'drawer' };
       await tx.insertInto('wheel').values(row).execute();
     }
+    const terms = ['#card', 'brass', 'knob'];
+    const entry = {
+      shop: 's1',
+      id: 'card:1',
+      kind: 'card',
+      subject_id: '1',
+      code: null,
+      at: START,
+    };
+    await tx
+      .insertInto('find_entry')
+      .values({ ...entry, approved: 0, place: 7, terms: terms.join(' ') })
+      .execute();
+    await enterTerms(tx, [{ shop: 's1', place: 7, terms }]);
   });
 };
 
@@ -40,6 +56,11 @@ const everything = async (store: Store): Promise<Record<string, unknown>> => {
       .selectAll()
       .orderBy(key as never)
       .execute();
+  }
+  // What is made from others comes back with them.
+  for (const name of MADE_TABLES) {
+    const rows = await store.read.selectFrom(name).selectAll().execute();
+    tables[name] = rows.map((row) => JSON.stringify(Object.entries(row).sort())).sort();
   }
   return tables;
 };

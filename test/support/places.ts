@@ -5,7 +5,7 @@ import os from 'node:os';
 import path from 'node:path';
 import pg from 'pg';
 import { inject, onTestFinished } from 'vitest';
-import { type Engine, type StorePlace, TABLES } from '../../src/store/index.ts';
+import { type Engine, MADE_TABLES, type StorePlace, TABLES } from '../../src/store/index.ts';
 
 export const ENGINES: readonly Engine[] = ['sqlite', 'postgres'];
 
@@ -30,7 +30,7 @@ export const emptyPlace = async (engine: Engine): Promise<TestPlace> => {
 };
 
 const used: string[] = [];
-const EMPTIED = `truncate ${TABLES.map(({ name }) => name).join(', ')}`;
+const EMPTIED = `truncate ${[...TABLES.map(({ name }) => name), ...MADE_TABLES].join(', ')}`;
 
 /** A folder that is gone when the test is over. */
 export const newFolder = (): string => {

@@ -12,14 +12,23 @@ export type Columns = {
   readonly real: RawBuilder<unknown>;
   /** What stands after a table's closing bracket. */
   readonly end: RawBuilder<unknown>;
+  /** The same for a table that is nothing but its key. */
+  readonly keyOnly: RawBuilder<unknown>;
 };
 
 export const columnsOf = (engine: Engine): Columns =>
   engine === 'sqlite'
-    ? { text: sql`text`, whole: sql`integer`, real: sql`real`, end: sql`strict` }
+    ? {
+        text: sql`text`,
+        whole: sql`integer`,
+        real: sql`real`,
+        end: sql`strict`,
+        keyOnly: sql`strict, without rowid`,
+      }
     : {
         text: sql`text collate "C"`,
         whole: sql`bigint`,
         real: sql`double precision`,
         end: sql``,
+        keyOnly: sql``,
       };

@@ -21,7 +21,13 @@ import {
   WHEEL_SHEET,
   WHEELS,
 } from '../../../src/shop/index.ts';
-import { type Engine, type Store, StoreUnavailable, TABLES } from '../../../src/store/index.ts';
+import {
+  type Engine,
+  MADE_TABLES,
+  type Store,
+  StoreUnavailable,
+  TABLES,
+} from '../../../src/store/index.ts';
 import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
 import { CARD, LEFT, STRAIGHT, TURRET } from './samples.ts';
 
@@ -145,6 +151,8 @@ const newFuse = (engine: Engine): Fuse => {
   };
 };
 
+const said = (row: unknown): string => JSON.stringify(row);
+
 /** Every row of every table. */
 const everything = async (store: Store): Promise<unknown> => {
   const tables: Record<string, unknown> = {};
@@ -154,6 +162,9 @@ const everything = async (store: Store): Promise<unknown> => {
       .selectAll()
       .orderBy(key as never)
       .execute();
+  }
+  for (const name of MADE_TABLES) {
+    tables[name] = (await store.read.selectFrom(name).selectAll().execute()).map(said).sort();
   }
   return tables;
 };

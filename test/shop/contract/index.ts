@@ -4,6 +4,7 @@ import type { Engine } from '../../../src/store/index.ts';
 import { breaking } from './breaking.ts';
 import { cards } from './cards.ts';
 import { csv } from './csv.ts';
+import { finding } from './find.ts';
 import { interactions } from './interactions.ts';
 import { isolation } from './isolation.ts';
 import { lists } from './lists.ts';
@@ -19,6 +20,7 @@ export const shopContract = (engine: Engine): void => {
     settings(engine);
     cards(engine);
     results(engine);
+    finding(engine);
     interactions(engine);
     outbox(engine);
     csv(engine);

@@ -5,8 +5,10 @@ import {
   addTo,
   changeIn,
   changeSetting,
+  dropFromFind,
   exportJson,
   findCard,
+  findEntries,
   findIn,
   findPerson,
   givenUp,
@@ -22,6 +24,7 @@ import {
   MATERIALS_OF_SHOP,
   nameGroupRole,
   nameRole,
+  nearestWords,
   once,
   personById,
   queueEffects,
@@ -37,7 +40,7 @@ import {
   WHEELS,
   whoMay,
 } from '../../../src/shop/index.ts';
-import { type Engine, TABLES } from '../../../src/store/index.ts';
+import { type Engine, MADE_TABLES, TABLES } from '../../../src/store/index.ts';
 import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
 import { CARD, STRAIGHT, TURRET } from './samples.ts';
 
@@ -124,6 +127,15 @@ const ASKED: Readonly<Record<string, (change: ShopChange, id: string) => Promise
   historyOfPerson: (change, id) => historyOf(change, 'person', { id }),
   givenUpSeen: (change, id) => givenUpSeen(change, [id]),
   once: (change, id) => once(change, id, () => Promise.resolve('mine')),
+  dropFromFind: (change, id) => dropFromFind(change, 'card', id),
+};
+
+/** Words that are looked for: what fits is everybody's own, so they are asked in an empty shop. */
+const LOOKED_FOR: typeof ASKED = {
+  find: (change, words) => findEntries(change, words, { limit: 9 }),
+  findMisspelt: (change, words) => findEntries(change, words.slice(0, -1), { limit: 9 }),
+  findCards: (change, words) => findEntries(change, words, { limit: 9, kind: 'card' }),
+  nearestWords: (change, words) => nearestWords(change, words.slice(0, -2)),
 };
 
 /** Everything that is asked without naming anything. */
@@ -139,6 +151,7 @@ const OVERVIEWS: Readonly<Record<string, (change: ShopChange) => Promise<unknown
   settings: (change) => settingsOf(change),
   givenUp: (change) => givenUp(change),
   history: (change) => historyOf(change, 'wheel'),
+  newest: (change) => findEntries(change, '', { limit: 9, kind: 'card' }),
   export: async (change) => {
     const pieces: string[] = [];
     for await (const piece of exportJson(change)) pieces.push(piece);
@@ -173,6 +186,18 @@ export const isolation = (engine: Engine): void => {
       },
     );
 
+    it.each(Object.entries(LOOKED_FOR))(
+      '%s finds nothing of another shop, and no word it uses',
+      async (_, look) => {
+        const { store } = await newRecords(engine);
+        const mine = await newShop(store, 'Mine');
+        const theirs = await furnish(await newShop(store, 'Other'), 'two');
+        for (const words of [CARD.words, ...Object.values(theirs)]) {
+          expect([words, await mine.change((change) => look(change, words))]).toEqual([words, []]);
+        }
+      },
+    );
+
     it('never shows a row of another in any overview, and fills none of its lists', async () => {
       const { store } = await newRecords(engine);
       const mine = await newShop(store, 'Mine');
@@ -202,7 +227,7 @@ export const isolation = (engine: Engine): void => {
       const { store } = await newRecords(engine, { watch: (statement) => said.add(statement) });
       const shop = await newShop(store, 'Mine');
       const things = await furnish(shop, 'one');
-      for (const ask of Object.values(ASKED)) {
+      for (const ask of [...Object.values(ASKED), ...Object.values(LOOKED_FOR)]) {
         for (const id of [things.wheel, things.machine, things.person, things.code, NOBODYS]) {
           await tried(shop, (change) => ask(change, id));
         }
@@ -246,7 +271,10 @@ const rowsOf = async (shop: TestShop): Promise<string> => {
   return pieces.join('');
 };
 
-const OF_SHOPS = TABLES.filter(({ shop }) => shop === 'shop').map(({ name }) => name as string);
+const OF_SHOPS: readonly string[] = [
+  ...TABLES.filter(({ shop }) => shop === 'shop').map(({ name }) => name),
+  ...MADE_TABLES,
+];
 
 const tableIn = (statement: string): string | undefined => {
   const name = /(?:from|into|update) "(?<name>\w+)"/u.exec(statement)?.groups?.['name'];
