@@ -16,6 +16,7 @@ const rooms = {
   desk: { values: ['card', 'words', 'phrases', 'shop'] },
   adapters: { values: ['desk', 'card', 'phrases', 'drawing'] },
   config: { everything: true },
+  demo: { everything: true },
 };
 const commandsMayImport = ['desk', 'calc', 'words', 'shop', 'card'];
 

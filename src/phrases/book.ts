@@ -52,6 +52,9 @@ export type TerminalPhrases = {
   readonly speaks: (name: string, place: string) => string;
   readonly tooLong: string;
   readonly noChannel: (typed: string) => string;
+  readonly demoFilling: string;
+  /** What is said before anything is asked in the shop that is kept there. */
+  readonly demoOpening: (folder: string) => readonly string[];
   /** What happened besides the answer. */
   readonly posted: (place: string, rung: readonly string[], says: string) => string;
   readonly pinned: (place: string, says: string) => string;

@@ -39,6 +39,8 @@ export type ChannelOptions = {
   readonly output: Writable;
   /** A person is typing and sees it; what comes from a file is shown before its answer. */
   readonly interactive: boolean;
+  /** What is said before anything is asked. */
+  readonly opening?: readonly string[];
   /** Who speaks until somebody else does. */
   readonly speaker?: Speaker;
   readonly width: () => number;
@@ -104,8 +106,9 @@ export const runChannel = async (options: ChannelOptions): Promise<void> => {
   const { book, input, output, interactive, width } = options;
   const { terminal } = book;
   let { speaker = FIRST } = options;
-  const opening = terminal.opening.map((text) => sentenceText(text, width()));
-  await written(output, `${opening.join('\n')}\n\n`);
+  const { opening = terminal.opening } = options;
+  const said = opening.map((text) => sentenceText(text, width()));
+  await written(output, `${said.join('\n')}\n\n`);
   const lines = createInterface({ input, crlfDelay: Number.POSITIVE_INFINITY });
   const prompt = async (typed: string): Promise<void> => {
     await written(output, `${promptFor(speaker, terminal.prompt)}${typed}`);

@@ -16,6 +16,13 @@ export const terminal: TerminalPhrases = {
   tooLong: 'That is too long for a name. Type /as and a name, or /in and a channel.',
   noChannel: (typed) =>
     `"${typed}" is no channel. Type one word, such as /in #questions, or a thread, such as /in #questions/3fa2.`,
+  demoFilling: 'Inventing a shop …',
+  demoOpening: (folder) => [
+    'Wholetooth, local channel of an invented shop: its people, parts and numbers are made up.',
+    'Orla owns it, Mara supervises, Ben is the engineer, Kit, Dov and Sanna work the lathes.',
+    'Try /shop wheels, or /as Kit and 1.000 yellow bar straight wheel Fern on Bench lathe.',
+    `It is kept in ${folder}; remove that folder to begin again.`,
+  ],
   posted: (place, rung, says) =>
     `→ Posted in ${place}${rung.length === 0 ? '' : `, for ${listed(rung)}`}: ${says}`,
   pinned: (place, says) => `→ Pinned in ${place}: ${says}`,

@@ -1,0 +1,14 @@
+/** What somebody says in the demo's shop, and how long after what was said before. */
+export type Said = {
+  readonly by: string;
+  readonly line: string;
+  /** Minutes since the line before. */
+  readonly after?: number;
+  readonly attached?: { readonly name: string; readonly text: string };
+};
+
+/** Everybody of the invented shop. */
+export const OWNER = 'Orla';
+export const SUPERVISOR = 'Mara';
+export const ENGINEER = 'Ben';
+export const OPERATORS = ['Kit', 'Dov', 'Sanna'] as const;
