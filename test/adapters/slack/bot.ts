@@ -7,6 +7,9 @@ import { en } from '../../../src/phrases/index.ts';
 import { openPeople } from '../../platforms/slack/people.ts';
 import { APP_TOKEN, openPlatform, SIGNING_SECRET, TEAMS } from '../../platforms/slack/platform.ts';
 import { bodyCheck } from '../../platforms/slack/schemas.ts';
+import { until } from '../../support/until.ts';
+
+export { until } from '../../support/until.ts';
 
 const CHECK = bodyCheck();
 
@@ -24,14 +27,6 @@ const freePort = async (): Promise<number> => {
       server.close(() => done(port));
     });
   });
-};
-
-export const until = async (holds: () => boolean, what: string, ms = 10_000): Promise<void> => {
-  const end = Date.now() + ms;
-  while (!holds()) {
-    if (Date.now() > end) throw new Error(`not in time: ${what}`);
-    await new Promise((done) => setTimeout(done, 5));
-  }
 };
 
 export type Wanted = Partial<SlackOptions> & {

@@ -7,96 +7,22 @@ import { literally, typedText } from '../../../src/adapters/slack/escape.ts';
 import { verbForm } from '../../../src/adapters/slack/form.ts';
 import { homeView } from '../../../src/adapters/slack/home.ts';
 import { type Message, render } from '../../../src/adapters/slack/render.ts';
-import { en, type SpokenCard } from '../../../src/phrases/index.ts';
+import { en } from '../../../src/phrases/index.ts';
 import { buttonsOf } from '../../platforms/slack/people.ts';
 import { ruleFaults } from '../../platforms/slack/rules.ts';
 import { bodyCheck, mostIn, slackSchema } from '../../platforms/slack/schemas.ts';
 import { deskIn } from '../../support/desk.ts';
+import { anyCard, bare, saidBy } from '../contract/anyCard.ts';
 
 const check = bodyCheck();
 const faultsIn = (message: Message): readonly string[] =>
   [check('message', message), ...ruleFaults('message', message)].filter((each) => each !== null);
 
-/** Words of any kind, and what has a meaning in Slack's markup. */
-const words = (most: number) =>
-  fc
-    .array(
-      fc.oneof(
-        { weight: 4, arbitrary: fc.string({ minLength: 1, maxLength: 12, unit: 'grapheme' }) },
-        fc.constantFrom(
-          '<!channel>',
-          '<@U0SOMEBODY>',
-          '&amp;',
-          '*bold*',
-          '_so_',
-          '`x`',
-          '~',
-          '>',
-          '0.9852 in',
-          '😀',
-        ),
-      ),
-      { minLength: 1, maxLength: most },
-    )
-    .map((each) => `w${each.join(' ')}`);
-const short = words(4);
-const text = fc.oneof({ weight: 5, arbitrary: words(20) }, { weight: 1, arbitrary: words(900) });
+const card = anyCard(['<!channel>', '<@U0SOMEBODY>', '&amp;', '*bold*', '_so_', '`x`', '~', '>']);
 
-const part = fc.oneof(
-  fc.record({ part: fc.constant('lines' as const), texts: fc.array(text, { maxLength: 12 }) }),
-  fc.record({
-    part: fc.constant('rows' as const),
-    rows: fc.array(fc.record({ label: short, text }), { maxLength: 30 }),
-  }),
-  fc.record({
-    part: fc.constant('checks' as const),
-    checks: fc.array(
-      fc.record({
-        label: short,
-        state: fc.constantFrom('fine' as const, 'watch' as const, 'stop' as const),
-        stateWord: fc.constantFrom('fine', 'watch', 'stop'),
-        text: words(60),
-      }),
-      { maxLength: 20 },
-    ),
-  }),
-  fc.record({
-    part: fc.constant('cautions' as const),
-    shown: fc.array(text, { maxLength: 5 }),
-    standing: text,
-    all: fc.array(text, { maxLength: 5 }),
-    rest: fc.array(text, { maxLength: 5 }),
-  }),
-  fc.record({ part: fc.constant('own' as const), texts: fc.array(text, { maxLength: 5 }) }),
-  fc.record({ part: fc.constant('footing' as const), text }),
-);
-const card: fc.Arbitrary<SpokenCard> = fc.record({
-  headline: text,
-  parts: fc.array(part, { maxLength: 7 }),
-  choicesTitle: fc.constant('Next'),
-  choices: fc.array(fc.record({ label: text, words: text }), { maxLength: 40 }),
-});
-
-const bare = (said: string): string => said.replaceAll(/\s+/gu, '');
 /** What is read in a message, marks taken as marks. */
 const readIn = ({ blocks }: Message): string =>
   blocks.flatMap((block) => (block.type === 'section' ? [block.text?.text ?? ''] : [])).join('\n');
-
-const saidBy = (each: SpokenCard['parts'][number]): readonly string[] => {
-  switch (each.part) {
-    case 'lines':
-    case 'own':
-      return each.texts;
-    case 'rows':
-      return each.rows.flatMap((row) => [row.label, row.text]);
-    case 'checks':
-      return each.checks.flatMap((one) => [one.label, one.stateWord, one.text]);
-    case 'cautions':
-      return [...each.shown, ...each.rest, each.standing];
-    case 'footing':
-      return [each.text];
-  }
-};
 
 test('generated cards: within every limit, nothing lost, every choice has its button', () => {
   fc.assert(
@@ -105,7 +31,7 @@ test('generated cards: within every limit, nothing lost, every choice has its bu
       for (const message of messages) expect(faultsIn(message)).toEqual([]);
       const read = bare(messages.map(readIn).join('\n'));
       // A text that was parted stands in two places, one after the other.
-      for (const said of [generated.headline, ...generated.parts.flatMap(saidBy)])
+      for (const said of saidBy(generated))
         expect(read.replaceAll('**', '')).toContain(bare(literally(said)));
       const values = messages.flatMap((message) => buttonsOf(message).map(({ value }) => value));
       expect(values).toEqual(generated.choices.map((_, index) => `p:${String(index)}:Ev1`));

@@ -1,14 +1,6 @@
-import fs from 'node:fs';
-import path from 'node:path';
-import { fileURLToPath } from 'node:url';
-import { Ajv, type ValidateFunction } from 'ajv';
-import { createGenerator } from 'ts-json-schema-generator';
+import { type Checked, checkedAgainst, type Node, schemaOf } from '../common/typeSchemas.ts';
 import type { Bodies } from './bodies.ts';
 
-const SOURCE = fileURLToPath(new URL('bodies.ts', import.meta.url));
-const root = fileURLToPath(new URL('../../..', import.meta.url));
-
-type Node = Record<string, unknown>;
 const isNode = (value: unknown): value is Node =>
   typeof value === 'object' && value !== null && !Array.isArray(value);
 
@@ -49,45 +41,11 @@ const withLimits = (value: unknown): unknown => {
   return { ...walked, properties: Object.fromEntries(fields) as Node };
 };
 
-const versionOf = (name: string): string => {
-  const file = path.join(root, 'node_modules', name, 'package.json');
-  return (JSON.parse(fs.readFileSync(file, 'utf8')) as { version: string }).version;
-};
+const SOURCE = new URL('bodies.ts', import.meta.url);
 
-/** Making the schema takes seconds and depends on three packages and one file: kept beside them. */
-const made = (): Node => {
-  const versions = ['@slack/types', '@slack/bolt', 'ts-json-schema-generator'].map(versionOf);
-  const name = `slack-${versions.join('-')}-${String(fs.statSync(SOURCE).size)}.json`;
-  const file = path.join(root, 'node_modules', '.cache', 'wholetooth', name);
-  if (fs.existsSync(file)) return JSON.parse(fs.readFileSync(file, 'utf8')) as Node;
-  const schema = createGenerator({
-    path: SOURCE,
-    type: 'Bodies',
-    skipTypeCheck: true,
-    additionalProperties: false,
-    jsDoc: 'extended',
-  }).createSchema('Bodies');
-  fs.mkdirSync(path.dirname(file), { recursive: true });
-  const mine = `${file}.${String(process.pid)}`;
-  fs.writeFileSync(mine, JSON.stringify(schema));
-  fs.renameSync(mine, file);
-  return schema as Node;
-};
+export const slackSchema = (): Node =>
+  withLimits(schemaOf('slack', SOURCE, ['@slack/types', '@slack/bolt'])) as Node;
 
-export const slackSchema = (): Node => withLimits(made()) as Node;
+export type BodyCheck = Checked<Bodies>;
 
-export type BodyCheck = (kind: keyof Bodies, body: unknown) => string | null;
-
-/** Tells what is wrong with a body, or null where it is right. */
-export const bodyCheck = (): BodyCheck => {
-  const ajv = new Ajv({ strict: false, allErrors: false, validateFormats: false });
-  ajv.addSchema(slackSchema(), 'slack');
-  const validators = new Map<string, ValidateFunction>();
-  return (kind, body) => {
-    const ref = `slack#/definitions/Bodies/properties/${kind}`;
-    const validate = validators.get(kind) ?? ajv.compile({ $ref: ref });
-    validators.set(kind, validate);
-    if (validate(body)) return null;
-    return `${kind}: ${ajv.errorsText(validate.errors)} in ${JSON.stringify(body).slice(0, 600)}`;
-  };
-};
+export const bodyCheck = (): BodyCheck => checkedAgainst<Bodies>(slackSchema());
