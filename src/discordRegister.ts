@@ -1,7 +1,7 @@
 import { parseArgs } from 'node:util';
 import { config as loadEnvironment } from 'dotenv';
 import { FLEET } from '../commands/index.ts';
-import { register } from './adapters/discord/index.ts';
+import { type NotRegistered, register } from './adapters/discord/index.ts';
 import { sentencesFor } from './chats.ts';
 import { configOf } from './config.ts';
 import { en } from './phrases/index.ts';
@@ -17,6 +17,13 @@ const refuse = (sentences: readonly string[]): void => {
   process.exitCode = 1;
 };
 
+const sentenceFor = ({ wrong, fault }: NotRegistered): string => {
+  const { tokenWrong, registration } = en.chat;
+  if (wrong === 'DISCORD_TOKEN') return tokenWrong(wrong);
+  if (wrong === 'DISCORD_TEST_GUILD') return registration.notMember;
+  return wrong === null ? registration.failed(fault) : en.config.malformed(wrong);
+};
+
 loadEnvironment({ quiet: true });
 const found = configOf(process.env);
 if ('faults' in found) refuse(sentencesFor(en, found.faults));
@@ -29,7 +36,7 @@ else if (found.config.discord === null)
   );
 else {
   const { token, application, testGuild: guild, api } = found.config.discord;
-  await register({
+  const result = await register({
     token,
     application,
     guild,
@@ -39,4 +46,5 @@ else {
     fleet: FLEET,
     print,
   });
+  if ('fault' in result) refuse([sentenceFor(result)]);
 }

@@ -34,6 +34,12 @@ export type RegistrationPhrases = {
   readonly changed: (name: string) => string;
   readonly removed: (name: string) => string;
   readonly same: (name: string) => string;
+  /** What differs below a command that is changed; the names of its fields are the platform's. */
+  readonly detail: Readonly<
+    Record<'added' | 'removed' | 'changed', (path: string, fields: readonly string[]) => string>
+  >;
+  readonly notMember: string;
+  readonly failed: (fault: string) => string;
   readonly dry: string;
   readonly done: (changes: number) => string;
 };

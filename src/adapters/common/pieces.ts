@@ -17,7 +17,6 @@ export type Piece = { readonly block: number } & (
   | { readonly piece: 'headline' | 'line' | 'caution' | 'own' | 'footing'; readonly text: string }
   | { readonly piece: 'row'; readonly label: string; readonly text: string }
   | { readonly piece: 'check'; readonly check: SpokenCheck }
-  | { readonly piece: 'picture'; readonly drawn: Drawn }
   | { readonly piece: 'choices'; readonly title: string }
   | { readonly piece: 'choice'; readonly index: number; readonly label: string }
 );
@@ -46,7 +45,7 @@ const partPieces = (part: SpokenPart, block: number): readonly Piece[] => {
 };
 
 /** A card in reading order, in pieces that can be dealt out to messages. */
-export const piecesOf = (card: SpokenCard, pictures: readonly Drawn[] = []): readonly Piece[] => {
+export const piecesOf = (card: SpokenCard): readonly Piece[] => {
   const [first] = card.parts;
   // The lines under the headline belong to it; everything else stands in its own block.
   const shift = first?.part === 'lines' ? 0 : 1;
@@ -55,12 +54,11 @@ export const piecesOf = (card: SpokenCard, pictures: readonly Drawn[] = []): rea
   return [
     { piece: 'headline', text: card.headline, block: 0 },
     ...body.filter((piece) => !('text' in piece) || piece.text.trim() !== ''),
-    ...pictures.map((drawn) => ({ piece: 'picture', drawn, block: next }) as const),
     ...(card.choices.length === 0
       ? []
-      : [{ piece: 'choices', title: card.choicesTitle, block: next + 1 } as const]),
+      : [{ piece: 'choices', title: card.choicesTitle, block: next } as const]),
     ...card.choices.map(
-      ({ label }, index) => ({ piece: 'choice', index, label, block: next + 1 }) as const,
+      ({ label }, index) => ({ piece: 'choice', index, label, block: next }) as const,
     ),
   ];
 };

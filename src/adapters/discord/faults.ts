@@ -51,7 +51,9 @@ export const isFinal = (error: unknown): boolean =>
 export const faultText = (error: unknown): string => {
   if (error instanceof DiscordAPIError) return `${String(error.code)} ${error.message}`;
   if (error instanceof HTTPError) return `HTTP ${String(error.status)}`;
-  return error instanceof Error ? error.name : 'unknown fault';
+  if (!(error instanceof Error)) return 'unknown fault';
+  const { code } = error as NodeJS.ErrnoException;
+  return code !== undefined && CONNECTION.has(code) ? code : error.name;
 };
 
 /** Judgement: three tries within what a person waits; the outbox has its own, longer patience. */

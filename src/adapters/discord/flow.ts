@@ -15,7 +15,8 @@ export type FlowOptions = {
   readonly book: Book;
   readonly sender: Sender;
   readonly log: Log;
-  readonly draw: Draw;
+  /** Null where no pictures are wanted. */
+  readonly draw: Draw | null;
   /** How long an answer may take before it is acknowledged without one. */
   readonly deferAfterMs: number;
 };
@@ -221,7 +222,7 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
     { answer }: Reply,
     standing: Standing | null,
   ): Promise<void> => {
-    if (answer === null || standing === null) return;
+    if (draw === null || answer === null || standing === null) return;
     const onFault = (error: unknown): void =>
       log.fault('picture', { interaction: call.interactionId, fault: faultText(error) });
     await addPictures({ draw, noPicture: book.terminal.noPicture, onFault }, answer, standing);

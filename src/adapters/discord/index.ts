@@ -13,7 +13,7 @@ import type { Draw } from './pictures.ts';
 import { openSender } from './send.ts';
 
 export { TokenRefused } from './connect.ts';
-export { register } from './register.ts';
+export { type NotRegistered, register } from './register.ts';
 
 export type DiscordOptions = {
   readonly token: string;
@@ -72,7 +72,7 @@ const guildIn = (client: Client, channel: string): string | null => {
 /** Connects, and answers until stopped. */
 export const openDiscord = async (options: DiscordOptions): Promise<Discord> => {
   const { token, log, desk, book, once = onceInProcess(), onEnded = () => undefined } = options;
-  const { draw = () => Promise.resolve([]), deferAfterMs = DEFER_AFTER_MS } = options;
+  const { draw = null, deferAfterMs = DEFER_AFTER_MS } = options;
   const client = clientOf(options);
   const sender = openSender(client.rest);
   const flow = openFlow({ desk, book, sender, log, draw, deferAfterMs });

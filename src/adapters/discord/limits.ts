@@ -38,6 +38,8 @@ export const LIMITS = {
 
 /** Codes with which Discord refuses (topics/opcodes-and-status-codes), by what they mean here. */
 export const REFUSALS = {
+  /** The id of another application, or of none. */
+  notThisApplication: [10002, 20012],
   unknownChannel: [10003],
   unknownGuild: [10004],
   unknownMember: [10007],

@@ -1,4 +1,5 @@
 import type { Answer } from '../../desk/index.ts';
+import { picturesWanted } from '../common/draw.ts';
 import type { Drawn } from '../common/pieces.ts';
 import { isOver } from './faults.ts';
 import { LIMITS } from './limits.ts';
@@ -19,9 +20,6 @@ export type Picturing = {
   readonly onFault: (error: unknown) => void;
 };
 
-const wantedBy = (answer: Answer): number =>
-  answer.kind === 'card' ? answer.card.pictures.length : 0;
-
 /**
  * The card stands already; its pictures are added to it when they are there. Where one cannot be
  * made or sent, the message says that nothing is missing but the picture.
@@ -31,7 +29,7 @@ export const addPictures = async (
   answer: Answer,
   { message, change }: Standing,
 ): Promise<void> => {
-  const wanted = wantedBy(answer);
+  const wanted = picturesWanted(answer);
   if (wanted === 0) return;
   const drawn = await draw(answer).catch((error: unknown) => {
     onFault(error);

@@ -78,7 +78,6 @@ const textOf = (piece: Piece): string | null => {
         ? `${String(piece.index + 1)}  ${escaped(piece.label)}`
         : null;
     case 'choices':
-    case 'picture':
       return null;
     default:
       return unreachable(piece);

@@ -71,7 +71,6 @@ const markupOf = (piece: Piece): string | null => {
         ? `${String(piece.index + 1)}  ${literally(piece.label)}`
         : null;
     case 'choices':
-    case 'picture':
       return null;
     default:
       return unreachable(piece);

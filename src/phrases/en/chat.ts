@@ -31,6 +31,14 @@ export const chat: ChatPhrases = {
     changed: (name) => `~ ${name}`,
     removed: (name) => `- ${name}`,
     same: (name) => `= ${name}`,
+    detail: {
+      added: (path) => `    + ${path}`,
+      removed: (path) => `    - ${path}`,
+      changed: (path, fields) => `    ~ ${path}: ${fields.join(', ')}`,
+    },
+    notMember:
+      'The bot is not in the server that DISCORD_TEST_GUILD names. Invite it there, or name another.',
+    failed: (fault) => `The commands could not be registered: ${fault}.`,
     dry: 'Only shown; nothing was changed.',
     done: (changes) =>
       changes === 0
