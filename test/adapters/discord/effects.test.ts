@@ -151,7 +151,12 @@ test('where the pins are full it is said, with the oldest, and none is taken off
 
 test('a thread opens once under its post, and what follows stands in it', async () => {
   const earlier = (await delivered(post('question', `${FLOOR}/`))) as MessageAddress;
-  const thread = { effect: 'thread', key: 'thread', of: 'question', title: 'Which wheel?' } as const;
+  const thread = {
+    effect: 'thread',
+    key: 'thread',
+    of: 'question',
+    title: 'Which wheel?',
+  } as const;
   const opened = await delivered(thread, { earlier });
   expect(opened).toEqual({ place: `${FLOOR}/${earlier.message}`, message: earlier.message });
   expect(await delivered(thread, { earlier })).toEqual(opened);
@@ -213,7 +218,10 @@ test('whoever is no member of the server hears nothing of its shop', async () =>
 
 test('an edit changes what stands, and what does not fit any more follows it', async () => {
   const message = (await delivered(post('edited'))) as MessageAddress;
-  const texts = Array.from({ length: 90 }, (_, i) => `Line ${String(i)} ${'of the record '.repeat(5)}`);
+  const texts = Array.from(
+    { length: 90 },
+    (_, i) => `Line ${String(i)} ${'of the record '.repeat(5)}`,
+  );
   const long = { ...card, parts: [{ part: 'own', texts }] } as const;
   await delivered({ effect: 'edit', key: 'edit', message, card: long });
   expect(platform.posted[0]?.edits).toBe(1);

@@ -176,6 +176,8 @@ export const openRooms = (next: () => number) => {
       return channel;
     },
     shutDirect: (person: string): void => void shut.add(`19${person.slice(2)}`),
+    /** The few minutes are over in which the same nonce is the same message. */
+    forgetNonces: (): void => nonces.clear(),
     leave: (guild: string): void => void guilds.delete(guild),
   };
 };
