@@ -4,6 +4,7 @@ import { check } from './knurl/check.ts';
 import { convert } from './knurl/convert.ts';
 import { help } from './knurl/help.ts';
 import { plan } from './knurl/plan.ts';
+import { results } from './knurl/result.ts';
 import { setup } from './knurl/setup.ts';
 import { trouble } from './knurl/trouble.ts';
 import { why } from './knurl/why.ts';
@@ -21,6 +22,7 @@ export const FLEET: readonly Command[] = [
   check,
   plan,
   trouble,
+  ...results,
   convert,
   card,
   why,

@@ -1,6 +1,7 @@
 import {
   checkAfter,
   checkBlank,
+  type FamilyGrowth,
   type Mm,
   mm,
   OutOfRange,
@@ -45,7 +46,12 @@ const seamReply = (
   return cardReply(seamCard({ context, said, request, diameter, result }));
 };
 
-const afterReply = (context: Context, said: CheckWords, request: SetupRequest): Reply => {
+const afterReply = (
+  context: Context,
+  said: CheckWords,
+  request: SetupRequest,
+  growth: FamilyGrowth | null,
+): Reply => {
   const blank = barOf(request);
   if (blank === null) return missingDiameter(context);
   const { flats } = said;
@@ -67,7 +73,7 @@ const afterReply = (context: Context, said: CheckWords, request: SetupRequest): 
             },
     },
   );
-  return cardReply(afterCard({ context, said, request, diameter: blank, result }));
+  return cardReply(afterCard({ context, said, request, diameter: blank, result }, growth));
 };
 
 const missingDiameter = (context: Context): Reply => {
@@ -81,9 +87,14 @@ const missingDiameter = (context: Context): Reply => {
   );
 };
 
-const checked = (context: Context, said: CheckWords, request: SetupRequest): Reply => {
+const checked = (
+  context: Context,
+  said: CheckWords,
+  request: SetupRequest,
+  growth: FamilyGrowth | null,
+): Reply => {
   if (said.seam !== undefined) return seamReply(context, said, request, said.seam);
-  if (isAfter(said)) return afterReply(context, said, request);
+  if (isAfter(said)) return afterReply(context, said, request, growth);
   const diameter = barOf(request);
   if (diameter === null) return missingDiameter(context);
   const result = checkBlank(request, diameter);
@@ -116,7 +127,7 @@ export const check = defineCommand({
   run: async (context, said) => {
     const built = await shopRequestOf(context, said);
     if ('refusal' in built) return refuse(built.refusal, built.choices);
-    const reply = checked(context, said, built.request);
+    const reply = checked(context, said, built.request, built.growth);
     return 'card' in reply ? { ...reply, about: built.about } : reply;
   },
 });

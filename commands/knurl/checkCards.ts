@@ -4,6 +4,7 @@ import {
   type CautionId,
   CHOSEN_CAUTIONS,
   type CheckFigures,
+  type FamilyGrowth,
   firstBite,
   MM_PER_INCH,
   type Mm,
@@ -31,6 +32,8 @@ import {
 import type { Context } from '../../src/desk/index.ts';
 import type { CheckWords } from './checkFields.ts';
 import { checkPictures } from './pictures.ts';
+import { logChoices } from './resultChoices.ts';
+import { growthLines } from './shopGrowth.ts';
 import { reworded } from './words.ts';
 
 /** What a check's card is made from. */
@@ -202,7 +205,9 @@ export const blankCard = (c: Checked<BlankCheck>): Card => {
       { part: 'lines', lines: doubtsWheel(c) ? seamSteps(trialBite(c)) : [] },
     ],
     STANDING_CAUTIONS,
-    to === null || sensibleFrom(c) !== null ? [] : [setUpAt(c, to)],
+    to === null || sensibleFrom(c) !== null
+      ? []
+      : [setUpAt(c, to), ...(tracks(c) ? logChoices(c.context) : [])],
   );
 };
 
@@ -371,8 +376,16 @@ const afterChoices = (c: Checked<AfterCheck>): readonly Choice[] => {
   return [...(smaller === null ? [] : [setUpAt(c, smaller, pair)]), setUpAt(c, diameter, pair)];
 };
 
+/** A cut part has no growth to expect. */
+const growthBehind = (c: Checked<AfterCheck>, growth: FamilyGrowth | null): readonly Line[] =>
+  growthLines(
+    growth,
+    c.request,
+    figureOf(c.result.figures, 'growthExpected') === null ? 'cut' : 'form',
+  );
+
 /** The finished part: right or not, what is off, and what to do. */
-export const afterCard = (c: Checked<AfterCheck>): Card =>
+export const afterCard = (c: Checked<AfterCheck>, growth: FamilyGrowth | null): Card =>
   cardOf(
     c,
     afterHeadline(c),
@@ -383,7 +396,8 @@ export const afterCard = (c: Checked<AfterCheck>): Card =>
       },
       { part: 'rows', rows: afterRows(c) },
       { part: 'checks', checks: c.result.checks },
+      { part: 'lines', lines: growthBehind(c, growth) },
     ],
     STANDING_CAUTIONS,
-    afterChoices(c),
+    [...afterChoices(c), ...logChoices(c.context)],
   );

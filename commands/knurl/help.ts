@@ -16,8 +16,9 @@ const EXAMPLES = {
   ],
 } as const;
 
-/** Of a list's commands the one that shows it is enough: it says how to add to it. */
-const isNamed = ({ path }: Command): boolean => path.length <= 2 || path.at(-1) === 'list';
+/** Of a list's commands the one that shows it is enough, of a group's the one that is usual. */
+const isNamed = ({ path }: Command): boolean =>
+  path.length <= 2 || path.at(-1) === 'log' || (path[0] === 'shop' && path.at(-1) === 'list');
 
 const helpCard = ({ units, fleet }: Context): Card => ({
   verb: 'help',

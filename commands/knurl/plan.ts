@@ -59,7 +59,7 @@ type Asked = Exclude<ShopBuilt, { readonly refusal: unknown }>;
 const planned = async (
   context: Context,
   given: PlanWords,
-  { request, machine, about }: Asked,
+  { request, machine, growth, about }: Asked,
 ): Promise<Reply> => {
   const { finish } = request;
   if (finish === null || request.aimOnly === true) return missingFinish(context);
@@ -73,7 +73,16 @@ const planned = async (
     turningSpread: machine?.turningSpread ?? TURNING_SPREAD,
   };
   return cardReply(
-    planCard({ context, given, request, limits: finish, kind, crib, plan: planFrom(wanted) }),
+    planCard({
+      context,
+      given,
+      request,
+      limits: finish,
+      kind,
+      crib,
+      growth,
+      plan: planFrom(wanted),
+    }),
     [],
     about,
   );

@@ -3,6 +3,7 @@ import {
   type CribWheel,
   cribPitch,
   DEFAULT_INCLUDED,
+  type FamilyGrowth,
   type Figures,
   figure,
   type Pitch,
@@ -28,6 +29,7 @@ import type { Context } from '../../src/desk/index.ts';
 import { planPictures } from './pictures.ts';
 import type { CribKind, PlanWords } from './planFields.ts';
 import { cribLine } from './shopCrib.ts';
+import { growthLines } from './shopGrowth.ts';
 import { reworded } from './words.ts';
 
 type Planned = {
@@ -38,6 +40,8 @@ type Planned = {
   readonly kind: CribKind;
   readonly crib: readonly CribWheel[];
   readonly plan: Plan;
+  /** What the shop has seen of the growth of such a part. */
+  readonly growth: FamilyGrowth | null;
 };
 
 /** Candidates told on the card; programs get all of them. */
@@ -277,6 +281,7 @@ export const planCard = (p: Planned): Card => {
       { part: 'lines', lines: changesBelow(p).map(changeLine) },
       { part: 'rows', rows: candidateRows(p) },
       { part: 'checks', checks: best?.checks ?? [] },
+      { part: 'lines', lines: growthLines(p.growth, p.request, best?.process ?? 'form') },
       { part: 'cautions', shown: [], rest: [], all: STANDING_CAUTIONS },
       { part: 'footing' },
     ],

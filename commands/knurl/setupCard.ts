@@ -3,6 +3,7 @@ import {
   type Check,
   type CheckName,
   DWELL_TURNS,
+  type FamilyGrowth,
   MATERIALS,
   type Mm,
   materialById,
@@ -28,7 +29,9 @@ import type { Context } from '../../src/desk/index.ts';
 import { type Machine, onDial } from '../../src/shop/index.ts';
 import { partOf } from '../../src/words/index.ts';
 import { setupPictures } from './pictures.ts';
+import { logChoices } from './resultChoices.ts';
 import type { SetupWords } from './setupParameters.ts';
+import { growthLines } from './shopGrowth.ts';
 import { reworded } from './words.ts';
 
 /** What the card is made from. */
@@ -40,6 +43,8 @@ export type Worked = {
   readonly materialAssumed: boolean;
   /** The shop's machine that was named. */
   readonly machine: Machine | null;
+  /** What the shop has seen of the growth of such a part. */
+  readonly growth: FamilyGrowth | null;
 };
 
 /** Cautions shown by name; the standing ones follow in short. */
@@ -226,7 +231,7 @@ const rows = (w: Worked): readonly Row[] => {
   ];
 };
 
-const wheelLines = ({ request, result, said }: Worked): readonly Line[] => {
+const wheelLines = ({ growth, request, result, said }: Worked): readonly Line[] => {
   const lines: Line[] = [];
   const { counted, pitch } = request;
   if (counted !== null && pitch !== null)
@@ -240,7 +245,7 @@ const wheelLines = ({ request, result, said }: Worked): readonly Line[] => {
     );
   if (said.feed !== undefined && result.motion.travel === 'plunge')
     lines.push(line('feedNeedsLength', {}));
-  return lines;
+  return [...lines, ...growthLines(growth, request, result.process)];
 };
 
 const blankChoices = (w: Worked): readonly Choice[] => {
@@ -326,6 +331,7 @@ const choices = (w: Worked): readonly Choice[] => {
     ...wayBackChoices(w),
     ...finishedSizeChoices(w),
     ...blankChoices(w).slice(0, 1),
+    ...logChoices(context),
     ...(took === null
       ? []
       : [

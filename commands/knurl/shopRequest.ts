@@ -1,4 +1,4 @@
-import type { SetupRequest } from '../../src/calc/index.ts';
+import type { FamilyGrowth, SetupRequest } from '../../src/calc/index.ts';
 import type { About, Context } from '../../src/desk/index.ts';
 import type { Refusal, Suggestion } from '../../src/refusal.ts';
 import {
@@ -13,6 +13,7 @@ import {
 } from '../../src/shop/index.ts';
 import { requestOf } from './request.ts';
 import type { SetupWords } from './setupParameters.ts';
+import { grownAs, growthFor } from './shopGrowth.ts';
 
 type Refused = { readonly refusal: Refusal; readonly choices: readonly Suggestion[] };
 type Given<T> = { readonly id: string; readonly value: T } | null;
@@ -22,6 +23,9 @@ export type ShopBuilt =
       readonly request: SetupRequest;
       readonly materialAssumed: boolean;
       readonly machine: Machine | null;
+      readonly wheel: Wheel | null;
+      /** What the shop has seen of the growth of such a part. */
+      readonly growth: FamilyGrowth | null;
       readonly about: About;
     }
   | Refused;
@@ -106,11 +110,14 @@ export const shopRequestOf = async (
   const known = wheel === null ? said : withWheel(said, wheel.value);
   const built = requestOf(context, known, pitchNeeded);
   if ('refusal' in built) return built;
-  const request = lowered(built.request, machine?.value ?? null);
+  const growth = await growthFor(context, built.request);
+  const request = grownAs(lowered(built.request, machine?.value ?? null), growth);
   return {
     request,
     materialAssumed: built.materialAssumed,
     machine: machine?.value ?? null,
+    wheel: wheel?.value ?? null,
+    growth,
     about: {
       request,
       wheel: wheel?.id ?? null,

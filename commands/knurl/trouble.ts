@@ -18,6 +18,7 @@ import {
   type Reply,
   refuse,
 } from '../../src/desk/index.ts';
+import { causeCounts, type Wheel } from '../../src/shop/index.ts';
 import { shopRequestOf } from './shopRequest.ts';
 import { troubleCard } from './troubleCard.ts';
 import { type TroubleWords, troubleFields } from './troubleFields.ts';
@@ -47,11 +48,17 @@ const partOf = (said: TroubleWords, blank: number): MeasuredPart | null => {
   };
 };
 
-const factsOf = (said: TroubleWords, request: SetupRequest): TroubleFacts => {
+/** Parts the wheel has made: as it was said, else as the shop has counted them. */
+const partsOn = (said: TroubleWords, wheel: Wheel | null): number | null => {
+  if (said.partsOnWheel !== undefined) return said.partsOnWheel;
+  return wheel === null || wheel.partsRun === 0 ? null : wheel.partsRun;
+};
+
+const factsOf = (said: TroubleWords, request: SetupRequest, wheel: Wheel | null): TroubleFacts => {
   const result = setUp(request);
   const part = partOf(said, result.blank.diameter);
   return troubleFacts(request, result, {
-    partsOnWheel: said.partsOnWheel ?? null,
+    partsOnWheel: partsOn(said, wheel),
     firstBite: length(said.bite),
     blank: null,
     blankTaper: null,
@@ -59,18 +66,19 @@ const factsOf = (said: TroubleWords, request: SetupRequest): TroubleFacts => {
   });
 };
 
-const ranked = (
+const ranked = async (
   context: Context,
   said: TroubleWords,
   symptom: SymptomId,
   facts: TroubleFacts,
   about?: About,
-): Reply =>
-  cardReply(
-    troubleCard({ context, said, symptom, facts, causes: rankCauses(symptom, facts, {}) }),
-    [],
-    about,
-  );
+): Promise<Reply> => {
+  const { visit } = context;
+  const counts = visit === null ? {} : await causeCounts(visit.shop, symptom);
+  const causes = rankCauses(symptom, facts, counts);
+  const logged = Object.values(counts).reduce((sum, count) => sum + count, 0);
+  return cardReply(troubleCard({ context, said, symptom, facts, causes, logged }), [], about);
+};
 
 const SYMPTOM_EXAMPLES = ['double', 'flaking', 'shallow', 'pin seized'] as const;
 
@@ -109,10 +117,16 @@ export const trouble = defineCommand({
   allowed: 'operator',
   run: async (context, said) => {
     if (said.symptom === undefined) return missingSymptom(context);
-    if (wordsAlone(said)) return ranked(context, said, said.symptom, NO_FACTS);
+    if (wordsAlone(said)) return await ranked(context, said, said.symptom, NO_FACTS);
     const built = await shopRequestOf(context, said);
     return 'refusal' in built
       ? refuse(built.refusal, built.choices)
-      : ranked(context, said, said.symptom, factsOf(said, built.request), built.about);
+      : await ranked(
+          context,
+          said,
+          said.symptom,
+          factsOf(said, built.request, built.wheel),
+          built.about,
+        );
   },
 });

@@ -17,6 +17,8 @@ type Troubled = {
   readonly symptom: SymptomId;
   readonly facts: TroubleFacts;
   readonly causes: readonly RankedCause[];
+  /** Causes this shop has found behind the symptom. */
+  readonly logged: number;
 };
 
 /** Causes told on the card; programs get all of them. */
@@ -38,7 +40,7 @@ const choices = (context: Context): readonly Choice[] => [
 ];
 
 /** Causes of a symptom, what speaks for each in numbers, and one next move each. */
-export const troubleCard = ({ context, said, symptom, facts, causes }: Troubled): Card => {
+export const troubleCard = ({ context, said, symptom, facts, causes, logged }: Troubled): Card => {
   const [likeliest] = causes;
   if (likeliest === undefined) throw new Error(`no cause for ${symptom}`);
   return {
@@ -50,6 +52,7 @@ export const troubleCard = ({ context, said, symptom, facts, causes }: Troubled)
         lines: [
           line('troubleSeen', { symptom }),
           facts === NO_FACTS ? line('troubleByWords', {}) : line('troubleByNumbers', {}),
+          ...(logged === 0 ? [] : [line('troubleCounts', { results: logged })]),
         ],
       },
       {

@@ -11,7 +11,7 @@ import {
 } from '../../src/words/index.ts';
 
 /** What people say they see. `size wrong` alone says too little and is asked. */
-const SPOKEN: { readonly [S in SymptomId]: readonly string[] } = {
+export const SPOKEN: { readonly [S in SymptomId]: readonly string[] } = {
   doublePattern: [
     'double',
     'doubled',

@@ -109,11 +109,28 @@ const formulaLines = (why: Explained): readonly Line[] => [
   sureLine(why),
 ];
 
+/** Formulas and figures that rest on the growth to expect. */
+const OF_GROWTH: readonly string[] = ['growthBelief', 'growthBeforeResults'];
+const GROWTH_FIGURES: readonly FigureName[] = ['growthFactor', 'growthFactorExpected'];
+
+const restsOnGrowth = (why: Explained): boolean =>
+  [why.by, ...Object.values(why.through).map(({ by }) => by)].some((by) =>
+    OF_GROWTH.includes(by),
+  ) || Object.values(why.inputs).some((name) => GROWTH_FIGURES.includes(name));
+
+/** How many results stand behind the growth, as the card itself said it. */
+const growthLinesOf = ({ card }: Explaining, why: Explained): readonly Line[] =>
+  restsOnGrowth(why)
+    ? card.parts
+        .flatMap((part) => (part.part === 'lines' ? part.lines : []))
+        .filter((said) => said.line === 'growthStands')
+    : [];
+
 const partsOf = (e: Explaining, why: Why): readonly Part[] =>
   'told' in why
     ? [{ part: 'lines', lines: [line('whyTold', { told: why.told })] }, { part: 'footing' }]
     : [
-        { part: 'lines', lines: formulaLines(why) },
+        { part: 'lines', lines: [...formulaLines(why), ...growthLinesOf(e, why)] },
         { part: 'rows', rows: rowsOf(e, why) },
         { part: 'lines', lines: sourceLines(why) },
         { part: 'lines', lines: [line('whyAssumes', { by: why.by })] },

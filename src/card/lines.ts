@@ -22,6 +22,7 @@ import type { CheckLabels, CheckLines, CheckRows } from './checkLines.ts';
 import type { ConvertLabels, ConvertLines, ConvertRows } from './convertLines.ts';
 import type { Nothing } from './nothing.ts';
 import type { PlanLabels, PlanLines, PlanRows } from './planLines.ts';
+import type { ResultLabels, ResultLines, ResultRows } from './resultLines.ts';
 import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
 import type { TroubleLabels, TroubleLines, TroubleRows } from './troubleLines.ts';
 import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
@@ -33,6 +34,7 @@ import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
 export type Lines = CheckLines &
   ConvertLines &
   PlanLines &
+  ResultLines &
   ShopLines &
   TroubleLines &
   WhyLines & {
@@ -80,6 +82,7 @@ export type Line = { [K in LineId]: { readonly line: K; readonly values: Lines[K
 export type Rows = CheckRows &
   ConvertRows &
   PlanRows &
+  ResultRows &
   ShopRows &
   TroubleRows &
   WhyRows & {
@@ -117,6 +120,7 @@ export type Row = { [K in RowId]: { readonly row: K; readonly values: Rows[K] } 
 export type Labels = CheckLabels &
   ConvertLabels &
   PlanLabels &
+  ResultLabels &
   ShopLabels &
   TroubleLabels &
   WhyLabels & {

@@ -31,7 +31,7 @@ export {
 export type { Effect, MessageAddress, Ring, Target } from './effect.ts';
 export { type KeptAnswers } from './kept.ts';
 export { openRecordsDesk, type RecordsDeskOptions } from './records.ts';
-export { ROLES, type Role } from './role.ts';
+export { atLeast, ROLES, type Role } from './role.ts';
 export { type Route, route } from './route.ts';
 export { placeName } from './settle.ts';
 export type { Visit } from './visit.ts';

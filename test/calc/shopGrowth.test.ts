@@ -6,9 +6,12 @@ import {
   growthBeforeResults,
   growthBelief,
   growthFamily,
+  growthFromTallies,
   growthInterval,
+  isDoubted,
   measuredGrowthShare,
   siftResults,
+  tallyGrowth,
 } from '../../src/calc/shopGrowth.ts';
 import { mm, OutOfRange } from '../../src/calc/units.ts';
 import { mulberry32, normalFrom, oneOf } from '../support/random.ts';
@@ -175,6 +178,38 @@ describe('a gross outlier', () => {
     const { mean, sd } = growthBelief(good, 'a');
     const at = (z: number) => siftResults([...good, ...seen('a', mean + z * sd)]).doubted.length;
     expect([at(2.999), at(3.001), at(-2.999), at(-3.001)]).toEqual([0, 1, 0, 1]);
+  });
+});
+
+describe('what the results add up to', () => {
+  it('says the same as all of them, to the last digit', () => {
+    const families = ['a', 'b', 'c', 'never seen'];
+    const share = fc.oneof(fc.double({ min: 0.7, max: 1.2, noNaN: true }), fc.constant(1.9));
+    const one = fc.record({
+      family: fc.constantFrom('a', 'b', 'c'),
+      share,
+      confirmed: fc.boolean(),
+    });
+    fc.assert(
+      fc.property(fc.array(one, { maxLength: 40 }), (results) => {
+        const waiting = siftResults(results).doubted.length;
+        for (const family of families)
+          expect(growthFromTallies(tallyGrowth(results), family, waiting)).toEqual(
+            growthBelief(results, family),
+          );
+      }),
+    );
+  });
+
+  it('doubts the next one where the sieve does', () => {
+    const known = seen('a', 0.93, 0.96, 0.9);
+    const shares = fc.double({ min: 0.5, max: 1.5, noNaN: true });
+    fc.assert(
+      fc.property(shares, (share) => {
+        const isOdd = siftResults([...known, ...seen('a', share)]).doubted.length === 1;
+        expect(isDoubted(share, growthBelief(known, 'a'))).toBe(isOdd);
+      }),
+    );
   });
 });
 

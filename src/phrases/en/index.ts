@@ -12,6 +12,7 @@ import { planLabels } from './planLines.ts';
 import { records } from './records.ts';
 import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
+import { resultLabels } from './resultLines.ts';
 import { rows } from './rows.ts';
 import { shopLabels } from './shopLines.ts';
 import { slack } from './slack.ts';
@@ -33,6 +34,7 @@ export const en: Book = {
     ...checkLabels,
     ...convertLabels,
     ...planLabels,
+    ...resultLabels,
     ...troubleLabels,
     ...shopLabels,
     ...whyLabels,

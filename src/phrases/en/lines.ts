@@ -7,6 +7,7 @@ import { convertLines } from './convertLines.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 import { planLines } from './planLines.ts';
 import { remedyLabel } from './remedies.ts';
+import { resultLines } from './resultLines.ts';
 import { shopLines } from './shopLines.ts';
 import { troubleLines } from './troubleLines.ts';
 import { whyLines } from './whyLines.ts';
@@ -26,6 +27,7 @@ export const lines: Book['lines'] = {
   ...checkLines,
   ...convertLines,
   ...planLines,
+  ...resultLines,
   ...shopLines,
   ...troubleLines,
   ...whyLines,

@@ -2,6 +2,7 @@ import type { Book } from '../book.ts';
 import { checkRows } from './checkLines.ts';
 import { convertRows } from './convertLines.ts';
 import { planRows } from './planLines.ts';
+import { resultRows } from './resultLines.ts';
 import { shopRows } from './shopLines.ts';
 import { troubleRows } from './troubleLines.ts';
 import { whyRows } from './whyLines.ts';
@@ -12,6 +13,7 @@ export const rows: Book['rows'] = {
   ...checkRows,
   ...convertRows,
   ...planRows,
+  ...resultRows,
   ...shopRows,
   ...troubleRows,
   ...whyRows,

@@ -3,13 +3,13 @@ import { cardById } from '../cards.ts';
 import { remember, type Verb } from '../history.ts';
 import { personById } from '../people.ts';
 import { type Done, done, refused } from '../result.ts';
-import type { ShopChange } from '../view.ts';
+import type { ShopChange, ShopView } from '../view.ts';
 import { compared } from './compare.ts';
 import { contentFault, contentOf, contentRow, type ResultContent } from './content.ts';
 import { resift } from './growth.ts';
-import { resultName, resultRows } from './kept.ts';
+import { type KeptResult, resultName, resultRows } from './kept.ts';
 import { inTurn, type Logged, loggedOf, NO_OTHERS, saidOf } from './log.ts';
-import { wear } from './wear.ts';
+import { partsRun, wear } from './wear.ts';
 
 /** Which result, and the version of it that was seen: another is not written over. */
 type Seen = { readonly id: string; readonly version?: number };
@@ -111,19 +111,25 @@ export const confirmResult = async (change: ShopChange, seen: Seen): Promise<Don
   const before = found.value;
   await rewritten(change, before, { confirmed_at: change.at, confirmed_by: change.by });
   const others = await resift(change);
-  return done(await again(change, before, await wear(change, before.wheel, 0), others));
+  return done(await again(change, before, await partsRun(change, before.wheel), others));
+};
+
+/** A result with all that is known through it, nothing being changed. */
+export const lookAtResult = async (view: ShopView, result: KeptResult): Promise<Logged> => {
+  const row = await resultRows(view).where('id', '=', result.id).executeTakeFirstOrThrow();
+  return await again(view, row, await partsRun(view, row.wheel), NO_OTHERS);
 };
 
 /** The result held against its card once more, as it stands now. */
 const again = async (
-  change: ShopChange,
+  view: ShopView,
   row: ResultTable,
   parts: number | null,
   others: Logged['others'],
 ): Promise<Logged> => {
-  const card = await cardById(change, row.card);
+  const card = await cardById(view, row.card);
   const beside = card === null ? null : compared(card, contentOf(row));
   const nothing = { base: null, after: null, growth: 'oldCard' } as const;
   const seen = beside?.ok === true ? beside.value : nothing;
-  return await loggedOf(change, row.id, seen, parts, others);
+  return await loggedOf(view, row.id, seen, parts, others);
 };

@@ -15,13 +15,16 @@ import {
 import type { Refusal } from '../../refusal.ts';
 import type { KeptCard } from '../cards.ts';
 import { type Done, done, refused } from '../result.ts';
-import type { ResultContent } from './content.ts';
+import type { Outcome, ResultContent } from './content.ts';
 
 /** What a result says of the growth of its pattern and material. */
 export type GrowthSaid = { readonly family: string; readonly share: number };
 
 /** Why a result says nothing of the growth. */
-export type NoGrowth = 'noCrest' | 'noHeight' | 'cut' | 'tooLittle' | 'oldCard';
+export type NoGrowth = 'noCrest' | 'noHeight' | 'cut' | 'spoiled' | 'tooLittle' | 'oldCard';
+
+/** What leaves no sound tooth, so that its crest is not that of the growth. Judgement. */
+const SPOILED: readonly Outcome[] = ['double', 'flaking', 'bent', 'seized'];
 
 /** A result held against its card. */
 export type Compared = {
@@ -64,6 +67,7 @@ const growthOf = (
 ): GrowthSaid | NoGrowth => {
   const planned = setUp({ ...request, stock: blank, asIs: true, wantedTeeth: null });
   if (planned.process === 'cut') return 'cut';
+  if (SPOILED.includes(content.outcome)) return 'spoiled';
   if (content.crest === null) return 'noCrest';
   const sharp = mm(planned.figures.sharpHeight?.value ?? 0);
   const height = heightOf(content, after, sharp);

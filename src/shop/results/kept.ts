@@ -87,6 +87,12 @@ export const findResult = async (
   return row === undefined ? refused(notFound) : done(keptResult(row));
 };
 
+/** The result of an id that the records themselves name. */
+export const resultById = async (view: ShopView, id: string): Promise<KeptResult | null> => {
+  const row = await resultRows(view).where('id', '=', id).executeTakeFirst();
+  return row === undefined ? null : keptResult(row);
+};
+
 export type ResultsWanted = {
   readonly limit: number;
   /** Only one person's. */

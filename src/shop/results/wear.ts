@@ -11,8 +11,7 @@ export const wear = async (
   wheel: string | null,
   parts: number,
 ): Promise<number | null> => {
-  if (wheel === null) return null;
-  if (parts === 0) return await partsRun(change, wheel);
+  if (wheel === null || parts === 0) return await partsRun(change, wheel);
   const row = await change.db
     .updateTable('wheel')
     .set((eb) => ({
@@ -32,7 +31,9 @@ export const wear = async (
   return row?.parts_run ?? null;
 };
 
-const partsRun = async (view: ShopView, wheel: string): Promise<number | null> => {
+/** Parts that a wheel has run by now; null where there is none. */
+export const partsRun = async (view: ShopView, wheel: string | null): Promise<number | null> => {
+  if (wheel === null) return null;
   const row = await view.db
     .selectFrom('wheel')
     .select('parts_run')

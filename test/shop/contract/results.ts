@@ -126,8 +126,8 @@ const logging = (engine: Engine): void => {
     const shop = await shopOn(engine);
     const said: ResultContent = {
       ...grown(0.93),
-      outcome: 'double',
-      symptom: 'doublePattern',
+      outcome: 'other',
+      symptom: 'oversize',
       teeth: 66,
       partsRun: 12,
       cause: 'dullWheel',
@@ -142,7 +142,7 @@ const logging = (engine: Engine): void => {
     const last = good(await findResult(shop.view, { card: second.result.card }));
     expect(last).toEqual(second.result);
     expect(await historyOf(shop.view, 'result', { id: first.result.id })).toMatchObject([
-      { verb: 'added', before: null, after: { outcome: 'double', teeth: 66, note } },
+      { verb: 'added', before: null, after: { outcome: 'other', teeth: 66, note } },
     ]);
   });
 
@@ -161,6 +161,7 @@ const logging = (engine: Engine): void => {
     const family = growthFamily({ kind: 'straight' }, 'steel');
     expect(await said(whole)).toMatchObject({ family, share: expect.closeTo(0.9, 9) as unknown });
     expect(await said({ ...whole, crest: null })).toBe('noCrest');
+    expect(await said({ ...whole, outcome: 'flaking' })).toBe('spoiled');
     expect(await said({ ...whole, toothHeight: null })).toBe('noHeight');
     expect(await said({ ...whole, crest: mm(25.2) }, { ...requestFor(), process: 'cut' })).toBe(
       'cut',
