@@ -17,6 +17,7 @@ import {
   type KeptResult,
   type Logged,
   logResult,
+  OUTCOMES,
   type ResultContent,
   resultName,
   withdrawResult,
@@ -74,12 +75,10 @@ const NOTHING_SAID: Omit<ResultContent, 'outcome'> = {
   note: null,
 };
 
-const OUTCOME_EXAMPLES = ['good', 'double', 'shallow', 'flaking', 'bent', 'seized'] as const;
-
 const missingOutcome = (context: Context): Reply =>
   refuse(
-    { code: 'missing', parameter: 'outcome', examples: OUTCOME_EXAMPLES },
-    OUTCOME_EXAMPLES.map((example) => ({
+    { code: 'missing', parameter: 'outcome', examples: OUTCOMES },
+    OUTCOMES.map((example) => ({
       label: example,
       words: reworded(context, [], example),
     })),
