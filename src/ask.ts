@@ -44,6 +44,11 @@ const printed = (answer: Answer, json: boolean, phone: boolean): string =>
     ? JSON.stringify(answerJson(answer, en))
     : cardText(spoken(answer, en), widthOf(process.stdout.columns, phone));
 
+// A reader that goes away (`| head`) has read what it wanted.
+process.stdout.on('error', (error: NodeJS.ErrnoException) => {
+  process.exit(error.code === 'EPIPE' ? CARD : MISUSE);
+});
+
 const { values, positionals } = argumentsOf();
 const { units } = values;
 if (units !== 'in' && units !== 'mm') misuse(en.terminal.unitsArgument);

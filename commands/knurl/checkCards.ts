@@ -26,12 +26,13 @@ import {
   label,
   line,
   type Part,
+  type Picture,
   type Row,
   row,
 } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
 import type { CheckWords } from './checkFields.ts';
-import { checkPictures } from './pictures.ts';
+import { afterPictures, blankPictures, seamPictures } from './checkPictures.ts';
 import { logChoices } from './resultChoices.ts';
 import { growthLines } from './shopGrowth.ts';
 import { reworded } from './words.ts';
@@ -94,12 +95,13 @@ const cardOf = (
   parts: readonly Part[],
   cautions: readonly CautionId[],
   choices: readonly Choice[],
+  pictures: readonly Picture[],
 ): Card => ({
   verb: 'check',
   headline,
   parts: [...parts, cautionPart(cautions), { part: 'footing' }],
   choices: [...choices, otherUnits(c)],
-  pictures: checkPictures(c.diameter, c.result),
+  pictures,
   figures: c.result.figures,
   checks: c.result.checks,
   cautions,
@@ -208,6 +210,7 @@ export const blankCard = (c: Checked<BlankCheck>): Card => {
     to === null || sensibleFrom(c) !== null
       ? []
       : [setUpAt(c, to), ...(tracks(c) ? logChoices(c.context) : [])],
+    blankPictures(c.request, c.diameter, c.result),
   );
 };
 
@@ -288,6 +291,7 @@ export const seamCard = (c: Checked<SeamCheck>): Card => {
     ],
     c.result.cautions,
     seamChoices(c, left),
+    countIsFar(c) ? [] : seamPictures(c.request, c.diameter, c.result),
   );
 };
 
@@ -400,4 +404,5 @@ export const afterCard = (c: Checked<AfterCheck>, growth: FamilyGrowth | null): 
     ],
     STANDING_CAUTIONS,
     [...afterChoices(c), ...logChoices(c.context)],
+    afterPictures(c.request, c.diameter, c.result),
   );

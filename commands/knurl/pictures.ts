@@ -1,26 +1,27 @@
 import {
-  type AfterCheck,
-  type BlankCheck,
   type Candidate,
   type Check,
-  type CheckFigures,
   cribPitch,
   formOf,
-  type Mm,
   mm,
   type SetupRequest,
   type SetupResult,
   sharpHeight,
+  TRACKS_WITHIN,
   type Window,
 } from '../../src/calc/index.ts';
 import type { Picture } from '../../src/card/index.ts';
 
 type PictureFor<K extends Picture['kind']> = Extract<Picture, { kind: K }>;
-type StripMarks = PictureFor<'trackingStrip'>['numbers']['marks'];
 
 const trackingOf = (checks: readonly Check[]): Check | undefined =>
   checks.find((check) => check.name === 'tracking');
-const isFine = (checks: readonly Check[]): boolean => trackingOf(checks)?.state === 'fine';
+/** How far the second turn falls beside the first, in teeth. */
+const errorOf = (checks: readonly Check[]): number =>
+  trackingOf(checks)?.figures['toothError']?.value ?? 0;
+/** Whether the pattern would split; a blank can be stopped for other reasons too. */
+const splits = (checks: readonly Check[]): boolean =>
+  Math.abs(errorOf(checks)) > TRACKS_WITHIN + 1e-9;
 
 const toothForm = ({ figures, blank, pitch, process }: SetupResult): readonly Picture[] => {
   const { sharpHeight: sharp, crestFlat } = figures;
@@ -45,38 +46,23 @@ const toothForm = ({ figures, blank, pitch, process }: SetupResult): readonly Pi
   ];
 };
 
-const strip = (of: {
-  readonly transversePitch: Mm;
-  /** The whole-tooth diameter that the window belongs to. */
-  readonly whole: number;
-  readonly window: Window;
-  readonly marks: StripMarks;
-  readonly next: PictureFor<'trackingStrip'>['numbers']['next'];
-}): Picture => {
-  const { transversePitch, whole, marks, next } = of;
-  return {
-    kind: 'trackingStrip',
-    numbers: {
-      transversePitch,
-      below: mm(whole - of.window.low),
-      above: mm(of.window.high - whole),
-      marks,
-      next,
-    },
-  };
-};
-
 const setupStrip = (request: SetupRequest, result: SetupResult): Picture => {
   const { blank, pitch, window } = result;
   const { stock } = request;
+  const whole = (blank.teeth * pitch.transverse) / Math.PI;
   const blankMark = { what: 'blank', diameter: blank.diameter } as const;
-  return strip({
-    transversePitch: pitch.transverse,
-    whole: (blank.teeth * pitch.transverse) / Math.PI,
-    window,
-    marks: stock === null ? [blankMark] : [{ what: 'bar', diameter: stock }, blankMark],
-    next: null,
-  });
+  return {
+    kind: 'trackingStrip',
+    numbers: {
+      transversePitch: pitch.transverse,
+      wholeAt: null,
+      below: mm(whole - window.low),
+      above: mm(window.high - whole),
+      marks: stock === null ? [blankMark] : [{ what: 'bar', diameter: stock }, blankMark],
+      expected: null,
+      next: null,
+    },
+  };
 };
 
 const setupSketch = (request: SetupRequest, result: SetupResult): Picture => ({
@@ -117,47 +103,16 @@ const developedPattern = (request: SetupRequest, result: SetupResult): Picture =
     transversePitch: result.pitch.transverse,
     helix: result.pitch.helix,
     families: familiesOf(request),
-    toothError: trackingOf(result.checks)?.figures['toothError']?.value ?? 0,
-    tracks: isFine(result.checks),
+    toothError: errorOf(result.checks),
+    tracks: !splits(result.checks),
   },
 });
 
 /** Tooth, diameter and machine; where the count is bad, what it would do to the pattern instead. */
 export const setupPictures = (request: SetupRequest, result: SetupResult): readonly Picture[] =>
-  isFine(result.checks)
-    ? [...toothForm(result), setupStrip(request, result), setupSketch(request, result)]
-    : [setupStrip(request, result), developedPattern(request, result), ...toothForm(result)];
-
-const figureOf = (figures: CheckFigures, name: keyof CheckFigures): number | null =>
-  figures[name]?.value ?? null;
-
-/** Where the blank stands between the whole counts, and where to from there. */
-export const checkPictures = (
-  diameter: Mm,
-  { figures, checks }: Pick<BlankCheck | AfterCheck, 'figures' | 'checks'>,
-): readonly Picture[] => {
-  const [pitch, toothCount] = [
-    figureOf(figures, 'transversePitch'),
-    figureOf(figures, 'toothCount'),
-  ];
-  const [low, high] = [figureOf(figures, 'blankWindowLow'), figureOf(figures, 'blankWindowHigh')];
-  if (pitch === null || toothCount === null || low === null || high === null) return [];
-  const seam = figureOf(figures, 'seamDiameter');
-  const proven = figureOf(figures, 'effectivePitch');
-  // A seam that does not close speaks against the label: its counts are not shown as if they held.
-  if (seam !== null && proven === null) return [];
-  const to = seam ?? figureOf(figures, 'nextDiameter');
-  const needsNext = to !== null && to < diameter - 1e-6 && (seam !== null || !isFine(checks));
-  return [
-    strip({
-      transversePitch: mm(proven ?? pitch),
-      whole: (toothCount * pitch) / Math.PI,
-      window: { low: mm(low), high: mm(high) },
-      marks: [{ what: 'bar', diameter }],
-      next: needsNext ? { from: diameter, to: mm(to) } : null,
-    }),
-  ];
-};
+  splits(result.checks)
+    ? [setupStrip(request, result), developedPattern(request, result), ...toothForm(result)]
+    : [...toothForm(result), setupStrip(request, result), setupSketch(request, result)];
 
 /** Dots on the map: more would hide each other. Judgement. */
 const MAPPED = 40;

@@ -1,6 +1,6 @@
 import { framed, INK, type Key, keyBlock, MARGIN, WIDTH } from './frame.ts';
 import type { DevelopedPatternNumbers } from './numbers.ts';
-import { element, line, type Point, rect } from './svg.ts';
+import { type Attributes, element, line, type Point, rect } from './svg.ts';
 import type { WordsOf } from './words.ts';
 
 const LEFT = MARGIN + 2;
@@ -77,6 +77,17 @@ const shownTeeth = (n: DevelopedPatternNumbers): number => Math.min(n.toothCount
 const FIRST = { stroke: INK.ink, 'stroke-width': 2.5 } as const;
 const SECOND = { stroke: INK.warn, 'stroke-width': 2, 'stroke-dasharray': '6 4' } as const;
 
+/** Grooves round the work, a pitch apart from the lower edge up. */
+const rings = (a: Area, pitch: number, id: string, style: Attributes): string =>
+  element(
+    'g',
+    { 'data-figure': id },
+    Array.from({ length: Math.ceil((a.bottom - a.top) / pitch) - 1 }, (_, i) => {
+      const y = a.bottom - (i + 1) * pitch;
+      return line([a.left, y], [a.right, y], style);
+    }).join(''),
+  );
+
 /** The knurl unrolled, its true angle and pitch, and where a second turn falls beside the first. */
 export const developedPattern = (
   n: DevelopedPatternNumbers,
@@ -98,13 +109,9 @@ export const developedPattern = (
         family(n, lean, pitch, 0, a, FIRST),
       ),
     );
-    const rows = Math.floor(HEIGHT / pitch);
-    const across =
-      n.families === 'square'
-        ? Array.from({ length: rows + 1 }, (_, i) =>
-            line([LEFT, a.bottom - i * pitch], [RIGHT, a.bottom - i * pitch], FIRST),
-          ).join('')
-        : '';
+    const across = n.families === 'square' ? rings(a, pitch, 'firstRings', FIRST) : '';
+    const acrossAgain =
+      n.families === 'square' && !n.tracks ? rings(a, pitch, 'secondRings', SECOND) : '';
     const second = n.tracks
       ? ''
       : leansOf(n)
@@ -121,7 +128,7 @@ export const developedPattern = (
       stroke: INK.ink,
       'stroke-width': 1,
     });
-    return { svg: field + first.join('') + across + second, height: HEIGHT };
+    return { svg: field + first.join('') + across + acrossAgain + second, height: HEIGHT };
   };
   const stroke =
     (style: Readonly<Record<string, string | number>>): Key['symbol'] =>
@@ -131,6 +138,7 @@ export const developedPattern = (
   const keys: readonly Key[] = [
     { symbol: stroke(FIRST), said: words.first },
     ...(words.second === null || n.tracks ? [] : [{ symbol: stroke(SECOND), said: words.second }]),
+    ...(words.rings === null ? [] : [{ symbol: none, said: words.rings }]),
     { symbol: none, said: words.angle },
     { symbol: none, said: words.pitch },
     { symbol: none, said: words.shown(teeth) },

@@ -26,17 +26,21 @@ export type ToothFormNumbers = {
   readonly process: Process;
 };
 
-/** A diameter that is marked on the strip. */
+/** A diameter that is marked on the strip; that of a part is over its crests. */
 export type StripMark = { readonly what: 'bar' | 'blank' | 'part'; readonly diameter: Mm };
 
 export type TrackingStripNumbers = {
   readonly transversePitch: Mm;
+  /** A diameter that holds a whole count which nobody has counted; null: the label's counts hold. */
+  readonly wholeAt: Mm | null;
   /** Half width of the window round each whole count, on the diameter. */
   readonly below: Mm;
   readonly above: Mm;
   readonly marks: readonly StripMark[];
-  /** From a diameter that does not track to the next that does. */
-  readonly next: { readonly from: Mm; readonly to: Mm } | null;
+  /** What was expected over the crests of a part that is measured there. */
+  readonly expected: Window | null;
+  /** From a diameter that does not track to the next that does; what comes off, where that is known. */
+  readonly next: { readonly from: Mm; readonly to: Mm; readonly off: Mm | null } | null;
 };
 
 export type SetupSketchNumbers = {

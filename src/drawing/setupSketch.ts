@@ -228,6 +228,9 @@ export const setupSketch = (n: SetupSketchNumbers, words: WordsOf['setupSketch']
   const e = endSizes(n);
   const side = sideSizes(n, e.scale);
   const isBroken = !(e.isTrue && side.zone.isTrue && side.gap.isTrue);
+  // A knurl too short to be seen is drawn longer; only one too long is cut.
+  const isZoneCut = !side.zone.isTrue && side.zone.size !== LEAST_LENGTH;
+  const isCutOut = isZoneCut || !side.gap.isTrue;
   const drawing = (top: number) => {
     const r = e.part / 2;
     const y = top + MIDDLE + (e.wheels === 2 ? 0 : e.wheel / 2);
@@ -258,7 +261,7 @@ export const setupSketch = (n: SetupSketchNumbers, words: WordsOf['setupSketch']
       });
     const [cut, cutKnurl] = [
       side.gap.isTrue ? '' : breakMark(side.start + side.gap.size / 2, y - r - 5, y + r + 5),
-      side.zone.isTrue ? '' : breakMark((from + to) / 2, y - r - 5, y + r + 5),
+      isZoneCut ? breakMark((from + to) / 2, y - r - 5, y + r + 5) : '',
     ];
     const arrowY = y - r - e.wheel / 2;
     const way =
@@ -294,7 +297,7 @@ export const setupSketch = (n: SetupSketchNumbers, words: WordsOf['setupSketch']
         bar +
         zone +
         cut +
-        (side.zone.isTrue || side.zone.size === LEAST_LENGTH ? '' : cutKnurl) +
+        cutKnurl +
         wheels(-1) +
         (n.opposed ? wheels(1) : '') +
         way +
@@ -324,8 +327,21 @@ export const setupSketch = (n: SetupSketchNumbers, words: WordsOf['setupSketch']
     },
     { symbol: none, said: words.travel },
     { symbol: none, said: words.chamfer },
+    ...(isCutOut
+      ? [{ symbol: (x: number, y: number) => breakMark(x, y - 7, y + 7), said: words.cutOut }]
+      : []),
     ...(isBroken
-      ? [{ symbol: (x: number, y: number) => breakMark(x, y - 7, y + 7), said: words.broken }]
+      ? [
+          {
+            symbol: (x: number, y: number) =>
+              line([x - 9, y], [x + 9, y], {
+                stroke: INK.ink,
+                'stroke-width': 2,
+                ...enlarged(false),
+              }),
+            said: words.notToScale,
+          },
+        ]
       : []),
   ];
   return framed('setupSketch', words.title, drawing, (top) => keyBlock(keys, top));

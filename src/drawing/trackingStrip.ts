@@ -5,8 +5,8 @@ import type { WordsOf } from './words.ts';
 
 const LEFT = MARGIN + 6;
 const RIGHT = WIDTH - MARGIN - 6;
-const HEIGHT = 118;
-const AXIS = 78;
+/** Under the strip: counts and diameters. */
+const UNDER = 40;
 /** Whole counts side by side before the strip is broken in two: their numbers need the room. Judgement. */
 const MOST_COUNTS = 4;
 
@@ -34,10 +34,18 @@ const MARKS: { readonly [K in StripMark['what']]: (x: number, y: number) => stri
     rect(x - 6, y - 6, 12, 12, { fill: INK.panel, stroke: INK.ink, 'stroke-width': 2 }),
 };
 /** How high each kind stands over the strip, so that two of one diameter do not hide each other. */
-const LIFT: { readonly [K in StripMark['what']]: number } = { blank: 0, bar: 30, part: 52 };
+const LIFT: { readonly [K in StripMark['what']]: number } = { blank: 0, bar: 30, part: 54 };
+const ARROW = 16;
+/** Room over the highest mark. */
+const HEAD = 14;
+
+/** How far under the top of the drawing the strip lies: no further than its marks need. */
+const axisOf = ({ marks, next }: TrackingStripNumbers): number =>
+  HEAD + Math.max(10, next === null ? 0 : ARROW, ...marks.map(({ what }) => LIFT[what]));
 
 const pointsOf = (n: TrackingStripNumbers): readonly number[] => [
   ...n.marks.map((mark) => mark.diameter),
+  ...(n.expected === null ? [] : [n.expected.low, n.expected.high]),
   ...(n.next === null ? [] : [n.next.from, n.next.to]),
 ];
 
@@ -63,46 +71,48 @@ const stretchesOf = (n: TrackingStripNumbers): readonly Stretch[] => {
 const placeIn = (s: Stretch, diameter: number): number =>
   s.left + ((diameter - s.low) / (s.high - s.low)) * (s.right - s.left);
 
-const wholeCounts = (s: Stretch, step: number): readonly number[] => {
-  const first = Math.max(1, Math.ceil(s.low / step - 1e-9));
-  const last = Math.floor(s.high / step + 1e-9);
-  return Array.from({ length: Math.max(0, last - first + 1) }, (_, i) => first + i);
+type Whole = { readonly diameter: number; readonly count: number | null };
+
+/** Whole counts by their number, or as so many steps from one whose number nobody knows. */
+const wholeCounts = (s: Stretch, { transversePitch, wholeAt }: TrackingStripNumbers) => {
+  const step = transversePitch / Math.PI;
+  const origin = wholeAt ?? 0;
+  const least = wholeAt === null ? 1 : Math.ceil((step - origin) / step);
+  const first = Math.max(least, Math.ceil((s.low - origin) / step - 1e-9));
+  const last = Math.floor((s.high - origin) / step + 1e-9);
+  return Array.from({ length: Math.max(0, last - first + 1) }, (_, i): Whole => {
+    const count = first + i;
+    return { diameter: origin + count * step, count: wholeAt === null ? count : null };
+  });
+};
+
+const wholeWords = (
+  { diameter, count }: Whole,
+  x: number,
+  words: WordsOf['trackingStrip'],
+  axis: number,
+): string => {
+  const under = (y: number, said: string, weight: 'bold' | 'regular'): string =>
+    text([x, axis + y], said, { size: SMALL, weight, anchor: 'middle' }, { fill: INK.ink });
+  return count === null
+    ? under(24, words.diameter(diameter), 'regular')
+    : under(22, words.count(count), 'bold') + under(37, words.diameter(diameter), 'regular');
 };
 
 const stretchSvg = (
   s: Stretch,
   n: TrackingStripNumbers,
   words: WordsOf['trackingStrip'],
-  top: number,
+  axis: number,
 ): string => {
-  const step = n.transversePitch / Math.PI;
-  const axis = top + AXIS;
   const scale = (s.right - s.left) / (s.high - s.low);
-  const counts = wholeCounts(s, step).map((count) => {
-    const diameter = count * step;
+  const counts = wholeCounts(s, n).map((whole) => {
+    const { diameter, count } = whole;
     const x = placeIn(s, diameter);
     const from = Math.max(s.left, placeIn(s, diameter - n.below));
     const to = Math.min(s.right, placeIn(s, diameter + n.above));
     // Words of a count at the very end would leave the strip.
     const hasRoom = x > s.left + 32 && x < s.right - 32;
-    const words_ = hasRoom
-      ? text(
-          [x, axis + 22],
-          words.count(count),
-          { size: SMALL, weight: 'bold', anchor: 'middle' },
-          {
-            fill: INK.ink,
-          },
-        ) +
-        text(
-          [x, axis + 37],
-          words.diameter(diameter),
-          { size: SMALL, anchor: 'middle' },
-          {
-            fill: INK.ink,
-          },
-        )
-      : '';
     return (
       rect(from, axis - 9, Math.max(0, to - from), 18, {
         fill: INK.good,
@@ -114,10 +124,10 @@ const stretchSvg = (
         stroke: INK.ink,
         'stroke-width': 2,
         'data-figure': 'wholeCount',
-        'data-count': count,
+        ...(count === null ? {} : { 'data-count': count }),
         'data-scale': scale.toFixed(6),
       }) +
-      words_
+      (hasRoom ? wholeWords(whole, x, words, axis) : '')
     );
   });
   return (
@@ -125,6 +135,34 @@ const stretchSvg = (
     counts.join('')
   );
 };
+
+const EXPECTED = {
+  fill: INK.wheel,
+  stroke: INK.ink,
+  'stroke-width': 1,
+  'stroke-dasharray': '4 3',
+} as const;
+
+/** What was expected over the crests, at the height of the part that is measured there. */
+const expectedSvg = (
+  { expected }: TrackingStripNumbers,
+  stretches: readonly Stretch[],
+  axis: number,
+): string =>
+  expected === null
+    ? ''
+    : stretches
+        .map((s) => {
+          const from = placeIn(s, Math.max(s.low, expected.low));
+          const to = placeIn(s, Math.min(s.high, expected.high));
+          return to <= from
+            ? ''
+            : rect(from, axis - LIFT.part - 9, to - from, 18, {
+                ...EXPECTED,
+                'data-figure': 'expected',
+              });
+        })
+        .join('');
 
 const arrow = (from: Point, to: Point): string => {
   const way = Math.sign(to[0] - from[0]) || 1;
@@ -134,14 +172,14 @@ const arrow = (from: Point, to: Point): string => {
   );
 };
 
-const markSvg = (mark: StripMark, stretches: readonly Stretch[], top: number): string => {
+const markSvg = (mark: StripMark, stretches: readonly Stretch[], axis: number): string => {
   const s = stretches.find((each) => mark.diameter >= each.low && mark.diameter <= each.high);
   if (s === undefined) return '';
   const x = placeIn(s, mark.diameter);
-  const axis = top + AXIS;
   const y = axis - LIFT[mark.what];
+  // What is measured over the crests has no whole count under it.
   const stem =
-    LIFT[mark.what] === 0
+    LIFT[mark.what] === 0 || mark.what === 'part'
       ? ''
       : line([x, y], [x, axis], {
           stroke: INK.ink,
@@ -151,14 +189,14 @@ const markSvg = (mark: StripMark, stretches: readonly Stretch[], top: number): s
   return stem + MARKS[mark.what](x, y);
 };
 
-const nextSvg = (n: TrackingStripNumbers, stretches: readonly Stretch[], top: number): string => {
+const nextSvg = (n: TrackingStripNumbers, stretches: readonly Stretch[], axis: number): string => {
   if (n.next === null) return '';
   const { from, to } = n.next;
   const at = (diameter: number): number => {
     const s = stretches.find((each) => diameter >= each.low && diameter <= each.high);
     return s === undefined ? LEFT : placeIn(s, diameter);
   };
-  const y = top + AXIS - 16;
+  const y = axis - ARROW;
   return arrow([at(from), y], [at(to), y]);
 };
 
@@ -166,14 +204,18 @@ const nextSvg = (n: TrackingStripNumbers, stretches: readonly Stretch[], top: nu
 export const trackingStrip = (n: TrackingStripNumbers, words: WordsOf['trackingStrip']): string => {
   const stretches = stretchesOf(n);
   const isBroken = stretches.length > 1;
-  const drawing = (top: number) => ({
-    svg:
-      stretches.map((s) => stretchSvg(s, n, words, top)).join('') +
-      nextSvg(n, stretches, top) +
-      n.marks.map((mark) => markSvg(mark, stretches, top)).join('') +
-      (isBroken ? breakMark(WIDTH / 2, top + 8, top + AXIS + 14) : ''),
-    height: HEIGHT,
-  });
+  const drawing = (top: number) => {
+    const axis = top + axisOf(n);
+    return {
+      svg:
+        stretches.map((s) => stretchSvg(s, n, words, axis)).join('') +
+        expectedSvg(n, stretches, axis) +
+        nextSvg(n, stretches, axis) +
+        n.marks.map((mark) => markSvg(mark, stretches, axis)).join('') +
+        (isBroken ? breakMark(WIDTH / 2, top, axis + 14) : ''),
+      height: axisOf(n) + UNDER,
+    };
+  };
   const keys: readonly Key[] = [
     ...n.marks.map((mark, i) => ({ symbol: MARKS[mark.what], said: words.marks[i] ?? '' })),
     {
@@ -181,6 +223,14 @@ export const trackingStrip = (n: TrackingStripNumbers, words: WordsOf['trackingS
         rect(x - 8, y - 6, 16, 12, { fill: INK.good, stroke: INK.ink, 'stroke-width': 1 }),
       said: words.window,
     },
+    ...(words.expected === null
+      ? []
+      : [
+          {
+            symbol: (x: number, y: number) => rect(x - 8, y - 6, 16, 12, EXPECTED),
+            said: words.expected,
+          },
+        ]),
     ...(words.next === null
       ? []
       : [

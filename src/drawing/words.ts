@@ -21,6 +21,7 @@ export type WordsOf = {
     readonly diameter: (value: number) => string;
     readonly window: string;
     readonly marks: readonly string[];
+    readonly expected: string | null;
     readonly next: string | null;
     readonly broken: string;
   };
@@ -32,12 +33,14 @@ export type WordsOf = {
     readonly travel: string;
     readonly nip: string;
     readonly wheel: string;
-    readonly broken: string;
+    readonly cutOut: string;
+    readonly notToScale: string;
   };
   readonly developedPattern: {
     readonly title: string;
     readonly first: string;
     readonly second: string | null;
+    readonly rings: string | null;
     readonly angle: string;
     readonly pitch: string;
     readonly shown: (teeth: number) => string;

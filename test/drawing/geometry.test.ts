@@ -104,8 +104,10 @@ describe('tracking strip', () => {
       transversePitch: inch(1 / 21),
       below: mm(step / 10),
       above: mm(step / 10),
+      wholeAt: null,
       marks: [{ what: 'bar', diameter: inch(0.995) }],
-      next: { from: inch(0.995), to: mm(65 * step) },
+      expected: null,
+      next: { from: inch(0.995), to: mm(65 * step), off: mm(inch(0.995) - 65 * step) },
     } as const;
     const svg = drawPicture(
       'trackingStrip',
@@ -122,6 +124,59 @@ describe('tracking strip', () => {
     sameShare(num(window, 'width'), (step / 5) * scale, WRITTEN);
   });
 
+  test('a part stands at its crest diameter, beside what was expected of it, on the scale of the counts', () => {
+    const step = inch(1 / 21) / Math.PI;
+    const numbers = {
+      transversePitch: inch(1 / 21),
+      wholeAt: null,
+      below: mm(step / 10),
+      above: mm(step / 10),
+      marks: [
+        { what: 'blank', diameter: mm(65 * step) },
+        { what: 'part', diameter: inch(1.004) },
+      ],
+      expected: { low: inch(1.001), high: inch(1.0059) },
+      next: null,
+    } as const;
+    const said = en.pictures.trackingStrip;
+    const svg = drawPicture('trackingStrip', numbers, said.words(numbers, showIn('in')));
+    const [whole, other] = [65, 66].map((count) =>
+      figures(svg, 'wholeCount').find((tick) => num(tick, 'data-count') === count),
+    );
+    const scale = (num(other, 'x1') - num(whole, 'x1')) / step;
+    const expected = figure(svg, 'expected');
+    sameShare(num(expected, 'width'), inch(1.0059 - 1.001) * scale, WRITTEN);
+    const from = (inch(1.001) - 65 * step) * scale;
+    sameShare(num(expected, 'x') - num(whole, 'x1'), from, WRITTEN);
+    const part = elementsOf(svg).find(
+      (each) => each.name === 'rect' && each.at['width'] === '12' && each.at['height'] === '12',
+    );
+    const at = num(part, 'x') + 6 - num(whole, 'x1');
+    sameShare(at, (inch(1.004) - 65 * step) * scale, WRITTEN);
+    expect(said.alt(numbers, showIn('in'))).toContain(
+      'Part, over its crests 1.0040 in. Tracks: 0.0015 in either side of a whole count. Expected over the crests: 1.0010 to 1.0059 in',
+    );
+  });
+
+  test('where nobody has counted, whole counts have places but no numbers', () => {
+    const numbers = {
+      transversePitch: mm(1),
+      wholeAt: mm(19.9),
+      below: mm(0.03),
+      above: mm(0.03),
+      marks: [{ what: 'bar', diameter: mm(20.3) }],
+      expected: null,
+      next: { from: mm(20.3), to: mm(19.9), off: mm(0.4) },
+    } as const;
+    const said = en.pictures.trackingStrip;
+    const svg = drawPicture('trackingStrip', numbers, said.words(numbers, showIn('mm')));
+    const ticks = figures(svg, 'wholeCount').map((tick) => num(tick, 'x1'));
+    expect(ticks).toContain(num(figure(svg, 'next'), 'x2'));
+    const [a = 0, b = 0] = ticks;
+    sameShare(lengthOf(figure(svg, 'next')), (0.4 * Math.PI * (b - a)) / 1, 0.001);
+    expect(svg).not.toContain('teeth');
+  });
+
   test('a bar many counts over its blank breaks the strip, visibly and in words', () => {
     const numbers = {
       transversePitch: mm(1),
@@ -131,6 +186,8 @@ describe('tracking strip', () => {
         { what: 'bar', diameter: mm(30) },
         { what: 'blank', diameter: mm(20.05) },
       ],
+      wholeAt: null,
+      expected: null,
       next: null,
     } as const;
     const svg = drawPicture(
@@ -188,7 +245,7 @@ describe('set-up sketch', () => {
 });
 
 describe('developed pattern', () => {
-  const numbers = (toothError: number, families: 'crossed' | 'straight') =>
+  const numbers = (toothError: number, families: 'crossed' | 'straight' | 'square') =>
     ({
       toothCount: 57,
       transversePitch: mm(1.2),
@@ -223,6 +280,34 @@ describe('developed pattern', () => {
     expect(svg).toContain('>8 of 57 teeth round, to scale<');
     const pitch = (first[1] ?? 0) - (first[0] ?? 0);
     sameShare((second[0] ?? 0) - (first[0] ?? 0), 0.3 * pitch, WRITTEN);
+  });
+
+  test('a square pattern splits round the work; its rings, a pitch apart, fall into themselves', () => {
+    const n = numbers(0.3, 'square');
+    const svg = svgFor(n);
+    const rows = (dashed: boolean): readonly number[] =>
+      groove(svg, dashed)
+        .filter((line) => line.at['y1'] === line.at['y2'])
+        .map((line) => num(line, 'y1'));
+    expect(rows(false).length).toBeGreaterThan(1);
+    expect(rows(true)).toEqual(rows(false));
+    const along = groove(svg, false).filter((line) => line.at['x1'] === line.at['x2']);
+    const pitch = num(along[1], 'x1') - num(along[0], 'x1');
+    sameShare((rows(false)[0] ?? 0) - (rows(false)[1] ?? 0), pitch, WRITTEN);
+    expect(svg).toContain('fall into themselves');
+    expect(en.pictures.developedPattern.alt(n, showIn('mm'))).toContain('fall into themselves');
+  });
+
+  test('a blank of few teeth that is whole all the same is not said to split', () => {
+    const request = requestOf({
+      pitch: { system: 'metric', value: 1 },
+      stock: mm(1.3),
+      material: materialById('brass360') ?? requestOf().material,
+    });
+    const pictures = picturesOf(request) ?? [];
+    expect(pictures.map(({ kind }) => kind)).toEqual(['toothForm', 'trackingStrip', 'setupSketch']);
+    const off = picturesOf({ ...request, stock: mm(1.45), asIs: true }) ?? [];
+    expect(off.map(({ kind }) => kind)).toContain('developedPattern');
   });
 
   test('a blank that tracks shows no second turn', () => {

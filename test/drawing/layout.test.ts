@@ -4,7 +4,7 @@ import type { Picture } from '../../src/card/index.ts';
 import { renderOptions } from '../../src/drawing/png.ts';
 import { textWidth } from '../../src/drawing/text.ts';
 import { type Box, boxOf, elementsOf, num, type Read, realWidth, textBox } from './read.ts';
-import { manyPlans, manyRecords, manySetups, spokenIn, svgOf } from './setups.ts';
+import { manyChecks, manyPlans, manyRecords, manySetups, spokenIn, svgOf } from './setups.ts';
 
 const MANY = 500;
 /** Half a unit: what two strokes of a letter may touch. */
@@ -57,6 +57,7 @@ const faultsIn = (list: readonly (readonly Picture[])[]): readonly string[] =>
 
 test.each([
   ['set-ups', manySetups],
+  ['checks', manyChecks],
   ['plans', manyPlans],
   ['records of a shop', manyRecords],
 ] as const)('nothing overlaps or leaves the frame for 500 %s in both unit systems', (_, many) => {
@@ -67,7 +68,12 @@ test.each([
 });
 
 test('every picture has alt text that says its numbers, and at most three go with a card', () => {
-  for (const pictures of [...manySetups(60), ...manyPlans(20), ...manyRecords(20)]) {
+  for (const pictures of [
+    ...manySetups(60),
+    ...manyChecks(20),
+    ...manyPlans(20),
+    ...manyRecords(20),
+  ]) {
     expect(pictures.length).toBeLessThanOrEqual(3);
     for (const { alt } of spokenIn('mm', pictures)) expect(alt).toMatch(/\d/u);
   }

@@ -1,9 +1,12 @@
 /** Set-ups for the pictures: usual ones, and those at the ends of what is answered. */
 import fc from 'fast-check';
+import { afterPictures, blankPictures, seamPictures } from '../../commands/knurl/checkPictures.ts';
 import { planPictures, setupPictures } from '../../commands/knurl/pictures.ts';
 import { type MeasuredPart, recordPictures } from '../../commands/knurl/recordPictures.ts';
 import {
   type CribWheel,
+  checkAfter,
+  checkBlank,
   degrees,
   dinCrib,
   dpCrib,
@@ -15,6 +18,7 @@ import {
   type Pattern,
   plan,
   type SetupRequest,
+  seamTest,
   setUp,
   wholeToothDiameter,
 } from '../../src/calc/index.ts';
@@ -83,6 +87,55 @@ export const manySetups = (count: number): readonly (readonly Picture[])[] => {
       .filter((each) => each !== null)
       .slice(0, count / 2);
   return [...drawn(usual), ...drawn(far)];
+};
+
+/** Nothing where the request makes no sense. */
+const sensible = (make: () => readonly Picture[]): readonly Picture[] => {
+  try {
+    return make();
+  } catch (error) {
+    if (error instanceof OutOfRange) return [];
+    throw error;
+  }
+};
+
+/** Checks before, by a trial turn and after, right and wrong, counts and crests far off among them. */
+export const manyChecks = (count: number): readonly (readonly Picture[])[] => {
+  const random = mulberry32(38);
+  const checks: (readonly Picture[])[] = [];
+  while (checks.length < count) {
+    const pitch = oneOf(random, [0.2, 0.5, 1, 1.6, 3.2]);
+    const teeth = Math.round(oneOf(random, [4, 12, 65, 600, 2400]) * between(random, 1, 1.2));
+    const off = oneOf(random, [0, between(random, 0, 1 / teeth), between(random, 0, 0.02)]);
+    const diameter = mm(Math.min(500, wholeToothDiameter(teeth, mm(pitch)) * (1 + off)));
+    const request = requestOf({
+      pattern: oneOf(random, PATTERNS),
+      pitch: { system: 'metric', value: pitch },
+      stock: diameter,
+      asIs: true,
+    });
+    const seen = oneOf(random, [null, teeth, teeth + 1, 2 * teeth, 2 * teeth + 3]);
+    const crest = mm(diameter + pitch * oneOf(random, [0.1, 0.4, 0.7, 5]));
+    const measured = {
+      blank: diameter,
+      teeth: seen,
+      crest: seen !== null && random() < 0.5 ? null : crest,
+      toothHeight: null,
+      flat: null,
+      ends: null,
+    };
+    const gap = between(random, 0.05, 1);
+    const reading = { gap, scrap: false, count: random() < 0.5 ? null : teeth };
+    const drawn = sensible(
+      oneOf(random, [
+        () => blankPictures(request, diameter, checkBlank(request, diameter)),
+        () => seamPictures(request, diameter, seamTest(request, diameter, reading)),
+        () => afterPictures(request, diameter, checkAfter(request, measured)),
+      ]),
+    );
+    if (drawn.length > 0) checks.push(drawn);
+  }
+  return checks;
 };
 
 /** A wheel as a shop may name it: as its maker does, with all there is to say, or in one long word. */

@@ -8,18 +8,27 @@ const teeth = (count: number): string => `${String(count)} ${count === 1 ? 'toot
 const countAt = (diameter: number, transversePitch: number): string =>
   ((Math.PI * diameter) / transversePitch).toFixed(2);
 
-const MARK_NAMES = { bar: 'Bar', blank: 'Blank', part: 'Part measured' } as const;
+const MARK_NAMES = { bar: 'Bar', blank: 'Blank', part: 'Part, over its crests' } as const;
 
 const markLines = (n: PictureNumbers['trackingStrip'], show: Show): readonly string[] =>
-  n.marks.map(
-    ({ what, diameter }) =>
-      `${MARK_NAMES[what]} ${show.length(diameter)}: ${countAt(diameter, n.transversePitch)} teeth`,
-  );
+  n.marks.map(({ what, diameter }) => {
+    const said = `${MARK_NAMES[what]} ${show.length(diameter)}`;
+    // Teeth stand on the blank; nobody has counted them where the label does not hold.
+    return what === 'part' || n.wholeAt !== null
+      ? said
+      : `${said}: ${countAt(diameter, n.transversePitch)} teeth`;
+  });
 
-const nextLine = (n: PictureNumbers['trackingStrip'], show: Show): string | null =>
-  n.next === null
+const expectedLine = (n: PictureNumbers['trackingStrip'], show: Show): string | null =>
+  n.expected === null
     ? null
-    : `Next that tracks: ${show.length(n.next.to)}, ${show.length(n.next.from - n.next.to)} off`;
+    : `Expected over the crests: ${show.span(n.expected.low, n.expected.high)} ${show.units}`;
+
+const nextLine = (n: PictureNumbers['trackingStrip'], show: Show): string | null => {
+  if (n.next === null) return null;
+  const { to, off } = n.next;
+  return `Next that tracks: ${show.length(to)}${off === null ? '' : `, ${show.length(off)} off`}`;
+};
 
 const window = (n: PictureNumbers['trackingStrip'], show: Show): string =>
   n.below === n.above
@@ -56,6 +65,12 @@ const angleText = (n: PictureNumbers['developedPattern'], show: Show): string =>
   if (n.families === 'square') return 'Grooves cross square, along and round the work';
   return n.helix === 0 ? 'Grooves run along the work' : `Grooves lean ${show.angle(n.helix)}`;
 };
+
+/** A crossed wheel goes straight in: its grooves round the work meet themselves whatever the count. */
+const ringText = (n: PictureNumbers['developedPattern']): string | null =>
+  n.families === 'square' && !n.tracks
+    ? 'Grooves round the work fall into themselves all the same'
+    : null;
 
 const candidateLines = (n: PictureNumbers['planMap'], show: Show): readonly string[] =>
   n.candidates.map(
@@ -112,11 +127,12 @@ export const pictures: PicturePhrases = {
       diameter: (value) => show.bare(value),
       window: window(n, show),
       marks: markLines(n, show),
+      expected: expectedLine(n, show),
       next: nextLine(n, show),
       broken: `Strip broken: the diameters are too far apart to show all between them.`,
     }),
     alt: (n, show) =>
-      `Diameters that track: ${[...markLines(n, show), window(n, show), nextLine(n, show) ?? ''].filter((each) => each !== '').join('. ')}.`,
+      `Diameters that track: ${[...markLines(n, show), window(n, show), expectedLine(n, show) ?? '', nextLine(n, show) ?? ''].filter((each) => each !== '').join('. ')}.`,
   },
   setupSketch: {
     words: (n, show) => ({
@@ -127,7 +143,8 @@ export const pictures: PicturePhrases = {
       travel: travelText(n),
       nip: 'Closing nip: work and wheel run together here. Keep hands and rags out.',
       wheel: wheelText(n, show),
-      broken: 'Scale broken at a double wave; what is dashed is drawn larger than it is.',
+      cutOut: 'Double wave: a length is cut out here.',
+      notToScale: 'Scale broken: what is dashed is not drawn to scale.',
     }),
     alt: (n, show) =>
       `Set-up sketch, ${SUPPORTS[n.support]}: blank ${show.length(n.blankDiameter)}, knurl ${show.length(n.length)} long${n.stickout === null ? '' : `, ${show.length(n.stickout)} out`}. ${wheelText(n, show)}. ${travelText(n)} The closing nip is marked where work and wheel run together.`,
@@ -137,12 +154,13 @@ export const pictures: PicturePhrases = {
       title: n.tracks ? 'The knurl unrolled' : 'The knurl unrolled: it splits',
       first: 'Grooves of the first turn',
       second: n.tracks ? null : `Second turn, ${offBy(n.toothError, show)}`,
+      rings: ringText(n),
       angle: angleText(n, show),
       pitch: `Pitch round the work ${show.length(n.transversePitch)}`,
       shown: (drawn) => `${String(drawn)} of ${teeth(n.toothCount)} round, to scale`,
     }),
     alt: (n, show) =>
-      `The knurl unrolled, ${FAMILIES[n.families]}. ${angleText(n, show)}; pitch round the work ${show.length(n.transversePitch)}. ${n.tracks ? 'The second turn falls into the first.' : `The second turn falls beside the first: ${offBy(n.toothError, show)}.`}`,
+      `The knurl unrolled, ${FAMILIES[n.families]}. ${angleText(n, show)}; pitch round the work ${show.length(n.transversePitch)}. ${n.tracks ? 'The second turn falls into the first.' : `The second turn falls beside the first: ${offBy(n.toothError, show)}.${ringText(n) === null ? '' : ` ${ringText(n) ?? ''}.`}`}`,
   },
   planMap: {
     words: (n, show) => ({
