@@ -1,11 +1,13 @@
 import type { ResultTable } from '../../store/index.ts';
 import { cardById } from '../cards.ts';
+import { dropFromFind } from '../find/index.ts';
 import { remember, type Verb } from '../history.ts';
 import { personById } from '../people.ts';
 import { type Done, done, refused } from '../result.ts';
 import type { ShopChange, ShopView } from '../view.ts';
 import { compared } from './compare.ts';
 import { contentFault, contentOf, contentRow, type ResultContent } from './content.ts';
+import { letFind } from './found.ts';
 import { resift } from './growth.ts';
 import { type KeptResult, resultName, resultRows } from './kept.ts';
 import { inTurn, type Logged, loggedOf, NO_OTHERS, saidOf } from './log.ts';
@@ -86,7 +88,8 @@ export const correctResult = async (
   // What was confirmed were other numbers.
   const isSame = said.family === before.family && said.share === before.share;
   const confirmed = isSame ? {} : { confirmed_at: null, confirmed_by: null, learned: 0 };
-  await rewritten(change, before, { ...contentRow(content), ...said, ...confirmed });
+  const after = await rewritten(change, before, { ...contentRow(content), ...said, ...confirmed });
+  await letFind(change, after, card);
   const others = isSame ? NO_OTHERS : await resift(change);
   const parts = await wear(change, before.wheel, content.partsRun - before.parts_run);
   return done(await loggedOf(change, before.id, beside.value, parts, others));
@@ -99,6 +102,7 @@ export const withdrawResult = async (change: ShopChange, seen: Seen): Promise<Do
   const before = found.value;
   const columns = { withdrawn_at: change.at, withdrawn_by: change.by, learned: 0 };
   await rewritten(change, before, columns, 'removed');
+  await dropFromFind(change, 'result', before.id);
   const others = await resift(change);
   const parts = await wear(change, before.wheel, -before.parts_run);
   return done(await again(change, before, parts, others));

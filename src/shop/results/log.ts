@@ -6,6 +6,7 @@ import { type Done, done, refused } from '../result.ts';
 import type { ShopChange, ShopView } from '../view.ts';
 import { type Compared, compared } from './compare.ts';
 import { contentFault, contentRow, type ResultContent } from './content.ts';
+import { letFind } from './found.ts';
 import { growthIn, learn, type Resifted, resift } from './growth.ts';
 import { type KeptResult, keptResult } from './kept.ts';
 import { wear } from './wear.ts';
@@ -111,6 +112,7 @@ export const logResult = async (
   await change.db.insertInto('result').values(kept).execute();
   const others = speaks && !isNewest ? await resift(change) : NO_OTHERS;
   const partsOnWheel = await wear(change, row.wheel, row.parts_run);
+  await letFind(change, row, card);
   await remember(change, 'result', [
     { subjectId: row.id, verb: 'added', before: null, after: saidOf(row) },
   ]);

@@ -8,8 +8,11 @@ import {
   addTo,
   changeIn,
   changeSetting,
+  confirmResult,
+  correctResult,
   importSheet,
   keepCard,
+  logResult,
   MACHINES,
   nameGroupRole,
   nameRole,
@@ -20,6 +23,7 @@ import {
   type ShopChange,
   WHEEL_SHEET,
   WHEELS,
+  withdrawResult,
 } from '../../../src/shop/index.ts';
 import {
   type Engine,
@@ -29,9 +33,17 @@ import {
   TABLES,
 } from '../../../src/store/index.ts';
 import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
+import { requestOf } from '../../support/setupRequest.ts';
+import { grown, keptFor } from './results.ts';
 import { CARD, LEFT, STRAIGHT, TURRET } from './samples.ts';
 
-type Prepared = { readonly wheel: string; readonly ben: string };
+type Prepared = {
+  readonly wheel: string;
+  readonly ben: string;
+  /** A result that is learned from, and one that waits. */
+  readonly learned: string;
+  readonly doubted: string;
+};
 type Work = (change: ShopChange, prepared: Prepared) => Promise<unknown>;
 
 const FILE = `name,form,pitch,parts run
@@ -68,6 +80,15 @@ const WORKS: Readonly<Record<string, Work>> = {
     good(await changeSetting(change, 'units', 'mm'));
     good(await changeSetting(change, 'questionHours', 8));
   },
+  logging: async (change, { wheel }) => {
+    const card = await keptFor(change, requestOf(), wheel);
+    const said = { ...grown(0.9), partsRun: 40, cause: 'dullWheel', note: 'burr' } as const;
+    good(await logResult(change, card, said));
+  },
+  correcting: async (change, { learned }) =>
+    good(await correctResult(change, { id: learned }, { ...grown(0.88), partsRun: 3 })),
+  withdrawing: async (change, { learned }) => good(await withdrawResult(change, { id: learned })),
+  confirming: async (change, { doubted }) => good(await confirmResult(change, { id: doubted })),
   people: async (change, { ben }) => {
     good(await nameGroupRole(change, { outside: 'g', name: 'Leads' }, 'supervisor'));
     good(await nameRole(change, ben, 'owner'));
@@ -100,7 +121,10 @@ const prepare = async (shop: TestShop): Promise<Prepared> => {
   return await shop.change(async (change) => {
     const { id: wheel } = good(await addTo(change, WHEELS, STRAIGHT));
     await keepCard(change, { ...CARD, wheel });
-    return { wheel, ben };
+    const card = await keptFor(change, requestOf(), wheel);
+    const { result: learned } = good(await logResult(change, card, grown(0.95)));
+    const { result: doubted } = good(await logResult(change, card, grown(1.6)));
+    return { wheel, ben, learned: learned.id, doubted: doubted.id };
   });
 };
 

@@ -3,23 +3,30 @@ import { describe, expect, it } from 'vitest';
 import {
   addRule,
   addTo,
+  causeCounts,
   changeIn,
   changeSetting,
+  confirmResult,
+  correctResult,
   dropFromFind,
   exportJson,
   findCard,
   findEntries,
   findIn,
   findPerson,
+  findResult,
   givenUp,
   givenUpSeen,
+  growthIn,
+  growthTallies,
   historyOf,
   importSheet,
-  keepCard,
   latestCards,
+  latestResults,
   listGroups,
   listOf,
   listPeople,
+  logResult,
   MACHINES,
   MATERIALS_OF_SHOP,
   nameGroupRole,
@@ -32,6 +39,7 @@ import {
   removeFrom,
   removeGroup,
   removePerson,
+  resultById,
   rolesOfGroups,
   rulesOnCard,
   type ShopChange,
@@ -39,9 +47,19 @@ import {
   WHEEL_SHEET,
   WHEELS,
   whoMay,
+  withdrawResult,
 } from '../../../src/shop/index.ts';
 import { type Engine, MADE_TABLES, TABLES } from '../../../src/store/index.ts';
-import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
+import {
+  good,
+  newRecords,
+  newShop,
+  person,
+  refusalOf,
+  type TestShop,
+} from '../../support/records.ts';
+import { requestOf } from '../../support/setupRequest.ts';
+import { grown, keptFor } from './results.ts';
 import { CARD, STRAIGHT, TURRET } from './samples.ts';
 
 /** Everything of a shop that has an id or a name. */
@@ -60,6 +78,7 @@ type Thing =
   | 'group'
   | 'card'
   | 'code'
+  | 'result'
   | 'effect';
 
 const ALL = { machine: null, material: null, base: null };
@@ -76,7 +95,10 @@ const furnish = async (shop: TestShop, mark: string): Promise<Things> => {
     const rule = good(await addRule(change, { ...ALL, text: `rule ${mark}` }));
     const group = { outside: `group-${mark}`, name: `Group ${mark}` };
     good(await nameGroupRole(change, group, 'supervisor'));
-    const card = await keepCard(change, { ...CARD, wheel: wheel.id, machine: machine.id });
+    const part = await keptFor(change, requestOf(), wheel.id, machine.id);
+    good(await logResult(change, part, grown(0.95)));
+    const odd = { ...grown(1.6), symptom: 'oversize', cause: 'dullWheel' } as const;
+    const { result } = good(await logResult(change, part, odd));
     await queueEffects(change, [{ key: `post ${mark}`, effect: { post: mark } }]);
     return {
       wheel: wheel.id,
@@ -90,8 +112,9 @@ const furnish = async (shop: TestShop, mark: string): Promise<Things> => {
       personName: met.name,
       personOutside: met.outside,
       group: group.outside,
-      card: card.id,
-      code: card.code,
+      card: part.id,
+      code: part.code,
+      result: result.id,
       effect: `post ${mark}`,
     };
   });
@@ -125,6 +148,16 @@ const ASKED: Readonly<Record<string, (change: ShopChange, id: string) => Promise
   cardsOf: (change, id) => latestCards(change, { limit: 50, madeBy: id }),
   historyOfWheel: (change, id) => historyOf(change, 'wheel', { id }),
   historyOfPerson: (change, id) => historyOf(change, 'person', { id }),
+  resultOfCard: (change, id) => findResult(change, { card: id }),
+  resultById: (change, id) => resultById(change, id),
+  resultsOf: (change, id) => latestResults(change, { limit: 50, madeBy: id }),
+  resultsOfCard: (change, id) => latestResults(change, { limit: 50, card: id }),
+  resultsOnWheel: (change, id) => latestResults(change, { limit: 50, wheel: id }),
+  correctResult: (change, id) => correctResult(change, { id }, { teeth: 65 }),
+  withdrawResult: (change, id) => withdrawResult(change, { id }),
+  confirmResult: (change, id) => confirmResult(change, { id }),
+  historyOfResult: (change, id) => historyOf(change, 'result', { id }),
+  growthIn: (change, id) => growthIn(change, id),
   givenUpSeen: (change, id) => givenUpSeen(change, [id]),
   once: (change, id) => once(change, id, () => Promise.resolve('mine')),
   dropFromFind: (change, id) => dropFromFind(change, 'card', id),
@@ -148,6 +181,11 @@ const OVERVIEWS: Readonly<Record<string, (change: ShopChange) => Promise<unknown
   groups: (change) => listGroups(change),
   whoMay: (change) => whoMay(change, 'operator'),
   cards: (change) => latestCards(change, { limit: 50 }),
+  results: (change) => latestResults(change, { limit: 50 }),
+  doubted: (change) => latestResults(change, { limit: 50, doubted: true, since: 1 }),
+  growth: (change) => growthIn(change, 'straight × steel'),
+  tallies: (change) => growthTallies(change),
+  causes: (change) => causeCounts(change, 'oversize'),
   settings: (change) => settingsOf(change),
   givenUp: (change) => givenUp(change),
   history: (change) => historyOf(change, 'wheel'),
@@ -210,6 +248,14 @@ export const isolation = (engine: Engine): void => {
       for (const [name, look] of Object.entries(OVERVIEWS)) {
         expect([name, JSON.stringify(await mine.change(look))]).toEqual([name, blank[name]]);
       }
+    });
+
+    it('finds no result by a number that only another has', async () => {
+      const { store } = await newRecords(engine);
+      const [mine, other] = [await newShop(store, 'Mine'), await newShop(store, 'Other')];
+      await furnish(other, 'two');
+      const asked = (number: number) => findResult(mine.view, { number });
+      expect(refusalOf(await asked(2))).toEqual(refusalOf(await asked(9)));
     });
 
     it('lets two shops have the same names, the same codes of groups, the same keys', async () => {

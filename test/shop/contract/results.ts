@@ -19,6 +19,7 @@ import {
   causeCounts,
   confirmResult,
   correctResult,
+  findEntries,
   findIn,
   findResult,
   growthIn,
@@ -76,8 +77,9 @@ export const keptFor = async (
   change: ShopChange,
   request = requestFor(),
   wheel: string | null = null,
+  machine: string | null = null,
 ): Promise<KeptCard> => {
-  const { id } = await keepCard(change, { ...CARD, request, wheel });
+  const { id } = await keepCard(change, { ...CARD, request, wheel, machine });
   const card = await cardById(change, id);
   if (card === null) throw new Error('a card that was just kept is not there');
   return card;
@@ -113,6 +115,7 @@ const numberOf = ({ result }: Logged): number => result.number;
 export const results = (engine: Engine): void => {
   describe('results', () => {
     logging(engine);
+    finding(engine);
     refusing(engine);
     changing(engine);
     learning(engine);
@@ -202,6 +205,30 @@ const logging = (engine: Engine): void => {
     expect(await numbers({ card: one.result.card })).toEqual([1]);
     expect(await numbers({ since: START + 1 })).toEqual([2]);
     expect(await numbers({ doubted: true })).toEqual([2]);
+  });
+};
+
+const finding = (engine: Engine): void => {
+  it('are found by what was said of them, and no more once they are withdrawn', async () => {
+    const shop = await shopOn(engine);
+    const said: ResultContent = { ...NOTHING_SAID, outcome: 'double', symptom: 'doublePattern' };
+    const { result } = await logOne(shop, {
+      ...said,
+      cause: 'dullWheel',
+      note: 'burr by the jaws',
+    });
+    const found = async (words: string) =>
+      (await findEntries(shop.view, words, { limit: 9, kind: 'result' })).map(({ id }) => id);
+    for (const words of ['burr', 'dull wheel', 'double straight', 'R1'])
+      expect([words, await found(words)]).toEqual([words, [result.id]]);
+    await shop.change(async (change) => {
+      good(await correctResult(change, { id: result.id }, { note: 'scratch by the jaws' }));
+    });
+    expect([await found('scratch'), await found('burr')]).toEqual([[result.id], []]);
+    await shop.change(async (change) => {
+      good(await withdrawResult(change, { id: result.id }));
+    });
+    expect(await found('scratch')).toEqual([]);
   });
 };
 
