@@ -115,7 +115,7 @@ const lineFor = (call: Call, fleet: readonly Command[], pressed: Answer | null):
   const way = route(line, fleet);
   return added === undefined || !('command' in way)
     ? line
-    : [line, ...wordsOf(way.command, added)].join(' ');
+    : [line, ...wordsOf(way.command, added, tokensOf(line).length > way.skip)].join(' ');
 };
 
 export const openDesk = (

@@ -1,5 +1,5 @@
 import type { Refusal } from '../refusal.ts';
-import { nearestOf, quoted, tokensOf } from '../words/index.ts';
+import { type AnyParameter, nearestOf, quoted, tokensOf } from '../words/index.ts';
 import type { Options } from './call.ts';
 import type { Command } from './command.ts';
 
@@ -68,23 +68,50 @@ export const route = (text: string, fleet: readonly Command[]): Route => {
   return { command, skip: before };
 };
 
-/** The fields of a form, as words. */
-export const wordsOf = (command: Command, options: Options): readonly string[] => {
-  const parts = command.parameters.flatMap((parameter) => {
-    const given = options[parameter.name];
-    if (given === undefined || given === false) return [];
-    if (given === true) return [parameter.values?.[0]?.[0] ?? ''];
-    const keyword =
-      parameter.bare === true || parameter.free ? '' : (parameter.keywords?.[0] ?? '');
-    const typed = String(given).trim();
-    if (parameter.text === true) return [`${keyword} ${quoted(typed)}`];
-    const announced = keyword !== '' && typed.toLowerCase().startsWith(`${keyword} `);
-    return [announced ? typed : `${keyword} ${typed}`.trim()];
-  });
+/** A field's value that says itself what it is: `long 1.5` in the field for the length. */
+const isAnnounced = ({ keywords = [], postfix }: AnyParameter, typed: string): boolean => {
+  const plain = typed.toLowerCase();
+  return keywords.some(
+    (keyword) =>
+      plain.startsWith(`${keyword} `) || (postfix === true && plain.endsWith(` ${keyword}`)),
+  );
+};
+
+const wordsFor = (
+  parameter: AnyParameter,
+  given: Options[string] | undefined,
+  isLead: boolean,
+): readonly string[] => {
+  if (given === undefined || given === false) return [];
+  if (given === true) return [parameter.values?.[0]?.[0] ?? ''];
+  const isOpen = isLead || parameter.bare === true || parameter.free !== undefined;
+  const keyword = isOpen ? '' : (parameter.keywords?.[0] ?? '');
+  const typed = String(given).trim();
+  if (parameter.text === true) return [`${keyword} ${quoted(typed)}`.trim()];
+  return [isAnnounced(parameter, typed) ? typed : `${keyword} ${typed}`.trim()];
+};
+
+/**
+ * The fields of a form, as words: first what has to stand first, unless something stands before
+ * it already.
+ */
+export const wordsOf = (
+  { parameters, lead }: Command,
+  options: Options,
+  isBehind = false,
+): readonly string[] => {
+  const isLead = ({ name }: AnyParameter): boolean => !isBehind && name === lead?.name;
+  const ordered = [...parameters.filter(isLead), ...parameters.filter((each) => !isLead(each))];
+  const parts = ordered.flatMap((each) => wordsFor(each, options[each.name], isLead(each)));
   const extra = options['words'];
   return [...parts, ...(extra === undefined ? [] : [String(extra)])];
 };
 
 /** The words of a form, as a line: one reader for everything that can be typed. */
-export const lineOf = (command: Command, options: Options): string =>
-  [`/${command.path.join(' ')}`, ...wordsOf(command, options)].join(' ');
+export const lineOf = (command: Command, options: Options): string => {
+  const { words, ...others } = options;
+  // A whole line in the field for words is that line.
+  const isWhole = typeof words === 'string' && words.trim().startsWith('/');
+  if (isWhole && Object.keys(others).length === 0) return words.trim();
+  return [`/${command.path.join(' ')}`, ...wordsOf(command, options)].join(' ');
+};

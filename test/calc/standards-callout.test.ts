@@ -171,6 +171,8 @@ describe('a callout among other words', () => {
     ['rge 0.8 1.0 bar', 'rge 0.8'],
     ['rge 0.8 90 out', 'rge 0.8'],
     ['rge 1.5 long', 'rge'],
+    // It once gave the pitch away as a length that nothing was done with.
+    ['rge 0.8 long 15mm', 'rge 0.8'],
     ['rge 3/4', 'rge'],
     ['din 82 raa 0,8 rge 1', 'din 82 raa 0,8'],
     ['96 dp straight 1.0 long', '96 dp straight'],

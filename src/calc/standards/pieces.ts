@@ -131,8 +131,11 @@ const pitches: readonly Rule[] = [
   { shape: shape(`(?<value>\\d?[.,]\\d+)\\s*module?${END}`), say: pitchOf('module') },
 ];
 
+const UNITS = 'in|inch|inches|thou|um|hb|hrc|rpm|sfm|turns|teeth|tpi|dp|m';
+/** `0.8 long` is a length; in `0.8 long 15mm` the word belongs to the number behind it. */
+const NAMES_BEFORE = `(?:long|deep|wide)(?!\\s*[\\d.,])`;
 /** What makes a number something else than a pitch: its unit, or being part of a fraction. */
-const ELSE = `(?!\\s*(?:in|inch|inches|thou|um|hb|hrc|rpm|sfm|turns|teeth|tpi|dp|long|deep|wide|m)${END})(?![\\w/%"'x.])(?!\\s*["%])`;
+const ELSE = `(?!\\s*(?:${UNITS}|${NAMES_BEFORE})${END})(?![\\w/%"'x.])(?!\\s*["%])`;
 
 const numbers: readonly Rule[] = [
   {

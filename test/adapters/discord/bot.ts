@@ -75,6 +75,15 @@ export const openBot = async ({
     now: () => START,
     onFault: (error) => log.fault('records', { error }),
   });
+  let toBeShown = 0;
+  const counting: Desk = {
+    ...desk,
+    answer: async (call) => {
+      const answer = await desk.answer(call);
+      if (answer.kind === 'card' && answer.card.pictures.length > 0) toBeShown += 1;
+      return answer;
+    },
+  };
   const leave = async (): Promise<void> => {
     await store.close();
     await platform.stop();
@@ -83,7 +92,7 @@ export const openBot = async ({
   const bot = await openDiscord({
     token: TOKEN,
     api: platform.api,
-    desk: breakDesk(desk),
+    desk: breakDesk(counting),
     book: en,
     log,
     draw: drawn,
@@ -109,6 +118,12 @@ export const openBot = async ({
       const message = posted[before];
       if (message === undefined) throw new Error('no reply');
       return { acked, message };
+    },
+    /** Nothing more comes of what was answered: pictures follow their card. */
+    quiet: async (): Promise<void> => {
+      const shown = () => posted.filter(({ files }) => files.length > 0).length;
+      await until(() => shown() >= toBeShown, 'the pictures');
+      await new Promise((done) => setTimeout(done, 5));
     },
     /** The form that comes of something. */
     nextForm: async (act: () => Promise<unknown>) => {

@@ -1,5 +1,7 @@
 /** A message as a person reads it. */
+
 import { textsIn } from '../../platforms/discord/payloads.ts';
+import { buttonsOf } from '../../platforms/discord/people.ts';
 import type { Posted } from '../../platforms/discord/rooms.ts';
 
 /** What is typed for Discord's eyes only is taken back. */
@@ -8,3 +10,20 @@ const plain = (text: string): string => text.replaceAll(/\\([^\p{L}\p{N}\s])/gu,
 /** Everything that is read in a message. */
 export const readIn = (message: Pick<Posted, 'body'>): string =>
   plain(textsIn(message.body).join('\n').replaceAll('**', ''));
+
+/** A message line by line: to whom, what it says, its pictures in words, its buttons. */
+export const seenAs = (message: Posted): string =>
+  [
+    message.only === null ? '(in the channel)' : '(to whoever asked alone)',
+    textsIn(message.body).map(plain).join('\n\n'),
+    ...message.files.map(({ name, alt }) => `${name}: ${alt}`),
+    buttonsOf(message)
+      .map(({ label }) => `[${label ?? ''}]`)
+      .join(' '),
+  ]
+    .filter((each) => each !== '')
+    .join('\n\n');
+
+/** The same card twice has two codes. */
+export const withoutCodes = (text: string): string =>
+  text.replaceAll(/\bCard [2346789CFHJKMPRTWXY]{5,12}\b/gu, 'Card CODE');

@@ -5,7 +5,6 @@ import {
   APPLICATION,
   BOT_NAME,
   BOT_PERMISSIONS,
-  CHANNELS,
   type Channel,
   type Guild,
   PERMISSION,
@@ -96,8 +95,11 @@ const DIRECT_CHANNEL = 1;
 export const directOf = ({ id }: Channel): Bodies['direct'] =>
   asBody('direct', { id, type: DIRECT_CHANNEL, name: null });
 
-export const guildOf = ({ id, name, owner, roles }: Guild): Bodies['guildCreate'] => {
-  const own = CHANNELS.filter(({ guild }) => guild === id);
+export const guildOf = (
+  { id, name, owner, roles }: Guild,
+  channels: readonly Channel[],
+): Bodies['guildCreate'] => {
+  const own = channels.filter(({ guild }) => guild === id);
   return asBody('guildCreate', {
     id,
     name,
@@ -169,8 +171,8 @@ const permissionsOf = ({ manages }: Someone): string =>
 export const interactionCommon = (
   { id, token }: { readonly id: string; readonly token: string },
   someone: Someone,
+  channel: Channel,
 ) => {
-  const channel = CHANNELS.find((each) => each.id === someone.channel);
   return {
     id,
     application_id: APPLICATION,
@@ -180,7 +182,7 @@ export const interactionCommon = (
     channel_id: someone.channel,
     channel: {
       id: someone.channel,
-      type: (channel?.parent ?? null) === null ? TEXT_CHANNEL : THREAD_CHANNEL,
+      type: channel.parent === null ? TEXT_CHANNEL : THREAD_CHANNEL,
     },
     member: {
       user: userOf(someone),

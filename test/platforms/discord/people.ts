@@ -40,6 +40,7 @@ const GROUP = 2;
 const TEXT_OPTION = 3;
 const WHOLE_OPTION = 4;
 const BUTTON = 2;
+const SELECT = 3;
 const FIELD = 4;
 const LABEL = 18;
 
@@ -49,8 +50,24 @@ const MOST_TEXT = 6000;
 export const buttonsOf = ({ body }: Pick<Posted, 'body'>): readonly Component[] =>
   allOf((body['components'] ?? []) as readonly Component[]).filter(({ type }) => type === BUTTON);
 
-export const fieldsOf = ({ body }: Form): readonly (Component & { readonly value?: string })[] =>
-  allOf((body['components'] ?? []) as readonly Component[]).filter(({ type }) => type === FIELD);
+export type Field = Component & {
+  readonly value?: string;
+  readonly placeholder?: string;
+  readonly options?: readonly { readonly value: string; readonly default?: boolean }[];
+};
+export const fieldsOf = ({ body }: Form): readonly Field[] =>
+  allOf((body['components'] ?? []) as readonly Component[]).filter(
+    ({ type }) => type === FIELD || type === SELECT,
+  );
+
+/** What comes of a field: its text, or what was chosen of its options. */
+const sentBy = ({ type, options = [], value = '' }: Field, filled: string | undefined): Body => {
+  if (type === FIELD) return { value: filled ?? value };
+  const before = options.filter((each) => each.default === true).map((each) => each.value);
+  if (filled === undefined) return { values: before };
+  if (options.every((each) => each.value !== filled)) throw new Error(`no option ${filled}`);
+  return { values: [filled] };
+};
 
 /** What the platform's own client would not let a person send. */
 const refusedAt = (option: Option, value: Value): string | null => {
@@ -75,7 +92,7 @@ export const openPeople = (platform: Platform) => {
     platform.meetPerson(someone);
     const asked: Asked = interactions.ask(kind, someone, times);
     const body = {
-      ...interactionCommon(asked, someone),
+      ...interactionCommon(asked, someone, platform.rooms.channelOf(someone.channel)),
       ...more,
     } as unknown as Bodies[Interaction];
     platform.dispatch('INTERACTION_CREATE', payload, body, copies);
@@ -205,16 +222,11 @@ export const openPeople = (platform: Platform) => {
       for (const name of Object.keys(filled))
         if (fields.every(({ custom_id }) => custom_id !== name))
           throw new Error(`no field ${name} among ${fields.map((f) => f.custom_id).join(', ')}`);
-      const components = fields.map(({ custom_id = '', value = '' }, index) => ({
-        type: LABEL,
-        id: 2 * index + 1,
-        component: {
-          type: FIELD,
-          id: 2 * index + 2,
-          custom_id,
-          value: filled[custom_id] ?? value,
-        },
-      }));
+      const components = fields.map((field, index) => {
+        const { type, custom_id = '' } = field;
+        const said = { type, id: 2 * index + 2, custom_id, ...sentBy(field, filled[custom_id]) };
+        return { type: LABEL, id: 2 * index + 1, component: said };
+      });
       const data = { custom_id: form.body['custom_id'], components };
       return ask('submission', 'submission', form.asked.someone, delivery, { type: 5, data });
     },

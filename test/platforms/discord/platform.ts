@@ -13,6 +13,7 @@ import { type BodyCheck, bodyCheck } from './schemas.ts';
 import { sentIn } from './sent.ts';
 import {
   ENGINEER,
+  everybodyIn,
   GUILDS,
   type Guild,
   OPERATOR,
@@ -153,7 +154,7 @@ export const openPlatform = async (check: BodyCheck = bodyCheck()) => {
   const gateway = openGateway(server, (session) => {
     const ready = readyOf(guilds, session, base.replace('http', 'ws'));
     checked('ready', ready);
-    const created = guilds.map(guildOf);
+    const created = guilds.map((guild) => guildOf(guild, rooms.channels));
     for (const guild of created) checked('guildCreate', guild);
     return [{ t: 'READY', d: ready }, ...created.map((guild) => ({ t: 'GUILD_CREATE', d: guild }))];
   });
@@ -190,6 +191,17 @@ export const openPlatform = async (check: BodyCheck = bodyCheck()) => {
       guilds = guilds.filter((each) => each.id !== id);
       rooms.leave(id);
       gateway.dispatch({ t: 'GUILD_DELETE', d: { id } });
+    },
+    /** The bot is let into a server; whoever owns it stands in its one channel. */
+    addGuild: (name: string): Someone => {
+      const [id, channel] = [snowflake(next()), snowflake(next())];
+      const guild: Guild = { id, name, owner: OWNER.id, roles: everybodyIn(id) };
+      guilds = [...guilds, guild];
+      rooms.join(id, channel);
+      const created = guildOf(guild, rooms.channels);
+      checked('guildCreate', created);
+      gateway.dispatch({ t: 'GUILD_CREATE', d: created });
+      return { ...OWNER, guild: id, channel };
     },
     newId: (): string => snowflake(next()),
     stop: async (): Promise<void> => {

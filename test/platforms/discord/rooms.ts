@@ -179,6 +179,14 @@ export const openRooms = (next: () => number) => {
     /** The few minutes are over in which the same nonce is the same message. */
     forgetNonces: (): void => nonces.clear(),
     leave: (guild: string): void => void guilds.delete(guild),
+    /** A server of one channel. */
+    join: (guild: string, channel: string): void => {
+      guilds.add(guild);
+      channels.set(channel, { id: channel, name: 'floor', guild, parent: null, open: true });
+    },
+    get channels(): readonly Channel[] {
+      return [...channels.values()];
+    },
   };
 };
 export type Rooms = ReturnType<typeof openRooms>;

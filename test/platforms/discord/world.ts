@@ -44,7 +44,7 @@ export const OTHER = '1100000000000000002';
 export const ENGINEERS = '1200000000000000011';
 export const SUPERVISORS = '1200000000000000012';
 
-const rolesOf = (guild: string, more: readonly Role[] = []): readonly Role[] => [
+export const everybodyIn = (guild: string, more: readonly Role[] = []): readonly Role[] => [
   // The role of everybody has the server's id.
   { id: guild, name: '@everyone', permissions: everybody },
   ...more,
@@ -55,7 +55,7 @@ export const GUILDS: readonly Guild[] = [
     id: SHOP,
     name: 'Brass Lane Works',
     owner: '1300000000000000001',
-    roles: rolesOf(SHOP, [
+    roles: everybodyIn(SHOP, [
       { id: ENGINEERS, name: 'Engineers', permissions: everybody },
       { id: SUPERVISORS, name: 'Supervisors', permissions: everybody },
     ]),
@@ -64,7 +64,7 @@ export const GUILDS: readonly Guild[] = [
     id: OTHER,
     name: 'Quayside Turning',
     owner: '1300000000000000021',
-    roles: rolesOf(OTHER),
+    roles: everybodyIn(OTHER),
   },
 ];
 

@@ -1,0 +1,139 @@
+/** Every verb through the real client: options, the card they bring, and all that hangs on it. */
+import { afterAll, expect, test } from 'vitest';
+import { FLEET } from '../../../commands/index.ts';
+import type { Command } from '../../../src/desk/index.ts';
+import { buttonsOf, fieldsOf, type Value } from '../../platforms/discord/people.ts';
+import type { Posted } from '../../platforms/discord/rooms.ts';
+import type { Someone } from '../../platforms/discord/world.ts';
+import { until } from '../../support/until.ts';
+import { openBot } from './bot.ts';
+import { optionsFor, restOf } from './options.ts';
+import { readIn, seenAs, withoutCodes } from './seen.ts';
+
+const bot = await openBot();
+afterAll(async () => {
+  expect(bot.platform.faults).toEqual([]);
+  expect(bot.faults).toEqual([]);
+  await bot.stop();
+});
+const { people, platform } = bot;
+const SETUP = ['knurl', 'setup'];
+const LINE = '1.000 straight 21tpi 1018';
+
+const codeIn = (message: Posted): string =>
+  /\bCard ([2346789CFHJKMPRTWXY]{5,12})\b/u.exec(readIn(message))?.[1] ?? '';
+/** Examples name a code that no card has. */
+const withCode = (line: string, code: string): string =>
+  line.replaceAll(/\b(?=\w*\d)(?=\w*[A-Z])[2346789CFHJKMPRTWXY]{5}\b/gu, code);
+
+/** Everything that one act brings: it is over when nothing more comes. */
+const brought = async (act: () => Promise<unknown>): Promise<readonly Posted[]> => {
+  const before = platform.posted.length;
+  const { message } = await bot.next(act);
+  await bot.quiet();
+  const all = platform.posted.slice(before);
+  expect(all.every(({ only }) => only === message.only)).toBe(true);
+  return all;
+};
+
+/** A server of its own, with a card to speak of and whatever the verb's list holds. */
+const shopFor = async (
+  name: string,
+  { path }: Command,
+): Promise<{ who: Someone; code: string }> => {
+  const who = platform.addGuild(name);
+  const first = await brought(() => people.slash(SETUP, { words: LINE }, who));
+  const adds = FLEET.filter(
+    (each) => each.path[1] === path[1] && each.path.at(-1) === 'add' && path.at(-1) !== 'add',
+  );
+  for (const add of adds)
+    for (const example of add.examples)
+      await brought(() => people.slash(add.path, optionsFor(people, add, example), who));
+  return { who, code: first.map(codeIn).join('') };
+};
+
+const typed = (path: readonly string[], options: Readonly<Record<string, unknown>>): string =>
+  [
+    `/${path.join(' ')}`,
+    ...Object.entries(options).map(([name, value]) => `${name}: ${String(value)}`),
+  ].join('  ');
+
+/** What the examples of a verb bring in a server of their own, without the codes of its cards. */
+const examplesOf = async (
+  name: string,
+  command: Command,
+  fill: (line: string) => Readonly<Record<string, Value>>,
+) => {
+  const { who, code } = await shopFor(name, command);
+  const asked: string[] = [];
+  const seen: string[] = [];
+  for (const example of command.examples) {
+    const options = fill(withCode(example, code));
+    const messages = await brought(() => people.slash(command.path, options, who));
+    asked.push(typed(command.path, options).replaceAll(code, 'CODE'));
+    seen.push(withoutCodes(messages.map(seenAs).join('\n\n')).replaceAll(code, 'CODE'));
+  }
+  return { asked, seen };
+};
+
+const VERBS = FLEET.map((command) => [command.path.join(' '), command] as const);
+
+test.each(VERBS)('golden: /%s by its options, and the same by words', async (name, command) => {
+  const byOptions = await examplesOf(name, command, (line) => optionsFor(people, command, line));
+  const byWords = await examplesOf(`${name} in words`, command, (line) => ({
+    words: restOf(line),
+  }));
+  expect(byWords.seen).toEqual(byOptions.seen);
+  const text = byOptions.asked.flatMap((line, index) => [line, byOptions.seen[index]]);
+  await expect(`${text.join('\n\n')}\n`).toMatchFileSnapshot(
+    `goldens/${name.replaceAll(' ', '-')}.txt`,
+  );
+});
+
+/** Judgement: buttons of one verb's cards that are pressed, each label once. */
+const MOST_PRESSES = 40;
+
+test.each(VERBS)(
+  'every button and form of /%s is answered, and private stays private',
+  async (name, command) => {
+    const { who, code } = await shopFor(`${name} pressed`, command);
+    const waiting: Posted[] = [];
+    for (const example of command.examples) {
+      const options = optionsFor(people, command, withCode(example, code));
+      waiting.push(...(await brought(() => people.slash(command.path, options, who))));
+      const hidden = { ...options, 'only-me': true };
+      waiting.push(...(await brought(() => people.slash(command.path, hidden, who))));
+    }
+    const pressed = new Set<string>();
+    for (let card = waiting.shift(); card !== undefined; card = waiting.shift())
+      for (const { label = '', custom_id = '' } of buttonsOf(card)) {
+        const key = `${label} ${custom_id.split(':')[0] ?? ''}`;
+        if (pressed.has(key) || pressed.size >= MOST_PRESSES) continue;
+        pressed.add(key);
+        const answers = await answered(card, label, who);
+        if (card.only !== null) expect(answers.every(({ only }) => only === who.id)).toBe(true);
+        waiting.push(...answers);
+      }
+  },
+  30_000,
+);
+
+/** What a button brings, by way of its form where it opens one. */
+const answered = async (card: Posted, label: string, who: Someone): Promise<readonly Posted[]> => {
+  const forms = platform.forms.length;
+  const before = platform.posted.length;
+  const acked = await people.press(card, label, who);
+  expect(acked, `${label} is answered in time`).not.toBeNull();
+  const form = platform.forms[forms];
+  if (form === undefined) {
+    await until(() => platform.posted.length > before, `what ${label} brings`);
+    return platform.posted.slice(before);
+  }
+  const filled = Object.fromEntries(
+    fieldsOf(form).map(({ custom_id = '', value, placeholder, options }) => [
+      custom_id,
+      options?.[0]?.value ?? value ?? placeholder?.split(', ')[0] ?? 'x',
+    ]),
+  );
+  return await brought(() => people.submit(form, filled));
+};
