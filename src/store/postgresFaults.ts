@@ -14,6 +14,7 @@ const REASONS: Readonly<Record<string, UnavailableReason>> = {
   '57P02': 'gone', // crash_shutdown
   '57P03': 'gone', // cannot_connect_now
   '58030': 'gone', // io_error
+  '55000': 'gone', // object_not_in_prerequisite_state: a database that takes no connections
   '3D000': 'gone', // invalid_catalog_name
   '28P01': 'gone', // invalid_password
   '28000': 'gone', // invalid_authorization_specification
