@@ -98,6 +98,8 @@ export type Stale = {
   readonly what: string;
   readonly by: string;
   readonly when: string;
+  /** The time zone in which the shop reads its clock. */
+  readonly zone?: string;
 };
 
 export type Unavailable = {
@@ -130,6 +132,34 @@ export type InUse = {
 /** Somebody must be left who can name owners. */
 export type LastOwner = { readonly code: 'lastOwner'; readonly name: string };
 
+/** A standard is not where in its life it would have to be for what was asked. */
+export type NotNow = {
+  readonly code: 'notNow';
+  readonly asked: 'save' | 'propose' | 'approve' | 'revise' | 'retire' | 'use';
+  readonly part: string;
+  readonly revision: number;
+  /** Where it is, who brought it there, and when. */
+  readonly state: 'draft' | 'proposed' | 'approved' | 'superseded' | 'retired';
+  readonly by: string;
+  readonly at: number;
+  readonly zone: string;
+};
+
+/** Whoever proposed it may not approve it here; these may. */
+export type FourEyes = {
+  readonly code: 'fourEyes';
+  readonly part: string;
+  readonly revision: number;
+  readonly people: readonly string[];
+};
+
+/** A set-up that ends in a stop is nobody's standard. */
+export type CardStopped = {
+  readonly code: 'cardStopped';
+  readonly card: string;
+  readonly check: string;
+};
+
 export type Refusal =
   | Unreadable
   | Missing
@@ -141,4 +171,7 @@ export type Refusal =
   | Unavailable
   | Taken
   | InUse
-  | LastOwner;
+  | LastOwner
+  | NotNow
+  | FourEyes
+  | CardStopped;

@@ -3,11 +3,13 @@ import type {
   FigureName,
   Mm,
   MmPerRev,
+  Pattern,
   Pitch,
   Rad,
   RevPerMin,
   Steps,
   Watt,
+  Window,
 } from '../calc/index.ts';
 import type { CellFault, FileFault } from './fileFaults.ts';
 import type { Nothing } from './nothing.ts';
@@ -27,7 +29,10 @@ export type Amount =
   | { readonly kind: 'hardness'; readonly value: number }
   | { readonly kind: 'percent'; readonly value: number }
   | { readonly kind: 'hours'; readonly value: number }
+  | { readonly kind: 'months'; readonly value: number }
   | { readonly kind: 'count'; readonly value: number }
+  | { readonly kind: 'span'; readonly value: Window }
+  | { readonly kind: 'pattern'; readonly value: Pattern }
   /** As a person typed it. */
   | { readonly kind: 'text'; readonly value: string }
   /** One of the program's own words; the phrase book says it. */

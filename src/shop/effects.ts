@@ -26,7 +26,7 @@ export const queueEffects = async (
 ): Promise<readonly string[]> => {
   const queued: string[] = [];
   for (const effect of effects) {
-    const state = await startingState(change, effect.after);
+    const { state, fault } = await startingState(change, effect.after);
     const row = await change.db
       .insertInto('effect')
       .values({
@@ -42,9 +42,9 @@ export const queueEffects = async (
         first_at: null,
         worker: null,
         delivered_at: null,
-        given_up_at: null,
+        given_up_at: state === 'givenUp' ? change.at : null,
         seen_at: null,
-        last_fault: null,
+        last_fault: fault,
         outcome: null,
       })
       .onConflict((oc) => oc.columns(['shop', 'key']).doNothing())
@@ -55,21 +55,39 @@ export const queueEffects = async (
   return queued;
 };
 
+type Starting = {
+  readonly state: 'waiting' | 'held' | 'givenUp';
+  readonly fault: string | null;
+};
+
 /**
- * Held until the one before it has taken place. That one's row is written to, unchanged, so that
- * it cannot be delivered unseen at the same moment, which would leave this one held for ever.
+ * Held until the one before it has taken place, and given up with it. That one's row is written to,
+ * unchanged, so that it cannot be delivered unseen at the same moment, which would leave this one
+ * held for ever.
  */
-const startingState = async (change: Queueing, after: string | undefined): Promise<string> => {
-  if (after === undefined) return 'waiting';
+const startingState = async (change: Queueing, after: string | undefined): Promise<Starting> => {
+  if (after === undefined) return { state: 'waiting', fault: null };
   const before = await change.db
     .updateTable('effect')
     .set((eb) => ({ attempts: eb.ref('attempts') }))
     .where('shop', '=', change.id)
     .where('key', '=', after)
-    .returning('state')
+    .returning(['state', 'last_fault'])
     .executeTakeFirst();
   if (before === undefined) throw new Error(`an effect waits for ${after}, which was never queued`);
-  return before.state === 'delivered' ? 'waiting' : 'held';
+  if (before.state === 'givenUp') return { state: 'givenUp', fault: before.last_fault };
+  return { state: before.state === 'delivered' ? 'waiting' : 'held', fault: null };
+};
+
+/** Whether an effect was queued, and may still take place or has. */
+export const isUnderWay = async (view: ShopView, key: string): Promise<boolean> => {
+  const row = await view.db
+    .selectFrom('effect')
+    .select('state')
+    .where('shop', '=', view.id)
+    .where('key', '=', key)
+    .executeTakeFirst();
+  return row !== undefined && row.state !== 'givenUp';
 };
 
 /** An effect that could not be delivered and will not be tried again. */

@@ -10,7 +10,8 @@ export type Subject =
   | 'group'
   | 'setting'
   | 'effect'
-  | 'result';
+  | 'result'
+  | 'standard';
 export type Verb = 'added' | 'changed' | 'removed';
 
 export type HistoryLine = {

@@ -22,7 +22,14 @@ export {
 export { MACHINE_SHEET } from './csv/machineSheet.ts';
 export { WHEEL_SHEET } from './csv/wheelSheet.ts';
 export { limitsOf, onDial } from './dial.ts';
-export { type GivenUp, givenUp, givenUpSeen, type QueuedEffect, queueEffects } from './effects.ts';
+export {
+  type GivenUp,
+  givenUp,
+  givenUpSeen,
+  isUnderWay,
+  type QueuedEffect,
+  queueEffects,
+} from './effects.ts';
 export {
   type Entered,
   enterShop,
@@ -120,6 +127,7 @@ export {
   settingsOf,
 } from './settings.ts';
 export { type SpokenNames, spokenNames } from './spoken.ts';
+export * from './standards/index.ts';
 export { type ShopChange, type ShopView, type ShopWords, viewShop } from './view.ts';
 export {
   BARE_WHEEL,

@@ -91,14 +91,18 @@ export type RuleScope = {
   readonly base: string | null;
 };
 
-/** The sentences that belong on a card, in the order of their numbers. */
-export const rulesOnCard = async (view: ShopView, scope: RuleScope): Promise<readonly string[]> => {
+/** The rules that hold for it, in the order of their numbers. */
+export const rulesHolding = async (
+  view: ShopView,
+  scope: RuleScope,
+): Promise<readonly Kept<Rule>[]> => {
   const holds = (rule: Rule): boolean =>
     (rule.machine === null || rule.machine === scope.machine) &&
     (rule.material === null || rule.material === scope.material) &&
     (rule.base === null || rule.base === scope.base);
-  return (await listOf(view, RULES))
-    .filter(holds)
-    .sort((a, b) => Number(a.name) - Number(b.name))
-    .map(({ text }) => text);
+  return (await listOf(view, RULES)).filter(holds).sort((a, b) => Number(a.name) - Number(b.name));
 };
+
+/** The sentences that belong on a card, in the order of their numbers. */
+export const rulesOnCard = async (view: ShopView, scope: RuleScope): Promise<readonly string[]> =>
+  (await rulesHolding(view, scope)).map(({ text }) => text);

@@ -34,6 +34,10 @@ export const SETTINGS = {
   questionsChannel: { shape: channel, usual: null },
   /** Where the bot says what it could not deliver. */
   noticesChannel: { shape: channel, usual: null },
+  /** Whoever proposes a standard may not approve it. Usually off: many a shop has one supervisor. */
+  fourEyes: { shape: z.boolean(), usual: false },
+  /** How long an approved standard holds before somebody looks at it again. */
+  reviewMonths: { shape: z.number().int().min(1).max(120), usual: 12 },
   /** How long a question may stay open before it is put up again. */
   questionHours: { shape: hours, usual: 4 },
 } as const;
@@ -84,6 +88,10 @@ const settingFault = (view: ShopView, name: SettingName, value: unknown): Refusa
   if (name === 'questionHours') {
     const amount = Number(value);
     return { code: 'outOfRange', what: name, value: amount, min: 0.25, max: 336, unit: 'h' };
+  }
+  if (name === 'reviewMonths') {
+    const amount = Number(value);
+    return { code: 'outOfRange', what: name, value: amount, min: 1, max: 120, unit: 'months' };
   }
   const said = view.words.plainText(String(value));
   const nearest = name === 'timeZone' ? view.words.nearestOf(said, timeZones()) : [];

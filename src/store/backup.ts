@@ -76,11 +76,17 @@ const lookThrough = (draft: string, file: string): void => {
     copy.pragma('journal_mode = delete');
     const found = copy.pragma('integrity_check', { simple: true });
     if (found !== 'ok') throw new BackupFault('damaged', file);
+  } catch (error) {
+    // Some damage is found out by the looking itself.
+    throw isCorrupt(error) ? new BackupFault('damaged', file, error) : error;
   } finally {
     copy.close();
   }
   fs.chmodSync(draft, 0o600);
 };
+
+const isCorrupt = (error: unknown): boolean =>
+  error instanceof Error && 'code' in error && String(error.code).startsWith('SQLITE_CORRUPT');
 
 const isNotADatabase = (error: unknown): boolean =>
   error instanceof Error && 'code' in error && error.code === 'SQLITE_NOTADB';

@@ -183,6 +183,49 @@ export type GrowthTable = OfShop & {
   first: string;
 };
 
+/** What a shop keeps under a part number; its revisions say what that is. */
+export type StandardTable = OfShop & {
+  id: string;
+  /** The number as the shop writes it, and as it is compared. */
+  part: string;
+  part_key: string;
+  /** Counts changes; of two that are made at once the second is refused. */
+  version: number;
+  made_at: Moment;
+  made_by: string;
+  changed_at: Moment;
+  changed_by: string;
+};
+
+/** A revision never changes but in its life: another card is another revision. */
+export type StandardRevisionTable = OfShop & {
+  id: string;
+  standard: string;
+  number: number;
+  /** draft, proposed, approved, superseded, retired. */
+  state: string;
+  /** The card it was made from. */
+  card: string;
+  /** What it applies to; the first two once more for the index. */
+  pattern: string;
+  base: string;
+  scope: Json;
+  /** The wheel, machine, material and rules as they were when it was approved. */
+  basis: Json | null;
+  why: string | null;
+  made_at: Moment;
+  made_by: string;
+  proposed_at: Moment | null;
+  proposed_by: string | null;
+  approved_at: Moment | null;
+  approved_by: string | null;
+  review_at: Moment | null;
+  /** When it was superseded or retired. */
+  ended_at: Moment | null;
+  ended_by: string | null;
+  ended_why: string | null;
+};
+
 export type InteractionTable = OfShop & {
   id: string;
   at: Moment;
@@ -259,6 +302,8 @@ export type Tables = {
   card: CardTable;
   result: ResultTable;
   growth: GrowthTable;
+  standard: StandardTable;
+  standard_revision: StandardRevisionTable;
   interaction: InteractionTable;
   effect: EffectTable;
   history: HistoryTable;
@@ -293,6 +338,8 @@ export const TABLES: readonly TableFacts[] = [
   { name: 'card', shop: 'shop', key: 'id', json: ['request', 'figures', 'card'] },
   { name: 'result', shop: 'shop', key: 'id', json: [] },
   { name: 'growth', shop: 'shop', key: 'family', json: [] },
+  { name: 'standard', shop: 'shop', key: 'id', json: [] },
+  { name: 'standard_revision', shop: 'shop', key: 'id', json: ['scope', 'basis'] },
   { name: 'interaction', shop: 'shop', key: 'id', json: ['answer'] },
   { name: 'effect', shop: 'shop', key: 'id', json: ['effect', 'outcome'] },
   { name: 'history', shop: 'shop', key: 'id', json: ['before', 'after'] },

@@ -11,6 +11,7 @@ import type {
 import type { Book } from '../book.ts';
 import type { Rounding, Show } from '../show.ts';
 import { thing } from './names.ts';
+import { cardStopped, fourEyes, notNow, stale } from './standardRefusals.ts';
 
 /** Words of a refusal are shown, never obeyed; a very long one is shortened. */
 const quoted = (word: string): string => `“${word.length > 30 ? `${word.slice(0, 29)}…` : word}”`;
@@ -184,7 +185,7 @@ export const refusal = (fault: Refusal, show: Show): string => {
     case 'notFound':
       return notFound(fault);
     case 'stale':
-      return `The ${thing(fault.what)} was changed by ${fault.by} at ${fault.when}. Look at it again, then repeat your change.`;
+      return stale(fault);
     case 'unavailable':
       return `The ${thing(fault.what)} cannot be reached just now. Nothing was changed. Send this again in a minute: ${fault.words}`;
     case 'taken':
@@ -193,6 +194,12 @@ export const refusal = (fault: Refusal, show: Show): string => {
       return inUse(fault);
     case 'lastOwner':
       return `${fault.name} is the only owner. Name another owner first.`;
+    case 'notNow':
+      return notNow(fault);
+    case 'fourEyes':
+      return fourEyes(fault);
+    case 'cardStopped':
+      return cardStopped(fault);
   }
 };
 

@@ -1,6 +1,6 @@
 import type { Amount, Fact, Moment, ShopThing } from '../../card/index.ts';
 import type { Show } from '../show.ts';
-import { pitchName, THINGS } from './names.ts';
+import { patternName, pitchName, THINGS } from './names.ts';
 
 /** What the things of a shop are called. */
 export const SHOP_THINGS: { readonly [T in ShopThing]: { one: string; many: string } } = {
@@ -54,6 +54,9 @@ export const SHOP_FACTS: Readonly<Record<string, string>> = {
   standardsChannel: 'standards go to',
   questionsChannel: 'questions go to',
   noticesChannel: 'notices go to',
+  fourEyes: 'standards need two people',
+  reviewMonths: 'a standard is reviewed after',
+  bars: 'bars',
   questionHours: 'a question waits',
 };
 
@@ -123,8 +126,14 @@ export const amountText = (amount: Amount, show: Show): string => {
       return `${String(Number(amount.value.toFixed(1)))} %`;
     case 'hours':
       return `${String(Number(amount.value.toFixed(2)))} h`;
+    case 'months':
+      return `${String(amount.value)} ${amount.value === 1 ? 'month' : 'months'}`;
     case 'count':
       return String(amount.value);
+    case 'span':
+      return `${show.span(amount.value.low, amount.value.high)} ${show.units}`;
+    case 'pattern':
+      return patternName(amount.value);
     case 'text':
       return amount.value;
     case 'word':
@@ -137,7 +146,17 @@ export const amountText = (amount: Amount, show: Show): string => {
 };
 
 /** Facts that say what they are by themselves. */
-const PLAIN = new Set(['form', 'pitch', 'place', 'edge', 'rule', 'role', 'base']);
+const PLAIN = new Set([
+  'pattern',
+  'form',
+  'pitch',
+  'place',
+  'edge',
+  'rule',
+  'role',
+  'base',
+  'material',
+]);
 
 /** A fact in a list, where there is no room for a label. */
 export const factText = ({ name, amount }: Fact, show: Show): string => {
@@ -146,6 +165,17 @@ export const factText = ({ name, amount }: Fact, show: Show): string => {
   if (name === 'teeth') return `${text} teeth`;
   if (name === 'partsRun') return `${text} parts run`;
   return `${factName(name)} ${text}`;
+};
+
+/** The day in the shop's own zone. */
+export const dateText = ({ at, zone }: Moment): string => {
+  const format = (timeZone: string): string =>
+    new Intl.DateTimeFormat('en-GB', { timeZone, dateStyle: 'medium' }).format(at);
+  try {
+    return format(zone);
+  } catch {
+    return format('UTC');
+  }
 };
 
 /** Day and time in the shop's own zone; a zone nobody knows any more reads as UTC. */

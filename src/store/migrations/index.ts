@@ -3,6 +3,7 @@ import { shopAndPeople } from './0001-shop-and-people.ts';
 import { registers } from './0002-registers.ts';
 import { cardsAndEffects } from './0003-cards-and-effects.ts';
 import { results } from './0004-results.ts';
+import { standards } from './0005-standards.ts';
 import { find } from './0007-find.ts';
 import { type Columns, columnsOf, type Engine } from './columns.ts';
 
@@ -14,6 +15,7 @@ const STEPS: Readonly<Record<string, Step>> = {
   '0002-registers': registers,
   '0003-cards-and-effects': cardsAndEffects,
   '0004-results': results,
+  '0005-standards': standards,
   '0007-find': find,
 };
 

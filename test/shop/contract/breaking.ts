@@ -6,21 +6,26 @@ import { describe, expect, it } from 'vitest';
 import {
   addRule,
   addTo,
+  approveStandard,
   changeIn,
   changeSetting,
   confirmResult,
   correctResult,
   importSheet,
   keepCard,
+  keysOf,
   logResult,
   MACHINES,
   nameGroupRole,
   nameRole,
   once,
+  proposeStandard,
   queueEffects,
   removeFrom,
   removePerson,
+  retireStandard,
   type ShopChange,
+  saveStandard,
   WHEEL_SHEET,
   WHEELS,
   withdrawResult,
@@ -36,6 +41,7 @@ import { good, newRecords, newShop, person, type TestShop } from '../../support/
 import { requestOf } from '../../support/setupRequest.ts';
 import { grown, keptFor } from './results.ts';
 import { CARD, LEFT, STRAIGHT, TURRET } from './samples.ts';
+import { bringTo, draftOf } from './standardSteps.ts';
 
 type Prepared = {
   readonly wheel: string;
@@ -43,6 +49,8 @@ type Prepared = {
   /** A result that is learned from, and one that waits. */
   readonly learned: string;
   readonly doubted: string;
+  /** A card of a set-up. */
+  readonly setup: string;
 };
 type Work = (change: ShopChange, prepared: Prepared) => Promise<unknown>;
 
@@ -96,21 +104,53 @@ const WORKS: Readonly<Record<string, Work>> = {
   },
 };
 
+/** What is done to a standard, with what is to be posted and pinned because of it. */
+const STANDARD_WORKS: Readonly<Record<string, Work>> = {
+  save: async (change, { setup }) =>
+    good(await saveStandard(change, await draftOf(change, 'NEW-1', setup), 'save')),
+  propose: async (change) =>
+    good(await proposeStandard(change, { part: 'DRAFT-1', revision: null })),
+  approve: (change) =>
+    once(change, 'i1', async () => {
+      const which = { part: 'WAITS-1', revision: 2, reviewMonths: null };
+      const { standard, before } = good(await approveStandard(change, which));
+      const keys = keysOf(standard.id, 2);
+      const older = keysOf(standard.id, before?.number ?? 0);
+      await queueEffects(change, [
+        { key: keys.post, effect: { post: 2 } },
+        { key: keys.pin, effect: { pin: 2 }, after: keys.post },
+        { key: older.unpin, effect: { unpin: 1 }, after: older.pin },
+      ]);
+      return { part: standard.part };
+    }),
+  revise: async (change, { setup }) => {
+    const draft = await draftOf(change, 'HOLDS-1', setup);
+    good(await saveStandard(change, { ...draft, why: 'a cleaner crest' }, 'revise'));
+  },
+  retire: async (change) => {
+    const which = { part: 'HOLDS-1', revision: null, why: 'no longer made' };
+    good(await retireStandard(change, which));
+  },
+};
+
 export const breaking = (engine: Engine): void => {
   describe('broken at every step', () => {
-    it.each(Object.entries(WORKS))('%s is done whole or not at all', async (_, work) => {
-      const fuse = newFuse(engine);
-      const { store } = await newRecords(engine, { watch: fuse.watch });
-      const shop = await newShop(store);
-      const prepared = await prepare(shop);
-      const before = await everything(store);
-      const calls = await breakAll(fuse, store, before, () =>
-        shop.change((change) => work(change, prepared)),
-      );
-      expect(await everything(store)).not.toEqual(before);
-      // A change that makes fewer calls than this would not have been broken anywhere.
-      expect(calls).toBeGreaterThan(5);
-    });
+    it.each(Object.entries({ ...WORKS, ...STANDARD_WORKS }))(
+      '%s is done whole or not at all',
+      async (_, work) => {
+        const fuse = newFuse(engine);
+        const { store } = await newRecords(engine, { watch: fuse.watch });
+        const shop = await newShop(store);
+        const prepared = await prepare(shop);
+        const before = await everything(store);
+        const calls = await breakAll(fuse, store, before, () =>
+          shop.change((change) => work(change, prepared)),
+        );
+        expect(await everything(store)).not.toEqual(before);
+        // A change that makes fewer calls than this would not have been broken anywhere.
+        expect(calls).toBeGreaterThan(5);
+      },
+    );
   });
 };
 
@@ -124,7 +164,17 @@ const prepare = async (shop: TestShop): Promise<Prepared> => {
     const card = await keptFor(change, requestOf(), wheel);
     const { result: learned } = good(await logResult(change, card, grown(0.95)));
     const { result: doubted } = good(await logResult(change, card, grown(1.6)));
-    return { wheel, ben, learned: learned.id, doubted: doubted.id };
+    const setup = card.id;
+    await bringTo(change, 'DRAFT-1', 'draft', setup);
+    await bringTo(change, 'HOLDS-1', 'approved', setup);
+    const { standard } = await bringTo(change, 'WAITS-1', 'approved', setup);
+    const { post, pin } = keysOf(standard.id, 1);
+    await queueEffects(change, [
+      { key: post, effect: { post: 1 } },
+      { key: pin, effect: { pin: 1 }, after: post },
+    ]);
+    await bringTo(change, 'WAITS-1', 'proposed', setup);
+    return { wheel, ben, learned: learned.id, doubted: doubted.id, setup };
   });
 };
 

@@ -12,6 +12,7 @@ import { outbox } from './outbox.ts';
 import { people } from './people.ts';
 import { results } from './results.ts';
 import { settings } from './settings.ts';
+import { standards } from './standards.ts';
 
 export const shopContract = (engine: Engine): void => {
   describe(`a shop in ${engine}`, () => {
@@ -20,6 +21,7 @@ export const shopContract = (engine: Engine): void => {
     settings(engine);
     cards(engine);
     results(engine);
+    standards(engine);
     finding(engine);
     interactions(engine);
     outbox(engine);

@@ -3,11 +3,13 @@ import { describe, expect, it } from 'vitest';
 import {
   addRule,
   addTo,
+  approveStandard,
   causeCounts,
   changeIn,
   changeSetting,
   confirmResult,
   correctResult,
+  covering,
   dropFromFind,
   exportJson,
   findCard,
@@ -15,31 +17,38 @@ import {
   findIn,
   findPerson,
   findResult,
+  findStandard,
   givenUp,
   givenUpSeen,
   growthIn,
   growthTallies,
   historyOf,
   importSheet,
+  isUnderWay,
   latestCards,
   latestResults,
   listGroups,
   listOf,
   listPeople,
+  listStandards,
   logResult,
   MACHINES,
   MATERIALS_OF_SHOP,
   nameGroupRole,
   nameRole,
   nearestWords,
+  oldestPins,
   once,
+  partsOf,
   personById,
+  proposeStandard,
   queueEffects,
   RULES,
   removeFrom,
   removeGroup,
   removePerson,
   resultById,
+  retireStandard,
   rolesOfGroups,
   rulesOnCard,
   type ShopChange,
@@ -61,6 +70,7 @@ import {
 import { requestOf } from '../../support/setupRequest.ts';
 import { grown, keptFor } from './results.ts';
 import { CARD, STRAIGHT, TURRET } from './samples.ts';
+import { bringTo, jobLike } from './standardSteps.ts';
 
 /** Everything of a shop that has an id or a name. */
 type Things = Readonly<Record<Thing, string>>;
@@ -79,7 +89,9 @@ type Thing =
   | 'card'
   | 'code'
   | 'result'
-  | 'effect';
+  | 'effect'
+  | 'standard'
+  | 'part';
 
 const ALL = { machine: null, material: null, base: null };
 const BAR = { base: 'steel-medC-CD', hardness: 210, elongation: null, note: null };
@@ -99,6 +111,7 @@ const furnish = async (shop: TestShop, mark: string): Promise<Things> => {
     good(await logResult(change, part, grown(0.95)));
     const odd = { ...grown(1.6), symptom: 'oversize', cause: 'dullWheel' } as const;
     const { result } = good(await logResult(change, part, odd));
+    const { standard } = await bringTo(change, `part ${mark}`, 'approved', part.id);
     await queueEffects(change, [{ key: `post ${mark}`, effect: { post: mark } }]);
     return {
       wheel: wheel.id,
@@ -116,6 +129,8 @@ const furnish = async (shop: TestShop, mark: string): Promise<Things> => {
       code: part.code,
       result: result.id,
       effect: `post ${mark}`,
+      standard: standard.id,
+      part: standard.part,
     };
   });
 };
@@ -159,6 +174,15 @@ const ASKED: Readonly<Record<string, (change: ShopChange, id: string) => Promise
   historyOfResult: (change, id) => historyOf(change, 'result', { id }),
   growthIn: (change, id) => growthIn(change, id),
   givenUpSeen: (change, id) => givenUpSeen(change, [id]),
+  findStandard: (change, id) => findStandard(change, id),
+  proposeStandard: (change, id) => proposeStandard(change, { part: id, revision: null }),
+  approveStandard: (change, id) =>
+    approveStandard(change, { part: id, revision: null, reviewMonths: null }),
+  retireStandard: (change, id) =>
+    retireStandard(change, { part: id, revision: null, why: 'mine now' }),
+  historyOfStandard: (change, id) => historyOf(change, 'standard', { id }),
+  covering: (change, id) => covering(change, jobLike({ wheel: id, machine: id, material: id })),
+  isUnderWay: (change, id) => isUnderWay(change, id),
   once: (change, id) => once(change, id, () => Promise.resolve('mine')),
   dropFromFind: (change, id) => dropFromFind(change, 'card', id),
 };
@@ -186,6 +210,11 @@ const OVERVIEWS: Readonly<Record<string, (change: ShopChange) => Promise<unknown
   growth: (change) => growthIn(change, 'straight × steel'),
   tallies: (change) => growthTallies(change),
   causes: (change) => causeCounts(change, 'oversize'),
+  standards: (change) => listStandards(change, { limit: 50 }),
+  approvedStandards: (change) => listStandards(change, { limit: 50, state: 'approved' }),
+  parts: (change) => partsOf(change),
+  covering: (change) => covering(change, jobLike()),
+  oldestPins: (change) => oldestPins(change, 5),
   settings: (change) => settingsOf(change),
   givenUp: (change) => givenUp(change),
   history: (change) => historyOf(change, 'wheel'),

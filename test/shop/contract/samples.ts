@@ -1,6 +1,13 @@
 /** Invented wheels, machines and a card. */
-import { degrees, mm, mmPerRev, revPerMin, watt } from '../../../src/calc/index.ts';
-import { BARE_MACHINE, BARE_WHEEL, type Machine, type Wheel } from '../../../src/shop/index.ts';
+import { degrees, mm, mmPerRev, revPerMin, setUp, watt } from '../../../src/calc/index.ts';
+import {
+  BARE_MACHINE,
+  BARE_WHEEL,
+  type CardDraft,
+  type Machine,
+  type Wheel,
+} from '../../../src/shop/index.ts';
+import { requestOf } from '../../support/setupRequest.ts';
 
 export const STRAIGHT: Wheel = {
   ...BARE_WHEEL,
@@ -58,4 +65,14 @@ export const CARD = {
   wheel: null,
   machine: null,
   material: null,
+};
+
+const SETUP = setUp(requestOf());
+
+/** A set-up that was worked out, as the desk keeps it. */
+export const SETUP_CARD: CardDraft = {
+  ...CARD,
+  request: requestOf(),
+  figures: SETUP.figures,
+  card: { verb: 'setup', checks: SETUP.checks, parts: [] },
 };
