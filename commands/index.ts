@@ -6,6 +6,7 @@ import { help } from './knurl/help.ts';
 import { plan } from './knurl/plan.ts';
 import { results } from './knurl/result.ts';
 import { setup } from './knurl/setup.ts';
+import { standard } from './knurl/standard.ts';
 import { trouble } from './knurl/trouble.ts';
 import { why } from './knurl/why.ts';
 import { exportAll } from './shop/export.ts';
@@ -26,6 +27,7 @@ export const FLEET: readonly Command[] = [
   convert,
   card,
   why,
+  ...standard,
   help,
   ...wheels,
   ...machines,

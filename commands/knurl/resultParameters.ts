@@ -117,26 +117,15 @@ export const cause = said<CauseId>({
   examples: ['cause dull wheel', 'cause light bite'],
 });
 
-const NO_WORDS = vocabularyOf([]);
-const readWords = textOf(() => NO_WORDS);
-
-/** Everything up to the end of the line as it was typed, or what stands in quotation marks. */
-const readNote: Reader<string> = (cursor, names) => {
-  const start = tokenAt(cursor)?.start ?? 0;
-  const reading = readWords(cursor, names);
-  const isQuoted = /["“”„]/u.test(cursor.text.slice(Math.max(0, start - 1), start + 1));
-  if (reading === null || 'refusal' in reading || isQuoted) return reading;
-  return took(cursor.text.slice(start).trim(), cursor.tokens.length - cursor.at);
-};
-
-/** Words of the person's own, about anything that no number says. */
+/** Everything up to the end of the line, or what stands in quotation marks. */
 export const note = said<string>({
   name: 'note',
-  read: readNote,
+  read: textOf(() => NO_WORDS),
   keywords: ['note', 'notes', 'remark'],
   text: true,
   examples: ['note burr at the chuck end'],
 });
+const NO_WORDS = vocabularyOf([]);
 
 /** The version of a result that a button was made for. */
 export const version = said<number>({

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { proven } from './checkParameters.ts';
 import { fit, plate } from './finishParameters.ts';
 import * as words from './parameters.ts';
+import { partOfSetup } from './standardFields.ts';
 
 /** Everything that can be said of a set-up. */
 export const setupParameters = z.object({
@@ -45,6 +46,7 @@ export const setupParameters = z.object({
   plate,
   fit,
   proven,
+  part: partOfSetup,
   units: words.shown,
 });
 export type SetupWords = z.infer<typeof setupParameters>;

@@ -6,7 +6,9 @@ import {
   leaves,
   limitsOf,
   MACHINES,
+  MATERIALS_OF_SHOP,
   type Machine,
+  type ShopMaterial,
   sizeOf,
   WHEELS,
   type Wheel,
@@ -42,6 +44,19 @@ const machineOf = async (
   if (name === undefined) return null;
   if (visit === null) return noRecords('machine');
   const found = await findIn(visit.shop, MACHINES, name);
+  return found.ok
+    ? { id: found.value.id, value: found.value }
+    : { refusal: found.refusal, choices: [] };
+};
+
+const materialOf = async (
+  { visit }: Context,
+  said: SetupWords,
+): Promise<Given<ShopMaterial> | Refused> => {
+  const name = said.material?.own;
+  if (name === undefined) return null;
+  if (visit === null) return noRecords('material');
+  const found = await findIn(visit.shop, MATERIALS_OF_SHOP, name);
   return found.ok
     ? { id: found.value.id, value: found.value }
     : { refusal: found.refusal, choices: [] };
@@ -107,6 +122,8 @@ export const shopRequestOf = async (
   const [wheel, machine] = [await wheelOf(context, said), await machineOf(context, said.machine)];
   if (wheel !== null && 'refusal' in wheel) return wheel;
   if (machine !== null && 'refusal' in machine) return machine;
+  const material = await materialOf(context, said);
+  if (material !== null && 'refusal' in material) return material;
   const known = wheel === null ? said : withWheel(said, wheel.value);
   const built = requestOf(context, known, pitchNeeded);
   if ('refusal' in built) return built;
@@ -122,7 +139,7 @@ export const shopRequestOf = async (
       request,
       wheel: wheel?.id ?? null,
       machine: machine?.id ?? null,
-      material: null,
+      material: material?.id ?? null,
       base: request.material.id,
     },
   };

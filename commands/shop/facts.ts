@@ -107,5 +107,7 @@ export const settingFacts = (settings: Settings): readonly Fact[] => [
   { name: 'standardsChannel', amount: setTo(settings.standardsChannel) },
   { name: 'questionsChannel', amount: setTo(settings.questionsChannel) },
   { name: 'noticesChannel', amount: setTo(settings.noticesChannel) },
+  { name: 'fourEyes', amount: { kind: 'word', value: settings.fourEyes ? 'yes' : 'no' } },
+  { name: 'reviewMonths', amount: { kind: 'months', value: settings.reviewMonths } },
   { name: 'questionHours', amount: { kind: 'hours', value: settings.questionHours } },
 ];

@@ -15,6 +15,7 @@ import {
   settingsOf,
 } from '../../src/shop/index.ts';
 import { numberOfKind, type Reader, textOf, vocabularyOf } from '../../src/words/index.ts';
+import { reviewMonths } from '../knurl/standardFields.ts';
 import { settingFacts } from './facts.ts';
 import { recordsOf } from './named.ts';
 import { refused, shopCard, visiting } from './visit.ts';
@@ -72,6 +73,19 @@ const fields = {
   standardsChannel: channelField('standardsChannel', ['standards', 'standards go']),
   questionsChannel: channelField('questionsChannel', ['questions', 'questions go']),
   noticesChannel: channelField('noticesChannel', ['notices', 'notices go']),
+  fourEyes: said<boolean>({
+    name: 'fourEyes',
+    read: () => null,
+    closed: true,
+    values: [
+      ...['two people', 'four eyes', 'four eyes yes', 'four eyes on'].map(
+        (phrase) => [phrase, true] as const,
+      ),
+      ...['one person', 'four eyes no', 'four eyes off'].map((phrase) => [phrase, false] as const),
+    ],
+    examples: ['four eyes yes', 'four eyes no'],
+  }),
+  reviewMonths,
   questionHours: said<number>({
     name: 'questionHours',
     read: numberOfKind('questionHours', [0.25, 336], null, '1'),
@@ -119,6 +133,8 @@ const changesIn = (context: Context, given: Said): readonly Change[] => {
     const to = given[name];
     if (to !== undefined) changes.push([name, channelOf(context, to)]);
   }
+  if (given.fourEyes !== undefined) changes.push(['fourEyes', given.fourEyes]);
+  if (given.reviewMonths !== undefined) changes.push(['reviewMonths', given.reviewMonths]);
   if (given.questionHours !== undefined) changes.push(['questionHours', given.questionHours]);
   return changes;
 };

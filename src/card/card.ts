@@ -21,13 +21,16 @@ export const codedChoices = (choices: readonly Choice[], code: string): readonly
 /** A drawing that answers the card's question; its words are said by the phrase book. */
 export type { Picture } from '../drawing/index.ts';
 
+/** What does not come of the request itself: a standard of the shop that covers it. */
+type From = 'standard';
+
 /**
  * The parts of a reply in reading order. Semantic, not visual: no markup, no colour, no unit
  * chosen. A new part is a compile error in every renderer until each has a form for it.
  */
 export type Part =
-  | { readonly part: 'lines'; readonly lines: readonly Line[] }
-  | { readonly part: 'rows'; readonly rows: readonly Row[] }
+  | { readonly part: 'lines'; readonly lines: readonly Line[]; readonly from?: From }
+  | { readonly part: 'rows'; readonly rows: readonly Row[]; readonly from?: From }
   | { readonly part: 'checks'; readonly checks: readonly Check[] }
   | {
       readonly part: 'cautions';

@@ -11,4 +11,5 @@ export type {
   ShopRows,
   ShopThing,
 } from './shopLines.ts';
+export type { ChangedSince, RevisionSaid, StandardStateSaid } from './standardLines.ts';
 export type { Sure, WhyLabels, WhyLines, WhyRows } from './whyLines.ts';

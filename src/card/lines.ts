@@ -24,6 +24,7 @@ import type { Nothing } from './nothing.ts';
 import type { PlanLabels, PlanLines, PlanRows } from './planLines.ts';
 import type { ResultLabels, ResultLines, ResultRows } from './resultLines.ts';
 import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
+import type { StandardLabels, StandardLines, StandardRows } from './standardLines.ts';
 import type { TroubleLabels, TroubleLines, TroubleRows } from './troubleLines.ts';
 import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
 
@@ -36,6 +37,7 @@ export type Lines = CheckLines &
   PlanLines &
   ResultLines &
   ShopLines &
+  StandardLines &
   TroubleLines &
   WhyLines & {
     turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
@@ -84,6 +86,7 @@ export type Rows = CheckRows &
   PlanRows &
   ResultRows &
   ShopRows &
+  StandardRows &
   TroubleRows &
   WhyRows & {
     material: { readonly name: string; readonly condition: string };
@@ -122,6 +125,7 @@ export type Labels = CheckLabels &
   PlanLabels &
   ResultLabels &
   ShopLabels &
+  StandardLabels &
   TroubleLabels &
   WhyLabels & {
     asIs: { readonly stock: Mm };

@@ -36,6 +36,8 @@ export type Context = {
 /** What a card was worked out from: kept with it, so that it can be found and held against today. */
 export type About = {
   readonly request: unknown;
+  /** The line it was worked out from, where that is not the one that was typed. */
+  readonly words?: string;
   /** Ids of what the shop's own lists gave to it. */
   readonly wheel: string | null;
   readonly machine: string | null;

@@ -14,7 +14,8 @@ import type { Effect } from './effect.ts';
 import type { Visit } from './visit.ts';
 
 /** A place as the records name it. */
-export const placeName = ({ channel, thread }: Place): string => `${channel}/${thread ?? ''}`;
+export const placeName = ({ channel, thread }: Pick<Place, 'channel' | 'thread'>): string =>
+  `${channel}/${thread ?? ''}`;
 
 /** The last card this person was given in this place. */
 export const lastCard = async ({ shop, person }: Visit, place: Place): Promise<Card | null> => {
@@ -51,7 +52,7 @@ const keptCard = async (
   const { code } = await keepCard(visit.shop, {
     kind: card.verb,
     place: placeName(context.place),
-    words: context.text,
+    words: about.words ?? context.text,
     request: about.request,
     figures: card.figures,
     card: ruled,

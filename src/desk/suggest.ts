@@ -12,10 +12,10 @@ const plainly = (names: readonly string[]): readonly Suggestion[] =>
   names.map((name) => ({ label: name, words: name }));
 
 const offersOf = (kind: Suggested, names: Names): readonly Suggestion[] => {
-  const { wheels, machines, materials = [] } = names;
+  const { wheels, machines, materials = [], standards = [] } = names;
   if (kind === 'materials')
     return [...plainly(materials.map(({ name }) => name)), ...MATERIAL_OFFERS];
-  const given: Partial<Record<Suggested, readonly string[]>> = { wheels, machines };
+  const given: Partial<Record<Suggested, readonly string[]>> = { wheels, machines, standards };
   return plainly(given[kind] ?? []);
 };
 

@@ -20,6 +20,8 @@ export type Names = {
   readonly machines: readonly string[];
   /** Its own names for rows of the table of materials. */
   readonly materials?: readonly { readonly name: string; readonly base: string }[];
+  /** Part numbers that it keeps a standard for. */
+  readonly standards?: readonly string[];
 };
 export const NO_NAMES: Names = { wheels: [], machines: [] };
 

@@ -78,3 +78,29 @@ export const textOf =
     const used = 1 + unknownWords(moved(cursor, 1), vocabulary(), names);
     return took(typedAt(cursor, used), used);
   };
+
+/**
+ * All that is left of the line, word for word; in quotation marks round the whole of it, what they
+ * hold. What parts it from the word before is no part of it.
+ */
+export const restOfLine = (
+  cursor: Cursor,
+): { readonly value: string; readonly used: number } | null => {
+  const left = cursor.tokens.length - cursor.at;
+  if (left <= 0) return null;
+  const whole = quotedAt(cursor);
+  if (whole?.used === left && plainOf(cursor).trimEnd().endsWith('"')) return whole;
+  const before = cursor.tokens[cursor.at - 1]?.end ?? 0;
+  const value = cursor.text
+    .slice(before)
+    .replace(/^[\s:,;]+/u, '')
+    .trimEnd();
+  return { value, used: left };
+};
+
+/** One word as it was typed, or what stands in quotation marks. */
+export const oneWord: Reader<string> = (cursor) => {
+  const whole = quotedAt(cursor);
+  if (whole !== null) return took(whole.value, whole.used);
+  return tokenAt(cursor) === undefined ? null : took(typedAt(cursor, 1), 1);
+};

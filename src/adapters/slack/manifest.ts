@@ -36,8 +36,7 @@ const slashOf = (book: Book, fleet: readonly Command[], root: string, url: strin
     command: `/${root}`,
     description: shortened(book.verbs[root] ?? book.slack.slash(root), LIMITS.summary),
     usage_hint: example.replace(`/${root} `, ''),
-    // So that a person or a user group in a line comes with its id.
-    should_escape: true,
+    should_escape: false,
     ...(url === null ? {} : { url }),
   };
 };

@@ -16,6 +16,7 @@ import { resultLabels } from './resultLines.ts';
 import { rows } from './rows.ts';
 import { shopLabels } from './shopLines.ts';
 import { slack } from './slack.ts';
+import { standardLabels } from './standardLines.ts';
 import { terminal } from './terminal.ts';
 import { troubleLabels } from './troubleLines.ts';
 import { verbs } from './verbs.ts';
@@ -37,6 +38,7 @@ export const en: Book = {
     ...resultLabels,
     ...troubleLabels,
     ...shopLabels,
+    ...standardLabels,
     ...whyLabels,
     asIs: ({ stock }, show) => `Leave it at ${show.length(stock)}`,
     finishedSize: ({ size }, show) => `${show.length(size)} is the finished size`,

@@ -9,6 +9,7 @@ import { planLines } from './planLines.ts';
 import { remedyLabel } from './remedies.ts';
 import { resultLines } from './resultLines.ts';
 import { shopLines } from './shopLines.ts';
+import { standardLines } from './standardLines.ts';
 import { troubleLines } from './troubleLines.ts';
 import { whyLines } from './whyLines.ts';
 
@@ -29,6 +30,7 @@ export const lines: Book['lines'] = {
   ...planLines,
   ...resultLines,
   ...shopLines,
+  ...standardLines,
   ...troubleLines,
   ...whyLines,
   turnTo: ({ blankDiameter, toothCount }, show) =>

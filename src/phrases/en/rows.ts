@@ -4,6 +4,7 @@ import { convertRows } from './convertLines.ts';
 import { planRows } from './planLines.ts';
 import { resultRows } from './resultLines.ts';
 import { shopRows } from './shopLines.ts';
+import { standardRows } from './standardLines.ts';
 import { troubleRows } from './troubleLines.ts';
 import { whyRows } from './whyLines.ts';
 
@@ -15,6 +16,7 @@ export const rows: Book['rows'] = {
   ...planRows,
   ...resultRows,
   ...shopRows,
+  ...standardRows,
   ...troubleRows,
   ...whyRows,
   material: ({ name, condition }) => ({ label: 'Material', text: `${name}, ${condition}` }),
