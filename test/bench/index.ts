@@ -10,6 +10,7 @@ import { openDesk, plainShop } from '../../src/desk/index.ts';
 import { en } from '../../src/phrases/index.ts';
 import { MATERIAL_PHRASES, readLine, vocabularyOf } from '../../src/words/index.ts';
 import { planJob, planRequest } from '../support/planJob.ts';
+import { benchFind } from './find.ts';
 import { benchPictures, MOST_DELAY_MS } from './pictures.ts';
 
 const LINES = [
@@ -84,3 +85,7 @@ for (const [name, said] of [
   );
 print(`pictures (event loop asked to stay under ${String(MOST_DELAY_MS)} ms behind):`);
 print(JSON.stringify(await benchPictures(), null, 2));
+for (const { engine, few, many } of await benchFind())
+  print(
+    `finding in ${engine}: ${few.toFixed(1)} ms among a thousand entries, ${(many / few).toFixed(2)} times that among a hundred thousand`,
+  );

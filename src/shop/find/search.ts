@@ -21,14 +21,14 @@ export type FindOptions = {
 
 /**
  * So many of a term's newest are read, however many there are: with this the time to find stays
- * the same while the records grow. A term with fewer is known whole, and told apart by it.
- * Judgement: a hundred is more than anybody scrolls.
+ * the same while the records grow. A term with fewer is known whole, and tells things apart.
+ * Judgement: more than a phone shows, and few enough that a thousand entries cost no less.
  */
-const NEWEST_OF_TERM = 100;
+const NEWEST_OF_TERM = 24;
 /** Entries of the commonest words that are looked through for what all words have in common. */
 const DEEPEST = 2_000;
 /** Entries whose terms are all looked at. Judgement. */
-const MOST_WEIGHED = 250;
+const MOST_WEIGHED = 48;
 
 /** What a word that fits adds: rare words tell more, misspelt ones a little less. Judgement. */
 const WEIGHT = { rare: 2, common: 1 } as const;
