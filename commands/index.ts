@@ -2,6 +2,7 @@ import type { Command } from '../src/desk/index.ts';
 import { card } from './knurl/card.ts';
 import { check } from './knurl/check.ts';
 import { convert } from './knurl/convert.ts';
+import { find } from './knurl/find.ts';
 import { help } from './knurl/help.ts';
 import { plan } from './knurl/plan.ts';
 import { results } from './knurl/result.ts';
@@ -25,6 +26,7 @@ export const FLEET: readonly Command[] = [
   trouble,
   ...results,
   convert,
+  find,
   card,
   why,
   ...standard,

@@ -1,5 +1,6 @@
 export * from './card.ts';
 export type { CellFault, FileFault } from './fileFaults.ts';
+export type { FoundKind, FoundThing } from './findLines.ts';
 export * from './lines.ts';
 export type { CandidateSaid } from './planLines.ts';
 export type {

@@ -20,6 +20,7 @@ import type {
 } from '../calc/index.ts';
 import type { CheckLabels, CheckLines, CheckRows } from './checkLines.ts';
 import type { ConvertLabels, ConvertLines, ConvertRows } from './convertLines.ts';
+import type { FindLabels, FindLines, FindRows } from './findLines.ts';
 import type { Nothing } from './nothing.ts';
 import type { PlanLabels, PlanLines, PlanRows } from './planLines.ts';
 import type { ResultLabels, ResultLines, ResultRows } from './resultLines.ts';
@@ -34,6 +35,7 @@ import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
  */
 export type Lines = CheckLines &
   ConvertLines &
+  FindLines &
   PlanLines &
   ResultLines &
   ShopLines &
@@ -83,6 +85,7 @@ export type Line = { [K in LineId]: { readonly line: K; readonly values: Lines[K
 /** Label and value rows: the numbers of the card in reading order. */
 export type Rows = CheckRows &
   ConvertRows &
+  FindRows &
   PlanRows &
   ResultRows &
   ShopRows &
@@ -122,6 +125,7 @@ export type Row = { [K in RowId]: { readonly row: K; readonly values: Rows[K] } 
 /** What a button says. */
 export type Labels = CheckLabels &
   ConvertLabels &
+  FindLabels &
   PlanLabels &
   ResultLabels &
   ShopLabels &

@@ -24,6 +24,9 @@ const saidIn = (value: unknown): readonly string[] => {
   return isKnown(value) ? Object.values(value).flatMap(saidIn) : [];
 };
 
+const pitchText = (pitch: unknown): string =>
+  saidIn([within(pitch, 'value'), within(pitch, 'system')]).join(' ');
+
 const idOf = (material: unknown): string => {
   const id = within(material, 'id');
   return typeof id === 'string' ? id : '';
@@ -38,7 +41,7 @@ export const cardTexts = async (change: ShopChange, told: Told): Promise<readonl
     told.words,
     told.kind,
     ...saidIn(within(request, 'pattern')),
-    ...saidIn(within(request, 'pitch')),
+    pitchText(within(request, 'pitch')),
     ...(await namesOf(change, told)),
     ...(material === undefined ? [] : [material.name, material.condition, material.group]),
     ...change.words.materialNames(id),

@@ -52,6 +52,7 @@ export {
   type ForFind,
   type Found,
   findEntries,
+  hasWords,
   nearestWords,
   putForFind,
 } from './find/index.ts';

@@ -5,6 +5,7 @@ import { checkLabels } from './checkLines.ts';
 import { checks } from './checks.ts';
 import { convertLabels } from './convertLines.ts';
 import { discord } from './discord.ts';
+import { findLabels } from './findLines.ts';
 import { lines } from './lines.ts';
 import { materialName, THINGS } from './names.ts';
 import { pictures } from './pictures.ts';
@@ -34,6 +35,7 @@ export const en: Book = {
   labels: {
     ...checkLabels,
     ...convertLabels,
+    ...findLabels,
     ...planLabels,
     ...resultLabels,
     ...troubleLabels,

@@ -4,6 +4,7 @@ import type { Show } from '../show.ts';
 import { checkLines } from './checkLines.ts';
 import { checks } from './checks.ts';
 import { convertLines } from './convertLines.ts';
+import { findLines } from './findLines.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 import { planLines } from './planLines.ts';
 import { remedyLabel } from './remedies.ts';
@@ -27,6 +28,7 @@ const stopText = (check: Check, show: Show): string =>
 export const lines: Book['lines'] = {
   ...checkLines,
   ...convertLines,
+  ...findLines,
   ...planLines,
   ...resultLines,
   ...shopLines,

@@ -149,6 +149,7 @@ export const THINGS: Readonly<Record<string, string>> = {
   dial: 'dial',
   state: 'state',
   setting: 'setting',
+  wanted: 'word to look for',
   change: 'change',
   file: 'file',
   figure: 'figure or check',

@@ -18,7 +18,7 @@ const SAID_BY_OUTCOME: readonly SymptomId[] = [
 ];
 
 /** `double`, `tapered`, or just how it went. */
-const howItWent = ({ outcome, symptom }: HowItWent): string => {
+export const howItWent = ({ outcome, symptom }: HowItWent): string => {
   if (symptom === null || SAID_BY_OUTCOME.includes(symptom)) return outcome;
   return outcome === 'other' ? symptomNames[symptom] : `${outcome}, ${symptomNames[symptom]}`;
 };

@@ -1,6 +1,7 @@
 import type { Book } from '../book.ts';
 import { checkRows } from './checkLines.ts';
 import { convertRows } from './convertLines.ts';
+import { findRows } from './findLines.ts';
 import { planRows } from './planLines.ts';
 import { resultRows } from './resultLines.ts';
 import { shopRows } from './shopLines.ts';
@@ -13,6 +14,7 @@ const parts = (batch: number): string => (batch === 1 ? '' : ` for ${String(batc
 export const rows: Book['rows'] = {
   ...checkRows,
   ...convertRows,
+  ...findRows,
   ...planRows,
   ...resultRows,
   ...shopRows,

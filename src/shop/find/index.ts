@@ -2,3 +2,4 @@
 export { dropFromFind, type Findable, type ForFind, putForFind } from './put.ts';
 export { type FindOptions, type Found, findEntries } from './search.ts';
 export { nearestWords } from './spelt.ts';
+export { hasWords } from './terms.ts';

@@ -26,7 +26,10 @@ const COMMA = /(?<=\d),(?=\d)(?!\d+\.\d)/gu;
 const MARKS = /\p{M}+/gu;
 /** Numbers with a unit right behind them: the number is what tells them apart. */
 const NUMBER_AND_UNIT =
-  /^(?<number>\d*\.?\d+)(?<unit>mm|cm|in|inch|tpi|dp|rpm|sfm|hb|hrc|thou|pitch|deg|pcs|teeth|t)$/u;
+  /^(?<number>\d*\.?\d+)(?:mm|cm|in|inch|rpm|sfm|hb|hrc|thou|pitch|deg|pcs|teeth|t)$/u;
+/** `21 tpi` and `21tpi` are one pitch, and not 21 of anything else. */
+const PITCH_APART = /(?<=\d)\s+(?=(?:tpi|dp)(?![\p{L}\p{N}]))/gu;
+const PITCH = /^(?<number>\d*\.?\d+)(?<unit>tpi|dp)$/u;
 /** A word: letters and digits, with the dots, hyphens and strokes between them. */
 const WORD = /\.?[\p{L}\p{N}]+(?:[./_+-][\p{L}\p{N}]+)*/gu;
 
@@ -59,10 +62,13 @@ const isTelling = (term: string): boolean => term !== '' && !UNTELLING.has(term)
 /** The pieces of `WT-1042-B`, and the whole as one. */
 const piecesOf = (word: string): readonly string[] => {
   if (DECIMAL.test(word)) return [plainNumber(word)];
-  const measured = NUMBER_AND_UNIT.exec(word)?.groups;
-  if (measured !== undefined) {
-    return [plainNumber(measured['number'] ?? ''), measured['unit'] ?? ''];
+  const pitch = PITCH.exec(word)?.groups;
+  if (pitch !== undefined) {
+    const number = plainNumber(pitch['number'] ?? '');
+    return [number, number + (pitch['unit'] ?? '')];
   }
+  const measured = NUMBER_AND_UNIT.exec(word)?.groups;
+  if (measured !== undefined) return [plainNumber(measured['number'] ?? '')];
   const pieces = word.split(/[/_+-]/u).flatMap((piece) => piece.replace(/^\./u, '') || []);
   if (pieces.length < 2) return word.startsWith('.') ? pieces : [word];
   const whole = pieces.join('');
@@ -75,6 +81,7 @@ const piecesOf = (word: string): readonly string[] => {
 const wordsIn = (text: string): readonly (readonly string[])[] => {
   const plain = folded(text)
     .replace(COMMA, '.')
+    .replace(PITCH_APART, '')
     .replace(FRACTION, (_, whole: string | undefined, top: string, bottom: string) =>
       inDecimals(whole, top, bottom),
     );
@@ -88,6 +95,9 @@ const wordsIn = (text: string): readonly (readonly string[])[] => {
 
 /** The terms in a text, in its order, each once. */
 export const termsOf = (text: string): readonly string[] => [...new Set(wordsIn(text).flat())];
+
+/** Whether there is anything in a text that can be looked for. */
+export const hasWords = (text: string): boolean => termsOf(text).length > 0;
 
 /** Shortest piece of a word that is looked for by itself. Judgement: `WT` is in every `WT-1042`. */
 const SHORTEST_PIECE = 3;

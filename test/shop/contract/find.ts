@@ -59,10 +59,21 @@ export const finding = (engine: Engine): void => {
 
     it('never takes one digit for another', async () => {
       const shop = await filled(engine, [entry('a', '21 tpi on 0.875'), entry('b', 'job WT-1042')]);
-      for (const word of ['12', '2', '211', '0.857', '0.87', 'wt-1024', 'wt1402', '1.042']) {
+      for (const word of [
+        '12',
+        '2',
+        '211',
+        '0.857',
+        '0.87',
+        'wt-1024',
+        'wt1402',
+        '1.042',
+        '12 tpi',
+        '12tpi',
+      ]) {
         expect([word, await found(shop, word)]).toEqual([word, []]);
       }
-      for (const word of ['21', '21tpi', '.875', '0.8750', '7/8', '0,875']) {
+      for (const word of ['21', '21tpi', '21 tpi', '21tip', '.875', '0.8750', '7/8', '0,875']) {
         expect([word, await found(shop, word)]).toEqual([word, ['a']]);
       }
       for (const word of ['wt-1042', 'wt1042', 'WT 1042', '1042', 'wr-1042']) {
