@@ -35,19 +35,28 @@ export const drawn = (answer: Answer): Promise<readonly Drawn[]> =>
 /** A platform with the bot's commands, and records: what is still there when the bot is not. */
 export type Scene = { readonly platform: Platform; readonly place: TestPlace };
 
-export const openScene = async (): Promise<Scene> => {
-  const platform = await openPlatform(CHECK);
-  await register({
+export const registerIn = (platform: Platform, fleet = FLEET) =>
+  register({
     token: TOKEN,
     application: APPLICATION,
     guild: null,
     api: platform.api,
     dryRun: false,
     book: en,
-    fleet: FLEET,
+    fleet,
     print: () => undefined,
   });
-  return { platform, place: await newPlace('sqlite') };
+
+/** Before the bot has said what can be asked for. */
+export const newScene = async (): Promise<Scene> => ({
+  platform: await openPlatform(CHECK),
+  place: await newPlace('sqlite'),
+});
+
+const openScene = async (): Promise<Scene> => {
+  const scene = await newScene();
+  await registerIn(scene.platform);
+  return scene;
 };
 
 export type Wanted = Partial<DiscordOptions> & {

@@ -22,9 +22,28 @@ const LINE = '1.000 straight 21tpi 1018';
 
 const codeIn = (message: Posted): string =>
   /\bCard ([2346789CFHJKMPRTWXY]{5,12})\b/u.exec(readIn(message))?.[1] ?? '';
-/** Examples name a code that no card has. */
-const withCode = (line: string, code: string): string =>
-  line.replaceAll(/\b(?=\w*\d)(?=\w*[A-Z])[2346789CFHJKMPRTWXY]{5}\b/gu, code);
+/** Examples name a card and a number of the list that no shop of a test has. */
+const ownNames = (line: string, code: string): string =>
+  line
+    .replaceAll(/\b(?=\w*\d)(?=\w*[A-Z])[2346789CFHJKMPRTWXY]{5}\b/gu, code)
+    .replaceAll(/\b([QR])\d+\b/gu, '$11');
+
+/** What has to be there before a verb shows what it does. */
+const BEFORE: Readonly<Record<string, readonly string[]>> = {
+  'result show': ['result log'],
+  'result list': ['result log'],
+  'result correct': ['result log'],
+  'result withdraw': ['result log'],
+  'result confirm': ['result log'],
+};
+
+/** The verbs that fill the list which a verb reads. */
+const makersFor = ({ path }: Command): readonly Command[] => {
+  const [root, ...verb] = path;
+  const adds = verb.at(-1) === 'add' ? [] : [`${verb[0] ?? ''} add`];
+  const wanted = [...adds, ...(BEFORE[verb.join(' ')] ?? [])].map((each) => `${root} ${each}`);
+  return wanted.flatMap((each) => FLEET.filter((command) => command.path.join(' ') === each));
+};
 
 /** Everything that one act brings: it is over when nothing more comes. */
 const brought = async (act: () => Promise<unknown>): Promise<readonly Posted[]> => {
@@ -37,19 +56,16 @@ const brought = async (act: () => Promise<unknown>): Promise<readonly Posted[]> 
 };
 
 /** A server of its own, with a card to speak of and whatever the verb's list holds. */
-const shopFor = async (
-  name: string,
-  { path }: Command,
-): Promise<{ who: Someone; code: string }> => {
+const shopFor = async (name: string, command: Command): Promise<{ who: Someone; code: string }> => {
   const who = platform.addGuild(name);
   const first = await brought(() => people.slash(SETUP, { words: LINE }, who));
-  const adds = FLEET.filter(
-    (each) => each.path[1] === path[1] && each.path.at(-1) === 'add' && path.at(-1) !== 'add',
-  );
-  for (const add of adds)
-    for (const example of add.examples)
-      await brought(() => people.slash(add.path, optionsFor(people, add, example), who));
-  return { who, code: first.map(codeIn).join('') };
+  const code = first.map(codeIn).join('');
+  for (const maker of makersFor(command))
+    for (const example of maker.examples) {
+      const options = optionsFor(people, maker, ownNames(example, code));
+      await brought(() => people.slash(maker.path, options, who));
+    }
+  return { who, code };
 };
 
 const typed = (path: readonly string[], options: Readonly<Record<string, unknown>>): string =>
@@ -68,7 +84,7 @@ const examplesOf = async (
   const asked: string[] = [];
   const seen: string[] = [];
   for (const example of command.examples) {
-    const options = fill(withCode(example, code));
+    const options = fill(ownNames(example, code));
     const messages = await brought(() => people.slash(command.path, options, who));
     asked.push(typed(command.path, options).replaceAll(code, 'CODE'));
     seen.push(withoutCodes(messages.map(seenAs).join('\n\n')).replaceAll(code, 'CODE'));
@@ -99,7 +115,7 @@ test.each(VERBS)(
     const { who, code } = await shopFor(`${name} pressed`, command);
     const waiting: Posted[] = [];
     for (const example of command.examples) {
-      const options = optionsFor(people, command, withCode(example, code));
+      const options = optionsFor(people, command, ownNames(example, code));
       waiting.push(...(await brought(() => people.slash(command.path, options, who))));
       const hidden = { ...options, 'only-me': true };
       waiting.push(...(await brought(() => people.slash(command.path, hidden, who))));

@@ -111,6 +111,10 @@ export const openGateway = (
     },
     /** The connection breaks without a word; its session stays. */
     drop,
+    /** The platform hangs up, and says why. */
+    end: (code: number): void => {
+      for (const socket of sockets) socket.close(code);
+    },
     /** The connection is asked to come again. */
     refresh: (): void => {
       for (const socket of sockets) send(socket, OP.reconnect, null);
