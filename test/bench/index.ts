@@ -12,6 +12,7 @@ import { MATERIAL_PHRASES, readLine, vocabularyOf } from '../../src/words/index.
 import { planJob, planRequest } from '../support/planJob.ts';
 import { benchFind } from './find.ts';
 import { benchPictures, MOST_DELAY_MS } from './pictures.ts';
+import { benchSlack, MOST_ACK_MS, slackLines } from './slack.ts';
 
 const LINES = [
   '1.000 straight 21tpi 1018',
@@ -89,3 +90,5 @@ for (const { engine, few, many } of await benchFind())
   print(
     `finding in ${engine}: ${few.toFixed(1)} ms among a thousand entries, ${(many / few).toFixed(2)} times that among a hundred thousand`,
   );
+print(`two hundred at once in Slack (which gives ${String(MOST_ACK_MS)} ms to acknowledge):`);
+for (const said of slackLines(await benchSlack())) print(said);

@@ -4,6 +4,7 @@ import type { Book } from '../../phrases/index.ts';
 import type { Delivering, Delivery } from '../common/delivery.ts';
 import type { Log } from '../common/log.ts';
 import { type Once, onceInProcess } from '../common/once.ts';
+import { inTurns } from '../common/turns.ts';
 import {
   type Connecting,
   type Connection,
@@ -67,7 +68,8 @@ const onlyOnce = ({ app }: Connection, once: Once, log: Log): void => {
 
 /** Connects, and answers until stopped. */
 export const openSlack = async (options: SlackOptions): Promise<Slack> => {
-  const { by, api, desk, book, log, once = onceInProcess() } = options;
+  const { by, api, book, log, once = onceInProcess() } = options;
+  const desk = inTurns(options.desk);
   const logger = loggerFor(log);
   const installations = await Promise.all(
     options.botTokens.map((token) => installationOf(token, api, logger)),

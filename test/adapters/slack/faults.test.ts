@@ -182,6 +182,28 @@ describe('time', () => {
     await until(() => answersOf(bot).length === 2, 'the answer to the form');
   });
 
+  test('a hundred at once: all are acknowledged long before the last is answered', async () => {
+    const bot = await opened({
+      breakDesk: (desk) => ({
+        ...desk,
+        answer: async (call) => {
+          // Work that lets nothing else have its turn.
+          const end = performance.now() + 20;
+          while (performance.now() < end);
+          return await desk.answer(call);
+        },
+      }),
+    });
+    // Known from now on: nothing has to be looked up in between.
+    await bot.people.slash(LINE);
+    await until(() => answersOf(bot).length === 1, 'the first answer');
+    const since = performance.now();
+    const acks = await Promise.all(Array.from({ length: 100 }, () => bot.people.slash(LINE)));
+    await until(() => answersOf(bot).length === 101, 'all answers', 30_000);
+    const worst = Math.max(...acks.map((ack) => ack?.ms ?? Number.POSITIVE_INFINITY));
+    expect(worst).toBeLessThan((performance.now() - since) / 3);
+  });
+
   test('a desk that throws: still acknowledged, one sentence, a counted fault', async () => {
     const bot = await opened({
       breakDesk: (desk) => ({ ...desk, answer: () => Promise.reject(new Error('broken')) }),
