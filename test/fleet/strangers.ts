@@ -69,6 +69,10 @@ const otherCode = (code: string): string =>
 const RULES = 40;
 const namesRule = ({ path }: Command): boolean => path[1] === 'rules' && path[2] !== 'add';
 
+/** More results than the others ever get. */
+const RESULTS = 3;
+const namesResult = ({ path }: Command): boolean => path[1] === 'result' && path[2] !== 'log';
+
 /** Fills the other shop, and gives back everything of it that has an id, a name or a code. */
 export const furnish = async (ask: Ask, store: Store): Promise<readonly Thing[]> => {
   await carded(ask, `/shop people add ${PERSON.theirs} engineer`);
@@ -77,7 +81,10 @@ export const furnish = async (ask: Ask, store: Store): Promise<readonly Thing[]>
   await carded(ask, `/shop materials add ${MATERIAL.theirs} as 1018 HB 150`);
   for (let rule = 1; rule <= RULES; rule += 1) await carded(ask, '/shop rules add Lamp on');
   const code = await plainCode(ask);
-  const idsOf = async (table: 'wheel' | 'machine' | 'material' | 'rule' | 'person' | 'card') => {
+  for (let logged = 1; logged <= RESULTS; logged += 1)
+    await carded(ask, `/knurl result ${code} good 50 teeth`);
+  const tables = ['wheel', 'machine', 'material', 'rule', 'person', 'card', 'result'] as const;
+  const idsOf = async (table: (typeof tables)[number]) => {
     const { id } = await store.read
       .selectFrom(table)
       .select('id')
@@ -90,7 +97,6 @@ export const furnish = async (ask: Ask, store: Store): Promise<readonly Thing[]>
       spoken: false,
     };
   };
-  const tables = ['wheel', 'machine', 'material', 'rule', 'person', 'card'] as const;
   return [
     WHEEL,
     MACHINE,
@@ -98,6 +104,7 @@ export const furnish = async (ask: Ask, store: Store): Promise<readonly Thing[]>
     PERSON,
     { kind: 'code', theirs: code, nobodys: otherCode(code), spoken: true },
     { kind: 'number of a rule', theirs: '38', nobodys: '48', spoken: false, only: namesRule },
+    { kind: 'number of a result', theirs: 'R3', nobodys: 'R9', spoken: false, only: namesResult },
     ...(await Promise.all(tables.map(idsOf))),
   ];
 };

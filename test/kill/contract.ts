@@ -4,12 +4,13 @@
  * posted, once.
  */
 import { expect, it, onTestFinished } from 'vitest';
+import { tallyGrowth } from '../../src/calc/index.ts';
 import { addTo, enterShop, openOutbox, WHEELS } from '../../src/shop/index.ts';
 import type { Engine, Store, StorePlace } from '../../src/store/index.ts';
 import { STRAIGHT } from '../shop/contract/samples.ts';
 import { builtProgram, type Program, startProgram } from '../support/program.ts';
 import { good, newRecords, person, WORDS } from '../support/records.ts';
-import { type Did, TALLY } from './did.ts';
+import { type Did, TALLY, WORN } from './did.ts';
 import { postTo } from './post.ts';
 import { type Receiver, startReceiver } from './receiver.ts';
 
@@ -39,6 +40,7 @@ export const killContract = (engine: Engine): void => {
       const kept = await keptOf(store);
       everythingAcknowledgedIsThere(acknowledged, kept);
       await nothingIsThereInPart(store, kept);
+      await resultsAreWhole(store, kept);
       await everythingWasPostedOnce(store, kept, receiver);
       // Three in five are killed at work only after they have acknowledged something.
       expect(acknowledged.length).toBeGreaterThanOrEqual(KILLS * 0.6);
@@ -80,12 +82,13 @@ const oneLife = async (program: Program, after: string | null, ms: number): Prom
     .map((line) => JSON.parse(line.slice('kept '.length)) as Did);
 };
 
-/** The wheel on which every interaction counts itself. */
+/** The wheel on which every interaction counts itself, and the one that results are of. */
 const putTally = async (store: Store): Promise<void> => {
   const shop = { platform: 'terminal', id: 'killed', name: 'Killed' };
   await store.transact(async (tx) => {
     const { change } = await enterShop(tx, WORDS, shop, person('Kim'), Date.now());
-    good(await addTo(change, WHEELS, { ...STRAIGHT, name: TALLY, partsRun: 0 }));
+    for (const name of [TALLY, WORN])
+      good(await addTo(change, WHEELS, { ...STRAIGHT, name, partsRun: 0 }));
   });
 };
 
@@ -123,7 +126,7 @@ const nothingIsThereInPart = async (store: Store, kept: readonly Did[]): Promise
     .execute();
   const tally = wheels.find(({ name }) => name === TALLY);
   expect(tally?.parts_run).toBe(kept.length);
-  const others = wheels.filter(({ name }) => name !== TALLY);
+  const others = wheels.filter(({ name }) => name !== TALLY && name !== WORN);
   const ids = (rows: readonly { id: string }[]) => rows.map(({ id }) => id).sort();
   expect(ids(others)).toEqual(kept.flatMap((did) => did.wheels).sort());
   expect(ids(others.filter((wheel) => wheel.removed_at !== null))).toEqual(
@@ -138,6 +141,41 @@ const nothingIsThereInPart = async (store: Store, kept: readonly Did[]): Promise
     .execute();
   const added = history.filter(({ verb }) => verb === 'added').map(({ subject_id }) => subject_id);
   expect(added.sort()).toEqual(ids(wheels));
+};
+
+/** Every result is there or not, and with it what was learned, what the wheel ran and what is found. */
+const resultsAreWhole = async (store: Store, kept: readonly Did[]): Promise<void> => {
+  const rows = await store.read.selectFrom('result').selectAll().orderBy('id').execute();
+  expect(rows.length).toBeGreaterThan(0);
+  expect(rows.map(({ id }) => id).sort()).toEqual(kept.flatMap((did) => did.results).sort());
+  const standing = rows.filter((row) => row.withdrawn_at === null);
+  const gone = rows.filter((row) => row.withdrawn_at !== null).map(({ id }) => id);
+  expect(gone.sort()).toEqual(kept.flatMap((did) => did.withdrawn).sort());
+  const numbers = rows.map(({ number }) => number).sort((a, b) => a - b);
+  expect(numbers).toEqual(rows.map((_, at) => at + 1));
+  const worn = await store.read
+    .selectFrom('wheel')
+    .select('parts_run')
+    .where('name', '=', WORN)
+    .executeTakeFirstOrThrow();
+  expect(worn.parts_run).toBe(standing.reduce((sum, row) => sum + row.parts_run, 0));
+  const learned = standing.map(({ family, share, confirmed_at }) => ({
+    family: family ?? '',
+    share: share ?? 0,
+    confirmed: confirmed_at !== null,
+  }));
+  const tallies = await store.read
+    .selectFrom('growth')
+    .select(['family', 'count', 'sum'])
+    .orderBy('first')
+    .execute();
+  expect(tallies).toEqual(tallyGrowth(learned));
+  const found = await store.read
+    .selectFrom('find_entry')
+    .select('subject_id')
+    .where('kind', '=', 'result')
+    .execute();
+  expect(found.map(({ subject_id }) => subject_id).sort()).toEqual(standing.map(({ id }) => id));
 };
 
 const everythingWasPostedOnce = async (

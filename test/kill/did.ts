@@ -6,9 +6,15 @@ export type Did = {
   readonly removed: readonly string[];
   /** Codes. */
   readonly cards: readonly string[];
+  /** Ids of results that were logged, and of those that were withdrawn. */
+  readonly results: readonly string[];
+  readonly withdrawn: readonly string[];
   /** Keys. */
   readonly effects: readonly string[];
 };
 
 /** The wheel on which every interaction counts itself. */
 export const TALLY = 'tally';
+
+/** The wheel that every result is of. */
+export const WORN = 'worn';

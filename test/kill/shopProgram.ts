@@ -5,23 +5,31 @@
 import { writeSync } from 'node:fs';
 import {
   addTo,
+  confirmResult,
+  correctResult,
   enterShop,
   findIn,
   importSheet,
   keepCard,
+  latestResults,
   listOf,
+  logResult,
   once,
   openOutbox,
   queueEffects,
+  type ResultContent,
   removeFrom,
   type ShopChange,
   WHEEL_SHEET,
   WHEELS,
+  withdrawResult,
 } from '../../src/shop/index.ts';
 import { openStore, type StorePlace } from '../../src/store/index.ts';
 import { CARD, STRAIGHT } from '../shop/contract/samples.ts';
+import { grown, keptFor } from '../support/results.ts';
+import { requestOf } from '../support/setupRequest.ts';
 import { WORDS } from '../support/words.ts';
-import { type Did, TALLY } from './did.ts';
+import { type Did, TALLY, WORN } from './did.ts';
 import { postTo } from './post.ts';
 
 type Told = { readonly place: StorePlace; readonly receiver: string; readonly run: string };
@@ -41,7 +49,15 @@ const outbox = openOutbox(store, {
 const doSomething = async (change: ShopChange, interaction: string, kind: number): Promise<Did> => {
   const name = `wheel ${interaction}`;
   const key = `${interaction} post`;
-  const did: Did = { interaction, wheels: [], removed: [], cards: [], effects: [key] };
+  const did: Did = {
+    interaction,
+    wheels: [],
+    removed: [],
+    cards: [],
+    results: [],
+    withdrawn: [],
+    effects: [key],
+  };
   switch (kind) {
     case 0: {
       const added = await addTo(change, WHEELS, { ...STRAIGHT, name });
@@ -59,14 +75,52 @@ const doSomething = async (change: ShopChange, interaction: string, kind: number
       return { ...did, wheels };
     }
     case 2: {
-      const [wheel] = (await listOf(change, WHEELS)).filter((one) => one.name !== TALLY);
+      const [wheel] = (await listOf(change, WHEELS)).filter(
+        ({ name: called }) => called !== TALLY && called !== WORN,
+      );
       if (wheel === undefined) return did;
       const removed = await removeFrom(change, WHEELS, wheel.id, { evenInUse: true });
       return removed.ok ? { ...did, removed: [wheel.id] } : did;
     }
+    case 3:
+      return await logOne(change, did);
+    case 4:
+      return await changeOne(change, did);
     default: {
       const { code } = await keepCard(change, CARD);
       return { ...did, cards: [code], effects: [key, `${interaction} pin`] };
+    }
+  }
+};
+
+/** A part that came out, most of them as expected. */
+const somePart = (): ResultContent => ({
+  ...grown(Math.random() < 0.1 ? 1.6 : 0.85 + Math.random() / 5),
+  partsRun: Math.floor(Math.random() * 50),
+});
+
+const logOne = async (change: ShopChange, did: Did): Promise<Did> => {
+  const wheel = await findIn(change, WHEELS, WORN);
+  if (!wheel.ok) return did;
+  const card = await keptFor(change, requestOf(), wheel.value.id);
+  const logged = await logResult(change, card, somePart());
+  return logged.ok ? { ...did, cards: [card.code], results: [logged.value.result.id] } : did;
+};
+
+/** The last result is corrected, confirmed or taken back. */
+const changeOne = async (change: ShopChange, did: Did): Promise<Did> => {
+  const [last] = await latestResults(change, { limit: 1 });
+  if (last === undefined) return did;
+  switch (Math.floor(Math.random() * 3)) {
+    case 0:
+      await correctResult(change, last, somePart());
+      return did;
+    case 1:
+      await confirmResult(change, last);
+      return did;
+    default: {
+      const withdrawn = await withdrawResult(change, last);
+      return withdrawn.ok ? { ...did, withdrawn: [last.id] } : did;
     }
   }
 };
@@ -102,7 +156,7 @@ const say = (line: string): void => {
 outbox.start();
 say('ready');
 for (let at = 0; ; at += 1) {
-  const did = await act(`${run}.${at}`, Math.floor(Math.random() * 5));
+  const did = await act(`${run}.${at}`, Math.floor(Math.random() * 7));
   outbox.nudge();
   say(`kept ${JSON.stringify(did)}`);
   await new Promise((resolve) => setTimeout(resolve, Math.random() * 6));

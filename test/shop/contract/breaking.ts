@@ -38,8 +38,8 @@ import {
   TABLES,
 } from '../../../src/store/index.ts';
 import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
+import { grown, keptFor } from '../../support/results.ts';
 import { requestOf } from '../../support/setupRequest.ts';
-import { grown, keptFor } from './results.ts';
 import { CARD, LEFT, STRAIGHT, TURRET } from './samples.ts';
 import { bringTo, draftOf } from './standardSteps.ts';
 

@@ -67,8 +67,8 @@ import {
   refusalOf,
   type TestShop,
 } from '../../support/records.ts';
+import { grown, keptFor } from '../../support/results.ts';
 import { requestOf } from '../../support/setupRequest.ts';
-import { grown, keptFor } from './results.ts';
 import { CARD, STRAIGHT, TURRET } from './samples.ts';
 import { bringTo, jobLike } from './standardSteps.ts';
 

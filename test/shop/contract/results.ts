@@ -2,8 +2,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
-  formedRound,
-  formOf,
   type GrowthResult,
   growthBelief,
   growthFamily,
@@ -31,7 +29,6 @@ import {
   latestResults,
   logResult,
   type ResultContent,
-  type ShopChange,
   WHEELS,
   withdrawResult,
 } from '../../../src/shop/index.ts';
@@ -45,21 +42,9 @@ import {
   START,
   type TestShop,
 } from '../../support/records.ts';
+import { grown, keptFor, NOTHING_SAID } from '../../support/results.ts';
 import { requestOf } from '../../support/setupRequest.ts';
 import { CARD, STRAIGHT } from './samples.ts';
-
-export const NOTHING_SAID: ResultContent = {
-  outcome: 'good',
-  symptom: null,
-  teeth: null,
-  blank: null,
-  crest: null,
-  toothHeight: null,
-  flat: null,
-  partsRun: 1,
-  cause: null,
-  note: null,
-};
 
 const PATTERNS: readonly Pattern[] = [{ kind: 'straight' }, { kind: 'diamond', points: 'raised' }];
 const MATERIALS = ['steel-lowC-CD', 'brass360'];
@@ -71,36 +56,6 @@ const requestFor = (pattern = PATTERNS[0], material = MATERIALS[0]): SetupReques
     ? {}
     : { material: materialById(material ?? '')! }),
 });
-
-/** A card of the shop, as a set-up keeps it. */
-export const keptFor = async (
-  change: ShopChange,
-  request = requestFor(),
-  wheel: string | null = null,
-  machine: string | null = null,
-): Promise<KeptCard> => {
-  const { id } = await keepCard(change, { ...CARD, request, wheel, machine });
-  const card = await cardById(change, id);
-  if (card === null) throw new Error('a card that was just kept is not there');
-  return card;
-};
-
-/** What a part measures that grows by this share of the static growth. */
-export const grown = (share: number, request = requestFor()): ResultContent => {
-  const { blank, figures } = setUp(request);
-  const sharpHeight = mm(figures.sharpHeight?.value ?? 0);
-  const { growth } = formedRound({
-    form: formOf(request.pattern),
-    blankDiameter: blank.diameter,
-    height: blank.tooth.height,
-    sharpHeight,
-  });
-  return {
-    ...NOTHING_SAID,
-    crest: mm(blank.diameter + share * growth),
-    toothHeight: blank.tooth.height,
-  };
-};
 
 const shopOn = async (engine: Engine): Promise<TestShop> =>
   newShop((await newRecords(engine)).store);
