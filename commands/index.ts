@@ -5,6 +5,7 @@ import { convert } from './knurl/convert.ts';
 import { find } from './knurl/find.ts';
 import { help } from './knurl/help.ts';
 import { plan } from './knurl/plan.ts';
+import { questions } from './knurl/questions/index.ts';
 import { results } from './knurl/result.ts';
 import { setup } from './knurl/setup.ts';
 import { standard } from './knurl/standard.ts';
@@ -28,6 +29,7 @@ export const FLEET: readonly Command[] = [
   convert,
   find,
   card,
+  ...questions,
   why,
   ...standard,
   help,

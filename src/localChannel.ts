@@ -16,6 +16,7 @@ import { openDeliveries } from './deliveries.ts';
 import { openRecordsDesk } from './desk/index.ts';
 import { openRenderer } from './drawing/index.ts';
 import { en } from './phrases/index.ts';
+import { openQuestionReminders } from './reminders.ts';
 import { openStore, type Store, type StorePlace } from './store/index.ts';
 
 const onFault = (error: unknown): void => {
@@ -73,7 +74,15 @@ export const runLocalChannel = async (
     written(process.stdout, `${sentenceText(line, width())}\n`),
   );
   // What is due later comes up by itself while somebody is there to read it.
-  if (interactive) deliveries.start();
+  const reminders = openQuestionReminders(store, {
+    now: Date.now,
+    onQueued: deliveries.nudge,
+    onFault,
+  });
+  if (interactive) {
+    deliveries.start();
+    reminders.start();
+  }
   const folder = picturesFolder(interactive);
   const as = values.as ?? begin.as;
   await runChannel({
@@ -95,8 +104,12 @@ export const runLocalChannel = async (
             ),
     width,
     onFault,
-    settle: deliveries.deliverDue,
+    settle: async () => {
+      await reminders.remindDue();
+      return await deliveries.deliverDue();
+    },
   });
+  await reminders.stop();
   await deliveries.stop();
   await store.close();
 };

@@ -9,6 +9,7 @@ import { runLocalChannel } from './localChannel.ts';
 import { openLog } from './log.ts';
 import { en } from './phrases/index.ts';
 import { recordsFault, recordsPlace } from './records.ts';
+import { openQuestionReminders } from './reminders.ts';
 import { openStore } from './store/index.ts';
 
 /** Says what is wrong and ends with an exit code that a supervisor of processes understands. */
@@ -52,9 +53,16 @@ const chat = async (config: Config): Promise<void> => {
   const deliveries = openDeliveries(store, running.deliverers, { now: Date.now, onFault });
   nudge = deliveries.nudge;
   deliveries.start();
+  const reminders = openQuestionReminders(store, {
+    now: Date.now,
+    onQueued: deliveries.nudge,
+    onFault,
+  });
+  reminders.start();
   const stop = (code: number): void => {
-    deliveries
+    reminders
       .stop()
+      .then(() => deliveries.stop())
       .then(() => running.stop())
       .then(() => store.close())
       .then(

@@ -85,6 +85,8 @@ export type NotAllowed = {
   readonly code: 'notAllowed';
   readonly role: string;
   readonly people: readonly string[];
+  /** Who may do it too, because they asked. */
+  readonly asker?: string;
 };
 
 export type NotFound = Place & {
@@ -132,6 +134,17 @@ export type InUse = {
 /** Somebody must be left who can name owners. */
 export type LastOwner = { readonly code: 'lastOwner'; readonly name: string };
 
+/** Where a question stands it does not take that. */
+export type QuestionStands = {
+  readonly code: 'questionStands';
+  /** The question's own code. */
+  readonly question: string;
+  readonly state: 'open' | 'answered' | 'solved' | 'reopened';
+  readonly move: 'answer' | 'solve' | 'reopen';
+  /** What was said with it, so that it can be sent again. */
+  readonly words: string;
+};
+
 /** A standard is not where in its life it would have to be for what was asked. */
 export type NotNow = {
   readonly code: 'notNow';
@@ -174,4 +187,5 @@ export type Refusal =
   | LastOwner
   | NotNow
   | FourEyes
-  | CardStopped;
+  | CardStopped
+  | QuestionStands;

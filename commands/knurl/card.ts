@@ -13,6 +13,7 @@ import {
 import { findCard, type KeptCard, personById } from '../../src/shop/index.ts';
 import { tokenAt } from '../../src/words/index.ts';
 import { readCodeAt } from './codeWords.ts';
+import { askedAbout } from './questions/index.ts';
 
 const EXAMPLE = 'K7M2X';
 
@@ -61,7 +62,12 @@ const shownAgain = async (context: Context, visit: Visit, kept: KeptCard): Promi
   const isWordsOfToday = { label: label('today', {}), words: kept.words };
   return cardReply({
     ...card,
-    parts: [{ part: 'lines', lines: [again] }, ...(await today(context, kept)), ...card.parts],
+    parts: [
+      { part: 'lines', lines: [again] },
+      ...(await today(context, kept)),
+      ...(await askedAbout(shop, kept)),
+      ...card.parts,
+    ],
     choices: [isWordsOfToday, ...codedChoices(card.choices, of)],
   });
 };

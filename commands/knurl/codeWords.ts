@@ -14,6 +14,20 @@ const wordAt = (cursor: Cursor, ahead: number): readonly Token[] => {
 
 const textOf = (tokens: readonly Token[]): string => tokens.map(({ text }) => text).join('');
 
+/**
+ * A code that stands here without a gap, where nothing says that one follows: letters and digits,
+ * so that no plain word or number is taken for one.
+ */
+export const plainCodeAt = (
+  cursor: Cursor,
+): { readonly value: string; readonly used: number } | null => {
+  const tokens = wordAt(cursor, 0);
+  const word = textOf(tokens);
+  const looksIt = /^[a-z\d]+(?:-[a-z\d]+)?$/u.test(word) && /\d/u.test(word) && /[a-z]/u.test(word);
+  const code = looksIt ? readCode(word) : null;
+  return code === null ? null : { value: code, used: tokens.length };
+};
+
 /** A code as it is written or said: `k7m2x`, `K7-M2X`, `k7 m2x`. */
 export const readCodeAt: Reader<string> = (cursor) => {
   const first = wordAt(cursor, 0);

@@ -8,6 +8,7 @@ import {
 } from '../../src/calc/index.ts';
 import { type Card, type Choice, label, line, row } from '../../src/card/index.ts';
 import type { Context } from '../../src/desk/index.ts';
+import { askChoices } from './nextMoves.ts';
 import type { TroubleWords } from './troubleFields.ts';
 import { reworded } from './words.ts';
 
@@ -37,6 +38,7 @@ const choices = (context: Context): readonly Choice[] => [
   ...(context.read.values.has('diameter')
     ? [{ label: label('checkCard', {}), words: lineAs(context, 'check ', TROUBLE_WORDS) }]
     : []),
+  ...askChoices(context),
 ];
 
 /** Causes of a symptom, what speaks for each in numbers, and one next move each. */

@@ -110,4 +110,11 @@ export const settingFacts = (settings: Settings): readonly Fact[] => [
   { name: 'fourEyes', amount: { kind: 'word', value: settings.fourEyes ? 'yes' : 'no' } },
   { name: 'reviewMonths', amount: { kind: 'months', value: settings.reviewMonths } },
   { name: 'questionHours', amount: { kind: 'hours', value: settings.questionHours } },
+  {
+    name: 'quietHours',
+    amount:
+      settings.quietHours === null
+        ? { kind: 'nothing' }
+        : { kind: 'ofDay', value: settings.quietHours },
+  },
 ];

@@ -10,11 +10,19 @@ import {
 } from '../../src/desk/index.ts';
 import {
   changeSetting,
+  MINUTES_OF_DAY,
+  type QuietHours,
   type SettingName,
   type Settings,
   settingsOf,
 } from '../../src/shop/index.ts';
-import { numberOfKind, type Reader, textOf, vocabularyOf } from '../../src/words/index.ts';
+import {
+  numberOfKind,
+  plainText,
+  type Reader,
+  textOf,
+  vocabularyOf,
+} from '../../src/words/index.ts';
 import { reviewMonths } from '../knurl/standardFields.ts';
 import { settingFacts } from './facts.ts';
 import { recordsOf } from './named.ts';
@@ -32,6 +40,35 @@ const target: Reader<Target> = (cursor, names) => {
   const { value, used } = reading;
   if (value === 'here' || value === 'nowhere') return { value, used };
   return { value: { channel: value }, used };
+};
+
+/** `22:00`, `22`, `10pm`, `6.30 am`: the minute of the day, or null where it is none. */
+const minuteOf = (typed: string): number | null => {
+  const parts = /^(?<hour>\d{1,2})(?:[:.h](?<minute>\d{2}))?\s*(?<half>am|pm)?$/u.exec(
+    typed,
+  )?.groups;
+  if (parts === undefined) return null;
+  const { half } = parts;
+  const hour = Number(parts['hour']);
+  const minute = Number(parts['minute'] ?? 0);
+  if (minute > 59 || (half === undefined ? hour > 24 : hour < 1 || hour > 12)) return null;
+  const ofDay = half === undefined ? hour : (hour % 12) + (half === 'pm' ? 12 : 0);
+  return (ofDay * 60 + minute) % MINUTES_OF_DAY;
+};
+
+type Quiet = QuietHours | 'never';
+
+const NEVER: ReadonlySet<string> = new Set(['none', 'never', 'off', 'no']);
+
+/** `22:00-06:00`, `10pm to 6am`, `none`. */
+const quietHours: Reader<Quiet> = (cursor, names) => {
+  const reading = text(cursor, names);
+  if (reading === null || 'refusal' in reading) return reading;
+  const { value, used } = reading;
+  const typed = plainText(value).trim();
+  if (NEVER.has(typed)) return { value: 'never', used };
+  const [from = null, to = null, ...more] = typed.split(/\s*(?:-|to|until|till)\s*/u).map(minuteOf);
+  return from === null || to === null || more.length > 0 ? null : { value: { from, to }, used };
 };
 
 const channelField = (name: string, keywords: readonly string[]) =>
@@ -92,6 +129,13 @@ const fields = {
     keywords: ['question waits', 'questions wait', 'wait'],
     examples: ['questions wait 4'],
   }),
+  quietHours: said<Quiet>({
+    name: 'quietHours',
+    read: quietHours,
+    keywords: ['quiet', 'quiet hours', 'quiet from'],
+    text: true,
+    examples: ['quiet 22:00-06:00', 'quiet none'],
+  }),
 };
 const records = recordsOf(fields);
 type Said = z.infer<z.ZodObject<typeof fields>>;
@@ -136,6 +180,8 @@ const changesIn = (context: Context, given: Said): readonly Change[] => {
   if (given.fourEyes !== undefined) changes.push(['fourEyes', given.fourEyes]);
   if (given.reviewMonths !== undefined) changes.push(['reviewMonths', given.reviewMonths]);
   if (given.questionHours !== undefined) changes.push(['questionHours', given.questionHours]);
+  const { quietHours: quiet } = given;
+  if (quiet !== undefined) changes.push(['quietHours', quiet === 'never' ? null : quiet]);
   return changes;
 };
 

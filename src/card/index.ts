@@ -4,6 +4,12 @@ export type { FoundKind, FoundThing } from './findLines.ts';
 export * from './lines.ts';
 export type { CandidateSaid } from './planLines.ts';
 export type {
+  QuestionInShort,
+  QuestionLabels,
+  QuestionLines,
+  QuestionRows,
+} from './questionLines.ts';
+export type {
   Amount,
   Fact,
   Moment,

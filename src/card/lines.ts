@@ -23,6 +23,7 @@ import type { ConvertLabels, ConvertLines, ConvertRows } from './convertLines.ts
 import type { FindLabels, FindLines, FindRows } from './findLines.ts';
 import type { Nothing } from './nothing.ts';
 import type { PlanLabels, PlanLines, PlanRows } from './planLines.ts';
+import type { QuestionLabels, QuestionLines, QuestionRows } from './questionLines.ts';
 import type { ResultLabels, ResultLines, ResultRows } from './resultLines.ts';
 import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
 import type { StandardLabels, StandardLines, StandardRows } from './standardLines.ts';
@@ -37,6 +38,7 @@ export type Lines = CheckLines &
   ConvertLines &
   FindLines &
   PlanLines &
+  QuestionLines &
   ResultLines &
   ShopLines &
   StandardLines &
@@ -87,6 +89,7 @@ export type Rows = CheckRows &
   ConvertRows &
   FindRows &
   PlanRows &
+  QuestionRows &
   ResultRows &
   ShopRows &
   StandardRows &
@@ -127,6 +130,7 @@ export type Labels = CheckLabels &
   ConvertLabels &
   FindLabels &
   PlanLabels &
+  QuestionLabels &
   ResultLabels &
   ShopLabels &
   StandardLabels &

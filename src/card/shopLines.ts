@@ -31,6 +31,8 @@ export type Amount =
   | { readonly kind: 'hours'; readonly value: number }
   | { readonly kind: 'months'; readonly value: number }
   | { readonly kind: 'count'; readonly value: number }
+  /** From one minute of the day to another. */
+  | { readonly kind: 'ofDay'; readonly value: { readonly from: number; readonly to: number } }
   | { readonly kind: 'span'; readonly value: Window }
   | { readonly kind: 'pattern'; readonly value: Pattern }
   /** As a person typed it. */

@@ -80,9 +80,13 @@ const readFor = (
   if (command.lead === undefined || first === null)
     return readLine(text, vocabulary, units, names, skip);
   if ('refusal' in first) return first;
-  const rest = readLine(text, vocabulary, units, names, skip + first.used);
-  if ('refusal' in rest) return rest;
   const { name } = command.lead;
+  const isAll = skip + first.used >= cursor.tokens.length;
+  // What takes the whole line, as a question does, may be a letter.
+  const rest = isAll
+    ? { read: { values: new Map(), spans: new Map() } }
+    : readLine(text, vocabulary, units, names, skip + first.used);
+  if ('refusal' in rest) return rest;
   const { values, spans } = rest.read;
   return {
     read: {

@@ -30,7 +30,8 @@ export {
 } from './desk.ts';
 export type { Effect, MessageAddress, Ring, Target } from './effect.ts';
 export { type KeptAnswers } from './kept.ts';
-export { openRecordsDesk, type RecordsDeskOptions } from './records.ts';
+export { queued } from './queued.ts';
+export { openRecordsDesk, type RecordsDeskOptions, SHOP_WORDS } from './records.ts';
 export { atLeast, ROLES, type Role } from './role.ts';
 export { type Route, route } from './route.ts';
 export { placeName } from './settle.ts';

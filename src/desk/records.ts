@@ -1,5 +1,7 @@
+import type { Card } from '../card/index.ts';
 import {
   answerTo,
+  effectOf,
   enterShop,
   exportFiles,
   once,
@@ -26,6 +28,7 @@ import { type Answer, choicesIn } from './answer.ts';
 import type { Call } from './call.ts';
 import type { Command } from './command.ts';
 import { type Desk, openDesk, type ShopFacts } from './desk.ts';
+import type { Effect } from './effect.ts';
 import { atLeast, type Role } from './role.ts';
 import { lineOf } from './route.ts';
 import { lastCard, settled } from './settle.ts';
@@ -46,13 +49,20 @@ export type RecordsDeskOptions = {
 };
 
 /** Names of the shop's own are compared and guessed at as everything else that is typed. */
-const WORDS: ShopWords = { plainText, nearestOf, numberOf, unitOf, materialNames };
+export const SHOP_WORDS: ShopWords = { plainText, nearestOf, numberOf, unitOf, materialNames };
 
 /** What is read of a shop that nobody has come into yet. */
 const UNKNOWN_UNITS: ShopUnits = 'in';
 
 /** Who may take everything a shop has kept along. */
 const EXPORTS_NEED: Role = 'owner';
+
+/** The card of what was posted, for whatever stands behind its buttons. */
+const postedCard = (effect: unknown): Answer | null =>
+  // What was queued is what was handed in.
+  effect !== null && 'card' in (effect as Effect)
+    ? { kind: 'card', card: (effect as Extract<Effect, { card: Card }>).card, effects: [] }
+    : null;
 
 /** An answer that leaves nothing behind but itself. */
 class Refused extends Error {
@@ -86,7 +96,7 @@ export const openRecordsDesk = (
     const open = visits.get(call);
     if (open !== undefined) return open.shop;
     const id = await shopOf(store.read, outsideOf(call, call.person));
-    return id === null ? null : viewShop(store.read, id, WORDS);
+    return id === null ? null : viewShop(store.read, id, SHOP_WORDS);
   };
 
   const facts = async (call: Call): Promise<ShopFacts> => {
@@ -109,7 +119,8 @@ export const openRecordsDesk = (
     keep: () => undefined,
     recall: async (call, of) => {
       const view = await viewOf(call);
-      return view === null ? null : await answerTo<Answer>(view, of);
+      if (view === null) return null;
+      return (await answerTo<Answer>(view, of)) ?? postedCard(await effectOf(view, of));
     },
   });
 
@@ -120,7 +131,7 @@ export const openRecordsDesk = (
         const { person } = call;
         const { change: shop, ...entered } = await enterShop(
           tx,
-          WORDS,
+          SHOP_WORDS,
           outsideOf(call, person),
           { ...person, groups: person.groups ?? [], manages: person.manages ?? null },
           now(),
@@ -203,7 +214,7 @@ export const openRecordsDesk = (
 async function* filePieces(store: Store, { id }: ShopView, name: string): AsyncGenerator<string> {
   const view = await store.view();
   try {
-    const file = exportFiles(viewShop(view.db, id, WORDS)).find((each) => each.name === name);
+    const file = exportFiles(viewShop(view.db, id, SHOP_WORDS)).find((each) => each.name === name);
     if (file !== undefined) yield* file.pieces;
   } finally {
     await view.close();

@@ -9,6 +9,7 @@ const DEFAULT_VERB = 'setup';
 const LIST = 'list';
 /** What is done in a group of verbs where none of them is said: `/knurl result good`. */
 const LOG = 'log';
+const CHANGE = 'change';
 const HELP: readonly string[] = [DEFAULT_ROOT, 'help'];
 
 export type Route =
@@ -61,6 +62,10 @@ export const route = (text: string, fleet: readonly Command[]): Route => {
   if (log !== undefined) return { command: log, skip: before + 1 };
   // A list is shown where nothing is said to be done with it: `/shop wheels`.
   const list = find(fleet, [asked, rest[0] ?? '', LIST]);
+  // Where nothing has to be named first, whatever is said is to be changed: `/shop settings units mm`.
+  const change = rest.length > 1 ? find(fleet, [asked, rest[0] ?? '', CHANGE]) : undefined;
+  if (change !== undefined && change.lead === undefined)
+    return { command: change, skip: before + 1 };
   if (list !== undefined) return { command: list, skip: before + 1 };
   const fallback = rest.length === 0 ? HELP : [asked, DEFAULT_VERB];
   const command = find(fleet, fallback) ?? find(fleet, HELP);

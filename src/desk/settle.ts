@@ -4,13 +4,12 @@ import {
   givenUpSeen,
   keepCard,
   latestCards,
-  type QueuedEffect,
   queueEffects,
   rulesOnCard,
 } from '../shop/index.ts';
 import type { Place } from './call.ts';
 import type { About, Context, Reply } from './command.ts';
-import type { Effect } from './effect.ts';
+import { queued } from './queued.ts';
 import type { Visit } from './visit.ts';
 
 /** A place as the records name it. */
@@ -31,13 +30,6 @@ const beforeFooting = (card: Card, part: Part): Card => {
   const at = footing < 0 ? card.parts.length : footing;
   return { ...card, parts: [...card.parts.slice(0, at), part, ...card.parts.slice(at)] };
 };
-
-const queued = (effect: Effect): QueuedEffect => ({
-  key: effect.key,
-  effect,
-  // What is pinned, or gets a thread, has to be there first.
-  ...('of' in effect ? { after: effect.of } : {}),
-});
 
 /** The shop's rules, the card kept under a code of its own, and that code on it. */
 const keptCard = async (

@@ -121,6 +121,15 @@ const outcomeOf = async (tx: Tx, shop: string, key: string): Promise<unknown> =>
   return outcome === null ? null : JSON.parse(outcome);
 };
 
+/** Where it took place, where that is known. */
+const placeIn = (outcome: unknown): string | null =>
+  typeof outcome === 'object' &&
+  outcome !== null &&
+  'place' in outcome &&
+  typeof outcome.place === 'string'
+    ? outcome.place
+    : null;
+
 /** It has taken place. What waited for it may go now. */
 export const effectDelivered = async (
   store: Store,
@@ -136,6 +145,7 @@ export const effectDelivered = async (
         delivered_at: at,
         worker: null,
         outcome: outcome === undefined ? null : JSON.stringify(outcome),
+        place: placeIn(outcome),
       })
       .execute();
     await tx

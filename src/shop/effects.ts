@@ -46,6 +46,7 @@ export const queueEffects = async (
         seen_at: null,
         last_fault: fault,
         outcome: null,
+        place: null,
       })
       .onConflict((oc) => oc.columns(['shop', 'key']).doNothing())
       .returning('key')
@@ -88,6 +89,17 @@ export const isUnderWay = async (view: ShopView, key: string): Promise<boolean> 
     .where('key', '=', key)
     .executeTakeFirst();
   return row !== undefined && row.state !== 'givenUp';
+};
+
+/** An effect as it was queued, whatever has become of it. */
+export const effectOf = async (view: ShopView, key: string): Promise<unknown> => {
+  const row = await view.db
+    .selectFrom('effect')
+    .select('effect')
+    .where('shop', '=', view.id)
+    .where('key', '=', key)
+    .executeTakeFirst();
+  return row === undefined ? null : (JSON.parse(row.effect) as unknown);
 };
 
 /** An effect that could not be delivered and will not be tried again. */

@@ -11,7 +11,8 @@ export type Subject =
   | 'setting'
   | 'effect'
   | 'result'
-  | 'standard';
+  | 'standard'
+  | 'question';
 export type Verb = 'added' | 'changed' | 'removed';
 
 export type HistoryLine = {

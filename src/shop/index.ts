@@ -23,6 +23,7 @@ export { MACHINE_SHEET } from './csv/machineSheet.ts';
 export { WHEEL_SHEET } from './csv/wheelSheet.ts';
 export { limitsOf, onDial } from './dial.ts';
 export {
+  effectOf,
   type GivenUp,
   givenUp,
   givenUpSeen,
@@ -85,6 +86,40 @@ export {
   whoMay,
 } from './people.ts';
 export {
+  type Answered,
+  type Asking,
+  answerQuestion,
+  askQuestion,
+  type Reopening,
+  reopenQuestion,
+  type Solving,
+  solveQuestion,
+} from './questions/act.ts';
+export {
+  answerKey,
+  postKey,
+  reminderKey,
+  reopenKey,
+  shownKey,
+  threadKey,
+} from './questions/keys.ts';
+export {
+  answersTo,
+  findQuestion,
+  questionInThread,
+  questionsOnCard,
+  unsolvedQuestions,
+} from './questions/look.ts';
+export {
+  type GivenAnswer,
+  isWaiting,
+  type Question,
+  type QuestionState,
+} from './questions/question.ts';
+export { openReminders, type ReminderOptions, type Reminders } from './questions/reminders.ts';
+export { type PutUp } from './questions/waiting.ts';
+export { MINUTES_OF_DAY, type QuietHours } from './quiet.ts';
+export {
   addTo,
   changeIn,
   findIn,
@@ -129,6 +164,7 @@ export {
 } from './settings.ts';
 export { type SpokenNames, spokenNames } from './spoken.ts';
 export * from './standards/index.ts';
+export { type Tellable, toTell } from './telling.ts';
 export { type ShopChange, type ShopView, type ShopWords, viewShop } from './view.ts';
 export {
   BARE_WHEEL,

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import type { Refusal } from '../refusal.ts';
 import { remember } from './history.ts';
+import { LONGEST_QUIET, MINUTES_OF_DAY, minutesBetween } from './quiet.ts';
 import { type Done, done, refused } from './result.ts';
 import type { ShopChange, ShopView } from './view.ts';
 
@@ -17,6 +18,15 @@ const isTimeZone = (zone: string): boolean => {
 const timeZones = (): readonly string[] => [...Intl.supportedValuesOf('timeZone'), 'UTC'];
 
 const hours = z.number().min(0.25).max(336);
+const minute = z
+  .number()
+  .int()
+  .min(0)
+  .max(MINUTES_OF_DAY - 1);
+const quiet = z
+  .object({ from: minute, to: minute })
+  .refine(({ from, to }) => from !== to && minutesBetween(from, to) <= LONGEST_QUIET)
+  .nullable();
 const channel = z.string().min(1).max(100).nullable();
 
 /**
@@ -40,6 +50,8 @@ export const SETTINGS = {
   reviewMonths: { shape: z.number().int().min(1).max(120), usual: 12 },
   /** How long a question may stay open before it is put up again. */
   questionHours: { shape: hours, usual: 4 },
+  /** When nobody is rung, in the shop's own time; null where there is no such time. */
+  quietHours: { shape: quiet, usual: { from: 22 * 60, to: 6 * 60 } },
 } as const;
 
 export type SettingName = keyof typeof SETTINGS;
@@ -92,6 +104,11 @@ const settingFault = (view: ShopView, name: SettingName, value: unknown): Refusa
   if (name === 'reviewMonths') {
     const amount = Number(value);
     return { code: 'outOfRange', what: name, value: amount, min: 1, max: 120, unit: 'months' };
+  }
+  if (name === 'quietHours') {
+    const { from, to } = value as NonNullable<Settings['quietHours']>;
+    const length = minutesBetween(from, to) / 60;
+    return { code: 'outOfRange', what: name, value: length, min: 0, max: 20, unit: 'h' };
   }
   const said = view.words.plainText(String(value));
   const nearest = name === 'timeZone' ? view.words.nearestOf(said, timeZones()) : [];

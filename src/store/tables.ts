@@ -254,6 +254,46 @@ export type EffectTable = OfShop & {
   last_fault: string | null;
   /** What the platform gave back: the id of the message, say. */
   outcome: Json | null;
+  /** Where it took place, as the outcome says. */
+  place: string | null;
+};
+
+export type QuestionTable = OfShop & {
+  id: string;
+  code: string;
+  text: string;
+  /** The id of the card it is about. */
+  card: string | null;
+  /** open, answered, solved, reopened. */
+  state: string;
+  version: number;
+  asked_at: Moment;
+  asked_by: string;
+  /** Where it is put up: an adapter's own address. */
+  place: string;
+  /** When it was asked, or reopened last. */
+  waits_since: Moment;
+  /** How often it was reopened. */
+  round: number;
+  /** How often it was put up again since then. */
+  reminders: number;
+  /** When it is put up again next. */
+  remind_at: Moment | null;
+  /** The number of the answer that was accepted. */
+  accepted: number | null;
+  solved_at: Moment | null;
+  solved_by: string | null;
+};
+
+export type AnswerTable = OfShop & {
+  id: string;
+  /** The question's id. */
+  question: string;
+  /** Counts the answers to one question, from 1. */
+  number: number;
+  text: string;
+  given_at: Moment;
+  given_by: string;
 };
 
 export type HistoryTable = OfShop & {
@@ -306,6 +346,8 @@ export type Tables = {
   standard_revision: StandardRevisionTable;
   interaction: InteractionTable;
   effect: EffectTable;
+  question: QuestionTable;
+  answer: AnswerTable;
   history: HistoryTable;
   find_entry: FindEntryTable;
   find_term: FindTermTable;
@@ -342,6 +384,8 @@ export const TABLES: readonly TableFacts[] = [
   { name: 'standard_revision', shop: 'shop', key: 'id', json: ['scope', 'basis'] },
   { name: 'interaction', shop: 'shop', key: 'id', json: ['answer'] },
   { name: 'effect', shop: 'shop', key: 'id', json: ['effect', 'outcome'] },
+  { name: 'question', shop: 'shop', key: 'id', json: [] },
+  { name: 'answer', shop: 'shop', key: 'id', json: [] },
   { name: 'history', shop: 'shop', key: 'id', json: ['before', 'after'] },
   { name: 'find_entry', shop: 'shop', key: 'id', json: [] },
 ];

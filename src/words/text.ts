@@ -19,7 +19,9 @@ const wordsBefore = (cursor: Cursor, end: number): number => {
 };
 
 /** `"Old Faithful"`, `"5"" wheel"`; null where no quotation mark opens or none closes. */
-const quotedAt = (cursor: Cursor): { readonly value: string; readonly used: number } | null => {
+export const quotedAt = (
+  cursor: Cursor,
+): { readonly value: string; readonly used: number } | null => {
   const first = tokenAt(cursor);
   if (first === undefined) return null;
   const line = plainOf(cursor);

@@ -69,12 +69,18 @@ type Asked = {
   /** Who is asked for what the other shop has, and who for what nobody has. */
   readonly mine: Ask;
   readonly twin: Ask;
+  /** The same two, with nothing kept of what they are asked. */
+  readonly unkept?: Pick<Asked, 'mine' | 'twin'>;
 };
 
+/** A question is kept word for word, and is the shop's own from then on. */
+const keepsWords = ({ path }: Command): boolean => path[1] === 'ask';
+
 /** Asks every verb for everything, and gives back how much was asked. */
-const askForAll = async ({ things, linesOf, mine, twin }: Asked): Promise<number> => {
+const askForAll = async ({ things, linesOf, unkept, ...both }: Asked): Promise<number> => {
   let asked = 0;
-  for (const command of FLEET)
+  for (const command of FLEET) {
+    const { mine, twin } = keepsWords(command) ? (unkept ?? both) : both;
     for (const thing of things.filter(({ only }) => only === undefined || only(command))) {
       const nothing = linesOf(command, thing.nobodys);
       for (const [at, line] of linesOf(command, thing.theirs).entries()) {
@@ -84,6 +90,7 @@ const askForAll = async ({ things, linesOf, mine, twin }: Asked): Promise<number
         asked += 1;
       }
     }
+  }
   return asked;
 };
 
@@ -97,7 +104,9 @@ it.each(ENGINES)(
     await alike(mine);
     await alike(twin);
     const before = await rowsOf(store, THEIRS);
-    const asked = await askForAll({ things, linesOf: behindVerb, mine, twin });
+    const undone = deskOver(takenBack(store));
+    const unkept = { mine: askIn(undone, ALIKE[0]), twin: askIn(undone, ALIKE[1]) };
+    const asked = await askForAll({ things, linesOf: behindVerb, mine, twin, unkept });
     expect(asked).toBeGreaterThan(FLEET.length * 10);
     expect(await rowsOf(store, THEIRS)).toBe(before);
   },

@@ -10,6 +10,7 @@ import { lines } from './lines.ts';
 import { materialName, THINGS } from './names.ts';
 import { pictures } from './pictures.ts';
 import { planLabels } from './planLines.ts';
+import { questionLabels } from './questionLines.ts';
 import { records } from './records.ts';
 import { contradictions, refusal } from './refusals.ts';
 import { remedyLabel } from './remedies.ts';
@@ -37,6 +38,7 @@ export const en: Book = {
     ...convertLabels,
     ...findLabels,
     ...planLabels,
+    ...questionLabels,
     ...resultLabels,
     ...troubleLabels,
     ...shopLabels,

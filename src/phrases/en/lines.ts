@@ -7,6 +7,7 @@ import { convertLines } from './convertLines.ts';
 import { findLines } from './findLines.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 import { planLines } from './planLines.ts';
+import { questionLines } from './questionLines.ts';
 import { remedyLabel } from './remedies.ts';
 import { resultLines } from './resultLines.ts';
 import { shopLines } from './shopLines.ts';
@@ -30,6 +31,7 @@ export const lines: Book['lines'] = {
   ...convertLines,
   ...findLines,
   ...planLines,
+  ...questionLines,
   ...resultLines,
   ...shopLines,
   ...standardLines,

@@ -153,6 +153,16 @@ export const THINGS: Readonly<Record<string, string>> = {
   change: 'change',
   file: 'file',
   figure: 'figure or check',
+  question: 'question',
+  noCard: 'without a card',
+  asked: 'code of the question',
+  answer: 'answer',
+  accepted: 'number of the answer',
+  solution: 'words that say what solved it',
+  reason: 'reason',
+  code: 'code of the card',
+  quietHours: 'quiet time',
+  questionsChannel: 'channel for questions',
   explained: 'set-up or check to explain',
 };
 

@@ -4,6 +4,7 @@ import type {
   InUse,
   NotFound,
   OutOfRangeRefusal,
+  QuestionStands,
   Refusal,
   Suggestion,
   Unclear,
@@ -69,6 +70,8 @@ const BECAUSE: Readonly<Record<string, Because>> = {
     value < min
       ? `The stickout, ${print(value)}, is shorter than the knurl, ${print(min)}. Type a longer stickout or a shorter knurl.`
       : `The stickout, ${print(value)}, is longer than the bar can be, ${print(max)}. Type a shorter one.`,
+  quietHours: () =>
+    'Quiet hours take a part of the day and leave at least 4 hours of it. Type them like this: quiet 22:00-06:00.',
   crestDiameter: ({ value, min, max }, print) =>
     value < min
       ? `The crest, ${print(value)}, is smaller than the blank it grew from, ${print(min)}. Measure over several crests and type it again.`
@@ -141,6 +144,7 @@ const isDoubt = (because: NonNullable<Unclear['because']>): because is Doubt => 
 
 const whyUnclear = (fault: Unclear): string => {
   const { because, word } = fault;
+  if (fault.what === 'asked') return 'It does not say which question.';
   if (because === undefined) return `The ${thing(fault.what)} is not clear.`;
   return isDoubt(because)
     ? doubts[because](word === undefined ? 'That' : quoted(word), fault)
@@ -155,6 +159,10 @@ const asked = (readings: readonly Suggestion[]): string => {
 
 const notFound = ({ what, word, nearest }: NotFound): string => {
   const name = word === undefined ? '' : ` ${quoted(word)}`;
+  if (what === 'asked')
+    return nearest.length > 0
+      ? `There is no question${name} here. Did you mean ${list(nearest)}?`
+      : `There is no question${name} here. /knurl questions lists those that are open.`;
   if (nearest.length > 0)
     return `There is no ${thing(what)}${name} here. Did you mean ${list(nearest)}?`;
   if (what === 'material')
@@ -179,6 +187,7 @@ export const refusal = (fault: Refusal, show: Show): string => {
     case 'unclear':
       return `${whyUnclear(fault)} ${asked(fault.readings)}`;
     case 'notAllowed':
+      if (fault.asker !== undefined) return notTheirs(fault.asker, fault.role, fault.people);
       return fault.people.length > 0
         ? `That needs the role ${fault.role}. Ask ${list(fault.people)}.`
         : `That needs the role ${fault.role}, which nobody has yet.`;
@@ -194,6 +203,8 @@ export const refusal = (fault: Refusal, show: Show): string => {
       return inUse(fault);
     case 'lastOwner':
       return `${fault.name} is the only owner. Name another owner first.`;
+    case 'questionStands':
+      return questionStands(fault);
     case 'notNow':
       return notNow(fault);
     case 'fourEyes':
@@ -201,6 +212,20 @@ export const refusal = (fault: Refusal, show: Show): string => {
     case 'cardStopped':
       return cardStopped(fault);
   }
+};
+
+const notTheirs = (asker: string, role: string, people: readonly string[]): string =>
+  `That is for ${asker}, who asked, or for the role ${role}${people.length === 0 ? '' : `: ${list(people)}`}.`;
+
+const questionStands = ({ question, state, move, words }: QuestionStands): string => {
+  const said = words === '' ? '' : ` Your words: ${words}`;
+  if (move === 'reopen')
+    return `Question ${question} was not answered yet: it is open as it is. Nothing was changed.${said}`;
+  if (state === 'solved')
+    return move === 'answer'
+      ? `Question ${question} is solved and takes no more answers. Reopen it, then send yours again.${said}`
+      : `Question ${question} is solved already. Reopen it first, if that is not what solved it.${said}`;
+  return `Question ${question} has no answer yet. Say what solved it, such as /knurl solved ${question} the wheel was worn.`;
 };
 
 const USES = { rule: 'rule', card: 'card' } as const;

@@ -3,6 +3,7 @@ import { checkRows } from './checkLines.ts';
 import { convertRows } from './convertLines.ts';
 import { findRows } from './findLines.ts';
 import { planRows } from './planLines.ts';
+import { questionRows } from './questionLines.ts';
 import { resultRows } from './resultLines.ts';
 import { shopRows } from './shopLines.ts';
 import { standardRows } from './standardLines.ts';
@@ -16,6 +17,7 @@ export const rows: Book['rows'] = {
   ...convertRows,
   ...findRows,
   ...planRows,
+  ...questionRows,
   ...resultRows,
   ...shopRows,
   ...standardRows,

@@ -58,6 +58,7 @@ export const SHOP_FACTS: Readonly<Record<string, string>> = {
   reviewMonths: 'a standard is reviewed after',
   bars: 'bars',
   questionHours: 'a question waits',
+  quietHours: 'quiet',
 };
 
 export const factName = (name: string): string => SHOP_FACTS[name] ?? THINGS[name] ?? name;
@@ -103,6 +104,9 @@ const steps = (
 const watts = (value: number): string =>
   value < 1000 ? `${value.toFixed(0)} W` : `${String(Number((value / 1000).toFixed(2)))} kW`;
 
+const clock = (minute: number): string =>
+  [Math.floor(minute / 60), minute % 60].map((part) => String(part).padStart(2, '0')).join(':');
+
 /** A value of the records, in the shop's unit. */
 export const amountText = (amount: Amount, show: Show): string => {
   switch (amount.kind) {
@@ -130,6 +134,8 @@ export const amountText = (amount: Amount, show: Show): string => {
       return `${String(amount.value)} ${amount.value === 1 ? 'month' : 'months'}`;
     case 'count':
       return String(amount.value);
+    case 'ofDay':
+      return `${clock(amount.value.from)} to ${clock(amount.value.to)}`;
     case 'span':
       return `${show.span(amount.value.low, amount.value.high)} ${show.units}`;
     case 'pattern':

@@ -4,6 +4,7 @@ import { registers } from './0002-registers.ts';
 import { cardsAndEffects } from './0003-cards-and-effects.ts';
 import { results } from './0004-results.ts';
 import { standards } from './0005-standards.ts';
+import { questions } from './0006-questions.ts';
 import { find } from './0007-find.ts';
 import { type Columns, columnsOf, type Engine } from './columns.ts';
 
@@ -16,6 +17,7 @@ const STEPS: Readonly<Record<string, Step>> = {
   '0003-cards-and-effects': cardsAndEffects,
   '0004-results': results,
   '0005-standards': standards,
+  '0006-questions': questions,
   '0007-find': find,
 };
 

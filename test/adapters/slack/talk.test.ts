@@ -205,7 +205,10 @@ test('the home shows the forms and opens them', async () => {
 });
 
 /** What needs a shop's records is refused here, and refusals are private. */
-const OF_RECORDS: readonly string[] = ['card', 'result'];
+const OF_RECORDS: readonly string[] = [
+  ...['ask', 'answer', 'solved', 'reopen', 'questions'],
+  ...['card', 'result'],
+];
 const needsRecords = ({ path }: (typeof FLEET)[number]): boolean =>
   path[0] === 'shop' || OF_RECORDS.includes(path[1] ?? '');
 const EXAMPLES = FLEET.filter((command) => !needsRecords(command)).flatMap((command) =>
