@@ -207,7 +207,7 @@ test('the home shows the forms and opens them', async () => {
 /** What needs a shop's records is refused here, and refusals are private. */
 const OF_RECORDS: readonly string[] = [
   ...['ask', 'answer', 'solved', 'reopen', 'questions'],
-  ...['card', 'result'],
+  ...['card', 'result', 'standard', 'find'],
 ];
 const needsRecords = ({ path }: (typeof FLEET)[number]): boolean =>
   path[0] === 'shop' || OF_RECORDS.includes(path[1] ?? '');
