@@ -240,6 +240,13 @@ export const openPeople = (platform: Platform) => {
       return id;
     },
 
+    /** Another bot names this one. */
+    mentionByBot: (text: string, someone: Someone): void => {
+      const written = writtenBy(platform.newId(), someone, `<@${APPLICATION}> ${text}`, true);
+      const author = { ...written.author, bot: true };
+      platform.dispatch('MESSAGE_CREATE', 'mention', { ...written, author });
+    },
+
     /** Says something that does not name the bot: its words do not come along. */
     chat: (someone: Someone = OPERATOR): void => {
       platform.dispatch(

@@ -5,7 +5,7 @@ import { setTimeout as pause } from 'node:timers/promises';
 import { openInteractions } from './asked.ts';
 import type { Bodies } from './bodies.ts';
 import { openGateway } from './gateway.ts';
-import { guildOf, readyOf } from './payloads.ts';
+import { guildOf, readyOf, threadOf } from './payloads.ts';
 import { Refused } from './refused.ts';
 import { openRooms } from './rooms.ts';
 import { openRoutes, type Reply, type Route } from './routes.ts';
@@ -202,6 +202,16 @@ export const openPlatform = async (check: BodyCheck = bodyCheck()) => {
       checked('guildCreate', created);
       gateway.dispatch({ t: 'GUILD_CREATE', d: created });
       return { ...OWNER, guild: id, channel };
+    },
+    /** A thread is opened in a channel. */
+    addThread: (parent: string): string => {
+      const id = snowflake(next());
+      const { guild } = rooms.channelOf(parent);
+      const thread = { id, name: 'which-wheel', guild, parent, open: true };
+      rooms.add(thread);
+      checked('thread', threadOf(thread));
+      gateway.dispatch({ t: 'THREAD_CREATE', d: threadOf(thread) });
+      return id;
     },
     newId: (): string => snowflake(next()),
     stop: async (): Promise<void> => {

@@ -184,6 +184,7 @@ export const openRooms = (next: () => number) => {
       guilds.add(guild);
       channels.set(channel, { id: channel, name: 'floor', guild, parent: null, open: true });
     },
+    add: (channel: Channel): void => void channels.set(channel.id, channel),
     get channels(): readonly Channel[] {
       return [...channels.values()];
     },
