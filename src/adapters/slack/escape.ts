@@ -15,18 +15,20 @@ export const literally = (text: string): string => escaped(text).replaceAll(/[*_
 
 const ENTITY: Readonly<Record<string, string>> = { '&amp;': '&', '&lt;': '<', '&gt;': '>' };
 
-/** `<…>` as Slack sends it: people and groups are left out, links and channels keep their words. */
-const shown = (_all: string, inside: string): string => {
-  const [target = '', label] = inside.split('|');
-  if (/^[@!]/u.test(target)) return ' ';
-  if (label !== undefined) return target.startsWith('#') ? `#${label}` : label;
-  return target;
-};
+/** A person or a user group as Slack writes it in a text: what is kept of them is told by `keeps`. */
+const shown =
+  (keeps: (target: string) => boolean) =>
+  (_all: string, inside: string): string => {
+    const [target = '', label] = inside.split('|');
+    if (/^[@!]/u.test(target)) return keeps(target) ? `<${inside}>` : ' ';
+    if (label !== undefined) return target.startsWith('#') ? `#${label}` : label;
+    return target;
+  };
 
-/** What a person typed, from what Slack made of it. */
-export const typedText = (text: string): string =>
+/** What a person typed, from what Slack made of it; links and channels keep their words. */
+export const typedText = (text: string, keeps: (target: string) => boolean = () => false): string =>
   text
-    .replaceAll(/<([^<>]*)>/gu, shown)
+    .replaceAll(/<([^<>]*)>/gu, shown(keeps))
     .replaceAll(/&(?:amp|lt|gt);/gu, (entity) => ENTITY[entity] ?? entity)
     .replaceAll(/\s+/gu, ' ')
     .trim();

@@ -4,7 +4,8 @@ import type { Log } from '../common/log.ts';
 import { hasMoreCautions, sentence, spoken } from '../common/spoken.ts';
 import { faultText, isRefused } from './faults.ts';
 import { LIMITS } from './limits.ts';
-import type { StandingOf } from './people.ts';
+import { withMentions } from './mentions.ts';
+import type { People } from './people.ts';
 import { change, type Draw, sendPictures, withoutPicture } from './pictures.ts';
 import type { Handle } from './receive.ts';
 import { controlButton, type ExtraButton, type Message, render } from './render.ts';
@@ -16,7 +17,7 @@ export type FlowOptions = {
   readonly log: Log;
   /** Null where no pictures are wanted. */
   readonly draw: Draw | null;
-  readonly standingOf: StandingOf;
+  readonly people: People;
 };
 
 /** What is to be shown, before anything is known of messages. */
@@ -48,11 +49,19 @@ type Way = () => Promise<unknown>;
 
 export type Flow = ReturnType<typeof openFlow>;
 
-export const openFlow = ({ desk, book, log, draw, standingOf }: FlowOptions) => {
-  /** The desk also hears what this person may by the platform's own reckoning. */
-  const ask = async (sender: Sender, call: Call): Promise<Answer> => {
-    const standing = await standingOf(sender, call.shop, call.person.id);
-    return await desk.answer({ ...call, person: { ...call.person, ...standing } });
+export const openFlow = ({ desk, book, log, draw, people }: FlowOptions) => {
+  /** The desk also hears what this person may by the platform's own reckoning, and whom a line names. */
+  const ask = async (call: Call): Promise<Answer> => {
+    const { shop, person } = call;
+    const [standing, groups] = await Promise.all([
+      people.standingOf(shop, person.id),
+      people.groupsOf(shop),
+    ]);
+    const nameOf = (id: string): Promise<string> => people.nameOf(shop, id);
+    const known = await withMentions(call, { nameOf, groups });
+    // A mention comes without the name of whoever wrote it.
+    const name = person.name === person.id ? await nameOf(person.id) : person.name;
+    return await desk.answer({ ...known, person: { ...person, name, ...standing } });
   };
 
   const own = (card: SpokenCard, extra: readonly ExtraButton[] = []): Reply => ({
@@ -217,7 +226,7 @@ export const openFlow = ({ desk, book, log, draw, standingOf }: FlowOptions) => 
 
     /** Asks the desk and sends what it says. */
     answer: async (sender: Sender, handle: Handle, call: Call): Promise<void> => {
-      await sending(sender, handle, call, await replyFor(call, ask(sender, call)));
+      await sending(sender, handle, call, await replyFor(call, ask(call)));
     },
 
     /** Sends what the desk was asked before. */

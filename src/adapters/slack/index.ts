@@ -19,7 +19,7 @@ import { deliverEffect } from './effects.ts';
 import { faultText } from './faults.ts';
 import { openFlow } from './flow.ts';
 import { listen } from './listen.ts';
-import { openStanding } from './people.ts';
+import { openPeople } from './people.ts';
 import type { Draw } from './pictures.ts';
 import { interactionOf } from './receive.ts';
 import { openSender } from './send.ts';
@@ -55,9 +55,18 @@ const FORM_PATIENCE_MS = 1_500;
 
 /** Every interaction goes on only once, however often it comes. */
 const onlyOnce = ({ app }: Connection, once: Once, log: Log): void => {
+  /** Where it cannot be told, it goes on: the desk does nothing twice either. */
+  const isNew = async (name: string): Promise<boolean> => {
+    try {
+      return await once(name);
+    } catch (error) {
+      log.fault('once', { fault: faultText(error) });
+      return true;
+    }
+  };
   app.use(async ({ body, context, next, ...rest }) => {
     const id = interactionOf(body);
-    if (id === null || (await once(`${context.teamId ?? ''} ${id}`))) {
+    if (id === null || (await isNew(`${context.teamId ?? ''} ${id}`))) {
       await next();
       return;
     }
@@ -87,7 +96,15 @@ export const openSlack = async (options: SlackOptions): Promise<Slack> => {
   };
   const draw = options.draw ?? null;
   const formPatienceMs = options.formPatienceMs ?? FORM_PATIENCE_MS;
-  const flow = openFlow({ desk, book, log, draw, standingOf: openStanding(log) });
+  // Looked up by clients of their own: a pause that Slack asks of them holds no answer back.
+  const lookers = new Map(
+    installations.map(({ team, botToken }) => {
+      const patient = { ...clientOptions(api, logger), rejectRateLimitedCalls: true };
+      return [team, openSender(new webApi.WebClient(botToken, patient))] as const;
+    }),
+  );
+  const people = openPeople((shop) => lookers.get(shop) ?? null, log);
+  const flow = openFlow({ desk, book, log, draw, people });
   onlyOnce(connection, once, log);
   listen(connection.app, { desk, book, log, flow, keep, formPatienceMs });
   connection.app.error((error) => {

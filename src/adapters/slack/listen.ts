@@ -23,6 +23,7 @@ import {
 import { CHOOSE, homeView, OPEN, openButton, verbMenu } from './home.ts';
 import { LIMITS } from './limits.ts';
 import { FROM_MESSAGE, OPEN_SETUP } from './manifest.ts';
+import { namesSomebody } from './mentions.ts';
 import {
   callOf,
   commandHandle,
@@ -123,7 +124,8 @@ const asked = async (
 ): Promise<void> => {
   const { desk, book, flow } = listening;
   const { sender, handle, id } = at;
-  const { words, isPrivate } = quietly(body.text ?? '', book.slack.onlyMeWords);
+  const typed = typedText(body.text ?? '', namesSomebody(undefined));
+  const { words, isPrivate } = quietly(typed, book.slack.onlyMeWords);
   const line = `${body.command} ${words}`.trim();
   const bare = bareVerb(desk, line);
   if (bare !== null) {
@@ -251,6 +253,21 @@ const submission = (
   return { handle, call: callOf(handle, id, given, control.isPrivate) };
 };
 
+/** A form of an earlier program may say what this one does not read: it is acknowledged all the same. */
+const submissionOrFault = (...form: Parameters<typeof submission>) => {
+  try {
+    return submission(...form);
+  } catch (error) {
+    return { fault: error instanceof Error ? error : new Error('unreadable form') };
+  }
+};
+
+const pressedShape = z.object({
+  action_id: z.string(),
+  value: z.string().optional(),
+  selected_option: z.object({ value: z.string() }).nullish(),
+});
+
 const suggestion = z.object({
   value: z.string(),
   block_id: z.string(),
@@ -315,17 +332,9 @@ export const listen = (app: App, listening: Listening): void => {
     await acknowledged(ack);
     const there = at(client, handleOf(body, context.teamId ?? ''), body);
     const trigger = triggerOf(body);
-    const {
-      action_id: name,
-      value = '',
-      selected_option: selected,
-    } = z
-      .object({
-        action_id: z.string(),
-        value: z.string().optional(),
-        selected_option: z.object({ value: z.string() }).nullish(),
-      })
-      .parse(action);
+    const on = pressedShape.safeParse(action).data;
+    const [name, value] = [on?.action_id ?? '', on?.value ?? ''];
+    const selected = on?.selected_option;
     const command = commandAt(desk, name === CHOOSE ? (selected?.value ?? '') : value);
     const control = name.startsWith(`${CONTROL}:`) ? readId(value) : null;
     go('action', there, () => {
@@ -357,14 +366,20 @@ export const listen = (app: App, listening: Listening): void => {
   });
 
   app.view(/.*/u, async ({ ack, body, view, client, context }) => {
-    const sent = submission(body, view, context.teamId ?? '');
-    if (sent === null) {
+    const team = context.teamId ?? '';
+    const read = submissionOrFault(body, view, team);
+    if (read === null) {
       await acknowledged(ack);
       return;
     }
-    const { call, handle } = sent;
+    if ('fault' in read) {
+      await acknowledged(ack);
+      go('view', at(client, handleOf(body, team), body), () => Promise.reject(read.fault));
+      return;
+    }
+    const { call, handle } = read;
     const there = at(client, handle, body);
-    const asked = flow.ask(there.sender, call);
+    const asked = flow.ask(call);
     // Its fault is told by whoever sends the reply.
     const early = await within(
       asked.catch(() => null),
@@ -401,7 +416,8 @@ export const listen = (app: App, listening: Listening): void => {
       responseUrl: null,
     };
     const there = at(client, handle, body);
-    const { words, isPrivate } = quietly(text, book.slack.onlyMeWords);
+    const typed = typedText(text, namesSomebody(context.botUserId));
+    const { words, isPrivate } = quietly(typed, book.slack.onlyMeWords);
     go('mention', there, () => {
       const { sender, id } = there;
       const bare = bareVerb(desk, words === '' ? '/knurl' : words);

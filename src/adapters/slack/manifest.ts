@@ -36,7 +36,8 @@ const slashOf = (book: Book, fleet: readonly Command[], root: string, url: strin
     command: `/${root}`,
     description: shortened(book.verbs[root] ?? book.slack.slash(root), LIMITS.summary),
     usage_hint: example.replace(`/${root} `, ''),
-    should_escape: false,
+    // So that a person or a user group in a line comes with its id.
+    should_escape: true,
     ...(url === null ? {} : { url }),
   };
 };

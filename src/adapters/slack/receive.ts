@@ -1,6 +1,5 @@
 import { z } from 'zod';
 import type { Call, Options } from '../../desk/index.ts';
-import { typedText } from './escape.ts';
 
 /** The field that takes a whole line, and the one that hides the reply. */
 export const WORDS_FIELD = 'words';
@@ -84,10 +83,9 @@ export const callOf = (
 
 /** `only me` at either end of a line hides the reply; it is no word of the request. */
 export const quietly = (
-  words: string,
+  typed: string,
   onlyMe: string,
 ): { readonly words: string; readonly isPrivate: boolean } => {
-  const typed = typedText(words);
   const lower = typed.toLowerCase();
   if (lower === onlyMe) return { words: '', isPrivate: true };
   if (lower.endsWith(` ${onlyMe}`))

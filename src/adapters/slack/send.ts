@@ -9,6 +9,13 @@ import { LIMITS } from './limits.ts';
 import type { Message } from './render.ts';
 
 export type Where = { readonly channel: string; readonly thread: string | null };
+/** A user group as Slack names it, and its members. */
+export type UserGroup = {
+  readonly id: string;
+  readonly name: string;
+  readonly handle: string;
+  readonly users: readonly string[];
+};
 export type Sent = { readonly channel: string; readonly message: string };
 
 /** Judgement: three tries within what a person waits; the outbox has its own, longer patience. */
@@ -183,19 +190,26 @@ export const openSender = (client: webApi.WebClient) => {
         alt_text: shortened(alt, LIMITS.altText),
       }),
 
-    /** An administrator of this very workspace; guests of another one manage nothing here. */
-    manages: async (person: string, shop: string): Promise<boolean> => {
+    /** What they are called, and whether they administer this very workspace; guests of another do not. */
+    user: async (
+      person: string,
+      shop: string,
+    ): Promise<{ readonly name: string | null; readonly manages: boolean }> => {
       const { user } = await trying(() => client.users.info({ user: person }));
-      return user?.team_id === shop && (user.is_admin === true || user.is_owner === true);
+      const names = [user?.profile?.display_name, user?.real_name, user?.name];
+      return {
+        name: names.find((name) => name !== undefined && name !== '') ?? null,
+        manages: user?.team_id === shop && (user.is_admin === true || user.is_owner === true),
+      };
     },
 
-    /** The user groups a person is in, where the workspace has any. */
-    groups: async (person: string): Promise<readonly string[]> => {
+    /** The user groups of the workspace, where it has any, and who is in each. */
+    groups: async (): Promise<readonly UserGroup[]> => {
       const { usergroups = [] } = await trying(() =>
         client.usergroups.list({ include_users: true }),
       );
-      return usergroups.flatMap(({ id, users = [] }) =>
-        id !== undefined && users.includes(person) ? [id] : [],
+      return usergroups.flatMap(({ id, name = '', handle = '', users = [] }) =>
+        id === undefined ? [] : [{ id, name, handle, users }],
       );
     },
   };

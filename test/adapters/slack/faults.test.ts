@@ -225,6 +225,29 @@ describe('time', () => {
   });
 });
 
+describe('a listener that throws', () => {
+  test('a form that nobody can read any more: acknowledged, the person told, counted', async () => {
+    const bot = await opened();
+    await bot.people.slash('');
+    await until(() => bot.platform.views.length > 0, 'the form');
+    const [form] = bot.platform.views;
+    if (form === undefined) throw new Error('no form');
+    const old = { ...form, view: { ...form.view, private_metadata: 'of an earlier program' } };
+    expect(await bot.people.submit(old, { words: LINE })).not.toBeNull();
+    const [said] = await bot.posted(1);
+    expect(readable(said?.body ?? '')).toContain(en.chat.fault);
+    expect(said?.channel).toBe('DU0OPERATORT0SHOP');
+    expect(bot.faults.map(({ what }) => what)).toEqual(['interaction']);
+  });
+
+  test('records that cannot say what was there before: acknowledged, and answered', async () => {
+    const bot = await opened({ once: () => Promise.reject(new Error('no records')) });
+    expect(await bot.people.slash(LINE)).not.toBeNull();
+    await until(() => answersOf(bot).length === 1, 'the answer');
+    expect(bot.faults.map(({ what }) => what)).toEqual(['once']);
+  });
+});
+
 describe('the socket', () => {
   test('the same envelope twice acts once', async () => {
     const bot = await opened();

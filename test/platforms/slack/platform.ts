@@ -241,9 +241,19 @@ export const openPlatform = async (check: BodyCheck = bodyCheck()) => {
     },
     'users.info': (team, fields) => ({
       ok: true,
-      user: { id: fields['user'], team_id: team.id, is_admin: fields['user'] === 'U0OWNER' },
+      user: {
+        id: fields['user'],
+        team_id: team.id,
+        is_admin: fields['user'] === 'U0OWNER',
+        profile: { display_name: `Name of ${fields['user'] ?? ''}` },
+      },
     }),
-    'usergroups.list': () => ({ ok: true, usergroups: [{ id: 'S0ENG', users: ['U0ENGINEER'] }] }),
+    'usergroups.list': () => ({
+      ok: true,
+      usergroups: [
+        { id: 'S0ENG', name: 'Night Engineers', handle: 'engineers', users: ['U0ENGINEER'] },
+      ],
+    }),
     'files.getUploadURLExternal': (_team, fields) => {
       const id = `F${String(next())}`;
       uploads.set(id, { alt: fields['alt_text'] ?? '', bytes: 0 });
