@@ -133,9 +133,9 @@ const moveLines = ({ logged, trouble }: Told): readonly Line[] => {
   const behind = trouble === null ? [] : [trouble.headline];
   if (after === null) return behind;
   const flat = mm(after.pitch.normal * (1 - (figureOf(after, 'fillExpected') ?? 0)));
-  // What went wrong is not made the same again; the result has been logged.
+  // What went wrong is not made the same again, and the count of a doubled part proves no pitch.
   const next = after.nextPart.filter(
-    ({ id }) => id !== 'logGrowth' && (id !== 'same' || outcome === 'good'),
+    ({ id }) => id !== 'logGrowth' && outcome !== 'double' && (id !== 'same' || outcome === 'good'),
   );
   return [
     ...behind,

@@ -117,15 +117,26 @@ export const cause = said<CauseId>({
   examples: ['cause dull wheel', 'cause light bite'],
 });
 
-/** Everything up to the end of the line, or what stands in quotation marks. */
+const NO_WORDS = vocabularyOf([]);
+const readWords = textOf(() => NO_WORDS);
+
+/** Everything up to the end of the line as it was typed, or what stands in quotation marks. */
+const readNote: Reader<string> = (cursor, names) => {
+  const start = tokenAt(cursor)?.start ?? 0;
+  const reading = readWords(cursor, names);
+  const isQuoted = /["“”„]/u.test(cursor.text.slice(Math.max(0, start - 1), start + 1));
+  if (reading === null || 'refusal' in reading || isQuoted) return reading;
+  return took(cursor.text.slice(start).trim(), cursor.tokens.length - cursor.at);
+};
+
+/** Words of the person's own, about anything that no number says. */
 export const note = said<string>({
   name: 'note',
-  read: textOf(() => NO_WORDS),
+  read: readNote,
   keywords: ['note', 'notes', 'remark'],
   text: true,
   examples: ['note burr at the chuck end'],
 });
-const NO_WORDS = vocabularyOf([]);
 
 /** The version of a result that a button was made for. */
 export const version = said<number>({

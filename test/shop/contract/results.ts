@@ -11,12 +11,15 @@ import {
   type SetupRequest,
   setUp,
 } from '../../../src/calc/index.ts';
+import { escaped } from '../../../src/shop/csv/escape.ts';
 import {
   addTo,
   cardById,
   causeCounts,
   confirmResult,
   correctResult,
+  exportCsv,
+  exportJson,
   findEntries,
   findIn,
   findResult,
@@ -70,6 +73,7 @@ const numberOf = ({ result }: Logged): number => result.number;
 export const results = (engine: Engine): void => {
   describe('results', () => {
     logging(engine);
+    leaving(engine);
     finding(engine);
     refusing(engine);
     changing(engine);
@@ -160,6 +164,26 @@ const logging = (engine: Engine): void => {
     expect(await numbers({ card: one.result.card })).toEqual([1]);
     expect(await numbers({ since: START + 1 })).toEqual([2]);
     expect(await numbers({ doubted: true })).toEqual([2]);
+  });
+};
+
+const leaving = (engine: Engine): void => {
+  it('go along when the shop takes its records with it, as JSON and as a table', async () => {
+    const shop = await shopOn(engine);
+    await logOne(shop, { ...grown(0.93), teeth: 65, note: '=SUM(A1)' });
+    const pieces: string[] = [];
+    for await (const piece of exportJson(shop.view)) pieces.push(piece);
+    const all = JSON.parse(pieces.join('')) as Record<string, readonly object[]>;
+    expect(all['result']).toMatchObject([{ number: 1, teeth: 65, note: '=SUM(A1)', learned: 1 }]);
+    expect(all['growth']).toMatchObject([{ family: 'straight × steel', count: 1 }]);
+    const file = exportCsv(shop.view).find(({ name }) => name === 'result.csv');
+    let text = '';
+    for await (const piece of file?.pieces ?? []) text += piece;
+    const [heading = '', line = ''] = text.split('\r\n');
+    expect(heading.split(',')).toContain('tooth_height');
+    // No cell is a formula to the spreadsheet that opens it.
+    expect(line).toContain(escaped('=SUM(A1)'));
+    expect(escaped('=SUM(A1)')).not.toBe('=SUM(A1)');
   });
 };
 
