@@ -10,6 +10,8 @@ import { isolation } from './isolation.ts';
 import { lists } from './lists.ts';
 import { outbox } from './outbox.ts';
 import { people } from './people.ts';
+import { questions } from './questions.ts';
+import { reminders } from './reminders.ts';
 import { results } from './results.ts';
 import { settings } from './settings.ts';
 import { standards } from './standards.ts';
@@ -21,6 +23,8 @@ export const shopContract = (engine: Engine): void => {
     settings(engine);
     cards(engine);
     results(engine);
+    questions(engine);
+    reminders(engine);
     standards(engine);
     finding(engine);
     interactions(engine);
