@@ -8,10 +8,6 @@ import { en } from './phrases/index.ts';
 import { recordsFault } from './records.ts';
 import { openStore, type StorePlace, storePlace } from './store/index.ts';
 
-/** The demo's days begin so long ago. Judgement: results spread over a season of work. */
-const DAYS = 42;
-const DAY = 24 * 3_600_000;
-
 /** Beside the real records, never among them: a server is not asked. */
 const demoFolder = (): string => path.resolve(process.env['WHOLETOOTH_DATA'] || '.data', 'demo');
 const placeIn = (folder: string): StorePlace => storePlace({ WHOLETOOTH_DATA: folder });
@@ -19,7 +15,7 @@ const placeIn = (folder: string): StorePlace => storePlace({ WHOLETOOTH_DATA: fo
 /** Fills a folder that is put in its place once it is whole. */
 const filled = async (folder: string): Promise<void> => {
   const half = `${folder}.${String(process.pid)}`;
-  const clock = { now: Date.now() - DAYS * DAY };
+  const clock = { now: Date.now() };
   const now = (): number => clock.now;
   const store = await openStore(placeIn(half));
   try {

@@ -1,9 +1,7 @@
-/** What somebody says in the demo's shop, and how long after what was said before. */
+/** What somebody says in the demo's shop. */
 export type Said = {
   readonly by: string;
   readonly line: string;
-  /** Minutes since the line before. */
-  readonly after?: number;
   readonly attached?: { readonly name: string; readonly text: string };
 };
 

@@ -69,7 +69,10 @@ const load = async (store: Store, like: CardTable, count: number): Promise<void>
         const rows = Array.from({ length: Math.min(ROWS, end - at) }, (_, i): CardTable => {
           const made_at = before + (at + i) * MINUTE;
           const card = at + i >= count - FEW ? like.card : bare;
-          return { ...like, id: tx.newId(made_at), made_at, code: codeOf(at + i), card };
+          const code = codeOf(at + i);
+          // The card that was made has one of these by chance.
+          const free = code === like.code ? codeOf(count) : code;
+          return { ...like, id: tx.newId(made_at), made_at, code: free, card };
         });
         await tx.insertInto('card').values(rows).execute();
       }

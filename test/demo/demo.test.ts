@@ -3,6 +3,8 @@ import { spawn } from 'node:child_process';
 import fs from 'node:fs';
 import path from 'node:path';
 import { expect, it } from 'vitest';
+import { mulberry32 } from '../../src/demo/chance.ts';
+import { DAYS, season } from '../../src/demo/season.ts';
 import { openStore } from '../../src/store/index.ts';
 import { newFolder } from '../support/places.ts';
 
@@ -38,15 +40,28 @@ it('fills a shop of its own once, says that it is invented, and opens it', async
   expect(again.out).toContain('6 people:');
 
   const store = await openStore({ engine: 'sqlite', file: path.join(data, 'demo/wholetooth.db') });
-  const count = async (table: 'wheel' | 'machine' | 'material' | 'rule' | 'card') =>
+  const count = async (table: 'wheel' | 'machine' | 'material' | 'rule' | 'card' | 'result') =>
     (await store.read.selectFrom(table).select('id').execute()).length;
   expect(await count('wheel')).toBe(12);
   expect(await count('machine')).toBe(3);
   expect(await count('material')).toBe(3);
   expect(await count('rule')).toBe(4);
-  expect(await count('card')).toBeGreaterThanOrEqual(6);
+  expect(await count('result')).toBe(200);
+  const outcomes = await store.read.selectFrom('result').select('outcome').distinct().execute();
+  const seen = outcomes.map(({ outcome }) => outcome).sort();
+  expect(seen).toEqual(['bent', 'double', 'flaking', 'good', 'other', 'seized', 'shallow']);
   // Whatever was left to be done is done.
   const states = await store.read.selectFrom('effect').select('state').distinct().execute();
   expect(states.filter(({ state }) => state !== 'delivered')).toEqual([]);
   await store.close();
-}, 60_000);
+}, 120_000);
+
+it('tells the same season every time, in the order of its days, and nothing of tomorrow', () => {
+  const batches = season(mulberry32(7));
+  expect(season(mulberry32(7))).toEqual(batches);
+  expect(season(mulberry32(8))).not.toEqual(batches);
+  const hours = batches.map(({ at }) => at);
+  expect(hours).toEqual(hours.toSorted((a, b) => a - b));
+  expect(hours.at(-1)).toBeLessThan((DAYS - 1) * 24 + 9);
+  expect(batches.flatMap(({ results }) => results)).toHaveLength(200);
+});
