@@ -85,6 +85,6 @@ export const resultLine = (
           `flat ${inches(expected('crestFlat') * (1 + FLAT_TO_FLAT * second))}`,
         ];
   const counted = teeth === null ? [] : [`${String(expected('toothCount') + teeth)} teeth`];
-  const said = [code, ...counted, ...measured, `${String(parts)} parts`, words];
+  const said = [`card ${code}`, ...counted, ...measured, `${String(parts)} parts`, words];
   return `/knurl result ${said.join(' ')}`;
 };

@@ -15,11 +15,14 @@ const MEANT: Readonly<Record<string, string>> = { Z: '2', B: '8', N: 'M' };
 const SHORTEST = 5;
 const LONGEST = 12;
 
-/** A code with at least one letter and one digit, so that it is never read as a number or a word. */
+/** A number and what may be its unit: `263FT`. */
+const LIKE_A_SIZE = /^\d+[A-Z]+$/u;
+
+/** A code with letters and digits, so that it is never read as a number, a word or a size. */
 export const newCode = (length = SHORTEST): string => {
   for (;;) {
     const code = Array.from({ length }, () => CODE_SIGNS[randomInt(CODE_SIGNS.length)]).join('');
-    if (/\d/u.test(code) && /[A-Z]/u.test(code)) return code;
+    if (/\d/u.test(code) && /[A-Z]/u.test(code) && !LIKE_A_SIZE.test(code)) return code;
   }
 };
 

@@ -4,6 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { misheard, newCode } from '../../../src/shop/codes.ts';
 import { CODE_SIGNS, findCard, keepCard, latestCards, readCode } from '../../../src/shop/index.ts';
 import type { Engine } from '../../../src/store/index.ts';
+import { quantityAt, tokensOf } from '../../../src/words/index.ts';
 import { good, newRecords, newShop, person, refusalOf, START } from '../../support/records.ts';
 import { CARD } from './samples.ts';
 
@@ -69,12 +70,15 @@ export const codes = (): void => {
       expect(new Set(CODE_SIGNS).size).toBe(CODE_SIGNS.length);
     });
 
-    it('are read back as they were made, and are never a number or a word', () => {
+    it('are read back as they were made, and are never a number, a word or a size', () => {
       for (let count = 0; count < 2000; count += 1) {
         const code = newCode(5 + (count % 4));
         expect(readCode(code.toLowerCase())).toBe(code);
         expect(code).toMatch(/\d/u);
         expect(code).toMatch(/[A-Z]/u);
+        // `263FT` was once given out, and read as so many feet.
+        const cursor = { text: code, tokens: tokensOf(code), at: 0, units: 'in' } as const;
+        expect([code, quantityAt(cursor)?.unit ?? null]).toEqual([code, null]);
       }
     });
 
