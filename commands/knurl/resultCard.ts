@@ -103,10 +103,12 @@ const expectsLine = ({ card }: Told, { mean, ofFamily }: FamilyGrowth): Line => 
 const learnedLines = (t: Told): readonly Line[] => {
   const { compared, growth, result } = t.logged;
   switch (result.standing) {
-    case 'silent':
-      return typeof compared.growth === 'string'
-        ? [line('resultTeachesNot', { why: compared.growth })]
-        : [];
+    case 'silent': {
+      const why = compared.growth;
+      // Nobody measures the crest of a part that is none.
+      const isIdle = typeof why !== 'string' || (why === 'noCrest' && result.outcome !== 'good');
+      return isIdle ? [] : [line('resultTeachesNot', { why })];
+    }
     case 'doubted':
       return result.share === null || growth === null ? [] : [waitsLine(t, result.share, growth)];
     case 'learned':

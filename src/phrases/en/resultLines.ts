@@ -20,7 +20,7 @@ const SAID_BY_OUTCOME: readonly SymptomId[] = [
 /** `double`, `tapered`, or just how it went. */
 export const howItWent = ({ outcome, symptom }: HowItWent): string => {
   if (symptom === null || SAID_BY_OUTCOME.includes(symptom)) return outcome;
-  return outcome === 'other' ? symptomNames[symptom] : `${outcome}, ${symptomNames[symptom]}`;
+  return symptomNames[symptom];
 };
 
 const counted = (count: number): string => `${String(count)} ${count === 1 ? 'result' : 'results'}`;
@@ -70,8 +70,10 @@ export const resultLines: {
     `Kept, and not learned from yet: it grew ${show.percent(share)} of the static growth, and ${show.percent(low)} to ${show.percent(high)} was to be expected. An engineer who has looked at it confirms it: /knurl result confirm ${result}`,
   resultExpects: ({ mean, ofFamily, pattern, group }, show) => {
     const family = `a ${patternName(pattern)} in ${group}`;
-    const behind = ofFamily === 0 ? 'no result of it stands' : `by ${counted(ofFamily)} of it`;
-    return `The next card of ${family} expects ${show.percent(mean)} of the static growth: ${behind}.`;
+    const such = ofFamily === 1 ? 'such result' : 'such results';
+    const behind =
+      ofFamily === 0 ? 'with no such result behind it' : `by ${String(ofFamily)} ${such}`;
+    return `The next card of ${family} expects ${show.percent(mean)} of the static growth, ${behind}.`;
   },
   resultOthers: ({ learned, doubted }) =>
     [
@@ -96,7 +98,7 @@ export const resultRows: {
   }),
   resultWheel: ({ wheel, parts, run }) => ({
     label: 'Wheel',
-    text: `${wheel}: ${String(run)} parts run${parts === 0 ? '' : `, ${String(Math.abs(parts))} ${parts < 0 ? 'taken back' : 'of them now'}`}`,
+    text: `${wheel}: ${String(run)} parts run${parts === 0 ? '' : ` (${String(Math.abs(parts))} ${parts < 0 ? 'fewer' : 'more'})`}`,
   }),
   resultCause: ({ cause }) => ({ label: 'Cause', text: causeNames[cause] }),
   resultNote: ({ note }) => ({ label: 'Note', text: note }),
