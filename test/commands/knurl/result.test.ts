@@ -209,8 +209,8 @@ describe.each(ENGINES)('a result, %s', (engine) => {
     expect(text).toMatch(/Crests 1\.0035 in \[25\.489 mm\] measured, 1\.0010 to 1\.0060 expected/u);
     expect(text).toMatch(/Growth 9\d(\.\d)? % of the static growth, 95 % expected/u);
     expect(text).toMatch(/The next card of a straight knurl in steel expects 9\d(\.\d)? %/u);
-    expect(text).toContain('by 1 result of it');
-    expect(text).toContain('A1: 140 parts run, 40 of them now');
+    expect(text).toContain('by 1 such result.');
+    expect(text).toContain('A1: 140 parts run (40 more)');
     expect(text).toContain('Next part: the same again.');
     expect(codeOf(card)).not.toBe('');
     const wheel = async () => textOf(await ask('/shop wheels show A1'));
@@ -258,7 +258,7 @@ describe.each(ENGINES)('a result, %s', (engine) => {
     await ask('/shop people change Pavel engineer');
     const confirmed = await ask('/knurl result confirm', { who: 'Pavel' });
     expect(textOf(confirmed)).toContain('R1 confirmed');
-    expect(textOf(confirmed)).toContain('by 1 result of it');
+    expect(textOf(confirmed)).toContain('by 1 such result.');
     expect(textOf(await ask('/knurl result confirm R1', { who: 'Pavel' }))).toContain(
       'the cards learn from it already',
     );
