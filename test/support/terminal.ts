@@ -8,9 +8,11 @@ import {
   sentenceText,
   written,
 } from '../../src/adapters/terminal/index.ts';
+import type { Speaker } from '../../src/adapters/terminal/speaker.ts';
 import { openDeliveries } from '../../src/deliveries.ts';
 import { type Command, openRecordsDesk } from '../../src/desk/index.ts';
 import { en } from '../../src/phrases/index.ts';
+import { openQuestionReminders } from '../../src/reminders.ts';
 import type { Store } from '../../src/store/index.ts';
 
 export type Played = {
@@ -18,9 +20,12 @@ export type Played = {
   readonly fleet: readonly Command[];
   readonly lines: readonly string[];
   readonly now?: () => number;
+  readonly speaker?: Speaker;
 };
 
-export const play = async ({ store, fleet, lines, now = Date.now }: Played): Promise<string> => {
+/** Everything that is shown, after the opening. */
+export const play = async (played: Played): Promise<string> => {
+  const { store, fleet, lines, now = Date.now, speaker } = played;
   const input = new PassThrough();
   const output = new PassThrough();
   const said: Buffer[] = [];
@@ -30,6 +35,7 @@ export const play = async ({ store, fleet, lines, now = Date.now }: Played): Pro
   const deliver = deliverBy(en, (line) => written(output, `${sentenceText(line, PHONE_WIDTH)}\n`));
   const terminal = { platform: 'terminal', shops: null, deliver };
   const { deliverDue } = openDeliveries(store, [terminal], { now, onFault, concurrency: 1 });
+  const reminders = openQuestionReminders(store, { now, onQueued: () => undefined, onFault });
   input.end(lines.map((line) => `${line}\n`).join(''));
   await runChannel({
     desk: openRecordsDesk(fleet, store, {
@@ -43,10 +49,15 @@ export const play = async ({ store, fleet, lines, now = Date.now }: Played): Pro
     input,
     output,
     interactive: false,
+    opening: [],
+    ...(speaker === undefined ? {} : { speaker }),
     pictures: null,
     width: () => PHONE_WIDTH,
     onFault,
-    settle: deliverDue,
+    settle: async () => {
+      await reminders.remindDue();
+      return await deliverDue();
+    },
   });
   if (faults.length > 0) throw new Error(`faults: ${faults.map(String).join('\n')}`);
   return Buffer.concat(said).toString();

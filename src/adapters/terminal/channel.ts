@@ -105,10 +105,11 @@ const answered = async (options: ChannelOptions, call: Call, line: number): Prom
 export const runChannel = async (options: ChannelOptions): Promise<void> => {
   const { book, input, output, interactive, width } = options;
   const { terminal } = book;
+  const run = randomUUID();
   let { speaker = FIRST } = options;
   const { opening = terminal.opening } = options;
   const said = opening.map((text) => sentenceText(text, width()));
-  await written(output, `${said.join('\n')}\n\n`);
+  if (said.length > 0) await written(output, `${said.join('\n')}\n\n`);
   const lines = createInterface({ input, crlfDelay: Number.POSITIVE_INFINITY });
   const prompt = async (typed: string): Promise<void> => {
     await written(output, `${promptFor(speaker, terminal.prompt)}${typed}`);
@@ -119,8 +120,11 @@ export const runChannel = async (options: ChannelOptions): Promise<void> => {
     number += 1;
     if (!interactive) await prompt(`${printable(line)}\n`);
     const move = moved(line, speaker, terminal);
-    if (move === null) await answered(options, terminalCall(line, number, speaker), number);
-    else {
+    if (move === null) {
+      // Every line of every conversation acts once.
+      const interactionId = `${run}-${String(number)}`;
+      await answered(options, { ...terminalCall(line, number, speaker), interactionId }, number);
+    } else {
       speaker = move.speaker;
       await written(output, `${sentenceText(move.said, width())}\n\n`);
     }

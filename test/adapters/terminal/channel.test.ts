@@ -48,7 +48,7 @@ const herald = defineCommand({
 const fleet = [...FLEET, herald];
 
 /** What was shown, one paragraph to each line that was typed. */
-const turns = (said: string): readonly string[] => said.split(/\n\n(?=[^\n]*> )/u).slice(1);
+const turns = (said: string): readonly string[] => said.trimEnd().split(/\n\n(?=[^\n]*> )/u);
 
 describe.each(ENGINES)('on %s', (engine) => {
   it('everything that happens is a line under its answer, in its order, once', async () => {

@@ -178,7 +178,7 @@ const prepare = async (shop: TestShop): Promise<Prepared> => {
   });
 };
 
-export const breakAll = async (
+const breakAll = async (
   fuse: Fuse,
   store: Store,
   before: unknown,
@@ -206,7 +206,7 @@ type Fuse = {
 };
 
 /** Lets so many calls through and fails the next, as each engine's driver would. */
-export const newFuse = (engine: Engine): Fuse => {
+const newFuse = (engine: Engine): Fuse => {
   let left = Number.POSITIVE_INFINITY;
   const code = engine === 'sqlite' ? 'SQLITE_IOERR_WRITE' : 'ECONNRESET';
   return {
@@ -228,7 +228,7 @@ export const newFuse = (engine: Engine): Fuse => {
 const said = (row: unknown): string => JSON.stringify(row);
 
 /** Every row of every table. */
-export const everything = async (store: Store): Promise<unknown> => {
+const everything = async (store: Store): Promise<unknown> => {
   const tables: Record<string, unknown> = {};
   for (const { name, key } of TABLES) {
     tables[name] = await store.read
