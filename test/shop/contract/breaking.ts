@@ -178,7 +178,7 @@ const prepare = async (shop: TestShop): Promise<Prepared> => {
   });
 };
 
-const breakAll = async (
+export const breakAll = async (
   fuse: Fuse,
   store: Store,
   before: unknown,
@@ -206,7 +206,7 @@ type Fuse = {
 };
 
 /** Lets so many calls through and fails the next, as each engine's driver would. */
-const newFuse = (engine: Engine): Fuse => {
+export const newFuse = (engine: Engine): Fuse => {
   let left = Number.POSITIVE_INFINITY;
   const code = engine === 'sqlite' ? 'SQLITE_IOERR_WRITE' : 'ECONNRESET';
   return {
@@ -228,7 +228,7 @@ const newFuse = (engine: Engine): Fuse => {
 const said = (row: unknown): string => JSON.stringify(row);
 
 /** Every row of every table. */
-const everything = async (store: Store): Promise<unknown> => {
+export const everything = async (store: Store): Promise<unknown> => {
   const tables: Record<string, unknown> = {};
   for (const { name, key } of TABLES) {
     tables[name] = await store.read

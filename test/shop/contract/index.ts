@@ -2,6 +2,7 @@
 import { describe } from 'vitest';
 import type { Engine } from '../../../src/store/index.ts';
 import { breaking } from './breaking.ts';
+import { breakingQuestions } from './breakingQuestions.ts';
 import { cards } from './cards.ts';
 import { csv } from './csv.ts';
 import { finding } from './find.ts';
@@ -31,6 +32,7 @@ export const shopContract = (engine: Engine): void => {
     outbox(engine);
     csv(engine);
     breaking(engine);
+    breakingQuestions(engine);
     isolation(engine);
   });
 };

@@ -3,7 +3,10 @@ import { describe, expect, it } from 'vitest';
 import {
   addRule,
   addTo,
+  answerQuestion,
+  answersTo,
   approveStandard,
+  askQuestion,
   causeCounts,
   changeIn,
   changeSetting,
@@ -11,11 +14,13 @@ import {
   correctResult,
   covering,
   dropFromFind,
+  effectOf,
   exportJson,
   findCard,
   findEntries,
   findIn,
   findPerson,
+  findQuestion,
   findResult,
   findStandard,
   givenUp,
@@ -42,22 +47,29 @@ import {
   partsOf,
   personById,
   proposeStandard,
+  questionInThread,
+  questionsOnCard,
   queueEffects,
   RULES,
   removeFrom,
   removeGroup,
   removePerson,
+  reopenQuestion,
   resultById,
   retireStandard,
   rolesOfGroups,
   rulesOnCard,
   type ShopChange,
   settingsOf,
+  solveQuestion,
+  toTell,
+  unsolvedQuestions,
   WHEEL_SHEET,
   WHEELS,
   whoMay,
   withdrawResult,
 } from '../../../src/shop/index.ts';
+import { putUpAgain } from '../../../src/shop/questions/waiting.ts';
 import { type Engine, MADE_TABLES, TABLES } from '../../../src/store/index.ts';
 import {
   good,
@@ -89,6 +101,8 @@ type Thing =
   | 'card'
   | 'code'
   | 'result'
+  | 'question'
+  | 'questionCode'
   | 'effect'
   | 'standard'
   | 'part';
@@ -113,6 +127,9 @@ const furnish = async (shop: TestShop, mark: string): Promise<Things> => {
     const { result } = good(await logResult(change, part, odd));
     const { standard } = await bringTo(change, `part ${mark}`, 'approved', part.id);
     await queueEffects(change, [{ key: `post ${mark}`, effect: { post: mark } }]);
+    const asking = { text: `why ${mark}`, card: part.id, place: `questions ${mark}/` };
+    const question = good(await askQuestion(change, asking));
+    good(await answerQuestion(change, question.id, `so ${mark}`));
     return {
       wheel: wheel.id,
       wheelName: wheel.name,
@@ -128,6 +145,8 @@ const furnish = async (shop: TestShop, mark: string): Promise<Things> => {
       card: part.id,
       code: part.code,
       result: result.id,
+      question: question.id,
+      questionCode: question.code,
       effect: `post ${mark}`,
       standard: standard.id,
       part: standard.part,
@@ -183,6 +202,18 @@ const ASKED: Readonly<Record<string, (change: ShopChange, id: string) => Promise
   historyOfStandard: (change, id) => historyOf(change, 'standard', { id }),
   covering: (change, id) => covering(change, jobLike({ wheel: id, machine: id, material: id })),
   isUnderWay: (change, id) => isUnderWay(change, id),
+  findQuestion: (change, id) => findQuestion(change, id),
+  questionInThread: (change, id) => questionInThread(change, id),
+  questionsOnCard: (change, id) => questionsOnCard(change, id, 5),
+  answersTo: (change, id) => answersTo(change, id),
+  askedBy: (change, id) => unsolvedQuestions(change, { limit: 5, askedBy: id }),
+  answerQuestion: (change, id) => answerQuestion(change, id, 'mine'),
+  solveQuestion: (change, id) =>
+    solveQuestion(change, id, { role: 'engineer', accepted: null, words: 'mine' }),
+  reopenQuestion: (change, id) => reopenQuestion(change, id, { role: 'engineer', words: 'mine' }),
+  putUpAgain: (change, id) => putUpAgain({ ...change, at: change.at + 99 * 3_600_000 }, id),
+  toTell: (change, id) => toTell(change, 'engineer', id),
+  effectOf: (change, id) => effectOf(change, id),
   once: (change, id) => once(change, id, () => Promise.resolve('mine')),
   dropFromFind: (change, id) => dropFromFind(change, 'card', id),
 };
@@ -216,6 +247,7 @@ const OVERVIEWS: Readonly<Record<string, (change: ShopChange) => Promise<unknown
   covering: (change) => covering(change, jobLike()),
   oldestPins: (change) => oldestPins(change, 5),
   settings: (change) => settingsOf(change),
+  questions: (change) => unsolvedQuestions(change, { limit: 50 }),
   givenUp: (change) => givenUp(change),
   history: (change) => historyOf(change, 'wheel'),
   newest: (change) => findEntries(change, '', { limit: 9, kind: 'card' }),
