@@ -45,7 +45,7 @@ const nextNumber = async (view: ShopView): Promise<number> => {
   return (last?.number ?? 0) + 1;
 };
 
-/** Whether a result stands behind this one, made by another program whose clock is ahead. */
+/** Whether none stands behind it; another program's clock may be ahead of this one's. */
 const isLast = async (view: ShopView, id: string): Promise<boolean> => {
   const later = await view.db
     .selectFrom('result')

@@ -243,6 +243,24 @@ describe.each(ENGINES)('a result, %s', (engine) => {
     expect(textOf(await ask('/knurl trouble double'))).toContain('3 causes');
   });
 
+  it('wears the wheel, which trouble then knows of', async () => {
+    const { ask } = await deskOn(engine);
+    await ask('/shop wheels add A1 straight 21tpi parts 5000');
+    await ask('1.000 straight 1018 wheel A1');
+    await ask('/knurl result good 1500 parts');
+    const evidence = async (words: string) => {
+      const answer = await ask(`/knurl trouble double 1.000 straight 1018 ${words}`);
+      const causes = (answer.kind === 'card' ? answer.card.lists?.['causes'] : []) as {
+        readonly cause: string;
+        readonly evidence: readonly { readonly number?: string; readonly value?: number }[];
+      }[];
+      return causes.find(({ cause }) => cause === 'dullWheel')?.evidence;
+    };
+    expect(await evidence('wheel A1')).toMatchObject([{ number: 'partsOnWheel', value: 6500 }]);
+    expect(await evidence('wheel A1 wheel made 100')).toMatchObject([{ value: 100 }]);
+    expect(await evidence('21tpi')).toEqual([]);
+  });
+
   it('far from what was expected waits until an engineer stands by it', async () => {
     const { ask } = await deskOn(engine);
     await ask(LINE);
