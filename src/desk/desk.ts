@@ -20,6 +20,7 @@ import { type Answer, choicesIn } from './answer.ts';
 import type { Call } from './call.ts';
 import type { Command, Context, Reply } from './command.ts';
 import { type KeptAnswers, keptInProcess } from './kept.ts';
+import type { PinnedStandard } from './pinned.ts';
 import { atLeast } from './role.ts';
 import { lineOf, type Route, route, wordsOf } from './route.ts';
 import { suggestionsFor } from './suggest.ts';
@@ -36,6 +37,8 @@ export type Desk = {
   ) => Promise<readonly Suggestion[]>;
   /** The content of a file that an answer names, for who may have it; null for who may not. */
   readonly download: (call: Call, file: string) => Promise<AsyncIterable<string> | null>;
+  /** The standards that hold in a shop, for a page that shows them before anything is asked. */
+  readonly pinned: (call: Pick<Call, 'shop'>) => Promise<readonly PinnedStandard[]>;
   readonly fleet: readonly Command[];
 };
 
@@ -225,7 +228,14 @@ export const openDesk = (
     return given;
   };
 
-  return { answer, recall, suggest, download: () => Promise.resolve(null), fleet };
+  return {
+    answer,
+    recall,
+    suggest,
+    download: () => Promise.resolve(null),
+    pinned: () => Promise.resolve([]),
+    fleet,
+  };
 };
 
 /** A shop that has said nothing about itself. */

@@ -30,6 +30,7 @@ export {
 } from './desk.ts';
 export type { Effect, MessageAddress, Ring, Target } from './effect.ts';
 export { type KeptAnswers } from './kept.ts';
+export type { PinnedStandard } from './pinned.ts';
 export { queued } from './queued.ts';
 export { openRecordsDesk, type RecordsDeskOptions, SHOP_WORDS } from './records.ts';
 export { atLeast, ROLES, type Role } from './role.ts';

@@ -29,6 +29,7 @@ import type { Call } from './call.ts';
 import type { Command } from './command.ts';
 import { type Desk, openDesk, type ShopFacts } from './desk.ts';
 import type { Effect } from './effect.ts';
+import { pinnedIn } from './pinned.ts';
 import { atLeast, type Role } from './role.ts';
 import { lineOf } from './route.ts';
 import { lastCard, settled } from './settle.ts';
@@ -208,7 +209,18 @@ export const openRecordsDesk = (
     return filePieces(store, view, file);
   };
 
-  return { ...desk, answer, suggest, download };
+  const pinned: Desk['pinned'] = async (call) => {
+    try {
+      const view = await viewOf(call);
+      return view === null ? [] : await pinnedIn(view, fleet);
+    } catch (error) {
+      if (!(error instanceof StoreUnavailable)) throw error;
+      onFault(error);
+      return [];
+    }
+  };
+
+  return { ...desk, answer, suggest, download, pinned };
 };
 
 async function* filePieces(store: Store, { id }: ShopView, name: string): AsyncGenerator<string> {

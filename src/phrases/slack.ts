@@ -1,3 +1,6 @@
+import type { Mm } from '../calc/index.ts';
+import type { Show } from './show.ts';
+
 /** What only Slack has a place for: the app's own page, its forms, its home. */
 export type SlackPhrases = {
   readonly appName: string;
@@ -19,4 +22,16 @@ export type SlackPhrases = {
   /** Where a form cannot open by itself. */
   readonly formNeeded: string;
   readonly openForm: string;
+  /** Over the shop's own standards. */
+  readonly standards: string;
+  readonly standard: (
+    of: {
+      readonly part: string;
+      readonly revision: number;
+      readonly blankDiameter: Mm;
+      readonly toothCount: number;
+    },
+    show: Show,
+  ) => string;
+  readonly showStandard: string;
 };

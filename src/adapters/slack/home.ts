@@ -1,6 +1,6 @@
 import type { HomeView, KnownBlock } from '@slack/types';
-import type { Command } from '../../desk/index.ts';
-import type { Book } from '../../phrases/index.ts';
+import type { Command, PinnedStandard } from '../../desk/index.ts';
+import { type Book, showIn } from '../../phrases/index.ts';
 import { shortened } from '../common/fields.ts';
 import { verbSummary } from '../common/spoken.ts';
 import { optionOf } from './form.ts';
@@ -52,13 +52,40 @@ const verbBlocks = (book: Book, command: Command): readonly KnownBlock[] => [
   ...actionsOf([openButton(command, `/${command.path.join(' ')}`)]),
 ];
 
-/** What a person finds under the bot's own name. */
-export const homeView = (book: Book, fleet: readonly Command[]): HomeView => {
+/** Sends the line that stands behind it, answered to whoever presses it alone. */
+export const SAY = 'say';
+
+const standardBlocks = (book: Book, pinned: readonly PinnedStandard[]): readonly KnownBlock[] =>
+  pinned.length === 0
+    ? []
+    : [
+        { type: 'header', text: plain(book.slack.standards) },
+        ...pinned.map(
+          (standard, index): KnownBlock => ({
+            type: 'section',
+            text: plain(book.slack.standard(standard, showIn(standard.units))),
+            accessory: {
+              type: 'button',
+              action_id: `${SAY}:${String(index)}`,
+              value: standard.words,
+              text: plain(book.slack.showStandard),
+            },
+          }),
+        ),
+      ];
+
+/** What a person finds under the bot's own name: what the shop has decided, and the forms. */
+export const homeView = (
+  book: Book,
+  fleet: readonly Command[],
+  pinned: readonly PinnedStandard[] = [],
+): HomeView => {
   const forms = fleet.filter(hasForm);
   return {
     type: 'home',
     blocks: [
       { type: 'section', text: plain(book.slack.home) },
+      ...standardBlocks(book, pinned),
       ...forms.slice(0, SHOWN).flatMap((command) => verbBlocks(book, command)),
       ...(forms.length > SHOWN ? verbMenu(book, forms) : []),
       { type: 'context', elements: [plain(book.footing)] },

@@ -20,7 +20,7 @@ import {
   SUGGESTS,
   verbForm,
 } from './form.ts';
-import { CHOOSE, homeView, OPEN, openButton, verbMenu } from './home.ts';
+import { CHOOSE, homeView, OPEN, openButton, SAY, verbMenu } from './home.ts';
 import { LIMITS } from './limits.ts';
 import { FROM_MESSAGE, OPEN_SETUP } from './manifest.ts';
 import { namesSomebody } from './mentions.ts';
@@ -65,15 +65,35 @@ type At = {
 const commandAt = (desk: Desk, path: string): Command | undefined =>
   desk.fleet.find((each) => each.path.join(' ') === path);
 
-/** The verb of a line that says nothing more, where its form can ask for the rest. */
-const bareVerb = (desk: Desk, line: string): Command | null => {
+/** A root by itself means its set-up, and that its form; the desk would answer with the help. */
+const rootForm = (desk: Desk, line: string): Command | null => {
   const root = line.replace('/', '');
   const isRoot = desk.fleet.some(({ path }) => path[0] === root);
+  return (isRoot ? commandAt(desk, `${root} setup`) : null) ?? null;
+};
+
+/** The verb of a line that says nothing more: where that is not enough, its form asks for the rest. */
+const bareVerb = (desk: Desk, line: string): Command | null => {
   const way = route(line, desk.fleet);
   if (!('command' in way) || line.split(' ').length > way.skip) return null;
-  // A root by itself means its set-up; the desk would answer with the help.
-  const command = isRoot ? commandAt(desk, `${root} setup`) : way.command;
-  return command === undefined || command.parameters.length === 0 ? null : command;
+  return way.command.parameters.length === 0 ? null : way.command;
+};
+
+/** Asks a line that is only a verb; `ask` opens what asks for the rest, where something is missing. */
+const bareAnswered = async (
+  { flow, formPatienceMs }: Listening,
+  { sender, handle }: At,
+  call: Call,
+  ask: () => Promise<void>,
+): Promise<void> => {
+  const asked = flow.ask(call);
+  const early = await within(
+    asked.catch(() => null),
+    formPatienceMs,
+    null,
+  );
+  const isMissing = early?.kind === 'refusal' && early.refusal.code === 'missing';
+  await (isMissing ? ask() : flow.send(sender, handle, call, asked));
 };
 
 /** Whether nothing but a root was typed that has no set-up. */
@@ -127,16 +147,22 @@ const asked = async (
   const typed = typedText(body.text ?? '', namesSomebody(undefined));
   const { words, isPrivate } = quietly(typed, book.slack.onlyMeWords);
   const line = `${body.command} ${words}`.trim();
-  const bare = bareVerb(desk, line);
-  if (bare !== null) {
-    await openVerb(listening, at, body.trigger_id, bare, isPrivate);
+  const root = rootForm(desk, line);
+  if (root !== null) {
+    await openVerb(listening, at, body.trigger_id, root, isPrivate);
     return;
   }
   if (isBareRoot(desk, line)) {
     await choosing(listening, at, line.slice(1));
     return;
   }
-  await flow.answer(sender, handle, callOf(handle, id, { words: line }, isPrivate));
+  const call = callOf(handle, id, { words: line }, isPrivate);
+  const bare = bareVerb(desk, line);
+  await (bare === null
+    ? flow.answer(sender, handle, call)
+    : bareAnswered(listening, at, call, () =>
+        openVerb(listening, at, body.trigger_id, bare, isPrivate),
+      ));
 };
 
 /** A root whose verbs stand side by side: each opens its form. */
@@ -340,6 +366,10 @@ export const listen = (app: App, listening: Listening): void => {
     go('action', there, () => {
       if ((name.startsWith(`${OPEN}:`) || name === CHOOSE) && command !== undefined)
         return openVerb(listening, there, trigger, command, false);
+      if (name.startsWith(`${SAY}:`) && value !== '') {
+        const line = callOf(there.handle, there.id, { words: value }, true);
+        return flow.answer(there.sender, there.handle, line);
+      }
       if (control !== null) return pressed(listening, there, trigger, control);
       const call = callOf(there.handle, there.id, NOTHING, true);
       return flow.say(there.sender, there.handle, call, sentence(book.chat.gone));
@@ -420,26 +450,36 @@ export const listen = (app: App, listening: Listening): void => {
     const { words, isPrivate } = quietly(typed, book.slack.onlyMeWords);
     go('mention', there, () => {
       const { sender, id } = there;
-      const bare = bareVerb(desk, words === '' ? '/knurl' : words);
+      const line = words === '' ? '/knurl' : words;
       const call = callOf(handle, id, { words }, isPrivate);
+      // A mention opens no form: a button does.
+      const offer = (command: Command): Promise<void> =>
+        flow.say(sender, handle, call, sentence(book.slack.formNeeded), [
+          openButton(command, book.slack.openForm),
+        ]);
+      const root = rootForm(desk, line);
+      if (root !== null) return offer(root);
+      const bare = bareVerb(desk, line);
       return bare === null
         ? flow.answer(sender, handle, call)
-        : flow.say(sender, handle, call, sentence(book.slack.formNeeded), [
-            openButton(bare, book.slack.openForm),
-          ]);
+        : bareAnswered(listening, there, call, () => offer(bare));
     });
     await Promise.resolve();
   });
 
-  app.event('app_home_opened', async ({ event, client }) => {
+  const homeFor = async (client: webApi.WebClient, shop: string, person: string): Promise<void> => {
+    const looked = desk.pinned({ shop }).catch((error: unknown) => {
+      log.fault('home', { fault: faultText(error), error });
+      return [];
+    });
+    // The forms are there in any case.
+    const pinned = await within(looked, RECALL_MS, []);
+    await openSender(client).home(person, homeView(book, desk.fleet, pinned));
+  };
+
+  app.event('app_home_opened', async ({ event, body, client, context }) => {
     if (event.tab === 'messages') return;
-    const view = homeView(book, desk.fleet);
-    keep(
-      'home',
-      openSender(client)
-        .home(event.user, view)
-        .then(() => undefined),
-    );
+    keep('home', homeFor(client, context.teamId ?? body.team_id, event.user));
     await Promise.resolve();
   });
 };

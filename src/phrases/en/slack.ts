@@ -20,4 +20,8 @@ export const slack: SlackPhrases = {
   formLate: 'Slack gave the form no time to open. Press the button to open it now.',
   formNeeded: 'Press the button to fill it in, or say the bar, the pattern and the pitch.',
   openForm: 'Open the form',
+  standards: 'Standards of this shop',
+  standard: ({ part, revision, blankDiameter, toothCount }, show) =>
+    `${part} rev ${String(revision)}: turn to ${show.both(blankDiameter)}, ${String(toothCount)} teeth`,
+  showStandard: 'Show',
 };

@@ -1,33 +1,10 @@
 /** Who may what, by what Slack knows of people: administrators, user groups, those who are mentioned. */
-import { expect, onTestFinished, test } from 'vitest';
-import { FLEET } from '../../../commands/index.ts';
-import { openRecordsDesk } from '../../../src/desk/index.ts';
-import { newRecords } from '../../support/records.ts';
-import { openBot, readable, until, type Wanted } from './bot.ts';
+import { expect, test } from 'vitest';
+import { until } from '../../support/until.ts';
+import { openShops as opened } from './shops.ts';
 
 const RULE = 'rules add Lamp on at the back lathe';
 const LINE = '1.000 1018 straight 21tpi';
-
-/** A bot whose shops keep records. */
-const opened = async (wanted: Wanted = {}) => {
-  const { store } = await newRecords('sqlite');
-  const options = { platform: 'slack', program: 'test', now: Date.now };
-  const desk = openRecordsDesk(FLEET, store, options);
-  const bot = await openBot({ ...wanted, desk });
-  onTestFinished(async () => {
-    expect(bot.platform.faults).toEqual([]);
-    await bot.stop();
-  });
-  const answerTo = async (act: () => Promise<unknown>): Promise<string> => {
-    const before = bot.platform.posted.length;
-    await act();
-    await until(() => bot.platform.posted.length > before, 'an answer');
-    return readable(bot.platform.posted.at(-1)?.body ?? '');
-  };
-  const shop = (words: string, id: string) =>
-    answerTo(() => bot.people.slash(words, { id }, { command: '/shop' }));
-  return { ...bot, answerTo, shop };
-};
 
 test('a user group named in a line gives its members their role, and nobody else', async () => {
   const bot = await opened();

@@ -7,6 +7,7 @@ import { literally, typedText } from '../../../src/adapters/slack/escape.ts';
 import { verbForm } from '../../../src/adapters/slack/form.ts';
 import { homeView } from '../../../src/adapters/slack/home.ts';
 import { type Message, render } from '../../../src/adapters/slack/render.ts';
+import { mm } from '../../../src/calc/index.ts';
 import { en } from '../../../src/phrases/index.ts';
 import { buttonsOf } from '../../platforms/slack/people.ts';
 import { ruleFaults } from '../../platforms/slack/rules.ts';
@@ -97,7 +98,15 @@ test('every verb has a form within the limits, and the home too', () => {
     expect(check('modal', view)).toBeNull();
     expect(ruleFaults('view', view)).toEqual([]);
   }
-  const home = homeView(en, FLEET);
+  const standard = {
+    part: 'P'.repeat(200),
+    revision: 12,
+    blankDiameter: mm(25),
+    toothCount: 65,
+    units: 'in',
+    words: `/knurl standard show "${'P'.repeat(200)}"`,
+  } as const;
+  const home = homeView(en, FLEET, Array(20).fill(standard) as (typeof standard)[]);
   expect(check('home', home)).toBeNull();
   expect(ruleFaults('view', home)).toEqual([]);
 });

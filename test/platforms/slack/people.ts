@@ -279,7 +279,7 @@ export const openPeople = (platform: Platform) => {
           {},
         ),
       ),
-    pressHome: (value: string, someone: Someone = {}) =>
+    pressHome: (value: string, someone: Someone = {}, action = 'open:0') =>
       send(
         'button',
         'interactive',
@@ -288,7 +288,7 @@ export const openPeople = (platform: Platform) => {
           {
             type: 'button' as const,
             block_id: 'b',
-            action_id: 'open:0',
+            action_id: action,
             action_ts: '1790000000.000001',
             value,
             text: plainText(value),
