@@ -9,6 +9,7 @@ import { questions } from './knurl/questions/index.ts';
 import { results } from './knurl/result.ts';
 import { setup } from './knurl/setup.ts';
 import { standard } from './knurl/standard.ts';
+import { today } from './knurl/today.ts';
 import { trouble } from './knurl/trouble.ts';
 import { why } from './knurl/why.ts';
 import { exportAll } from './shop/export.ts';
@@ -28,6 +29,7 @@ export const FLEET: readonly Command[] = [
   ...results,
   convert,
   find,
+  today,
   card,
   ...questions,
   why,

@@ -18,6 +18,9 @@ import { foundThing, type Openable, openChoice } from './foundThings.ts';
 /** Most that one answer shows. Judgement: a phone's screen, scrolled once or twice. */
 const SHOWN = 8;
 
+/** Longest that is looked for. Judgement: more words find less. */
+const LONGEST = 200;
+
 const EXAMPLES = ['flaking 304', 'results brass', 'standard WT-1042'] as const;
 
 /** May stand before what is looked for; a form says it. */
@@ -141,6 +144,16 @@ export const find = defineCommand({
   run: (context, said) =>
     visiting(context, async (visit) => {
       const text = said.wanted ?? '';
+      const value = Array.from(text).length;
+      if (value > LONGEST)
+        return refuse({
+          code: 'outOfRange',
+          what: 'wanted',
+          value,
+          min: 1,
+          max: LONGEST,
+          unit: 'characters',
+        });
       const asked = askedFor(text);
       if (!hasWords(asked.words) && asked.kind === null)
         return refuse({ code: 'missing', parameter: 'wanted', examples: EXAMPLES });

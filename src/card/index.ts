@@ -19,4 +19,5 @@ export type {
   ShopThing,
 } from './shopLines.ts';
 export type { ChangedSince, RevisionSaid, StandardStateSaid } from './standardLines.ts';
+export type { TodayPart } from './todayLines.ts';
 export type { Sure, WhyLabels, WhyLines, WhyRows } from './whyLines.ts';

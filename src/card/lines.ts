@@ -27,6 +27,7 @@ import type { QuestionLabels, QuestionLines, QuestionRows } from './questionLine
 import type { ResultLabels, ResultLines, ResultRows } from './resultLines.ts';
 import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
 import type { StandardLabels, StandardLines, StandardRows } from './standardLines.ts';
+import type { TodayLabels, TodayLines, TodayRows } from './todayLines.ts';
 import type { TroubleLabels, TroubleLines, TroubleRows } from './troubleLines.ts';
 import type { WhyLabels, WhyLines, WhyRows } from './whyLines.ts';
 
@@ -42,6 +43,7 @@ export type Lines = CheckLines &
   ResultLines &
   ShopLines &
   StandardLines &
+  TodayLines &
   TroubleLines &
   WhyLines & {
     turnTo: { readonly blankDiameter: Mm; readonly toothCount: number };
@@ -93,6 +95,7 @@ export type Rows = CheckRows &
   ResultRows &
   ShopRows &
   StandardRows &
+  TodayRows &
   TroubleRows &
   WhyRows & {
     material: { readonly name: string; readonly condition: string };
@@ -134,6 +137,7 @@ export type Labels = CheckLabels &
   ResultLabels &
   ShopLabels &
   StandardLabels &
+  TodayLabels &
   TroubleLabels &
   WhyLabels & {
     asIs: { readonly stock: Mm };

@@ -21,6 +21,7 @@ export {
 } from './csv/import.ts';
 export { MACHINE_SHEET } from './csv/machineSheet.ts';
 export { WHEEL_SHEET } from './csv/wheelSheet.ts';
+export { startOfYesterday } from './dayStart.ts';
 export { limitsOf, onDial } from './dial.ts';
 export {
   effectOf,
@@ -165,6 +166,14 @@ export {
 export { type SpokenNames, spokenNames } from './spoken.ts';
 export * from './standards/index.ts';
 export { type Tellable, toTell } from './telling.ts';
+export {
+  type SetUp,
+  type Some,
+  setUpSince,
+  standardsToDecide,
+  standardsToReview,
+  wrongSince,
+} from './today.ts';
 export { type ShopChange, type ShopView, type ShopWords, viewShop } from './view.ts';
 export {
   BARE_WHEEL,

@@ -15,6 +15,9 @@ const inDigits = (value: number, count: number): string => {
   return text;
 };
 
+/** No id of this moment or a later one sorts before this; every earlier one does. */
+export const firstIdAt = (at: number): string => inDigits(Math.max(0, at), MOMENT_DIGITS);
+
 export type NewId = (at: number) => string;
 
 /**

@@ -3,6 +3,7 @@ export { backup } from './backup.ts';
 export { BackupFault, type BackupFaultCode } from './backupFaults.ts';
 export { RecordsTooNew, StoreUnavailable, type UnavailableReason } from './faults.ts';
 export { enterTerms, leaveTerms, termsIn } from './findIndex.ts';
+export { firstIdAt } from './ids.ts';
 export { literally } from './literally.ts';
 export type { Engine } from './migrations/columns.ts';
 export { AddressWrong, type StorePlace, type StoreSettings, storePlace } from './place.ts';

@@ -12,6 +12,8 @@ const KINDS: { readonly [K in FoundKind]: { readonly one: string; readonly many:
 };
 
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+/** A question mark, or a full stop of somebody's own. */
+const isEnded = (text: string): boolean => /[.!?…]$/u.test(text);
 const quoted = (words: string): string => `“${words}”`;
 const list = (items: readonly string[]): string =>
   items.length <= 1
@@ -55,7 +57,8 @@ export const findRows: {
       `${by}, ${momentText(moment)}`,
     ]
       .filter((part) => part !== '')
-      .join('. '),
+      .map((part, at, parts) => (at === parts.length - 1 || isEnded(part) ? part : `${part}.`))
+      .join(' '),
   }),
 };
 

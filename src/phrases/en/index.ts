@@ -20,6 +20,7 @@ import { shopLabels } from './shopLines.ts';
 import { slack } from './slack.ts';
 import { standardLabels } from './standardLines.ts';
 import { terminal } from './terminal.ts';
+import { todayLabels } from './todayLines.ts';
 import { troubleLabels } from './troubleLines.ts';
 import { verbs } from './verbs.ts';
 import { whyLabels } from './whyLines.ts';
@@ -40,6 +41,7 @@ export const en: Book = {
     ...planLabels,
     ...questionLabels,
     ...resultLabels,
+    ...todayLabels,
     ...troubleLabels,
     ...shopLabels,
     ...standardLabels,

@@ -12,6 +12,7 @@ import { remedyLabel } from './remedies.ts';
 import { resultLines } from './resultLines.ts';
 import { shopLines } from './shopLines.ts';
 import { standardLines } from './standardLines.ts';
+import { todayLines } from './todayLines.ts';
 import { troubleLines } from './troubleLines.ts';
 import { whyLines } from './whyLines.ts';
 
@@ -35,6 +36,7 @@ export const lines: Book['lines'] = {
   ...resultLines,
   ...shopLines,
   ...standardLines,
+  ...todayLines,
   ...troubleLines,
   ...whyLines,
   turnTo: ({ blankDiameter, toothCount }, show) =>

@@ -82,6 +82,8 @@ const outOfRange = (refusal: OutOfRangeRefusal, show: Show): string => {
   const { what, value, min, max, unit } = refusal;
   if (what === 'textLength')
     return `That is ${String(value)} characters; a request fits in ${String(max)}. Say the bar, the pattern and the pitch, such as 1.000 straight 21tpi.`;
+  if (what === 'wanted')
+    return `That is ${String(value)} characters to look for. Say it in a few words; at most ${String(max)} characters.`;
   if (unit === 'characters')
     return `The ${thing(what)} has ${String(value)} characters; at most ${String(max)} are kept. Make it shorter.`;
   if (Number.isNaN(value)) return `The ${thing(what)} is missing.`;

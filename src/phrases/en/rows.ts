@@ -7,6 +7,7 @@ import { questionRows } from './questionLines.ts';
 import { resultRows } from './resultLines.ts';
 import { shopRows } from './shopLines.ts';
 import { standardRows } from './standardLines.ts';
+import { todayRows } from './todayLines.ts';
 import { troubleRows } from './troubleLines.ts';
 import { whyRows } from './whyLines.ts';
 
@@ -21,6 +22,7 @@ export const rows: Book['rows'] = {
   ...resultRows,
   ...shopRows,
   ...standardRows,
+  ...todayRows,
   ...troubleRows,
   ...whyRows,
   material: ({ name, condition }) => ({ label: 'Material', text: `${name}, ${condition}` }),
