@@ -53,6 +53,7 @@ export const importCommand = (what: keyof typeof LISTS): Command => {
     path: ['shop', verb, 'import'],
     examples: [`/shop ${verb} import`, `/shop ${verb} import replace`],
     parameters: z.object({ replace }),
+    takesFile: true,
     allowed: 'supervisor',
     run: (context, given) => taken(context, what, given.replace === true),
   });

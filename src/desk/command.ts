@@ -75,6 +75,8 @@ export type Command = {
   readonly lead?: { readonly name: string; readonly read: Lead };
   /** Names of those to show first where a platform cannot show them all. */
   readonly foremost: readonly string[];
+  /** It is given a file; a platform asks for one. */
+  readonly takesFile?: boolean;
   /** Everyone of this role and above may. */
   readonly allowed: Role;
   readonly run: (context: Context, given: unknown) => Reply | Promise<Reply>;
@@ -101,6 +103,7 @@ export const defineCommand = <S extends z.ZodRawShape>(definition: {
   readonly parameters: z.ZodObject<S>;
   readonly foremost?: readonly (keyof S & string)[];
   readonly lead?: { readonly name: keyof S & string; readonly read: Lead };
+  readonly takesFile?: boolean;
   readonly allowed: Role;
   readonly run: (context: Context, given: z.infer<z.ZodObject<S>>) => Reply | Promise<Reply>;
 }): Command => ({
@@ -109,6 +112,7 @@ export const defineCommand = <S extends z.ZodRawShape>(definition: {
   parameters: Object.values(definition.parameters.shape).map(parameterOf),
   foremost: definition.foremost ?? [],
   ...(definition.lead === undefined ? {} : { lead: definition.lead }),
+  ...(definition.takesFile === true ? { takesFile: true } : {}),
   allowed: definition.allowed,
   run: (context, given) => definition.run(context, definition.parameters.parse(given)),
 });

@@ -11,6 +11,7 @@ import {
   type ReadLine,
   readLine,
   type ShopUnits,
+  type Suggested,
   spanOf,
   tokensOf,
   type Vocabulary,
@@ -50,6 +51,8 @@ export type ShopFacts = {
   readonly last: Card | null;
   /** The shop's records, where there are any. */
   readonly visit?: Visit;
+  /** What the records offer while somebody types, beside names. */
+  readonly offers?: (kind: Suggested) => Promise<readonly Suggestion[]>;
   /** What is kept of a reply, and what it is given besides, before it is answered. */
   readonly settle?: (reply: Reply, context: Context) => Promise<Reply>;
 };
@@ -195,7 +198,10 @@ export const openDesk = (
     const command = fleet.find((c) => c.path.join(' ') === given.path.join(' '));
     const parameter = command?.parameters.find((each) => each.name === name);
     if (parameter === undefined) return [];
-    return suggestionsFor(parameter, typed, (await facts(call)).names);
+    const { names, offers } = await facts(call);
+    const { suggests } = parameter;
+    const more = suggests === undefined ? [] : await offers?.(suggests);
+    return suggestionsFor(parameter, typed, names, more);
   };
 
   const answerTo = async (call: Call): Promise<Answer> => {

@@ -1,9 +1,12 @@
 import type { Card } from '../card/index.ts';
+import type { Suggestion } from '../refusal.ts';
 import {
   answerTo,
   effectOf,
   enterShop,
   exportFiles,
+  latestCodes,
+  listPeople,
   once,
   type ShopChange,
   type ShopOutside,
@@ -22,6 +25,7 @@ import {
   numberOf,
   plainText,
   type ShopUnits,
+  type Suggested,
   unitOf,
 } from '../words/index.ts';
 import { type Answer, choicesIn } from './answer.ts';
@@ -65,6 +69,19 @@ const postedCard = (effect: unknown): Answer | null =>
     ? { kind: 'card', card: (effect as Extract<Effect, { card: Card }>).card, effects: [] }
     : null;
 
+/** So many of the newest cards are offered while somebody types. Judgement. */
+const CARDS_OFFERED = 500;
+
+const offersIn = async (view: ShopView, kind: Suggested): Promise<readonly Suggestion[]> => {
+  if (kind === 'cards')
+    return (await latestCodes(view, CARDS_OFFERED)).map(({ code, words }) => ({
+      label: `${code}  ${words}`,
+      words: code,
+    }));
+  if (kind !== 'people') return [];
+  return (await listPeople(view)).map(({ name }) => ({ label: name, words: name }));
+};
+
 /** An answer that leaves nothing behind but itself. */
 class Refused extends Error {
   readonly answer: Answer;
@@ -106,7 +123,10 @@ export const openRecordsDesk = (
       return { units: UNKNOWN_UNITS, names: { wheels: [], machines: [] }, last: null };
     const names = await spokenNames(view);
     const visit = visits.get(call);
-    if (visit === undefined) return { units: (await settingsOf(view)).units, names, last: null };
+    if (visit === undefined) {
+      const { units } = await settingsOf(view);
+      return { units, names, last: null, offers: (kind) => offersIn(view, kind) };
+    }
     return {
       units: visit.settings.units,
       names,

@@ -27,19 +27,27 @@ const rank = (typed: string, offer: string): number => {
   return offer[at - 1] === ' ' ? 2 : 3;
 };
 
+/** What it sends says more of an offer than what is shown beside it. */
+const rankOf = (typed: string, { words, label }: Suggestion): number => {
+  const byWords = rank(typed, plainText(words));
+  return Number.isFinite(byWords) ? byWords : WORDS_RANKS + rank(typed, plainText(label));
+};
+const WORDS_RANKS = 4;
+
 /** What may be meant by the few letters typed so far, the likeliest first. */
 export const suggestionsFor = (
   parameter: AnyParameter,
   typed: string,
   names: Names,
+  more: readonly Suggestion[] = [],
 ): readonly Suggestion[] => {
   const offers =
     parameter.suggests === undefined
       ? plainly([...new Set((parameter.values ?? []).map(([phrase]) => phrase))])
-      : offersOf(parameter.suggests, names);
+      : [...more, ...offersOf(parameter.suggests, names)];
   const plain = plainText(typed).trim();
   const ranked = offers
-    .map((offer) => ({ offer, rank: rank(plain, plainText(offer.words)) }))
+    .map((offer) => ({ offer, rank: rankOf(plain, offer) }))
     .filter((each) => Number.isFinite(each.rank))
     .sort((a, b) => a.rank - b.rank || a.offer.words.length - b.offer.words.length);
   if (ranked.length > 0) return ranked.map((each) => each.offer);

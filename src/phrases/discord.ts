@@ -8,6 +8,12 @@ export type DiscordPhrases = {
   readonly unsent: string;
   readonly formLate: string;
   readonly moreWords: string;
+  /** The option that takes a file. */
+  readonly file: string;
+  readonly fileTooLarge: (name: string, megabytes: number) => string;
+  readonly filesHere: string;
+  /** A file goes to one person alone, and there was no way to them. */
+  readonly filesClosed: string;
   /** Why something could not be delivered: the end of a sentence. */
   readonly faults: {
     readonly notThere: string;

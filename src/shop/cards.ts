@@ -147,3 +147,16 @@ export const latestCards = async (
   if (before !== undefined) query = query.where('id', '<', before);
   return (await query.execute()).map(cardOf);
 };
+
+/** Codes with the lines they answered, the newest first: enough to choose one by. */
+export const latestCodes = async (
+  view: ShopView,
+  limit: number,
+): Promise<readonly Pick<KeptCard, 'code' | 'words'>[]> =>
+  await view.db
+    .selectFrom('card')
+    .select(['code', 'words'])
+    .where('shop', '=', view.id)
+    .orderBy('id', 'desc')
+    .limit(limit)
+    .execute();

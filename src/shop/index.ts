@@ -8,6 +8,7 @@ export {
   type KeptCard,
   keepCard,
   latestCards,
+  latestCodes,
 } from './cards.ts';
 export { type Carried, type Claimed, claimEffects, type NoteOf } from './claims.ts';
 export { CODE_SIGNS, readCode } from './codes.ts';

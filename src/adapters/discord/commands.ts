@@ -18,7 +18,7 @@ import {
 } from '../common/fields.ts';
 import { parameterName, verbSummary } from '../common/spoken.ts';
 import { LIMITS } from './limits.ts';
-import { ONLY_ME_OPTION, optionName, WORDS_OPTION } from './receive.ts';
+import { FILE_OPTION, ONLY_ME_OPTION, optionName, WORDS_OPTION } from './receive.ts';
 
 type Choice = { readonly name: string; readonly value: string };
 
@@ -89,6 +89,19 @@ const ownOptions = (book: Book): readonly APIApplicationCommandOption[] => [
   },
 ];
 
+/** Asked for first: nothing can be done without it. */
+const fileOptions = (book: Book, command: Command): readonly APIApplicationCommandOption[] =>
+  command.takesFile === true
+    ? [
+        {
+          type: ApplicationCommandOptionType.Attachment,
+          name: FILE_OPTION,
+          description: book.discord.file,
+          required: true,
+        },
+      ]
+    : [];
+
 /**
  * A verb as a sub-command. The parameters of a record stand in the order of their weight: what does
  * not fit among the options is said in the words.
@@ -99,15 +112,18 @@ const subcommandOf = (
   most: number,
 ): APIApplicationCommandSubcommandOption => {
   const own = ownOptions(book);
+  const file = fileOptions(book, command);
   const ordered = byWeight(command);
-  const room = Math.min(most, LIMITS.options - own.length);
+  const room = Math.min(most, LIMITS.options - own.length - file.length);
   return {
     type: ApplicationCommandOptionType.Subcommand,
     name: command.path.at(-1) ?? '',
     description: shortened(verbSummary(book, command), LIMITS.description),
-    options: [...ordered.slice(0, room).map((each) => optionOf(book, each)), ...own] as NonNullable<
-      APIApplicationCommandSubcommandOption['options']
-    >,
+    options: [
+      ...file,
+      ...ordered.slice(0, room).map((each) => optionOf(book, each)),
+      ...own,
+    ] as NonNullable<APIApplicationCommandSubcommandOption['options']>,
   };
 };
 

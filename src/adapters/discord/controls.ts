@@ -94,7 +94,7 @@ const act = async (controls: Controls, at: At, control: ControlId): Promise<bool
         return true;
       }
       const given = { pressed: { of: control.of, choice: control.choice } };
-      await flow.answer(handle, { ...call, given }, since);
+      await flow.answer(handle, { ...call, given }, { since });
       return true;
     }
     default:
@@ -143,5 +143,9 @@ export const submitted = async (
     await flow.say(handle, asked, sentence(book.chat.nothingToRead));
     return;
   }
-  await flow.answer(handle, await withMentions({ ...call, given }, interaction.guild), since);
+  await flow.answer(
+    handle,
+    { ...call, given },
+    { since, prepare: (plain) => withMentions(plain, interaction.guild) },
+  );
 };

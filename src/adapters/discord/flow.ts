@@ -4,10 +4,11 @@ import type { Book, SpokenCard } from '../../phrases/index.ts';
 import type { Log } from '../common/log.ts';
 import { hasMoreCautions, sentence, spoken } from '../common/spoken.ts';
 import { faultText, isOver, isRefused } from './faults.ts';
+import { FileRefused, filesFor } from './files.ts';
 import { LIMITS } from './limits.ts';
 import { addPictures, type Draw, type Standing } from './pictures.ts';
 import { channelOf } from './places.ts';
-import { type ExtraButton, type Message, render, type Shown } from './render.ts';
+import { type ExtraButton, type Message, openly, render, type Shown } from './render.ts';
 import type { Acknowledged, Handle, Sender } from './send.ts';
 
 export type FlowOptions = {
@@ -44,6 +45,10 @@ const extrasOf = (answer: Answer, call: Call, of: string, book: Book): readonly 
     : [];
 };
 
+/** What a call still needs before it is asked: names for mentions, the text of a file. */
+export type Prepare = (call: Call) => Promise<Call>;
+const AS_IT_IS: Prepare = (call) => Promise.resolve(call);
+
 export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOptions) => {
   const own = (call: Call, card: SpokenCard, extra: readonly ExtraButton[] = []): Reply => ({
     card,
@@ -62,10 +67,11 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
     answer,
   });
 
-  const replyFor = async (call: Call): Promise<Reply> => {
+  const replyFor = async (call: Call, prepare: Prepare): Promise<Reply> => {
     try {
-      return replyOf(call, await desk.answer(call));
+      return replyOf(call, await desk.answer(await prepare(call)));
     } catch (error) {
+      if (error instanceof FileRefused) return own(call, sentence(error.message));
       log.fault('answer', { interaction: call.interactionId, fault: faultText(error), error });
       return own(call, sentence(book.chat.fault));
     }
@@ -228,6 +234,29 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
     await addPictures({ draw, noPicture: book.terminal.noPicture, onFault }, answer, standing);
   };
 
+  /** Files go to whoever asked for them, and to nobody else. */
+  const withFiles = async (
+    call: Call,
+    { answer }: Reply,
+    send: (file: Message, index: number) => Promise<unknown>,
+  ): Promise<void> => {
+    if (answer === null) return;
+    try {
+      const files = await filesFor(desk, book, call, answer);
+      for (const [index, file] of files.entries()) await send(file, index);
+    } catch (error) {
+      log.fault('files', { interaction: call.interactionId, fault: faultText(error) });
+      if (!isRefused(error, 'cannotSendToPerson')) return;
+      const shown = shownAs(call, own(call, sentence(book.discord.filesClosed)));
+      const key = { from: FILES_FROM };
+      await inChannel(call, render({ ...shown, isPrivate: false }), key).catch(
+        (second: unknown) => {
+          log.fault('excuse', { interaction: call.interactionId, fault: faultText(second) });
+        },
+      );
+    }
+  };
+
   /** Waits for an answer as long as the platform allows, and then without holding anybody up. */
   const answering = async (
     handle: Handle,
@@ -247,13 +276,18 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
       await excuse(handle, call, await making, error);
       return;
     }
-    await withPictures(call, early ?? (await making), standing);
+    const reply = early ?? (await making);
+    await withPictures(call, reply, standing);
+    if (standing !== null) await withFiles(call, reply, (file) => sender.followUp(handle, file));
   };
 
   return {
     /** An interaction: acknowledged in time, answered when the answer is there. */
-    answer: (handle: Handle, call: Call, since = performance.now()): Promise<void> =>
-      answering(handle, call, replyFor(call), since),
+    answer: (
+      handle: Handle,
+      call: Call,
+      { since = performance.now(), prepare = AS_IT_IS }: { since?: number; prepare?: Prepare } = {},
+    ): Promise<void> => answering(handle, call, replyFor(call, prepare), since),
 
     /** Something said without asking the desk. */
     say: (handle: Handle, call: Call, card: SpokenCard): Promise<void> =>
@@ -271,8 +305,8 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
     },
 
     /** A message in a channel: there is nothing to acknowledge, and no private reply. */
-    answerMessage: async (call: Call, message: string): Promise<void> => {
-      const reply = await replyFor(call);
+    answerMessage: async (call: Call, message: string, prepare: Prepare): Promise<void> => {
+      const reply = await replyFor(call, prepare);
       let standing: Standing | null = null;
       try {
         const shown = { ...shownAs(call, reply), isPrivate: false };
@@ -286,6 +320,10 @@ export const openFlow = ({ desk, book, sender, log, draw, deferAfterMs }: FlowOp
         return;
       }
       await withPictures(call, reply, standing);
+      await withFiles(call, reply, async (file, index) => {
+        const direct = await sender.directChannel(call.person.id);
+        await sender.post(direct, openly(file), `${call.interactionId} file ${String(index)}`);
+      });
     },
   };
 };
@@ -293,3 +331,4 @@ export type Flow = ReturnType<typeof openFlow>;
 
 /** Apart from the messages of any card. */
 const EXCUSE_FROM = 900;
+const FILES_FROM = 800;

@@ -32,8 +32,9 @@ export const LIMITS = {
   threadName: 100,
   /** Pins a channel holds. */
   pins: 250,
-  /** A file of a message, in bytes. */
-  file: 10 * 1024 * 1024,
+  /** All files of a message together, in bytes, where nobody pays for more; and how many. */
+  files: 10 * 1024 * 1024,
+  filesInMessage: 10,
 } as const;
 
 /** Codes with which Discord refuses (topics/opcodes-and-status-codes), by what they mean here. */

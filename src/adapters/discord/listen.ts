@@ -12,9 +12,19 @@ import { sentence } from '../common/spoken.ts';
 import { within } from '../common/within.ts';
 import { type Controls, pressed, submitted } from './controls.ts';
 import { faultText } from './faults.ts';
+import { withFiles } from './files.ts';
 import { LIMITS } from './limits.ts';
 import { withMentions } from './mentions.ts';
-import { callOf, focusedIn, handleOf, isForBot, messageCall, typedIn, wordsOf } from './receive.ts';
+import {
+  callOf,
+  filesOf,
+  focusedIn,
+  handleOf,
+  isForBot,
+  messageCall,
+  typedIn,
+  wordsOf,
+} from './receive.ts';
 
 export type Listening = Controls & {
   readonly client: Client<true>;
@@ -32,7 +42,11 @@ export const openListeners = (listening: Listening) => {
     const since = performance.now();
     const { path, options: filled, isPrivate } = typedIn(interaction, desk.fleet);
     const call = callOf(interaction, { path, options: filled }, isPrivate);
-    await flow.answer(handleOf(interaction), await withMentions(call, interaction.guild), since);
+    await flow.answer(handleOf(interaction), call, {
+      since,
+      prepare: async (plain) =>
+        await withFiles(book, await withMentions(plain, interaction.guild), filesOf(interaction)),
+    });
   };
 
   const fromMessage = async (interaction: MessageContextMenuCommandInteraction): Promise<void> => {
@@ -42,7 +56,10 @@ export const openListeners = (listening: Listening) => {
     const handle = handleOf(interaction);
     await (words === ''
       ? flow.say(handle, call, sentence(book.chat.nothingToRead))
-      : flow.answer(handle, await withMentions(call, interaction.guild), since));
+      : flow.answer(handle, call, {
+          since,
+          prepare: (plain) => withMentions(plain, interaction.guild),
+        }));
   };
 
   const suggest = async (interaction: AutocompleteInteraction): Promise<void> => {
@@ -91,8 +108,14 @@ export const openListeners = (listening: Listening) => {
         log.note('repeated', { interaction: event.id });
         return;
       }
-      const call = messageCall(event, client.user.id);
-      await flow.answerMessage(await withMentions(call, event.guild), event.id);
+      await flow.answerMessage(
+        messageCall(event, client.user.id),
+        event.id,
+        async (plain) =>
+          await withFiles(book, await withMentions(plain, event.guild), [
+            ...event.attachments.values(),
+          ]),
+      );
     },
   };
 };

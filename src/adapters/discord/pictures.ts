@@ -20,6 +20,16 @@ export type Picturing = {
   readonly onFault: (error: unknown) => void;
 };
 
+/** As many as a message holds. */
+const fitting = (drawn: readonly Drawn[]): readonly Drawn[] => {
+  let left: number = LIMITS.files;
+  return drawn.filter(({ bytes }) => {
+    if (bytes.length > left) return false;
+    left -= bytes.length;
+    return true;
+  });
+};
+
 /**
  * The card stands already; its pictures are added to it when they are there. Where one cannot be
  * made or sent, the message says that nothing is missing but the picture.
@@ -35,9 +45,7 @@ export const addPictures = async (
     onFault(error);
     return [];
   });
-  const shown = drawn
-    .filter(({ bytes }) => bytes.length <= LIMITS.file)
-    .slice(0, LIMITS.galleryItems);
+  const shown = fitting(drawn).slice(0, LIMITS.galleryItems);
   const note = shown.length < wanted ? noPicture : null;
   try {
     await change(pictured(message, shown, note));

@@ -1,4 +1,5 @@
 import {
+  type Attachment,
   type AutocompleteInteraction,
   type BaseInteraction,
   type ChatInputCommandInteraction,
@@ -13,6 +14,8 @@ import type { Handle } from './send.ts';
 /** The option that takes a whole line, and the one that hides the reply. */
 export const WORDS_OPTION = 'words';
 export const ONLY_ME_OPTION = 'only-me';
+/** The option that takes a file. */
+export const FILE_OPTION = 'file';
 
 /** A parameter's name in the form that Discord takes for an option. */
 export const optionName = (name: string): string =>
@@ -106,7 +109,7 @@ export const typedIn = (
     (command?.parameters ?? []).map(({ name }) => [optionName(name), name] as const),
   );
   const filled = data.flatMap(({ name, value }) =>
-    value === undefined || name === ONLY_ME_OPTION
+    value === undefined || name === ONLY_ME_OPTION || name === FILE_OPTION
       ? []
       : [[names.get(name) ?? name, value] as const],
   );
@@ -115,6 +118,12 @@ export const typedIn = (
     options: Object.fromEntries(filled),
     isPrivate: data.some(({ name, value }) => name === ONLY_ME_OPTION && value === true),
   };
+};
+
+/** The files that came with a command. */
+export const filesOf = ({ options }: ChatInputCommandInteraction): readonly Attachment[] => {
+  const { data } = leafOf('', options.data);
+  return data.flatMap(({ attachment }) => (attachment ? [attachment] : []));
 };
 
 /** The parameter that is being typed. */

@@ -28,7 +28,7 @@ export type Message = {
     readonly attachments?: readonly {
       readonly id: string;
       readonly filename: string;
-      readonly description: string;
+      readonly description?: string;
     }[];
   };
   readonly files: readonly RawFile[];
@@ -206,6 +206,34 @@ const messageOf = (shown: Shown, pieces: readonly Piece[]): Message => {
     files: [],
   };
 };
+
+/** A sentence with files, for one person alone. */
+export const sentenceWith = (
+  text: string,
+  files: readonly { readonly name: string; readonly bytes: Buffer }[],
+): Message => ({
+  body: {
+    flags: MessageFlags.IsComponentsV2 | NO_EMBEDS | MessageFlags.Ephemeral,
+    components: [
+      { type: ComponentType.TextDisplay, content: escaped(text) },
+      ...files.map(
+        ({ name }): APIMessageTopLevelComponent => ({
+          type: ComponentType.File,
+          file: { url: `attachment://${name}` },
+        }),
+      ),
+    ],
+    allowed_mentions: { parse: [] },
+    attachments: files.map(({ name }, index) => ({ id: String(index), filename: name })),
+  },
+  files: files.map(({ name, bytes }) => ({ name, data: bytes })),
+});
+
+/** Where it is seen by one person anyhow. */
+export const openly = (message: Message): Message => ({
+  ...message,
+  body: { ...message.body, flags: message.body.flags & ~MessageFlags.Ephemeral },
+});
 
 /** All components of a message, those inside others too. */
 const count = (components: readonly object[]): number =>

@@ -19,6 +19,12 @@ export const discord: DiscordPhrases = {
   unsent: 'The answer was made but could not be shown. Press the button to see it.',
   formLate: 'Discord gave the form no time to open. Press that button again.',
   moreWords: 'Anything more, in your own words',
+  file: 'The file, as a table with commas between (CSV)',
+  fileTooLarge: (name, megabytes) =>
+    `${name} is larger than ${String(megabytes)} MB, more than can go this way.`,
+  filesHere: 'The files, for you alone.',
+  filesClosed:
+    'The files go to you alone, and you take no direct messages from this server. Ask by the slash command instead.',
   faults: {
     notThere: 'the channel is not there, or the bot may not see it',
     noPermission: "the bot's role may not do that in this channel",
