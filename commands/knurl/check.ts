@@ -115,6 +115,8 @@ export const check = defineCommand({
     'pattern',
     'pitch',
     'material',
+    'wheel',
+    'machine',
     'count',
     'crest',
     'seam',

@@ -96,6 +96,7 @@ export const plan = defineCommand({
     '/knurl plan finish 19.8-20.1mm RGE 0.8 1018 long 15mm',
   ],
   parameters: planFields,
+  foremost: ['finish', 'pattern', 'pitch', 'material', 'length', 'stickout', 'wheel', 'machine'],
   allowed: 'operator',
   run: async (context, given) => {
     if (given.finish === undefined) return missingFinish(context);

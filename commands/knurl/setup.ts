@@ -57,6 +57,20 @@ export const setup = defineCommand({
     '/knurl 7/8 diagonal left 96dp brass',
   ],
   parameters: setupParameters,
+  foremost: [
+    'diameter',
+    'pattern',
+    'pitch',
+    'material',
+    'length',
+    'stickout',
+    'wheel',
+    'machine',
+    'finish',
+    'teeth',
+    'asIs',
+    'bore',
+  ],
   allowed: 'operator',
   run: async (context, said) => {
     const picked = await pickedFor(context, said.part);

@@ -106,6 +106,8 @@ export const trouble = defineCommand({
     'pattern',
     'pitch',
     'material',
+    'wheel',
+    'machine',
     'bite',
     'partsOnWheel',
     'count',

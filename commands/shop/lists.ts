@@ -20,6 +20,7 @@ import {
   type Register,
   removeFrom,
 } from '../../src/shop/index.ts';
+import type { Suggested } from '../../src/words/index.ts';
 import { nameField, type Others } from './named.ts';
 import { refused, shopCard, visiting } from './visit.ts';
 
@@ -39,6 +40,8 @@ export type Listed<
   readonly name: string;
   readonly addLine: string;
   readonly lead: Lead;
+  /** Where its names come from while somebody types one. */
+  readonly suggests?: Suggested;
   readonly inShort: (visit: Visit, items: readonly T[]) => Promise<(item: T) => readonly Fact[]>;
   readonly facts: (visit: Visit, item: T) => Promise<readonly Fact[]>;
 };
@@ -105,7 +108,7 @@ const showCommand = <
   defineCommand({
     path: ['shop', of.verb, 'show'],
     examples: [`/shop ${of.verb} show ${of.name}`],
-    parameters: z.object({ name: nameField(NO_OTHERS, [of.name]) }),
+    parameters: z.object({ name: nameField(NO_OTHERS, [of.name], of.suggests) }),
     lead: { name: 'name', read: of.lead },
     allowed: 'operator',
     run: (context, { name }) =>
@@ -167,7 +170,7 @@ export const removeCommand = <
   return defineCommand({
     path: ['shop', of.verb, 'remove'],
     examples: [`/shop ${of.verb} remove ${of.name}`],
-    parameters: z.object({ name: nameField(others, [of.name]), evenInUse }),
+    parameters: z.object({ name: nameField(others, [of.name], of.suggests), evenInUse }),
     lead: { name: 'name', read: lead(others) },
     allowed: 'supervisor',
     run: (context, given) =>

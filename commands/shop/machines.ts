@@ -118,11 +118,13 @@ export const machineList: Listed<'machine', Machine> = {
   name: NAME,
   addLine: `/shop machines add ${NAME} speeds 60 90 140 215 330 500 rpm dial reads diameter inch dials`,
   lead: known,
+  suggests: 'machines',
   inShort: () => Promise.resolve(machineInShort),
   facts: (_, machine) => Promise.resolve(machineFacts(machine)),
 };
 
 const name = nameField(records, [NAME]);
+const listed = nameField(records, [NAME], 'machines');
 
 /** A machine that cards can be made for. */
 const add = defineCommand({
@@ -145,7 +147,7 @@ const rename = renameField(records);
 const change = defineCommand({
   path: ['shop', 'machines', 'change'],
   examples: [`/shop machines change ${NAME} dial reads radius`],
-  parameters: z.object({ name, newName: rename, ...fields }),
+  parameters: z.object({ name: listed, newName: rename, ...fields }),
   lead: { name: 'name', read: known },
   allowed: 'supervisor',
   run: (context, given) =>

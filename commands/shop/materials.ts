@@ -75,11 +75,13 @@ export const materialList: Listed<'material', ShopMaterial> = {
   name: NAME,
   addLine: `/shop materials add ${NAME} as 1018 HB 180`,
   lead: known,
+  suggests: 'ownMaterials',
   inShort: () => Promise.resolve(materialFacts),
   facts: (_, material) => Promise.resolve(materialFacts(material)),
 };
 
 const name = nameField(records, [NAME]);
+const listed = nameField(records, [NAME], 'ownMaterials');
 
 /** The shop's own name for a material, and what it has measured of it. */
 const add = defineCommand({
@@ -108,7 +110,7 @@ const rename = renameField(records);
 const change = defineCommand({
   path: ['shop', 'materials', 'change'],
   examples: [`/shop materials change ${NAME} HB 195`],
-  parameters: z.object({ name, newName: rename, ...fields }),
+  parameters: z.object({ name: listed, newName: rename, ...fields }),
   lead: { name: 'name', read: known },
   allowed: 'supervisor',
   run: (context, given) =>

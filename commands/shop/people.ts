@@ -41,6 +41,7 @@ const role = said<Role>({
 
 const others: Others = () => [parameterOf(role)];
 const name = nameField(others, [NAME]);
+const listed = nameField(others, [NAME], 'people');
 const lead = { name: 'name', read: newName(others) } as const;
 
 const roleless = {
@@ -89,7 +90,7 @@ const found = async (
 const show = defineCommand({
   path: ['shop', 'people', 'show'],
   examples: [`/shop people show ${NAME}`],
-  parameters: z.object({ name }),
+  parameters: z.object({ name: listed }),
   lead,
   allowed: 'operator',
   run: (context, given) =>
@@ -144,7 +145,7 @@ const add = defineCommand({
 const change = defineCommand({
   path: ['shop', 'people', 'change'],
   examples: [`/shop people change ${NAME} supervisor`],
-  parameters: z.object({ name, role }),
+  parameters: z.object({ name: listed, role }),
   lead,
   allowed: 'owner',
   run: (context, given) =>
@@ -161,7 +162,7 @@ const change = defineCommand({
 const remove = defineCommand({
   path: ['shop', 'people', 'remove'],
   examples: [`/shop people remove ${NAME}`],
-  parameters: z.object({ name }),
+  parameters: z.object({ name: listed }),
   lead,
   allowed: 'owner',
   run: (context, given) =>

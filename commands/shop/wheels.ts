@@ -19,11 +19,13 @@ export const wheelList: Listed<'wheel', Wheel> = {
   name: NAME,
   addLine: `/shop wheels add ${NAME} straight 21 tpi 63 teeth diameter 19.05 mm place drawer 3`,
   lead: known,
+  suggests: 'wheels',
   inShort: () => Promise.resolve(wheelInShort),
   facts: (_, wheel) => Promise.resolve(wheelFacts(wheel)),
 };
 
 const name = nameField(wheelRecords, [NAME]);
+const listed = nameField(wheelRecords, [NAME], 'wheels');
 
 /** A wheel comes into the crib. */
 const add = defineCommand({
@@ -48,7 +50,7 @@ const rename = renameField(wheelRecords);
 const change = defineCommand({
   path: ['shop', 'wheels', 'change'],
   examples: [`/shop wheels change ${NAME} worn parts 3000`],
-  parameters: z.object({ name, newName: rename, ...wheelFields }),
+  parameters: z.object({ name: listed, newName: rename, ...wheelFields }),
   lead: { name: 'name', read: known },
   allowed: 'supervisor',
   run: (context, given) =>

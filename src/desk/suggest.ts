@@ -13,9 +13,14 @@ const plainly = (names: readonly string[]): readonly Suggestion[] =>
 
 const offersOf = (kind: Suggested, names: Names): readonly Suggestion[] => {
   const { wheels, machines, materials = [], standards = [] } = names;
-  if (kind === 'materials')
-    return [...plainly(materials.map(({ name }) => name)), ...MATERIAL_OFFERS];
-  const given: Partial<Record<Suggested, readonly string[]>> = { wheels, machines, standards };
+  const own = materials.map(({ name }) => name);
+  if (kind === 'materials') return [...plainly(own), ...MATERIAL_OFFERS];
+  const given: Partial<Record<Suggested, readonly string[]>> = {
+    wheels,
+    machines,
+    standards,
+    ownMaterials: own,
+  };
   return plainly(given[kind] ?? []);
 };
 

@@ -26,7 +26,15 @@ export type Names = {
 export const NO_NAMES: Names = { wheels: [], machines: [] };
 
 /** Kinds of names that can be offered while somebody types. */
-export type Suggested = 'materials' | 'wheels' | 'machines' | 'cards' | 'standards' | 'people';
+export type Suggested =
+  | 'materials'
+  /** Only those that a shop has named itself. */
+  | 'ownMaterials'
+  | 'wheels'
+  | 'machines'
+  | 'cards'
+  | 'standards'
+  | 'people';
 
 /** Reads a value at a place; null where nothing of its kind stands there. */
 export type Reader<T> = (cursor: Cursor, names: Names) => Reading<T> | null;

@@ -47,7 +47,14 @@ const choicesOf = (parameter: Parameter): readonly Choice[] | null => {
   return phrases.map((phrase) => ({ name: phrase, value: phrase }));
 };
 
-const optionOf = (book: Book, parameter: Parameter): APIApplicationCommandOption => {
+/** How much is said of each option, and how many there are: what all verbs together have room for. */
+type Size = { readonly examples: number; readonly options: number };
+
+const optionOf = (
+  book: Book,
+  parameter: Parameter,
+  { examples }: Size,
+): APIApplicationCommandOption => {
   const name = optionName(parameter.name);
   const called = parameterName(book, parameter.name);
   const plain = shortened(book.chat.option(called, []), LIMITS.description);
@@ -62,7 +69,7 @@ const optionOf = (book: Book, parameter: Parameter): APIApplicationCommandOption
       choices: [...choices],
     };
   const description = shortened(
-    book.chat.option(called, parameter.examples.slice(0, 2)),
+    book.chat.option(called, parameter.examples.slice(0, examples)),
     LIMITS.description,
   );
   if (isWhole(parameter))
@@ -76,11 +83,11 @@ const optionOf = (book: Book, parameter: Parameter): APIApplicationCommandOption
   };
 };
 
-const ownOptions = (book: Book): readonly APIApplicationCommandOption[] => [
+const ownOptions = (book: Book, { path }: Command): readonly APIApplicationCommandOption[] => [
   {
     type: ApplicationCommandOptionType.String,
     name: WORDS_OPTION,
-    description: book.chat.words,
+    description: path[0] === 'knurl' ? book.chat.words : book.discord.moreWords,
   },
   {
     type: ApplicationCommandOptionType.Boolean,
@@ -109,19 +116,19 @@ const fileOptions = (book: Book, command: Command): readonly APIApplicationComma
 const subcommandOf = (
   book: Book,
   command: Command,
-  most: number,
+  size: Size,
 ): APIApplicationCommandSubcommandOption => {
-  const own = ownOptions(book);
+  const own = ownOptions(book, command);
   const file = fileOptions(book, command);
   const ordered = byWeight(command);
-  const room = Math.min(most, LIMITS.options - own.length - file.length);
+  const room = Math.min(size.options, LIMITS.options - own.length - file.length);
   return {
     type: ApplicationCommandOptionType.Subcommand,
     name: command.path.at(-1) ?? '',
     description: shortened(verbSummary(book, command), LIMITS.description),
     options: [
       ...file,
-      ...ordered.slice(0, room).map((each) => optionOf(book, each)),
+      ...ordered.slice(0, room).map((each) => optionOf(book, each, size)),
       ...own,
     ] as NonNullable<APIApplicationCommandSubcommandOption['options']>,
   };
@@ -131,11 +138,11 @@ const subcommandOf = (
 const optionsOf = (
   book: Book,
   commands: readonly Command[],
-  most: number,
+  size: Size,
 ): readonly APIApplicationCommandOption[] => {
   const groups = grouped(commands, ({ path }) => (path.length > 2 ? (path[1] ?? '') : ''));
   return [...groups].flatMap(([group, members]): readonly APIApplicationCommandOption[] => {
-    const below = members.map((command) => subcommandOf(book, command, most));
+    const below = members.map((command) => subcommandOf(book, command, size));
     if (group === '') return below;
     return [
       {
@@ -161,19 +168,26 @@ export const commandText = (command: unknown): number => {
   );
 };
 
+/** Examples shown of an option, where there is room. Judgement: two say what kind of thing it is. */
+const EXAMPLES = 2;
+
 const rootOf = (book: Book, root: string, commands: readonly Command[]): Registered => {
-  const made = (most: number): Registered => ({
+  const made = (size: Size): Registered => ({
     type: ApplicationCommandType.ChatInput,
     name: root,
     description: shortened(book.verbs[root] ?? root, LIMITS.description),
-    options: optionsOf(book, commands, most),
+    options: optionsOf(book, commands, size),
     contexts: [InteractionContextType.Guild],
     integration_types: [ApplicationIntegrationType.GuildInstall],
   });
-  // All verbs together have a limit too: the options of least weight go first.
-  let most: number = LIMITS.options;
-  while (most > 0 && commandText(made(most)) > LIMITS.commandText) most -= 1;
-  return made(most);
+  // All verbs together have a limit too: examples go first, then the options of least weight.
+  let size: Size = { examples: EXAMPLES, options: LIMITS.options };
+  while (size.options > 0 && commandText(made(size)) > LIMITS.commandText)
+    size =
+      size.examples > 0
+        ? { ...size, examples: size.examples - 1 }
+        : { ...size, options: size.options - 1 };
+  return made(size);
 };
 
 /** Everything a person can ask for, as Discord lists it: made from the records alone. */

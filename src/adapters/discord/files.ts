@@ -9,6 +9,10 @@ const MOST_READ = 4 * 1024 * 1024;
 const READ_PATIENCE_MS = 10_000;
 const MEGABYTE = 1024 * 1024;
 
+/** What may be a list, and no photograph of one. */
+export const isTable = ({ name, contentType }: Attachment): boolean =>
+  /\.(?:csv|tsv|txt)$/iu.test(name) || contentType?.startsWith('text/') === true;
+
 /** A file that nobody reads, in a sentence. */
 export class FileRefused extends Error {}
 

@@ -12,7 +12,7 @@ import { sentence } from '../common/spoken.ts';
 import { within } from '../common/within.ts';
 import { type Controls, pressed, submitted } from './controls.ts';
 import { faultText } from './faults.ts';
-import { withFiles } from './files.ts';
+import { isTable, withFiles } from './files.ts';
 import { LIMITS } from './limits.ts';
 import { withMentions } from './mentions.ts';
 import {
@@ -112,9 +112,11 @@ export const openListeners = (listening: Listening) => {
         messageCall(event, client.user.id),
         event.id,
         async (plain) =>
-          await withFiles(book, await withMentions(plain, event.guild), [
-            ...event.attachments.values(),
-          ]),
+          await withFiles(
+            book,
+            await withMentions(plain, event.guild),
+            [...event.attachments.values()].filter(isTable),
+          ),
       );
     },
   };

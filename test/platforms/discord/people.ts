@@ -12,6 +12,8 @@ import { APPLICATION, OPERATOR, type Someone } from './world.ts';
 export type Delivery = Times & {
   /** So many times over. */
   readonly copies?: number;
+  /** Files that a person gives to an option, by the option's value. */
+  readonly files?: Readonly<Record<string, Body>>;
 };
 export type Value = string | number | boolean;
 
@@ -163,7 +165,12 @@ export const openPeople = (platform: Platform) => {
       values: Readonly<Record<string, Value>> = {},
       someone: Someone = OPERATOR,
       delivery: Delivery = {},
-    ) => ask('slash', 'command', someone, delivery, { type: 2, data: commandData(path, values) }),
+    ) => {
+      const { files: attachments } = delivery;
+      const resolved = attachments === undefined ? {} : { resolved: { attachments } };
+      const data = { ...commandData(path, values), ...resolved };
+      return ask('slash', 'command', someone, delivery, { type: 2, data });
+    },
 
     /** What is offered while an option is being typed. */
     suggest: async (

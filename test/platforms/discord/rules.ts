@@ -18,6 +18,7 @@ export type Component = {
   readonly components?: readonly Component[];
   readonly component?: Component;
   readonly accessory?: Component;
+  readonly file?: { readonly url: string };
   readonly items?: readonly { readonly media: { readonly url: string }; description?: string }[];
 };
 
@@ -123,13 +124,21 @@ const fileFaults = (body: Body, files: readonly string[]): readonly string[] => 
   const items = allOf((body['components'] ?? []) as readonly Component[]).flatMap(
     ({ items: inside = [] }) => inside,
   );
-  const shown = items.map(({ media }) => media.url);
+  const pictures = items.map(({ media }) => media.url);
+  // A file that is handed over is its name; only a picture needs words.
+  const handed = ((body['components'] ?? []) as readonly Component[]).flatMap(({ file }) =>
+    file === undefined ? [] : [file.url],
+  );
+  const shown = [...pictures, ...handed];
   return [
     ...files.flatMap((name, index) => {
       const about = said.find(({ id }) => id === String(index));
+      const url = `attachment://${name}`;
       return [
-        ...((about?.description ?? '') === '' ? [`${name} without words`] : []),
-        ...(shown.includes(`attachment://${name}`) ? [] : [`${name} is shown nowhere`]),
+        ...(pictures.includes(url) && (about?.description ?? '') === ''
+          ? [`${name} without words`]
+          : []),
+        ...(shown.includes(url) ? [] : [`${name} is shown nowhere`]),
       ];
     }),
     ...shown.flatMap((url) =>
