@@ -4,12 +4,9 @@ import {
   type AnyParameter,
   knownName,
   leadingText,
-  moved,
   type Names,
-  opensQuote,
   type Suggested,
   textOf,
-  tokenAt,
   type Vocabulary,
   vocabularyOf,
 } from '../../src/words/index.ts';
@@ -25,14 +22,12 @@ export const recordsOf =
   () =>
     Object.values(fields).map(parameterOf);
 
-const NAME_KEYWORDS: readonly string[] = ['name', 'named', 'called'];
-
 /** The name of something, where it does not stand first: an option of a form. */
 export const nameField = (others: Others, examples: readonly string[], suggests?: Suggested) =>
   said<string>({
     name: 'name',
     read: textOf(() => vocabulary(others)),
-    keywords: NAME_KEYWORDS,
+    keywords: ['name', 'named', 'called'],
     text: true,
     ...(suggests === undefined ? {} : { suggests }),
     examples,
@@ -42,9 +37,6 @@ export const nameField = (others: Others, examples: readonly string[], suggests?
 export const newName =
   (others: Others): Lead =>
   (cursor) => {
-    // `name "Old Faithful"`, as a form says it, is read with its keyword.
-    if (NAME_KEYWORDS.includes(tokenAt(cursor)?.text ?? '') && opensQuote(moved(cursor, 1)))
-      return null;
     const reading = leadingText(cursor, vocabulary(others));
     if (reading === null) return null;
     return 'refusal' in reading ? { ...reading, choices: [] } : reading;

@@ -42,9 +42,6 @@ export const quotedAt = (
   return null;
 };
 
-/** Whether a text in quotation marks begins here. */
-export const opensQuote = (cursor: Cursor): boolean => quotedAt(cursor) !== null;
-
 /** As typed, from the first word to the last of so many. */
 const typedAt = (cursor: Cursor, used: number): string => {
   const { start, end } = spanOf(cursor, used);

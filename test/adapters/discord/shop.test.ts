@@ -3,14 +3,7 @@ import http from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { afterAll, expect, test } from 'vitest';
 import { en } from '../../../src/phrases/index.ts';
-import {
-  ENGINEER,
-  ENGINEERS,
-  OPERATOR,
-  OWNER,
-  STRANGER,
-  SUPERVISORS,
-} from '../../platforms/discord/world.ts';
+import { ENGINEER, OPERATOR, OWNER, STRANGER, SUPERVISORS } from '../../platforms/discord/world.ts';
 import { until } from '../../support/until.ts';
 import { openBot } from './bot.ts';
 import { readIn } from './seen.ts';
@@ -20,8 +13,7 @@ const { people, next, platform } = bot;
 for (const someone of [OPERATOR, OWNER, ENGINEER]) platform.meetPerson(someone);
 
 const SHEET = 'name,form,pitch,teeth,diameter\nKL-7,straight,21 tpi,63,19.05 mm\n';
-let served = SHEET;
-const files = http.createServer((_, response) => response.end(served));
+const files = http.createServer((_, response) => response.end(SHEET));
 await new Promise<void>((done) => files.listen(0, '127.0.0.1', done));
 const address = `http://127.0.0.1:${String((files.address() as AddressInfo).port)}/wheels.csv`;
 
@@ -113,7 +105,7 @@ const handedOver = (): readonly string[] =>
     .flatMap((each) => each.files.map(({ name }) => name))
     .filter((name) => /csv|json/u.test(name));
 
-const imported = (size = served.length) => {
+const imported = (size = SHEET.length) => {
   const id = '1600000000000000001';
   const file = { id, filename: 'wheels.csv', size, url: address, proxy_url: address };
   const path = ['shop', 'wheels', 'import'];
@@ -127,7 +119,6 @@ test('a list comes as a file with the command', async () => {
 });
 
 test('a file too large to be a list is not read', async () => {
-  served = 'name,form\n';
   const { message } = await imported(9 * 1024 * 1024);
   expect(readIn(message)).toContain(en.discord.fileTooLarge('wheels.csv', 4));
   expect(message.only).toBe(ENGINEER.id);
