@@ -25,7 +25,10 @@ const chat = async (config: Config): Promise<void> => {
   const onFault = (error: unknown): void => log.fault('records', { error });
   // Nothing is delivered before there is a platform to deliver it to.
   let nudge = (): void => undefined;
-  let end = (): void => process.exit(1);
+  // Whoever stops it while it starts has it stop at once.
+  let end = (code: number): void => process.exit(code);
+  process.once('SIGINT', () => end(0));
+  process.once('SIGTERM', () => end(0));
   const running = await startChats(
     {
       book: en,
@@ -42,7 +45,7 @@ const chat = async (config: Config): Promise<void> => {
       print: (line) => process.stdout.write(`${line}\n`),
       onEnded: (sentence) => {
         process.stderr.write(`${sentence}\n`);
-        end();
+        end(1);
       },
     },
     config,
@@ -59,7 +62,7 @@ const chat = async (config: Config): Promise<void> => {
     onFault,
   });
   reminders.start();
-  const stop = (code: number): void => {
+  end = (code) => {
     reminders
       .stop()
       .then(() => deliveries.stop())
@@ -70,9 +73,6 @@ const chat = async (config: Config): Promise<void> => {
         () => process.exit(1),
       );
   };
-  end = () => stop(1);
-  process.once('SIGINT', () => stop(0));
-  process.once('SIGTERM', () => stop(0));
 };
 
 loadEnvironment({ quiet: true });
