@@ -6,6 +6,7 @@ import { textsIn } from '../../platforms/discord/payloads.ts';
 import { buttonsOf } from '../../platforms/discord/people.ts';
 import { namedIn } from '../../platforms/discord/rules.ts';
 import { FLOOR, OPERATOR, OWNER, THREAD } from '../../platforms/discord/world.ts';
+import { until } from '../../support/until.ts';
 import { openBot } from './bot.ts';
 import { readIn } from './seen.ts';
 
@@ -201,6 +202,13 @@ describe('a mention', () => {
       for (const channel of [owner.channel, thread]) {
         const { message } = await next(() => people.mention(line, { ...owner, channel }));
         expect(message, line).toMatchObject({ by: 'post', channel, only: null });
+        // What the shop has kept follows by direct message, once it is made.
+        if (path.at(-1) === 'export') {
+          const isFile = ({ guild, files }: (typeof platform.posted)[number]): boolean =>
+            guild === null && files.length > 0;
+          await until(() => platform.posted.some(isFile), 'the files');
+          await new Promise((done) => setTimeout(done, 400));
+        }
       }
     }
     await quiet();
