@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import type { Delivering, Delivery } from './adapters/common/delivery.ts';
-import { type Card, line } from './card/index.ts';
+import { type Card, type Line, line } from './card/index.ts';
 import type { Effect } from './desk/index.ts';
 import {
   type Attempt,
@@ -8,6 +8,7 @@ import {
   type Claimed,
   type NoteOf,
   type Outbox,
+  oldestPins,
   openOutbox,
   type Store,
   settingsOf,
@@ -29,10 +30,10 @@ export type DeliveryOptions = {
 const NOTE = 'note:';
 
 /** A card that says what was given up, and what it would have said. */
-const noteCard = (effect: Effect, attempts: number, fault: string, units: Card['units']): Card => ({
+const noteCard = (headline: Line, lines: readonly Line[], units: Card['units']): Card => ({
   verb: 'notice',
-  headline: line('givenUp', { what: effect.effect, attempts, fault }),
-  parts: 'card' in effect ? [{ part: 'lines', lines: [effect.card.headline] }] : [],
+  headline,
+  parts: lines.length === 0 ? [] : [{ part: 'lines', lines }],
   choices: [],
   pictures: [],
   figures: {},
@@ -42,14 +43,27 @@ const noteCard = (effect: Effect, attempts: number, fault: string, units: Card['
   units,
 });
 
+/** What it would have said, or which pins have stood longest where one more could not be set. */
+const besides = async (
+  effect: Effect,
+  of: Parameters<NoteOf>[2],
+  zone: string,
+): Promise<readonly Line[]> => {
+  if ('card' in effect) return [effect.card.headline];
+  if (effect.effect !== 'pin') return [];
+  return [line('oldestPins', { pins: (await oldestPins(of)).map((pin) => ({ ...pin, zone })) })];
+};
+
 /** What was given up is said in the shop's own channel for that, where it has one. */
 const noteOf: NoteOf = async (claimed, fault, of) => {
   // What is said of a note that cannot be posted would go the way of the note.
   if (claimed.key.startsWith(NOTE)) return null;
-  const { noticesChannel, units } = await settingsOf(of);
+  const { noticesChannel, units, timeZone: zone } = await settingsOf(of);
   if (noticesChannel === null) return null;
   const key = `${NOTE}${claimed.key}`;
-  const card = noteCard(effectOf(claimed), claimed.attempt, fault, units);
+  const gone = effectOf(claimed);
+  const headline = line('givenUp', { what: gone.effect, attempts: claimed.attempt, fault });
+  const card = noteCard(headline, await besides(gone, of, zone), units);
   const effect: Effect = { effect: 'post', key, place: `${noticesChannel}/`, card };
   return { key, effect };
 };

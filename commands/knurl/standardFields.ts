@@ -14,8 +14,10 @@ import {
   restOfLine,
   tokenAt,
   took,
+  upToKeyword,
+  vocabularyOf,
 } from '../../src/words/index.ts';
-import { newName, recordsOf } from '../shop/named.ts';
+import { recordsOf } from '../shop/named.ts';
 
 export const PART_EXAMPLE = 'TH-2041-B';
 
@@ -173,8 +175,12 @@ export const state = said<StandardState>({
 /** What may stand behind a part number; the number itself ends where one of these begins. */
 const behind = recordsOf({ part, fromCard, revisions, revision, why, bars, reviewMonths, state });
 
-/** The part number right behind the verb: one that is known, or whatever stands there. */
+const behindIt = upToKeyword(() => vocabularyOf(behind()));
+
+/** The part number right behind the verb: one that is known, or the whole of what stands there. */
 export const leadPart: Lead = (cursor, names) => {
   const known = knownName(({ standards = [] }) => standards)(cursor, names);
-  return known !== null && 'value' in known ? known : newName(behind)(cursor, names);
+  const typed = behindIt(cursor, names);
+  const found = [known, typed].flatMap((each) => (each !== null && 'value' in each ? [each] : []));
+  return found.sort((a, b) => b.used - a.used)[0] ?? null;
 };

@@ -4,11 +4,13 @@ import {
   givenUpSeen,
   keepCard,
   latestCards,
+  oldestPins,
   queueEffects,
   rulesOnCard,
 } from '../shop/index.ts';
 import type { Place } from './call.ts';
 import type { About, Context, Reply } from './command.ts';
+import type { Effect } from './effect.ts';
 import { queued } from './queued.ts';
 import type { Visit } from './visit.ts';
 
@@ -58,7 +60,7 @@ const keptCard = async (
 };
 
 /** What could not be delivered is said once, on whatever card comes next. */
-const withNotes = async (card: Card, { shop }: Visit): Promise<Card> => {
+const withNotes = async (card: Card, { shop, settings }: Visit): Promise<Card> => {
   const gone = await givenUp(shop);
   const last = gone.at(-1);
   if (last === undefined) return card;
@@ -67,7 +69,13 @@ const withNotes = async (card: Card, { shop }: Visit): Promise<Card> => {
     gone.map(({ id }) => id),
   );
   const { fault } = last;
-  const lines = [line('undelivered', { count: gone.length, fault })];
+  const zone = settings.timeZone;
+  const isPin = gone.some(({ effect }) => (effect as Effect).effect === 'pin');
+  const pins = isPin ? await oldestPins(shop) : null;
+  const lines = [
+    line('undelivered', { count: gone.length, fault }),
+    ...(pins === null ? [] : [line('oldestPins', { pins: pins.map((pin) => ({ ...pin, zone })) })]),
+  ];
   return { ...card, parts: [...card.parts, { part: 'lines', lines }] };
 };
 

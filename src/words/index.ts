@@ -40,7 +40,7 @@ export {
   type Suggested,
   took,
 } from './reading.ts';
-export { leadingText, oneWord, quoted, quotedAt, restOfLine, textOf } from './text.ts';
+export { leadingText, oneWord, quoted, quotedAt, restOfLine, textOf, upToKeyword } from './text.ts';
 export { type Span, type Token, tokensOf } from './tokens.ts';
 export type { Quantity } from './unit.ts';
 export { unitOf } from './unit.ts';

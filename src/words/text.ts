@@ -106,3 +106,19 @@ export const oneWord: Reader<string> = (cursor) => {
   if (whole !== null) return took(whole.value, whole.used);
   return tokenAt(cursor) === undefined ? null : took(typedAt(cursor, 1), 1);
 };
+
+/** All words up to one that announces something else, whatever they are; or what is quoted. */
+export const upToKeyword =
+  (vocabulary: () => Vocabulary): Reader<string> =>
+  (cursor) => {
+    const whole = quotedAt(cursor);
+    if (whole !== null) return took(whole.value, whole.used);
+    const { phrases } = vocabulary();
+    let used = 0;
+    for (;;) {
+      const word = tokenAt(cursor, used)?.text;
+      if (word === undefined || phrases.has(word)) break;
+      used += 1;
+    }
+    return used === 0 ? null : took(typedAt(cursor, used), used);
+  };

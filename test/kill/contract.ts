@@ -41,6 +41,7 @@ export const killContract = (engine: Engine): void => {
       everythingAcknowledgedIsThere(acknowledged, kept);
       await nothingIsThereInPart(store, kept);
       await resultsAreWhole(store, kept);
+      await everyApprovalIsWhole(store, kept);
       await everythingWasPostedOnce(store, kept, receiver);
       // Three in five are killed at work only after they have acknowledged something.
       expect(acknowledged.length).toBeGreaterThanOrEqual(KILLS * 0.6);
@@ -176,6 +177,35 @@ const resultsAreWhole = async (store: Store, kept: readonly Did[]): Promise<void
     .where('kind', '=', 'result')
     .execute();
   expect(found.map(({ subject_id }) => subject_id).sort()).toEqual(standing.map(({ id }) => id));
+};
+
+/** Every approval that was kept is whole: its revision, the one before it, and both in the history. */
+const everyApprovalIsWhole = async (store: Store, kept: readonly Did[]): Promise<void> => {
+  const wanted = kept.flatMap((did) => did.approved);
+  const revisions = await store.read
+    .selectFrom('standard_revision')
+    .select(['id', 'number', 'state', 'basis'])
+    .orderBy('number')
+    .execute();
+  expect(revisions.map(({ id }) => id).sort()).toEqual([...wanted].sort());
+  expect(revisions.map(({ number }) => number)).toEqual(revisions.map((_, at) => at + 1));
+  const states = revisions.map(({ state }) => state);
+  expect(states).toEqual(
+    states.map((_, at) => (at + 1 < states.length ? 'superseded' : 'approved')),
+  );
+  expect(revisions.filter(({ basis }) => basis === null)).toEqual([]);
+  const steps = await store.read
+    .selectFrom('history')
+    .select('after')
+    .where('subject', '=', 'standard')
+    .execute();
+  const counted = (state: string) =>
+    steps.filter(({ after }) => after?.includes(`"state":"${state}"`)).length;
+  expect(['proposed', 'approved', 'superseded'].map(counted)).toEqual([
+    wanted.length,
+    wanted.length,
+    Math.max(0, wanted.length - 1),
+  ]);
 };
 
 const everythingWasPostedOnce = async (

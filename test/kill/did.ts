@@ -9,6 +9,8 @@ export type Did = {
   /** Ids of results that were logged, and of those that were withdrawn. */
   readonly results: readonly string[];
   readonly withdrawn: readonly string[];
+  /** Ids of revisions of a standard that were approved. */
+  readonly approved: readonly string[];
   /** Keys. */
   readonly effects: readonly string[];
 };

@@ -5,6 +5,7 @@
 import { writeSync } from 'node:fs';
 import {
   addTo,
+  approveStandard,
   confirmResult,
   correctResult,
   enterShop,
@@ -20,14 +21,16 @@ import {
   type ResultContent,
   removeFrom,
   type ShopChange,
+  saveStandard,
   WHEEL_SHEET,
   WHEELS,
   withdrawResult,
 } from '../../src/shop/index.ts';
 import { openStore, type StorePlace } from '../../src/store/index.ts';
-import { CARD, STRAIGHT } from '../shop/contract/samples.ts';
+import { CARD, SETUP_CARD, STRAIGHT } from '../shop/contract/samples.ts';
 import { grown, keptFor } from '../support/results.ts';
 import { requestOf } from '../support/setupRequest.ts';
+import { draftOf } from '../support/standards.ts';
 import { WORDS } from '../support/words.ts';
 import { type Did, TALLY, WORN } from './did.ts';
 import { postTo } from './post.ts';
@@ -45,6 +48,20 @@ const outbox = openOutbox(store, {
   concurrency: 3,
 });
 
+/** The part whose standard is approved again and again. */
+const PART = 'TH-2041-B';
+
+/** The next revision of one part's standard, proposed and approved over the one before it. */
+const approveNext = async (change: ShopChange): Promise<Pick<Did, 'cards' | 'approved'>> => {
+  const { id, code } = await keepCard(change, SETUP_CARD);
+  const proposed = await saveStandard(change, await draftOf(change, PART, id), 'propose');
+  if (!proposed.ok) return { cards: [code], approved: [] };
+  const which = { part: PART, revision: proposed.value.revision.number, reviewMonths: null };
+  const approved = await approveStandard(change, which);
+  if (!approved.ok) throw new Error(`not approved: ${approved.refusal.code}`);
+  return { cards: [code], approved: [approved.value.revision.id] };
+};
+
 /** One of several kinds of change; what it did, and what is to happen because of it. */
 const doSomething = async (change: ShopChange, interaction: string, kind: number): Promise<Did> => {
   const name = `wheel ${interaction}`;
@@ -56,6 +73,7 @@ const doSomething = async (change: ShopChange, interaction: string, kind: number
     cards: [],
     results: [],
     withdrawn: [],
+    approved: [],
     effects: [key],
   };
   switch (kind) {
@@ -86,6 +104,8 @@ const doSomething = async (change: ShopChange, interaction: string, kind: number
       return await logOne(change, did);
     case 4:
       return await changeOne(change, did);
+    case 5:
+      return { ...did, ...(await approveNext(change)), effects: [key, `${interaction} pin`] };
     default: {
       const { code } = await keepCard(change, CARD);
       return { ...did, cards: [code], effects: [key, `${interaction} pin`] };
@@ -156,7 +176,7 @@ const say = (line: string): void => {
 outbox.start();
 say('ready');
 for (let at = 0; ; at += 1) {
-  const did = await act(`${run}.${at}`, Math.floor(Math.random() * 7));
+  const did = await act(`${run}.${at}`, Math.floor(Math.random() * 8));
   outbox.nudge();
   say(`kept ${JSON.stringify(did)}`);
   await new Promise((resolve) => setTimeout(resolve, Math.random() * 6));

@@ -118,8 +118,8 @@ export const standardLines: {
   standardOnlyOne: (of) => `There is only ${rev(of)}: nothing to compare it with yet.`,
   oldestPins: ({ pins }) =>
     pins.length === 0
-      ? 'None of its pins are standards of this shop: look through the channel, take one off, then pin this one by hand.'
-      : `Pinned longest: ${list(pins.map((pin) => `${rev(pin)} (${dateText(pin)})`))}. None was taken off: take one off, then pin this one by hand.`,
+      ? 'None of its pins are standards of this shop. If the channel is full, take one off, then pin this one by hand.'
+      : `Pinned longest: ${list(pins.map((pin) => `${rev(pin)} (${dateText(pin)})`))}. None was taken off. If the channel is full, take one off yourself, then pin this one by hand.`,
 };
 
 export const standardRows: {

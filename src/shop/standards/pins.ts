@@ -4,13 +4,15 @@ import { keysOf } from './keys.ts';
 
 export type Pinned = { readonly part: string; readonly revision: number; readonly at: number };
 
+/** Pins that are named where there may be no room for one more. Judgement: enough to choose from. */
+const PINS_NAMED = 3;
 /** Approved standards looked through for their pins. Judgement: more than a channel can pin. */
 const MOST_LOOKED = 300;
 
 /** The standards of this shop whose pins have stood longest; the platform's pins are a mirror. */
 export const oldestPins = async (
   view: Pick<ShopView, 'id' | 'db'>,
-  most: number,
+  most = PINS_NAMED,
 ): Promise<readonly Pinned[]> => {
   const rows = await view.db
     .selectFrom('standard_revision')

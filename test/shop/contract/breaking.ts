@@ -40,8 +40,8 @@ import {
 import { good, newRecords, newShop, person, type TestShop } from '../../support/records.ts';
 import { grown, keptFor } from '../../support/results.ts';
 import { requestOf } from '../../support/setupRequest.ts';
+import { bringTo, draftOf } from '../../support/standards.ts';
 import { CARD, LEFT, STRAIGHT, TURRET } from './samples.ts';
-import { bringTo, draftOf } from './standardSteps.ts';
 
 type Prepared = {
   readonly wheel: string;

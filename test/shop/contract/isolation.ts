@@ -81,8 +81,8 @@ import {
 } from '../../support/records.ts';
 import { grown, keptFor } from '../../support/results.ts';
 import { requestOf } from '../../support/setupRequest.ts';
+import { bringTo, jobLike } from '../../support/standards.ts';
 import { CARD, STRAIGHT, TURRET } from './samples.ts';
-import { bringTo, jobLike } from './standardSteps.ts';
 
 /** Everything of a shop that has an id or a name. */
 type Things = Readonly<Record<Thing, string>>;

@@ -6,6 +6,7 @@ import {
   claimEffects,
   givenUp,
   givenUpSeen,
+  isUnderWay,
   type Outbox,
   type OutboxOptions,
   openOutbox,
@@ -216,6 +217,24 @@ const failing = (engine: Engine): void => {
       ),
     );
     expect(await givenUp(shop.view)).toEqual([]);
+  });
+
+  it('gives up with it what waits for something that was given up long ago', async () => {
+    const { store } = await newRecords(engine);
+    const shop = await newShop(store);
+    await queue(shop, post('a'));
+    const { outbox: box, asked } = bench(store, () => no({ final: true }));
+    await box.deliverDue();
+    await queue(shop, post('unpin', { after: 'a' }), post('tell', { after: 'unpin' }));
+    await box.deliverDue();
+    expect(asked).toEqual(['a 1']);
+    const gone = await givenUp(shop.view);
+    expect(gone.map(({ key, fault }) => [key, fault])).toEqual([
+      ['a', 'the channel is closed'],
+      ['unpin', 'the channel is closed'],
+      ['tell', 'the channel is closed'],
+    ]);
+    expect(await isUnderWay(shop.view, 'unpin')).toBe(false);
   });
 
   it('gives up at once where the platform will never take it', async () => {

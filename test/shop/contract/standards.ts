@@ -33,8 +33,8 @@ import {
 } from '../../../src/shop/index.ts';
 import type { Engine } from '../../../src/store/index.ts';
 import { good, newRecords, newShop, person, refusalOf, START } from '../../support/records.ts';
+import { bringTo, draftOf, inches, jobLike } from '../../support/standards.ts';
 import { SETUP_CARD, STRAIGHT, TURRET } from './samples.ts';
-import { bringTo, draftOf, inches, jobLike } from './standardSteps.ts';
 
 const PART = 'TH-2041-B';
 const BEN = person('Ben');

@@ -1,7 +1,8 @@
-/** Standards brought to any place in their lives, and jobs that they may cover. */
-import { mm, setUp } from '../../../src/calc/index.ts';
+/** Standards brought to any place in their lives, and jobs that they may cover. Programs use it too. */
+import { mm, setUp } from '../../src/calc/index.ts';
 import {
   approveStandard,
+  type Done,
   findCard,
   type Job,
   jobOf,
@@ -12,10 +13,15 @@ import {
   type StandardState,
   type StandardWith,
   saveStandard,
-} from '../../../src/shop/index.ts';
-import { good } from '../../support/records.ts';
-import { requestOf } from '../../support/setupRequest.ts';
-import { SETUP_CARD } from './samples.ts';
+} from '../../src/shop/index.ts';
+import { SETUP_CARD } from '../shop/contract/samples.ts';
+import { requestOf } from './setupRequest.ts';
+
+/** The value of a result that has to be good. */
+const good = <T>(result: Done<T>): T => {
+  if (!result.ok) throw new Error(`refused: ${JSON.stringify(result.refusal)}`);
+  return result.value;
+};
 
 /** What a revision is made from: a card of its own, or the one of this id. */
 export const draftOf = async (
