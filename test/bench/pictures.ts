@@ -3,6 +3,7 @@
  * 50 are asked for at once.
  */
 import { monitorEventLoopDelay } from 'node:perf_hooks';
+import { setTimeout as pause } from 'node:timers/promises';
 import { fileURLToPath } from 'node:url';
 import { FLEET } from '../../commands/index.ts';
 import { sketchesOf } from '../../src/adapters/common/draw.ts';
@@ -27,6 +28,17 @@ const svgs = async (count: number): Promise<readonly string[]> => {
   return drawn.filter((svg) => svg !== '');
 };
 
+const RESOLUTION_MS = 1;
+
+/** How far the event loop falls behind at the 99th percentile while something is done. */
+const delayWhile = async (work: () => Promise<unknown>): Promise<number> => {
+  const loop = monitorEventLoopDelay({ resolution: RESOLUTION_MS });
+  loop.enable();
+  await work();
+  loop.disable();
+  return Math.max(0, loop.percentile(99) / 1e6 - RESOLUTION_MS);
+};
+
 export type PictureCost = {
   readonly pictures: number;
   readonly drawMs: number;
@@ -36,6 +48,8 @@ export type PictureCost = {
   readonly memoryMb: number;
   /** Of the event loop while all were made, beside what the timer itself takes. */
   readonly delay99Ms: number;
+  /** The same for as long again with nothing to do: what the machine is busy with besides. */
+  readonly idle99Ms: number;
 };
 
 export const benchPictures = async (): Promise<PictureCost> => {
@@ -48,23 +62,22 @@ export const benchPictures = async (): Promise<PictureCost> => {
   const { length } = await render(first);
   const oneMs = performance.now() - one;
   const before = process.memoryUsage().rss;
-  const loop = monitorEventLoopDelay({ resolution: RESOLUTION_MS });
-  loop.enable();
   const all = performance.now();
-  await Promise.all(others.map((svg) => render(svg)));
+  const delay99Ms = await delayWhile(() => Promise.all(others.map((svg) => render(svg))));
   const allMs = performance.now() - all;
-  loop.disable();
+  const memoryMb = (process.memoryUsage().rss - before) / 2 ** 20;
+  const idle99Ms = await delayWhile(() => pause(allMs));
   return {
     pictures: others.length,
     drawMs,
     oneMs,
     kilobytes: length / 1024,
     allMs,
-    memoryMb: (process.memoryUsage().rss - before) / 2 ** 20,
-    delay99Ms: Math.max(0, loop.percentile(99) / 1e6 - RESOLUTION_MS),
+    memoryMb,
+    delay99Ms,
+    idle99Ms,
   };
 };
-const RESOLUTION_MS = 1;
 
 if (process.argv[1] === fileURLToPath(import.meta.url)) {
   const cost = await benchPictures();
