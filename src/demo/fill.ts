@@ -2,9 +2,10 @@ import { speakerCalled, terminalCall } from '../adapters/terminal/index.ts';
 import type { FigureName } from '../calc/index.ts';
 import type { Answer, Desk } from '../desk/index.ts';
 import { mulberry32 } from './chance.ts';
+import { DECISIONS, type Decision, spokenLine } from './decisions.ts';
 import { FLOOR } from './floor.ts';
 import type { Said } from './said.ts';
-import { DAYS, resultLine, season } from './season.ts';
+import { type Batch, DAYS, resultLine, season } from './season.ts';
 
 const MINUTE = 60_000;
 const HOUR = 60 * MINUTE;
@@ -52,6 +53,8 @@ const speakerIn = ({ desk, clock, settle }: Filling) => {
 };
 
 const codeOn = ({ card }: CardAnswer): string => {
+  const { headline } = card;
+  if (headline.line === 'questionPutUp') return headline.values.code;
   for (const part of card.parts)
     if (part.part === 'lines')
       for (const each of part.lines) if (each.line === 'cardCode') return each.values.code;
@@ -63,6 +66,27 @@ const figureOf =
   (name: FigureName): number =>
     card.figures[name]?.value ?? Number.NaN;
 
+type Season = {
+  readonly say: (said: Said, at?: number) => Promise<CardAnswer>;
+  readonly begin: number;
+  /** Codes by what they are spoken of as. */
+  readonly codes: Map<string, string>;
+};
+
+const makeBatch = async ({ say, begin, codes }: Season, batch: Batch): Promise<void> => {
+  const { job, by, at, results } = batch;
+  const card = await say({ by, line: job.line }, begin + at * HOUR);
+  const code = codeOn(card);
+  codes.set(`card ${job.part}`, code);
+  for (const result of results) await say({ by, line: resultLine(code, result, figureOf(card)) });
+};
+
+const decide = async ({ say, begin, codes }: Season, decision: Decision): Promise<void> => {
+  const { by, line, at, names } = decision;
+  const card = await say({ by, line: spokenLine(line, codes) }, begin + at * HOUR);
+  if (names !== undefined) codes.set(names, codeOn(card));
+};
+
 /** Fills an empty shop by what its people say in a season that ends now. */
 export const fill = async (filling: Filling): Promise<void> => {
   const { clock } = filling;
@@ -70,9 +94,19 @@ export const fill = async (filling: Filling): Promise<void> => {
   clock.now = begin - BEFORE_HOURS * HOUR;
   const say = speakerIn(filling);
   for (const said of FLOOR) await say(said);
-  for (const { job, by, at, results } of season(mulberry32(SEED))) {
-    const card = await say({ by, line: job.line }, begin + at * HOUR);
-    for (const result of results)
-      await say({ by, line: resultLine(codeOn(card), result, figureOf(card)) });
+  const going: Season = { say, begin, codes: new Map() };
+  let decided = 0;
+  const decideUntil = async (at: number): Promise<void> => {
+    for (;;) {
+      const next = DECISIONS[decided];
+      if (next === undefined || next.at > at) return;
+      decided += 1;
+      await decide(going, next);
+    }
+  };
+  for (const batch of season(mulberry32(SEED))) {
+    await decideUntil(batch.at);
+    await makeBatch(going, batch);
   }
+  await decideUntil(DAYS * 24);
 };

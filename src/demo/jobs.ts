@@ -9,7 +9,7 @@ export type Outcome = {
   readonly crest: number | null;
 };
 
-/** A job that comes round again: what is typed for it, and what its part is called. All invented. */
+/** A job that comes round again: the number of its part, and what is typed for it. All invented. */
 export type Job = {
   readonly part: string;
   readonly line: string;
@@ -33,7 +33,7 @@ const spoilt = (share: number, words: string, teeth: number | null = null): Outc
 
 export const JOBS: readonly Job[] = [
   {
-    part: 'QH-114 adjuster knob',
+    part: 'QH-114',
     line: '1.000 yellow bar straight wheel Fern on Bench lathe out 1.5',
     share: 26,
     outcomes: [
@@ -44,7 +44,7 @@ export const JOBS: readonly Job[] = [
     ],
   },
   {
-    part: 'QH-120 thumb nut',
+    part: 'QH-120',
     line: '5/8 brass straight wheel Linden on Bench lathe out 0.75',
     share: 20,
     outcomes: [
@@ -54,7 +54,7 @@ export const JOBS: readonly Job[] = [
     ],
   },
   {
-    part: 'QH-207 gauge handle',
+    part: 'QH-207',
     line: '3/4 green bar diamond 21tpi long 2 out 2.5 on Long bed tailstock',
     share: 16,
     outcomes: [
@@ -64,7 +64,7 @@ export const JOBS: readonly Job[] = [
     ],
   },
   {
-    part: 'QH-233 drain plug',
+    part: 'QH-233',
     line: '1.250 pump shaft straight wheel Juniper on Long bed out 1.25',
     share: 12,
     outcomes: [
@@ -75,7 +75,7 @@ export const JOBS: readonly Job[] = [
     ],
   },
   {
-    part: 'QH-301 press pin',
+    part: 'QH-301',
     line: '12mm 1045 straight wheel Clover on Bar turner out 25 mm',
     share: 14,
     outcomes: [
@@ -85,7 +85,7 @@ export const JOBS: readonly Job[] = [
     ],
   },
   {
-    part: 'QH-318 dial ring',
+    part: 'QH-318',
     line: '1.500 6061 straight 96dp wheel Thistle on Bench lathe out 1.5',
     share: 12,
     outcomes: [

@@ -50,6 +50,22 @@ it('fills a shop of its own once, says that it is invented, and opens it', async
   const outcomes = await store.read.selectFrom('result').select('outcome').distinct().execute();
   const seen = outcomes.map(({ outcome }) => outcome).sort();
   expect(seen).toEqual(['bent', 'double', 'flaking', 'good', 'other', 'seized', 'shallow']);
+  // A standard and a question in every state that there is.
+  const revisions = await store.read.selectFrom('standard_revision').select('state').execute();
+  expect([...new Set(revisions.map(({ state }) => state))].sort()).toEqual([
+    'approved',
+    'draft',
+    'proposed',
+    'retired',
+    'superseded',
+  ]);
+  const questions = await store.read.selectFrom('question').select('state').execute();
+  expect([...new Set(questions.map(({ state }) => state))].sort()).toEqual([
+    'answered',
+    'open',
+    'reopened',
+    'solved',
+  ]);
   // Whatever was left to be done is done.
   const states = await store.read.selectFrom('effect').select('state').distinct().execute();
   expect(states.filter(({ state }) => state !== 'delivered')).toEqual([]);

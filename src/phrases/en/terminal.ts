@@ -20,7 +20,7 @@ export const terminal: TerminalPhrases = {
   demoOpening: (folder) => [
     'Wholetooth, local channel of an invented shop: its people, parts and numbers are made up.',
     'Orla owns it, Mara supervises, Ben is the engineer, Kit, Dov and Sanna work the lathes.',
-    'Try /shop wheels, or /as Kit and 1.000 yellow bar straight wheel Fern on Bench lathe.',
+    'Try /knurl standard list, /knurl questions, /shop wheels, or /as Kit and 1.000 yellow bar straight wheel Fern on Bench lathe out 1.5.',
     `It is kept in ${folder}; remove that folder to begin again.`,
   ],
   posted: (place, rung, says) =>
