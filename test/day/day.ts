@@ -55,5 +55,5 @@ export const DAY: readonly Turn[] = [
   // The next who asks for the same job sees it first.
   kit('10:15', '1.000 1018 straight wheel Fern on Bench lathe out 1.5'),
   // Found again by what was said.
-  kit('13:20', '/knurl find double'),
+  kit('13:20', '/knurl find new rack doubles'),
 ];
