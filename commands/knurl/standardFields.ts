@@ -157,7 +157,7 @@ export const reviewMonths = said<number>({
 });
 
 export const state = said<StandardState>({
-  name: 'standardState',
+  name: 'state',
   read: () => null,
   closed: true,
   values: [

@@ -122,7 +122,6 @@ export const THINGS: Readonly<Record<string, string>> = {
   setUpCard: 'set-up card',
   fourEyes: 'two people for a standard',
   reviewMonths: 'months until a review',
-  standardState: 'state of the standard',
   asIs: 'bar left as it is',
   rule: 'rule',
   person: 'person',

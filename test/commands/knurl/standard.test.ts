@@ -321,6 +321,21 @@ describe.each(ENGINES)('standards, %s', (engine) => {
     expect(await shop.said('/knurl standard')).toMatch(/^No such standards yet\./u);
   });
 
+  it('are listed by where they are, and shown by their part number alone', async () => {
+    const shop = await open(engine);
+    await hold(shop, 'TH-2041-B');
+    await shop.ask(LINE);
+    await shop.ask('/knurl standard save 3/4-16 KNOB');
+    const all = await shop.said('/knurl standard');
+    expect(all).toMatch(/^2 standards: 3\/4-16 KNOB rev 1 draft; 0\.9852 in, 65 teeth;/u);
+    const approved = await shop.said('/knurl standard list approved');
+    expect(approved).toMatch(/^1 standard, approved: TH-2041-B rev 1 approved;/u);
+    expect(await shop.said('/knurl standard list drafts')).toMatch(/^1 standard, draft: 3\/4-16/u);
+    expect(await shop.said('/knurl standard list retired')).toMatch(/^No such standards yet\./u);
+    const shown = await shop.said('/knurl standard 3/4-16 knob');
+    expect(shown).toMatch(/^Standard 3\/4-16 KNOB rev 1: draft/u);
+  });
+
   it('are suggested while somebody types', async () => {
     const shop = await open(engine);
     await hold(shop, 'TH-2041-B');
