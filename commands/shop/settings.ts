@@ -68,7 +68,10 @@ const quietHours: Reader<Quiet> = (cursor, names) => {
   const typed = plainText(value).trim();
   if (NEVER.has(typed)) return { value: 'never', used };
   const [from = null, to = null, ...more] = typed.split(/\s*(?:-|to|until|till)\s*/u).map(minuteOf);
-  return from === null || to === null || more.length > 0 ? null : { value: { from, to }, used };
+  if (from !== null && to !== null && more.length === 0) return { value: { from, to }, used };
+  const examples = ['quiet 22:00-06:00', 'quiet none'];
+  return { refusal: { code: 'missing', parameter: 'quietHours', word: value, examples } };
+};
 };
 
 const channelField = (name: string, keywords: readonly string[]) =>
