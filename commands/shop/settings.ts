@@ -72,7 +72,6 @@ const quietHours: Reader<Quiet> = (cursor, names) => {
   const examples = ['quiet 22:00-06:00', 'quiet none'];
   return { refusal: { code: 'missing', parameter: 'quietHours', word: value, examples } };
 };
-};
 
 const channelField = (name: string, keywords: readonly string[]) =>
   said<Target>({

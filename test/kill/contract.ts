@@ -5,13 +5,14 @@
  */
 import { expect, it, onTestFinished } from 'vitest';
 import { tallyGrowth } from '../../src/calc/index.ts';
-import { addTo, enterShop, openOutbox, WHEELS } from '../../src/shop/index.ts';
+import { addTo, changeSetting, enterShop, openOutbox, WHEELS } from '../../src/shop/index.ts';
 import type { Engine, Store, StorePlace } from '../../src/store/index.ts';
 import { STRAIGHT } from '../shop/contract/samples.ts';
 import { builtProgram, type Program, startProgram } from '../support/program.ts';
 import { good, newRecords, person, WORDS } from '../support/records.ts';
 import { type Did, TALLY, WORN } from './did.ts';
 import { postTo } from './post.ts';
+import { questionsAreWhole, reminderKeys } from './questions.ts';
 import { type Receiver, startReceiver } from './receiver.ts';
 
 /** How often it is killed: a hundred times when that is what is asked for (npm run test:kill). */
@@ -42,6 +43,7 @@ export const killContract = (engine: Engine): void => {
       await nothingIsThereInPart(store, kept);
       await resultsAreWhole(store, kept);
       await everyApprovalIsWhole(store, kept);
+      await questionsAreWhole(store, kept);
       await everythingWasPostedOnce(store, kept, receiver);
       // Three in five are killed at work only after they have acknowledged something.
       expect(acknowledged.length).toBeGreaterThanOrEqual(KILLS * 0.6);
@@ -90,16 +92,19 @@ const putTally = async (store: Store): Promise<void> => {
     const { change } = await enterShop(tx, WORDS, shop, person('Kim'), Date.now());
     for (const name of [TALLY, WORN])
       good(await addTo(change, WHEELS, { ...STRAIGHT, name, partsRun: 0 }));
+    // Reminders come at any hour at which this is run.
+    good(await changeSetting(change, 'quietHours', null));
   });
 };
 
 /** Whoever comes after them delivers what they left, once their leases are over. */
 const deliverRest = async (store: Store, receiver: Receiver): Promise<void> => {
-  const HOUR = 3_600_000;
+  // Reminders were put down for the hours after, as the shop's clock was ahead for them.
+  const LATER = 9 * 3_600_000;
   const outbox = openOutbox(store, {
     worker: 'last',
     deliver: postTo(receiver.url),
-    now: () => Date.now() + HOUR,
+    now: () => Date.now() + LATER,
     onFault: (fault) => {
       throw fault instanceof Error ? fault : new Error(String(fault));
     },
@@ -213,7 +218,9 @@ const everythingWasPostedOnce = async (
   kept: readonly Did[],
   { posted }: Receiver,
 ): Promise<void> => {
-  const wanted = kept.flatMap((did) => did.effects).sort();
+  const reminded = await reminderKeys(store);
+  expect(reminded.length).toBeGreaterThan(0);
+  const wanted = [...kept.flatMap((did) => did.effects), ...reminded].sort();
   const effects = await store.read.selectFrom('effect').select(['key', 'state']).execute();
   expect(effects.map(({ key }) => key).sort()).toEqual(wanted);
   expect(effects.filter(({ state }) => state !== 'delivered')).toEqual([]);

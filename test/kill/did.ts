@@ -11,6 +11,10 @@ export type Did = {
   readonly withdrawn: readonly string[];
   /** Ids of revisions of a standard that were approved. */
   readonly approved: readonly string[];
+  /** Ids of questions that were asked, of answers that were given, of questions that were solved. */
+  readonly asked: readonly string[];
+  readonly answered: readonly string[];
+  readonly solved: readonly string[];
   /** Keys. */
   readonly effects: readonly string[];
 };

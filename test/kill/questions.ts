@@ -5,7 +5,8 @@ import {
   askedEffects,
   solvedEffects,
 } from '../../commands/knurl/questions/effects.ts';
-import { type Effect, queued } from '../../src/desk/index.ts';
+import type { Effect } from '../../src/desk/index.ts';
+import { queued } from '../../src/desk/queued.ts';
 import {
   answerQuestion,
   askQuestion,
@@ -19,13 +20,10 @@ import {
 import type { Store } from '../../src/store/index.ts';
 import type { Did } from './did.ts';
 
-/** Questions that are open at a time; then the oldest are answered and solved. */
-const MOST_OPEN = 3;
-
-/** One more is asked, or an old one is answered or solved, with all that is posted because of it. */
+/** The one that is open is answered, then solved, then another is asked, with all that is posted. */
 export const questionOne = async (change: ShopChange, did: Did): Promise<Did> => {
-  const [oldest, ...others] = await unsolvedQuestions(change, { limit: MOST_OPEN });
-  if (oldest === undefined || others.length + 1 < MOST_OPEN) {
+  const [oldest] = await unsolvedQuestions(change, { limit: 1 });
+  if (oldest === undefined) {
     const asking = { text: `why ${did.interaction}`, card: null, place: 'questions/' };
     const asked = await askQuestion(change, asking);
     if (!asked.ok) return did;

@@ -3,6 +3,8 @@
  * it was kept, once it was. It goes on until it is killed.
  */
 import { writeSync } from 'node:fs';
+import { reminderEffects } from '../../commands/knurl/questions/effects.ts';
+import { queued } from '../../src/desk/queued.ts';
 import {
   addTo,
   approveStandard,
@@ -17,6 +19,7 @@ import {
   logResult,
   once,
   openOutbox,
+  openReminders,
   queueEffects,
   type ResultContent,
   removeFrom,
@@ -34,6 +37,7 @@ import { draftOf } from '../support/standards.ts';
 import { WORDS } from '../support/words.ts';
 import { type Did, TALLY, WORN } from './did.ts';
 import { postTo } from './post.ts';
+import { questionOne } from './questions.ts';
 
 type Told = { readonly place: StorePlace; readonly receiver: string; readonly run: string };
 const { place, receiver, run } = JSON.parse(process.argv[2] ?? '') as Told;
@@ -62,6 +66,16 @@ const approveNext = async (change: ShopChange): Promise<Pick<Did, 'cards' | 'app
   return { cards: [code], approved: [approved.value.revision.id] };
 };
 
+/** Every question that waits has waited long enough to come up once more. */
+const reminders = openReminders(store, {
+  now: () => Date.now() + 5 * 3_600_000,
+  words: WORDS,
+  effectsOf: async (view, putUp) => (await reminderEffects(view, putUp)).map(queued),
+});
+
+/** The kinds of change in their turn; those that build on each other come more often. */
+const TURNS = [0, 6, 1, 6, 2, 3, 6, 4, 5, 7] as const;
+
 /** One of several kinds of change; what it did, and what is to happen because of it. */
 const doSomething = async (change: ShopChange, interaction: string, kind: number): Promise<Did> => {
   const name = `wheel ${interaction}`;
@@ -74,6 +88,9 @@ const doSomething = async (change: ShopChange, interaction: string, kind: number
     results: [],
     withdrawn: [],
     approved: [],
+    asked: [],
+    answered: [],
+    solved: [],
     effects: [key],
   };
   switch (kind) {
@@ -106,6 +123,8 @@ const doSomething = async (change: ShopChange, interaction: string, kind: number
       return await changeOne(change, did);
     case 5:
       return { ...did, ...(await approveNext(change)), effects: [key, `${interaction} pin`] };
+    case 6:
+      return await questionOne(change, did);
     default: {
       const { code } = await keepCard(change, CARD);
       return { ...did, cards: [code], effects: [key, `${interaction} pin`] };
@@ -153,7 +172,8 @@ const act = (interaction: string, kind: number): Promise<Did> =>
     const { change } = await enterShop(tx, WORDS, shop, who, Date.now());
     const { answer } = await once(change, interaction, async () => {
       const did = await doSomething(change, interaction, kind);
-      const [post = '', pin] = did.effects;
+      const [post = ''] = did.effects;
+      const pin = did.effects.find((each) => each.endsWith(' pin'));
       await queueEffects(change, [
         { key: post, effect: { post } },
         ...(pin === undefined ? [] : [{ key: pin, effect: { pin: post }, after: post }]),
@@ -175,8 +195,11 @@ const say = (line: string): void => {
 
 outbox.start();
 say('ready');
+// Each life begins with another kind of change: however short they are, all kinds have their turn.
+const first = Number(run.replace(/\D/gu, ''));
 for (let at = 0; ; at += 1) {
-  const did = await act(`${run}.${at}`, Math.floor(Math.random() * 8));
+  await reminders.remindDue();
+  const did = await act(`${run}.${at}`, TURNS[(first + at) % TURNS.length] ?? 0);
   outbox.nudge();
   say(`kept ${JSON.stringify(did)}`);
   await new Promise((resolve) => setTimeout(resolve, Math.random() * 6));
