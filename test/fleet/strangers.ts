@@ -40,6 +40,9 @@ const WHEEL = named('wheel', 'Qvuzzlewyck');
 const MACHINE = named('machine', 'Jxorfbandel');
 const MATERIAL = named('material', 'Vwyzgrumpel');
 const PERSON = named('person', 'Zjubbelfrant');
+const STANDARD = named('standard', 'Nbolgrimpyl');
+/** The other shop has one, the two alike have none. */
+const RESULT: Thing = { kind: 'result', theirs: 'R1', nobodys: 'R7', spoken: false };
 
 export const carded = async (ask: Ask, words: string): Promise<Answer> => {
   const answer = await ask(words);
@@ -47,16 +50,26 @@ export const carded = async (ask: Ask, words: string): Promise<Answer> => {
   return answer;
 };
 
-const codeOn = (answer: Answer): string => /Card ([A-Z0-9]+)/u.exec(textOf(answer))?.[1] ?? '';
+const codeOn = (answer: Answer): string =>
+  /(?:Card|Question) ([A-Z0-9]{5,})/u.exec(textOf(answer))?.[1] ?? '';
+
+const LINE = `1.000 ${MATERIAL.theirs} straight wheel ${WHEEL.theirs} on ${MACHINE.theirs}`;
 
 /** A code that reads as nothing but a code, so that no chance decides what a line means. */
-const plainCode = async (ask: Ask): Promise<string> => {
+const plainCode = async (ask: Ask, line: string): Promise<string> => {
   for (;;) {
-    const line = `1.000 ${MATERIAL.theirs} straight wheel ${WHEEL.theirs} on ${MACHINE.theirs}`;
     const code = codeOn(await carded(ask, line));
     if (/^[CFHJKPRTWXY]{2}/u.test(code)) return code;
   }
 };
+
+/** Something of the other shop that goes by a code. */
+const coded = (kind: string, code: string): Thing => ({
+  kind,
+  theirs: code,
+  nobodys: otherCode(code),
+  spoken: true,
+});
 
 /** Other letters in the same places: as far from being a word, and nobody's. */
 const otherCode = (code: string): string =>
@@ -80,7 +93,11 @@ export const furnish = async (ask: Ask, store: Store): Promise<readonly Thing[]>
   await carded(ask, `/shop machines add ${MACHINE.theirs} speeds 70 115 190`);
   await carded(ask, `/shop materials add ${MATERIAL.theirs} as 1018 HB 150`);
   for (let rule = 1; rule <= RULES; rule += 1) await carded(ask, '/shop rules add Lamp on');
-  const code = await plainCode(ask);
+  const code = await plainCode(ask, LINE);
+  const question = await plainCode(ask, `/knurl ask ${code} may I run it faster`);
+  await carded(ask, `/knurl result card ${code} good 50 parts`);
+  for (const step of [`propose ${STANDARD.theirs} card ${code}`, `approve ${STANDARD.theirs}`])
+    await carded(ask, `/knurl standard ${step}`);
   for (let logged = 1; logged <= RESULTS; logged += 1)
     await carded(ask, `/knurl result ${code} good 50 teeth`);
   const tables = ['wheel', 'machine', 'material', 'rule', 'person', 'card', 'result'] as const;
@@ -102,7 +119,10 @@ export const furnish = async (ask: Ask, store: Store): Promise<readonly Thing[]>
     MACHINE,
     MATERIAL,
     PERSON,
-    { kind: 'code', theirs: code, nobodys: otherCode(code), spoken: true },
+    STANDARD,
+    RESULT,
+    coded('code', code),
+    coded('code of a question', question),
     { kind: 'number of a rule', theirs: '38', nobodys: '48', spoken: false, only: namesRule },
     { kind: 'number of a result', theirs: 'R3', nobodys: 'R9', spoken: false, only: namesResult },
     ...(await Promise.all(tables.map(idsOf))),
