@@ -10,6 +10,12 @@ import { openDesk, plainShop } from '../../src/desk/index.ts';
 import { en } from '../../src/phrases/index.ts';
 import { MATERIAL_PHRASES, readLine, vocabularyOf } from '../../src/words/index.ts';
 import { planJob, planRequest } from '../support/planJob.ts';
+import {
+  benchDiscord,
+  MOST_ACK_MS as DISCORD_ACK_MS,
+  discordLines,
+  MOST_BLOCKED_MS,
+} from './discord.ts';
 import { benchFind } from './find.ts';
 import { benchPictures, MOST_DELAY_MS } from './pictures.ts';
 import { benchSlack, MOST_ACK_MS, slackLines } from './slack.ts';
@@ -92,3 +98,7 @@ for (const { engine, few, many } of await benchFind())
   );
 print(`two hundred at once in Slack (which gives ${String(MOST_ACK_MS)} ms to acknowledge):`);
 for (const said of slackLines(await benchSlack())) print(said);
+print(
+  `two hundred at once in Discord (which gives ${String(DISCORD_ACK_MS)} ms; the event loop asked to stay under ${String(MOST_BLOCKED_MS)} ms):`,
+);
+for (const said of discordLines(await benchDiscord())) print(said);

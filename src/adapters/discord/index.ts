@@ -4,6 +4,7 @@ import type { Book } from '../../phrases/index.ts';
 import type { Delivering, Delivery } from '../common/delivery.ts';
 import type { Log } from '../common/log.ts';
 import { type Once, onceInProcess } from '../common/once.ts';
+import { inTurns } from '../common/turns.ts';
 import { login, watch } from './connect.ts';
 import { deliverEffect } from './effects.ts';
 import { faultText } from './faults.ts';
@@ -71,7 +72,8 @@ const guildIn = (client: Client, channel: string): string | null => {
 
 /** Connects, and answers until stopped. */
 export const openDiscord = async (options: DiscordOptions): Promise<Discord> => {
-  const { token, log, desk, book, once = onceInProcess(), onEnded = () => undefined } = options;
+  const { token, log, book, once = onceInProcess(), onEnded = () => undefined } = options;
+  const desk = inTurns(options.desk);
   const { draw = null, deferAfterMs = DEFER_AFTER_MS } = options;
   const client = clientOf(options);
   const sender = openSender(client.rest);
