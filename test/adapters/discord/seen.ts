@@ -26,4 +26,4 @@ export const seenAs = (message: Posted): string =>
 
 /** The same card twice has two codes. */
 export const withoutCodes = (text: string): string =>
-  text.replaceAll(/\b(Card|Question) [2346789CFHJKMPRTWXY]{5,12}\b/gu, '$1 CODE');
+  text.replaceAll(/\b([Cc]ard|Question) [2346789CFHJKMPRTWXY]{5,12}\b/gu, '$1 CODE');

@@ -24,6 +24,9 @@ const LINE = '1.000 straight 21tpi 1018';
 
 const codeIn = (message: Posted): string =>
   /\bCard ([2346789CFHJKMPRTWXY]{5,12})\b/u.exec(readIn(message))?.[1] ?? '';
+/** What is asked has a code of its own. */
+const questionIn = (message: Posted): string | undefined =>
+  /\bQuestion ([2346789CFHJKMPRTWXY]{5,12}) is put up/u.exec(readIn(message))?.[1];
 /** Examples name a card and a number of the list that no shop of a test has. */
 const ownNames = (line: string, code: string): string =>
   line
@@ -37,6 +40,17 @@ const BEFORE: Readonly<Record<string, readonly string[]>> = {
   'result correct': ['result log'],
   'result withdraw': ['result log'],
   'result confirm': ['result log'],
+  answer: ['ask'],
+  solved: ['ask'],
+  reopen: ['ask', 'solved'],
+  questions: ['ask'],
+  'standard list': ['standard propose'],
+  'standard show': ['standard propose'],
+  'standard approve': ['standard propose'],
+  'standard history': ['standard propose', 'standard approve'],
+  'standard revise': ['standard propose', 'standard approve'],
+  'standard compare': ['standard propose', 'standard approve', 'standard revise'],
+  'standard retire': ['standard propose', 'standard approve'],
 };
 
 /** The verbs that fill the list which a verb reads. */
@@ -66,12 +80,16 @@ const brought = async (act: () => Promise<unknown>, quietMs = 0): Promise<readon
 const shopFor = async (name: string, command: Command): Promise<{ who: Someone; code: string }> => {
   const who = platform.addGuild(name);
   const first = await brought(() => people.slash(SETUP, { words: LINE }, who));
-  const code = first.map(codeIn).join('');
-  for (const maker of makersFor(command))
-    for (const example of maker.examples) {
+  let code = first.map(codeIn).join('');
+  for (const maker of makersFor(command)) {
+    // The first makes what is needed; a list gets all of them.
+    const needed = maker.path.at(-1) === 'add' ? maker.examples : maker.examples.slice(0, 1);
+    for (const example of needed) {
       const options = optionsFor(people, maker, ownNames(example, code));
-      await brought(() => people.slash(maker.path, options, who));
+      const made = await brought(() => people.slash(maker.path, options, who));
+      code = made.map(questionIn).find((each) => each !== undefined) ?? code;
     }
+  }
   return { who, code };
 };
 
