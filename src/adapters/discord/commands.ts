@@ -83,11 +83,15 @@ const optionOf = (
   };
 };
 
-const ownOptions = (book: Book, { path }: Command): readonly APIApplicationCommandOption[] => [
+/** A verb that works something out can be said in words alone; to the others they only add. */
+const isWorkedOut = ({ parameters }: Command): boolean =>
+  parameters.some(({ name }) => name === 'diameter');
+
+const ownOptions = (book: Book, command: Command): readonly APIApplicationCommandOption[] => [
   {
     type: ApplicationCommandOptionType.String,
     name: WORDS_OPTION,
-    description: path[0] === 'knurl' ? book.chat.words : book.discord.moreWords,
+    description: isWorkedOut(command) ? book.chat.words : book.discord.moreWords,
   },
   {
     type: ApplicationCommandOptionType.Boolean,
