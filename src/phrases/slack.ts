@@ -22,6 +22,9 @@ export type SlackPhrases = {
   /** Where a form cannot open by itself. */
   readonly formNeeded: string;
   readonly openForm: string;
+  /** Files have no private place in a channel. */
+  readonly filesHere: string;
+  readonly filesLeft: (names: readonly string[]) => string;
   /** Over the shop's own standards. */
   readonly standards: string;
   readonly standard: (

@@ -3,6 +3,7 @@ import type { Book, SpokenCard } from '../../phrases/index.ts';
 import type { Log } from '../common/log.ts';
 import { hasMoreCautions, sentence, spoken } from '../common/spoken.ts';
 import { faultText, isRefused } from './faults.ts';
+import { filesOf, sendFiles } from './files.ts';
 import { LIMITS } from './limits.ts';
 import { withMentions } from './mentions.ts';
 import type { People } from './people.ts';
@@ -51,18 +52,19 @@ export type Flow = ReturnType<typeof openFlow>;
 
 export const openFlow = ({ desk, book, log, draw, people }: FlowOptions) => {
   /** The desk also hears what this person may by the platform's own reckoning, and whom a line names. */
-  const ask = async (call: Call): Promise<Answer> => {
+  const known = async (call: Call): Promise<Call> => {
     const { shop, person } = call;
     const [standing, groups] = await Promise.all([
       people.standingOf(shop, person.id),
       people.groupsOf(shop),
     ]);
     const nameOf = (id: string): Promise<string> => people.nameOf(shop, id);
-    const known = await withMentions(call, { nameOf, groups });
+    const named = await withMentions(call, { nameOf, groups });
     // A mention comes without the name of whoever wrote it.
     const name = person.name === person.id ? await nameOf(person.id) : person.name;
-    return await desk.answer({ ...known, person: { ...person, name, ...standing } });
+    return { ...named, person: { ...person, name, ...standing } };
   };
+  const ask = async (call: Call): Promise<Answer> => await desk.answer(await known(call));
 
   const own = (card: SpokenCard, extra: readonly ExtraButton[] = []): Reply => ({
     card,
@@ -192,11 +194,32 @@ export const openFlow = ({ desk, book, log, draw, people }: FlowOptions) => {
     const messages = messagesOf(call, reply);
     if (reply.isPrivate) {
       await privately(sender, handle, call, messages, 0);
-      return;
+    } else {
+      const standing = await openly(sender, handle, call, messages);
+      if (standing !== null) await pictures(sender, handle, call, reply, standing);
     }
-    const standing = await openly(sender, handle, call, messages);
-    if (standing !== null) await pictures(sender, handle, call, reply, standing);
+    const names = filesOf(reply.answer);
+    if (names.length > 0) await files(sender, handle, call, names);
   };
+
+  /** To whoever asked, wherever that was. */
+  const files = async (
+    sender: Sender,
+    handle: Handle,
+    call: Call,
+    names: readonly string[],
+  ): Promise<void> => {
+    const onFault = (error: unknown): void =>
+      log.fault('file', { interaction: call.interactionId, fault: faultText(error) });
+    const say = (text: string, since: number): Promise<void> => {
+      const shown = { card: sentence(text), of: call.interactionId, wasPrivate: true };
+      return privately(sender, handle, call, render(shown), since);
+    };
+    await say(book.slack.filesHere, FILES_FROM);
+    const left = await sendFiles({ desk, sender }, await known(call), names, onFault);
+    if (left.length > 0) await say(book.slack.filesLeft(left), FILES_FROM + 1);
+  };
+  const FILES_FROM = 800;
 
   /** Nothing more than one short sentence is left to say, by whichever way is still open. */
   const EXCUSE_FROM = 900;

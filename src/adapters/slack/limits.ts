@@ -31,6 +31,8 @@ export const LIMITS = {
   /** A response address takes this many posts in half an hour. */
   responses: 5,
   altText: 1000,
+  /** Slack takes a gigabyte; as much as is held in memory for one file. Judgement. */
+  fileBytes: 50 * 1024 * 1024,
   summary: 2000,
 } as const;
 

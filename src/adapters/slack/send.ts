@@ -190,6 +190,17 @@ export const openSender = (client: webApi.WebClient) => {
         alt_text: shortened(alt, LIMITS.altText),
       }),
 
+    /** To the person alone. */
+    file: async (person: string, name: string, bytes: Buffer) => {
+      const { channel } = await trying(() => client.conversations.open({ users: person }));
+      await client.files.uploadV2({
+        channel_id: channel?.id ?? person,
+        file: bytes,
+        filename: name,
+        title: name,
+      });
+    },
+
     /** What they are called, and whether they administer this very workspace; guests of another do not. */
     user: async (
       person: string,

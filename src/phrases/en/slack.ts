@@ -20,6 +20,9 @@ export const slack: SlackPhrases = {
   formLate: 'Slack gave the form no time to open. Press the button to open it now.',
   formNeeded: 'Press the button to fill it in, or say the bar, the pattern and the pitch.',
   openForm: 'Open the form',
+  filesHere: 'The files go to you alone, in a direct message.',
+  filesLeft: (names) =>
+    `Not sent: ${names.join(', ')}. Ask again, or take a backup where the program runs.`,
   standards: 'Standards of this shop',
   standard: ({ part, revision, blankDiameter, toothCount }, show) =>
     `${part} rev ${String(revision)}: turn to ${show.both(blankDiameter)}, ${String(toothCount)} teeth`,

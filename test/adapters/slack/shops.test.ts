@@ -98,6 +98,25 @@ test('a verb that needs nothing more is answered; one that does opens its form, 
   expect(buttonsOf(offered.body).map(({ text }) => text?.text)).toEqual([en.slack.openForm]);
 });
 
+test('the files of an export go to the owner alone, and what cannot be sent is said', async () => {
+  const bot = await openShops();
+  await tells(bot);
+  await bot.shop('export', 'U0OPERATOR');
+  await bot.people.slash('export', { id: 'U0OWNER' }, { command: '/shop' });
+  await until(() => bot.platform.pictures.some(({ name }) => name.endsWith('.json')), 'a file');
+  await until(() => bot.platform.pictures.length > 3, 'the tables');
+  for (const { channel, bytes } of bot.platform.pictures) {
+    expect(channel).toBe('DU0OWNERT0SHOP');
+    expect(bytes).toBeGreaterThan(0);
+  }
+  bot.platform.meet('files.getUploadURLExternal', { error: 'missing_scope' });
+  const left = (): boolean => readable(bot.platform.posted).includes('Not sent: ');
+  await bot.people.slash('export', { id: 'U0OWNER' }, { command: '/shop' });
+  await until(left, 'what was not sent');
+  const said = bot.platform.posted.filter(({ body }) => readable(body).includes('Not sent: '));
+  expect(said.map(({ only }) => only)).toEqual(['U0OWNER']);
+});
+
 test('what cannot be told apart is asked with the readings as buttons, and a press answers', async () => {
   const bot = await openShops();
   const asked = await bot.messageTo(() => bot.people.slash('19 1018 straight 21tpi'));

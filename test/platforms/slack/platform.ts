@@ -32,6 +32,7 @@ export type Picture = {
   readonly thread: string | null;
   readonly alt: string;
   readonly bytes: number;
+  readonly name: string;
 };
 export type CallSeen = { readonly method: string; readonly token: string; readonly at: number };
 
@@ -95,7 +96,7 @@ export const openPlatform = async (check: BodyCheck = bodyCheck()) => {
     string,
     { until: number; used: boolean; person: string; team: string }
   >();
-  const uploads = new Map<string, { alt: string; bytes: number }>();
+  const uploads = new Map<string, { alt: string; bytes: number; name: string }>();
   const acks = new Map<string, (payload: unknown) => void>();
   const sockets = new Set<WebSocket>();
   let count = 0;
@@ -256,15 +257,15 @@ export const openPlatform = async (check: BodyCheck = bodyCheck()) => {
     }),
     'files.getUploadURLExternal': (_team, fields) => {
       const id = `F${String(next())}`;
-      uploads.set(id, { alt: fields['alt_text'] ?? '', bytes: 0 });
+      uploads.set(id, { alt: fields['alt_text'] ?? '', bytes: 0, name: fields['filename'] ?? '' });
       return { ok: true, upload_url: `${base}/upload/${id}`, file_id: id };
     },
     'files.completeUploadExternal': (team, fields) => {
       const channel = channelOf(team, fields['channel_id'] ?? '');
       if (channel === undefined) return { ok: false, error: 'channel_not_found' };
       for (const { id } of json(fields['files']) as readonly { id: string }[]) {
-        const file = uploads.get(id) ?? { alt: '', bytes: 0 };
-        if (file.alt === '') faults.push('a picture without words');
+        const file = uploads.get(id) ?? { alt: '', bytes: 0, name: '' };
+        if (file.alt === '' && file.name.endsWith('.png')) faults.push('a picture without words');
         pictures.push({ channel: channel.id, thread: fields['thread_ts'] ?? null, ...file });
       }
       return { ok: true, files: [] };
