@@ -6,6 +6,7 @@ import { find } from './knurl/find.ts';
 import { help } from './knurl/help.ts';
 import { plan } from './knurl/plan.ts';
 import { questions } from './knurl/questions/index.ts';
+import { record } from './knurl/record.ts';
 import { results } from './knurl/result.ts';
 import { setup } from './knurl/setup.ts';
 import { standard } from './knurl/standard.ts';
@@ -30,6 +31,7 @@ export const FLEET: readonly Command[] = [
   convert,
   find,
   today,
+  record,
   card,
   ...questions,
   why,

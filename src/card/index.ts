@@ -9,6 +9,7 @@ export type {
   QuestionLines,
   QuestionRows,
 } from './questionLines.ts';
+export type { RecordPart } from './recordLines.ts';
 export type {
   Amount,
   Fact,

@@ -24,6 +24,7 @@ import type { FindLabels, FindLines, FindRows } from './findLines.ts';
 import type { Nothing } from './nothing.ts';
 import type { PlanLabels, PlanLines, PlanRows } from './planLines.ts';
 import type { QuestionLabels, QuestionLines, QuestionRows } from './questionLines.ts';
+import type { RecordLines, RecordRows } from './recordLines.ts';
 import type { ResultLabels, ResultLines, ResultRows } from './resultLines.ts';
 import type { ShopLabels, ShopLines, ShopRows } from './shopLines.ts';
 import type { StandardLabels, StandardLines, StandardRows } from './standardLines.ts';
@@ -40,6 +41,7 @@ export type Lines = CheckLines &
   FindLines &
   PlanLines &
   QuestionLines &
+  RecordLines &
   ResultLines &
   ShopLines &
   StandardLines &
@@ -92,6 +94,7 @@ export type Rows = CheckRows &
   FindRows &
   PlanRows &
   QuestionRows &
+  RecordRows &
   ResultRows &
   ShopRows &
   StandardRows &

@@ -2,12 +2,14 @@ import type { Card } from '../card/index.ts';
 import type { Suggestion } from '../refusal.ts';
 import {
   answerTo,
+  type ExportFile,
   effectOf,
   enterShop,
   exportFiles,
   latestCodes,
   listPeople,
   once,
+  recordFiles,
   type ShopChange,
   type ShopOutside,
   type ShopView,
@@ -59,8 +61,15 @@ export const SHOP_WORDS: ShopWords = { plainText, nearestOf, numberOf, unitOf, m
 /** What is read of a shop that nobody has come into yet. */
 const UNKNOWN_UNITS: ShopUnits = 'in';
 
-/** Who may take everything a shop has kept along. */
-const EXPORTS_NEED: Role = 'owner';
+/** Files that go with an answer, and who may take them along. */
+type Offered = {
+  readonly files: (view: ShopView) => readonly ExportFile[];
+  readonly needs: Role;
+};
+const FILES: readonly Offered[] = [
+  { files: exportFiles, needs: 'owner' },
+  { files: recordFiles, needs: 'supervisor' },
+];
 
 /** The card of what was posted, for whatever stands behind its buttons. */
 const postedCard = (effect: unknown): Answer | null =>
@@ -225,8 +234,8 @@ export const openRecordsDesk = (
   const download: Desk['download'] = async (call, file) => {
     const role = await change(call, (_, visit) => Promise.resolve(visit.role));
     const view = await viewOf(call);
-    if (view === null || !atLeast(role, EXPORTS_NEED)) return null;
-    return filePieces(store, view, file);
+    const offered = view === null ? null : offeredTo(role, view, file);
+    return view === null || offered === null ? null : filePieces(store, view, file, offered);
   };
 
   const pinned: Desk['pinned'] = async (call) => {
@@ -243,10 +252,24 @@ export const openRecordsDesk = (
   return { ...desk, answer, suggest, download, pinned };
 };
 
-async function* filePieces(store: Store, { id }: ShopView, name: string): AsyncGenerator<string> {
+const named = (files: readonly ExportFile[], name: string): ExportFile | undefined =>
+  files.find((each) => each.name === name);
+
+/** What a file of this name belongs to, if this role may take it along. */
+const offeredTo = (role: Role, view: ShopView, name: string): Offered | null =>
+  FILES.find(
+    ({ files, needs }) => atLeast(role, needs) && named(files(view), name) !== undefined,
+  ) ?? null;
+
+async function* filePieces(
+  store: Store,
+  { id }: ShopView,
+  name: string,
+  { files }: Offered,
+): AsyncGenerator<string> {
   const view = await store.view();
   try {
-    const file = exportFiles(viewShop(view.db, id, SHOP_WORDS)).find((each) => each.name === name);
+    const file = named(files(viewShop(view.db, id, SHOP_WORDS)), name);
     if (file !== undefined) yield* file.pieces;
   } finally {
     await view.close();

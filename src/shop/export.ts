@@ -1,8 +1,7 @@
-import { stringify } from 'csv-stringify/sync';
 import { portionsOf, type Row, TABLES, type TableFacts } from '../store/index.ts';
 import type { Sheet } from './csv/columns.ts';
-import { escaped } from './csv/escape.ts';
 import { MACHINE_SHEET } from './csv/machineSheet.ts';
+import { csvText } from './csv/text.ts';
 import { WHEEL_SHEET } from './csv/wheelSheet.ts';
 import { MACHINES } from './machines.ts';
 import { listOf } from './register.ts';
@@ -62,9 +61,9 @@ async function* tablePieces(view: ShopView, table: TableFacts): AsyncGenerator<s
   let isFirst = true;
   for await (const rows of portionsOf(view.db, table, view.id)) {
     const [row] = rows;
-    if (isFirst && row !== undefined) yield lines([Object.keys(row)]);
+    if (isFirst && row !== undefined) yield csvText([Object.keys(row)]);
     isFirst = false;
-    yield lines(rows.map((one) => Object.values(one).map((cell) => String(cell ?? ''))));
+    yield csvText(rows.map((one) => Object.values(one).map((cell) => String(cell ?? ''))));
   }
 }
 
@@ -77,14 +76,7 @@ export const machinesCsv = async (view: ShopView): Promise<string> =>
   sheetCsv(MACHINE_SHEET, await listOf(view, MACHINES));
 
 const sheetCsv = <T>({ columns }: Sheet<T>, items: readonly T[]): string =>
-  lines([
+  csvText([
     columns.map(({ heading }) => heading),
     ...items.map((item) => columns.map(({ write }) => write(item))),
   ]);
-
-/** Lines as RFC 4180 has them; no cell is a formula to the spreadsheet that opens it. */
-const lines = (rows: readonly (readonly string[])[]): string =>
-  stringify(
-    rows.map((row) => row.map(escaped)),
-    { record_delimiter: '\r\n' },
-  );

@@ -121,6 +121,7 @@ export {
 export { openReminders, type ReminderOptions, type Reminders } from './questions/reminders.ts';
 export { type PutUp } from './questions/waiting.ts';
 export { MINUTES_OF_DAY, type QuietHours } from './quiet.ts';
+export * from './record/index.ts';
 export {
   addTo,
   changeIn,

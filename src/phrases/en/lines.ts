@@ -8,6 +8,7 @@ import { findLines } from './findLines.ts';
 import { patternName, pitchName, wheelName } from './names.ts';
 import { planLines } from './planLines.ts';
 import { questionLines } from './questionLines.ts';
+import { recordLines } from './recordLines.ts';
 import { remedyLabel } from './remedies.ts';
 import { resultLines } from './resultLines.ts';
 import { shopLines } from './shopLines.ts';
@@ -33,6 +34,7 @@ export const lines: Book['lines'] = {
   ...findLines,
   ...planLines,
   ...questionLines,
+  ...recordLines,
   ...resultLines,
   ...shopLines,
   ...standardLines,

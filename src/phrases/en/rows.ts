@@ -4,6 +4,7 @@ import { convertRows } from './convertLines.ts';
 import { findRows } from './findLines.ts';
 import { planRows } from './planLines.ts';
 import { questionRows } from './questionLines.ts';
+import { recordRows } from './recordLines.ts';
 import { resultRows } from './resultLines.ts';
 import { shopRows } from './shopLines.ts';
 import { standardRows } from './standardLines.ts';
@@ -19,6 +20,7 @@ export const rows: Book['rows'] = {
   ...findRows,
   ...planRows,
   ...questionRows,
+  ...recordRows,
   ...resultRows,
   ...shopRows,
   ...standardRows,

@@ -14,6 +14,7 @@ export const verbs: Readonly<Record<string, string>> = {
   'knurl result show': 'One result, and what was changed in it',
   'knurl result list': 'The last results, or those that wait to be confirmed',
   'knurl today': 'What is set up, what went wrong, what waits: for the shift that comes in',
+  'knurl record': "Growth, outcomes and standards as the shop's own results show them",
   'knurl find': 'Cards, standards, questions and results by words, past a slip of the thumb',
   'knurl card': 'A card again by its code, and whether it would come out the same today',
   'knurl ask': 'Put a question to the engineers, with the numbers of a card',
