@@ -10,7 +10,7 @@ const HEADINGS: { readonly [P in RecordPart]: string } = {
   standards: 'Standards by what was logged on their cards',
 };
 
-const NOT_NAMED = { wheels: 'No wheel named', materials: 'Not known' } as const;
+const NOT_NAMED = { wheels: 'no wheel named', materials: 'not known' } as const;
 
 /** From so many on a share is said in per cent. Judgement: of fewer it says more than is known. */
 const ENOUGH = 20;
@@ -18,7 +18,6 @@ const ENOUGH = 20;
 const counted = (count: number, one: string, many: string): string =>
   `${String(count)} ${count === 1 ? one : many}`;
 const results = (count: number): string => counted(count, 'result', 'results');
-const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 const list = (items: readonly string[]): string => items.join(', ');
 
 const goodOf = (good: number, count: number): string => {
@@ -45,15 +44,16 @@ export const recordRows: {
 } = {
   recordGrowth: ({ pattern, group, mean, low, high, results: count }) => {
     const percent = (share: number): string => (100 * share).toFixed(0);
+    // What tells the rows apart is long; the numbers are short, and stand in front.
     return {
-      label: `${capital(patternName(pattern))}, ${group}`,
-      text: `${percent(mean)} % (${percent(low)} to ${percent(high)}), ${results(count)}`,
+      label: `${percent(mean)} % (${percent(low)} to ${percent(high)})`,
+      text: `${patternName(pattern)} in ${group}, ${results(count)}`,
     };
   },
   recordOutcomes: ({ about, name, count, good, others }) => ({
-    label: name ?? NOT_NAMED[about],
+    label: goodOf(good, count),
     text: [
-      goodOf(good, count),
+      name ?? NOT_NAMED[about],
       ...others.map((other) => `${other.outcome} ${String(other.count)}`),
     ].join('; '),
   }),

@@ -85,7 +85,7 @@ describe.each(ENGINES)('record, %s', (engine) => {
     const percent = (share: number): string => (100 * share).toFixed(0);
     const answer = await ask('/knurl record');
     expect(textOf(answer, 2_000)).toContain(
-      `Straight knurl, steel  ${percent(belief.mean)} % (${percent(low)} to ${percent(high)}), 5 results`,
+      `${percent(belief.mean)} % (${percent(low)} to ${percent(high)})  straight knurl in steel, 5 results`,
     );
     expect(textOf(answer, 2_000)).toContain(
       'Not learned from until an engineer confirms them: R9.',
@@ -103,10 +103,10 @@ describe.each(ENGINES)('record, %s', (engine) => {
     await ask('/knurl result withdraw R11');
     const text = textOf(await ask('/knurl record'), 2_000);
     expect(text).toContain('10 results of this shop: 7 of 10 good.');
-    expect(text).toMatch(/Hazel +6 of 9 good; double 2; flaking 1\n/u);
-    expect(text).toMatch(/No wheel named +1 of 1 good\n/u);
+    expect(text).toMatch(/6 of 9 good +Hazel; double 2; flaking 1\n/u);
+    expect(text).toMatch(/1 of 1 good +no wheel named\n/u);
     expect(text).toMatch(
-      /Low-carbon steel, 0\.18 % C, cold drawn +6 of 9 good; double 2; flaking 1\n/u,
+      /6 of 9 good +Low-carbon steel, 0\.18 % C, cold drawn; double 2; flaking 1\n/u,
     );
     expect(text).not.toContain('bent');
     for (let more = 0; more < 15; more += 1) await ask('/knurl result good');
