@@ -10,15 +10,17 @@ import {
   type TroubleFacts,
   troubleFacts,
 } from '../../src/calc/index.ts';
+import { line } from '../../src/card/index.ts';
 import {
   type About,
   type Context,
   cardReply,
   defineCommand,
+  placeName,
   type Reply,
   refuse,
 } from '../../src/desk/index.ts';
-import { causeCounts, type Wheel } from '../../src/shop/index.ts';
+import { causeCounts, latestCards, type Wheel } from '../../src/shop/index.ts';
 import { shopRequestOf } from './shopRequest.ts';
 import { troubleCard } from './troubleCard.ts';
 import { type TroubleWords, troubleFields } from './troubleFields.ts';
@@ -80,6 +82,37 @@ const ranked = async (
   return cardReply(troubleCard({ context, said, symptom, facts, causes, logged }), [], about);
 };
 
+/** Cards that are looked through for the last set-up. Judgement. */
+const LOOKED_THROUGH = 20;
+
+/** A line without what says which verb it is for. */
+const bare = (text: string): string =>
+  text.replace(/^\s*\/?knurl\b\s*/iu, '').replace(/^(?:setup|trouble)\b\s*/iu, '');
+
+/** The same trouble with the set-up this person was last given here; null where there is none. */
+const ofLastSetup = async (context: Context): Promise<Reply | null> => {
+  const { visit, text } = context;
+  if (visit === null) return null;
+  const [place, madeBy] = [placeName(context.place), visit.person.id];
+  const own = await latestCards(visit.shop, { limit: LOOKED_THROUGH, madeBy, place });
+  const last = own.find(({ kind }) => kind === 'setup');
+  if (last === undefined) return null;
+  const words = `/knurl trouble ${bare(text)} ${bare(last.words)}`;
+  const reply = await context.again(words);
+  // Words that do not go together with it are ranked by themselves.
+  if ('refusal' in reply) return null;
+  const { card, about } = reply;
+  const from = line('troubleOfCard', { code: last.code });
+  const [head, ...rest] = card.parts;
+  const first = head?.part === 'lines' ? head.lines : [];
+  const others = head?.part === 'lines' ? rest : card.parts;
+  return {
+    ...reply,
+    card: { ...card, parts: [{ part: 'lines', lines: [from, ...first] }, ...others] },
+    ...(about === undefined ? {} : { about: { ...about, words } }),
+  };
+};
+
 const SYMPTOM_EXAMPLES = ['double', 'flaking', 'shallow', 'pin seized'] as const;
 
 const missingSymptom = (context: Context): Reply =>
@@ -119,7 +152,8 @@ export const trouble = defineCommand({
   allowed: 'operator',
   run: async (context, said) => {
     if (said.symptom === undefined) return missingSymptom(context);
-    if (wordsAlone(said)) return await ranked(context, said, said.symptom, NO_FACTS);
+    if (wordsAlone(said))
+      return (await ofLastSetup(context)) ?? (await ranked(context, said, said.symptom, NO_FACTS));
     const built = await shopRequestOf(context, said);
     return 'refusal' in built
       ? refuse(built.refusal, built.choices)

@@ -14,6 +14,8 @@ export type TroubleLines = {
   troubleSeen: { readonly symptom: SymptomId };
   troubleByNumbers: Nothing;
   troubleByWords: Nothing;
+  /** Nothing of the set-up was said: it is that of the last card. */
+  troubleOfCard: { readonly code: string };
 };
 
 /** What the buttons of a trouble say. */

@@ -43,6 +43,7 @@ export const troubleLines: {
   troubleLikeliest: (said, show) =>
     `Most likely ${causeNames[said.cause]}: ${moveText(said.move, show)}`,
   troubleSeen: ({ symptom }) => `Seen: ${symptomNames[symptom]}.`,
+  troubleOfCard: ({ code }) => `For your last set-up here, card ${code}.`,
   troubleByNumbers: () => "Ranked by this set-up's numbers.",
   troubleByWords: () =>
     'Ranked by words alone: say the bar, the pattern and the pitch too, and the numbers speak.',

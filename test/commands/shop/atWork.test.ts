@@ -150,6 +150,23 @@ describe.each(ENGINES)('a shop at work, %s', (engine) => {
     });
   });
 
+  it('ranks a trouble by the last set-up, where only what is seen is said', async () => {
+    const ask = await shopAt(engine);
+    expect(textOf(await ask('/knurl trouble double'))).toContain('Ranked by words alone');
+    const line = '1.000 straight 21tpi 1018 out 1.5';
+    const code = codeOf(textOf(await ask(line)));
+    const short = await ask('/knurl trouble double');
+    expect(textOf(short)).toContain(`For your last set-up here, card ${code}.`);
+    const full = await ask(`/knurl trouble double ${line}`);
+    expect(figureOf(short, 'chanceOfCause')).toBe(figureOf(full, 'chanceOfCause'));
+    // Shown again, it is worked out from the whole line, whatever was set up since.
+    await ask('0.5 diamond 33tpi brass');
+    const again = textOf(await ask(`/knurl card ${codeOf(textOf(short))}`));
+    expect(again).toContain('Worked out today it is the same.');
+    // Somebody else has no set-up here.
+    expect(textOf(await ask('/knurl trouble double', 'Pavel'))).toContain('Ranked by words alone');
+  });
+
   it('offers the nearest machine for a misspelt one', async () => {
     const ask = await shopAt(engine);
     await ask('/shop machines add lathe-west speeds 100 200');
