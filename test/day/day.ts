@@ -56,4 +56,7 @@ export const DAY: readonly Turn[] = [
   kit('10:15', '1.000 1018 straight wheel Fern on Bench lathe out 1.5'),
   // Found again by what was said.
   kit('13:20', '/knurl find new rack doubles'),
+  // What the next shift should know.
+  mara('14:05', '/knurl today'),
+  mara('14:06', '/knurl record'),
 ];
