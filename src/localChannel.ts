@@ -25,9 +25,8 @@ const onFault = (error: unknown): void => {
   );
 };
 
-/** Where pictures go; a run that is fed from a file writes none, unless it is asked to. */
-const picturesFolder = (interactive: boolean): string | null => {
-  const { WHOLETOOTH_PICTURES: asked } = process.env;
+/** Where a run writes to; one that is fed from a file writes nothing, unless it is asked to. */
+const folderFor = (asked: string | undefined, interactive: boolean): string | null => {
   if (asked !== undefined && asked !== '') return asked;
   return interactive ? join(tmpdir(), `wholetooth-${String(process.pid)}`) : null;
 };
@@ -83,7 +82,8 @@ export const runLocalChannel = async (
     deliveries.start();
     reminders.start();
   }
-  const folder = picturesFolder(interactive);
+  const { WHOLETOOTH_PICTURES: pictures, WHOLETOOTH_FILES: files } = process.env;
+  const folder = folderFor(pictures, interactive);
   const as = values.as ?? begin.as;
   await runChannel({
     desk: localDesk(store, Date.now),
@@ -102,6 +102,7 @@ export const runLocalChannel = async (
               { folder, prefix: `${String(line)}-` },
               { book: en, render, onFault },
             ),
+    files: folderFor(files, interactive),
     width,
     onFault,
     settle: async () => {

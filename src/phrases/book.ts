@@ -66,6 +66,10 @@ export type TerminalPhrases = {
   readonly unitsArgument: string;
   readonly fault: string;
   readonly pictureAt: (path: string) => string;
+  readonly fileAt: (path: string) => string;
+  readonly noFiles: string;
+  /** A file that was to be taken in cannot be read. */
+  readonly noSuchFile: (path: string) => string;
   /** Nothing is missing but the picture. */
   readonly noPicture: string;
 };

@@ -21,11 +21,12 @@ export type Played = {
   readonly lines: readonly string[];
   readonly now?: () => number;
   readonly speaker?: Speaker;
+  readonly files?: string;
 };
 
 /** Everything that is shown, after the opening. */
 export const play = async (played: Played): Promise<string> => {
-  const { store, fleet, lines, now = Date.now, speaker } = played;
+  const { store, fleet, lines, now = Date.now, speaker, files = null } = played;
   const input = new PassThrough();
   const output = new PassThrough();
   const said: Buffer[] = [];
@@ -52,6 +53,7 @@ export const play = async (played: Played): Promise<string> => {
     opening: [],
     ...(speaker === undefined ? {} : { speaker }),
     pictures: null,
+    files,
     width: () => PHONE_WIDTH,
     onFault,
     settle: async () => {

@@ -5,6 +5,7 @@ import type { Answer, Call, Desk } from '../../desk/index.ts';
 import type { Book } from '../../phrases/index.ts';
 import { spoken } from '../common/spoken.ts';
 import { cardText, printable, wrapped } from '../common/text.ts';
+import { handOver, withFile } from './files.ts';
 import { pictureLines } from './pictures.ts';
 import { FIRST, moved, promptFor, type Speaker } from './speaker.ts';
 
@@ -47,6 +48,8 @@ export type ChannelOptions = {
   readonly onFault: (error: unknown) => void;
   /** Writes the pictures of the answer to a line and says where; null where none are wanted. */
   readonly pictures: ((answer: Answer, line: number) => Promise<readonly string[]>) | null;
+  /** Where the files go that an answer hands over; null where none are wanted. */
+  readonly files?: string | null;
   /** Brings about what an answer left to be done, and says how much that was. */
   readonly settle?: () => Promise<number>;
 };
@@ -77,6 +80,23 @@ const pictured = async (
   if (lines.length > 0) await written(output, `${lines.join('\n')}\n\n`);
 };
 
+const filed = async (
+  { desk, files = null, book, output, onFault }: ChannelOptions,
+  call: Call,
+  answer: Answer,
+  line: number,
+): Promise<void> => {
+  if (files === null) return;
+  try {
+    const paths = await handOver(desk, call, answer, { folder: files, prefix: `${String(line)}-` });
+    if (paths.length > 0)
+      await written(output, `${paths.map(book.terminal.fileAt).join('\n')}\n\n`);
+  } catch (error) {
+    onFault(error);
+    await written(output, `${book.terminal.noFiles}\n\n`);
+  }
+};
+
 /** What happened besides stands under the card, before anything else is answered. */
 const settled = async ({ settle, output, onFault }: ChannelOptions): Promise<void> => {
   try {
@@ -94,6 +114,7 @@ const answered = async (options: ChannelOptions, call: Call, line: number): Prom
     await written(output, `${cardText(spoken(answer, book), width())}\n\n`);
     // The card stands already: nobody waits for a picture to read it.
     await pictured(options, answer, line);
+    await filed(options, call, answer, line);
   } catch (error) {
     options.onFault(error);
     await written(output, `${book.terminal.fault}\n\n`);
@@ -120,13 +141,17 @@ export const runChannel = async (options: ChannelOptions): Promise<void> => {
     number += 1;
     if (!interactive) await prompt(`${printable(line)}\n`);
     const move = moved(line, speaker, terminal);
-    if (move === null) {
-      // Every line of every conversation acts once.
-      const interactionId = `${run}-${String(number)}`;
-      await answered(options, { ...terminalCall(line, number, speaker), interactionId }, number);
-    } else {
+    const { words, file, attached } = await withFile(line);
+    if (move !== null) {
       speaker = move.speaker;
       await written(output, `${sentenceText(move.said, width())}\n\n`);
+    } else if (attached === null) {
+      await written(output, `${sentenceText(terminal.noSuchFile(file ?? ''), width())}\n\n`);
+    } else {
+      // Every line of every conversation acts once.
+      const interactionId = `${run}-${String(number)}`;
+      const call = { ...terminalCall(words, number, speaker), interactionId, attached };
+      await answered(options, call, number);
     }
     if (interactive) await prompt('');
   }

@@ -34,6 +34,9 @@ export const terminal: TerminalPhrases = {
     'Give one line in quotes, such as: npm run --silent ask -- "/knurl 1.000 straight 21tpi 1018"',
   unitsArgument: '--units takes in or mm.',
   fault: 'Something went wrong here, not in what you typed. Nothing was changed; send it again.',
+  fileAt: (path) => `File: ${path}`,
+  noFiles: 'The files could not be written. Check the folder, then ask again.',
+  noSuchFile: (path) => `There is no file ${path} to read. Nothing was taken in; check its name.`,
   pictureAt: (path) => `Picture: ${path}`,
   noPicture: 'A picture could not be shown. Nothing else is missing from the card.',
 };

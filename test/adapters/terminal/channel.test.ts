@@ -1,10 +1,12 @@
 /** A whole shop in one terminal: who speaks, where, and what happens besides the answers. */
+import fs from 'node:fs';
+import path from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { z } from 'zod';
 import { FLEET } from '../../../commands/index.ts';
 import { type Card, line } from '../../../src/card/index.ts';
 import { cardReply, defineCommand, type Effect } from '../../../src/desk/index.ts';
-import { ENGINES } from '../../support/places.ts';
+import { ENGINES, newFolder } from '../../support/places.ts';
 import { newRecords } from '../../support/records.ts';
 import { play } from '../../support/terminal.ts';
 
@@ -137,4 +139,32 @@ it('nothing is wider than a phone, whatever was typed', async () => {
   const said = await play({ store, fleet, lines });
   const shown = said.split('\n').filter((each) => !each.includes('> '));
   for (const each of shown) expect(each.length).toBeLessThanOrEqual(48);
+});
+
+it('a file is taken in behind its sign, and those of an answer are handed over to who may have them', async () => {
+  const { store } = await newRecords('sqlite');
+  const folder = newFolder();
+  const crib = path.join(folder, 'crib.csv');
+  fs.writeFileSync(crib, 'name,form,pitch\nAsh,straight,21 tpi\nBeech,straight,25 tpi\n');
+  const files = path.join(folder, 'files');
+  const lines = [
+    '/as mara',
+    `/shop wheels import < ${crib}`,
+    `/shop wheels import < ${crib}.not`,
+    '/shop export',
+    '/as kit',
+    '/shop export',
+    '/shop rules add Crest < 0.99 only on the drawing',
+  ];
+  const said = turns(await play({ store, fleet, lines, files }));
+  expect(said[1]).toContain('2 wheels added.');
+  expect(said[2]?.replaceAll(/\s+/gu, ' ')).toContain('Nothing was taken in; check its name.');
+  const wheels = fs.readdirSync(files).find((name) => name.endsWith('wheel.csv')) ?? '';
+  expect(said[3]).toContain(`File: ${path.join(files, wheels)}`);
+  expect(fs.readFileSync(path.join(files, wheels), 'utf8')).toContain('Beech');
+  expect(fs.statSync(path.join(files, wheels)).mode & 0o077).toBe(0);
+  expect(said[5]).toContain('That needs the role owner.');
+  expect(said[5]).not.toContain('File:');
+  // Only an import has a file behind the sign.
+  expect(said[6]).not.toContain('no file');
 });
