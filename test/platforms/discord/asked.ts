@@ -174,9 +174,5 @@ export const openInteractions = (rooms: Rooms, next: () => number) => {
       if (asked.original?.isLoading === true) return loaded(asked, body, files);
       return stored(asked, 'followUp', body, files, isHidden(body));
     },
-    /** People who asked for something: a late answer may ring them. */
-    get people(): ReadonlySet<string> {
-      return new Set([...open.values()].map(({ someone }) => someone.id));
-    },
   };
 };
