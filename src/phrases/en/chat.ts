@@ -3,8 +3,8 @@ import type { ChatPhrases, ConfigPhrases } from '../chat.ts';
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 
 export const chat: ChatPhrases = {
-  words: 'The request in your own words, such as 1.000 straight 21tpi 1018',
-  onlyMe: 'Show the answer to you alone',
+  words: 'In your own words, such as 1.000 straight 21tpi 1018',
+  onlyMe: 'Only you see the answer',
   option: (name, examples) =>
     examples.length === 0 ? capital(name) : `${capital(name)}: ${examples.join(', ')}`,
   fromMessage: 'Set up from this message',

@@ -18,7 +18,7 @@ export const discord: DiscordPhrases = {
   notYours: 'That answer is for whoever asked. Ask for your own.',
   unsent: 'The answer was made but could not be shown. Press the button to see it.',
   formLate: 'Discord gave the form no time to open. Press that button again.',
-  moreWords: 'Anything more, in your own words',
+  moreWords: 'More, in your own words',
   file: 'The file, as a table with commas between (CSV)',
   fileTooLarge: (name, megabytes) =>
     `${name} is larger than ${String(megabytes)} MB, more than can go this way.`,

@@ -134,6 +134,13 @@ export const openBot = async ({
       await until(() => shown() >= toBeShown, 'the pictures');
       await new Promise((done) => setTimeout(done, 5));
     },
+    /** No call for a while: whatever was still on its way, files among it, has come. */
+    still: async (ms = 300): Promise<void> => {
+      for (let seen = -1; seen !== platform.calls.length; ) {
+        seen = platform.calls.length;
+        await new Promise((done) => setTimeout(done, ms));
+      }
+    },
     /** The form that comes of something. */
     nextForm: async (act: () => Promise<unknown>) => {
       const before = platform.forms.length;

@@ -54,7 +54,7 @@ test('no send of any verb, asked for in private, is seen by anybody else', async
   for (const { path, examples } of FLEET)
     for (const words of examples)
       await next(() => people.slash(path, { words, 'only-me': true }, owner));
-  await quiet();
+  await bot.still();
   for (const { only, body } of platform.posted.slice(before))
     expect(only, readIn({ body })).toBe(owner.id);
 }, 60_000);
