@@ -195,6 +195,8 @@ export const revisionList = (
   figures: unknown,
 ) => ({ part, revision: number, state, why, reviewAt, scope, figures });
 
+const FOOTING: Part = { part: 'footing' };
+
 /** A revision with all that is to be known of it, and the set-up it was made from. */
 export const revisionCard = async (
   { units }: Context,
@@ -220,7 +222,15 @@ export const revisionCard = async (
   ];
   const whole =
     brief === true
-      ? { ...card, parts, pictures: [], checks: [], cautions: [], alternatives: [] }
+      ? // A diameter to turn to stands on it, so what goes before every card does too.
+        {
+          ...card,
+          parts: [...parts, FOOTING],
+          pictures: [],
+          checks: [],
+          cautions: [],
+          alternatives: [],
+        }
       : { ...card, parts: [...parts, ...setup.parts] };
   return {
     ...whole,

@@ -1,6 +1,6 @@
 import { LARGEST_DIAMETER } from '../../src/calc/index.ts';
 import { type Lead, said } from '../../src/desk/index.ts';
-import { readCode, type StandardState } from '../../src/shop/index.ts';
+import type { StandardState } from '../../src/shop/index.ts';
 import {
   type Cursor,
   countOf,
@@ -18,6 +18,7 @@ import {
   vocabularyOf,
 } from '../../src/words/index.ts';
 import { recordsOf } from '../shop/named.ts';
+import { readCodeAt } from './codeWords.ts';
 
 export const PART_EXAMPLE = 'TH-2041-B';
 
@@ -60,18 +61,9 @@ export const partOfSetup = said<string>({
   examples: [`part ${PART_EXAMPLE}`],
 });
 
-/** `K7M2X`, `K7-M2X`; what cannot be a code is looked for all the same, and then not found. */
-const readCard: Reader<string> = (cursor) => {
-  const first = tokenAt(cursor)?.text;
-  if (first === undefined) return null;
-  const second = tokenAt(cursor, 1)?.text;
-  const both = second === undefined ? null : readCode(first + second);
-  return readCode(first) === null && both !== null ? took(both, 2) : took(first, 1);
-};
-
 export const fromCard = said<string>({
   name: 'card',
-  read: readCard,
+  read: readCodeAt,
   keywords: ['card', 'code', 'from card'],
   suggests: 'cards',
   examples: ['card K7M2X'],
