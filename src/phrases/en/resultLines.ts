@@ -98,7 +98,7 @@ export const resultRows: {
   }),
   resultWheel: ({ wheel, parts, run }) => ({
     label: 'Wheel',
-    text: `${wheel}: ${String(run)} parts run${parts === 0 ? '' : ` (${String(Math.abs(parts))} ${parts < 0 ? 'fewer' : 'more'})`}`,
+    text: `${wheel}: ${String(run)} ${run === 1 ? 'part' : 'parts'} run${parts === 0 ? '' : ` (${String(Math.abs(parts))} ${parts < 0 ? 'fewer' : 'more'})`}`,
   }),
   resultCause: ({ cause }) => ({ label: 'Cause', text: causeNames[cause] }),
   resultNote: ({ note }) => ({ label: 'Note', text: note }),

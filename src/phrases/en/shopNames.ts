@@ -169,7 +169,7 @@ export const factText = ({ name, amount }: Fact, show: Show): string => {
   const text = amountText(amount, show);
   if (PLAIN.has(name) || amount.kind === 'speeds' || amount.kind === 'feeds') return text;
   if (name === 'teeth') return `${text} teeth`;
-  if (name === 'partsRun') return `${text} parts run`;
+  if (name === 'partsRun') return `${text} ${text === '1' ? 'part' : 'parts'} run`;
   return `${factName(name)} ${text}`;
 };
 
