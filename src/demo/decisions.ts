@@ -6,7 +6,7 @@ export type Decision = {
   /** Hours since the season began. */
   readonly at: number;
   readonly by: string;
-  /** `{card QH-114}` is the code of the last card of that part, `{doubt}` that of a question. */
+  /** `{card QH-114}` is the code of the last card of that part, `{shallow}` that of a question. */
   readonly line: string;
   /** The name under which the question that is put up is spoken of afterwards. */
   readonly names?: string;
