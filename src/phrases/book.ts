@@ -61,7 +61,8 @@ export type TerminalPhrases = {
   readonly unpinned: (place: string, says: string) => string;
   readonly threadOpened: (place: string, title: string) => string;
   readonly told: (people: readonly string[], says: string) => string;
-  readonly edited: (place: string, says: string) => string;
+  /** What is new mostly stands under the first line. */
+  readonly edited: (place: string, says: string, under: string | null) => string;
   readonly usage: string;
   readonly unitsArgument: string;
   readonly fault: string;

@@ -65,8 +65,9 @@ const acted = (
     }
     case 'edit': {
       const { place, message: name } = effect.message ?? message.parse(earlier);
-      const says = speakCard(book, effect.card).headline;
-      const line = terminal.edited(shown(place), says);
+      const { headline: says, parts } = speakCard(book, effect.card);
+      const [first] = parts.flatMap((part) => (part.part === 'lines' ? part.texts : []));
+      const line = terminal.edited(shown(place), says, first ?? null);
       return { line, outcome: { place, message: name, says } };
     }
     default:

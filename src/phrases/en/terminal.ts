@@ -29,7 +29,8 @@ export const terminal: TerminalPhrases = {
   unpinned: (place, says) => `→ Pin taken off in ${place}: ${says}`,
   threadOpened: (place, title) => `→ Thread ${place} opened: ${title}`,
   told: (people, says) => `→ ${listed(people)} told: ${says}`,
-  edited: (place, says) => `→ Changed in ${place}: ${says}`,
+  edited: (place, says, under) =>
+    `→ Changed in ${place}: ${says}${under === null ? '' : `${/[.!?…]$/u.test(says) ? '' : '.'} ${under}`}`,
   usage:
     'Give one line in quotes, such as: npm run --silent ask -- "/knurl 1.000 straight 21tpi 1018"',
   unitsArgument: '--units takes in or mm.',
