@@ -7,6 +7,7 @@ import type {
   APIApplicationCommandAutocompleteGuildInteraction,
   APIChatInputApplicationCommandGuildInteraction,
   APIDMChannel,
+  APIDMInteractionWrapper,
   APIGuildInteractionWrapper,
   APIMessage,
   APIMessageApplicationCommandGuildInteraction,
@@ -29,6 +30,8 @@ export type Bodies = {
   readonly suggestion: APIApplicationCommandAutocompleteGuildInteraction;
   readonly messageCommand: APIMessageApplicationCommandGuildInteraction;
   readonly button: APIGuildInteractionWrapper<APIMessageComponentButtonInteraction>;
+  /** In a direct message: there is no server, and no member of one. */
+  readonly directButton: APIDMInteractionWrapper<APIMessageComponentButtonInteraction>;
   readonly submission: APIModalSubmitGuildInteraction;
   readonly mention: GatewayMessageCreateDispatchData;
   readonly posted: APIMessage;

@@ -173,30 +173,35 @@ export const interactionCommon = (
   someone: Someone,
   channel: Channel,
 ) => {
+  // Between two people there is no server, and no member of one.
+  const isDirect = channel.guild === '';
+  const where = isDirect
+    ? { user: userOf(someone), context: 1, authorizing_integration_owners: { '0': '0' } }
+    : {
+        guild_id: someone.guild,
+        member: {
+          user: userOf(someone),
+          nick: null,
+          permissions: permissionsOf(someone),
+          ...memberCommon(someone.roles),
+        },
+        guild_locale: 'en-US',
+        context: 0,
+        authorizing_integration_owners: { '0': someone.guild },
+      };
+  const type = channel.parent === null ? TEXT_CHANNEL : THREAD_CHANNEL;
   return {
     id,
     application_id: APPLICATION,
     token,
     version: 1,
-    guild_id: someone.guild,
     channel_id: someone.channel,
-    channel: {
-      id: someone.channel,
-      type: channel.parent === null ? TEXT_CHANNEL : THREAD_CHANNEL,
-    },
-    member: {
-      user: userOf(someone),
-      nick: null,
-      permissions: permissionsOf(someone),
-      ...memberCommon(someone.roles),
-    },
+    channel: { id: someone.channel, type: isDirect ? DIRECT_CHANNEL : type },
     app_permissions: String(BOT_PERMISSIONS),
     locale: 'en-US',
-    guild_locale: 'en-US',
     entitlements: [],
-    authorizing_integration_owners: { '0': someone.guild },
-    context: 0,
     attachment_size_limit: 10_485_760,
+    ...where,
   } as const;
 };
 

@@ -17,7 +17,13 @@ export type Delivery = Times & {
 };
 export type Value = string | number | boolean;
 
-type Interaction = 'slash' | 'suggestion' | 'messageCommand' | 'button' | 'submission';
+type Interaction =
+  | 'slash'
+  | 'suggestion'
+  | 'messageCommand'
+  | 'button'
+  | 'directButton'
+  | 'submission';
 
 type Option = {
   readonly type: number;
@@ -220,7 +226,8 @@ export const openPeople = (platform: Platform) => {
       const presser = { ...someone, channel: message.channel };
       const data = { custom_id: button.custom_id, component_type: BUTTON };
       const more = { type: 3, data, ...nameOf(message) };
-      return ask('button', 'component', presser, delivery, more);
+      const payload = message.guild === null ? 'directButton' : 'button';
+      return ask(payload, 'component', presser, delivery, more);
     },
 
     /** Sends a form, filled in under each field's name; what was in it already stays. */
