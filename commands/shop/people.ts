@@ -13,6 +13,7 @@ import {
   said,
   type Visit,
 } from '../../src/desk/index.ts';
+import type { Refusal } from '../../src/refusal.ts';
 import {
   findPerson,
   listGroups,
@@ -124,6 +125,27 @@ const named = (context: Context, called: string, is: Role): Reply =>
     }),
   );
 
+/**
+ * Whoever will come by that name or id. Where the platform tells people apart by ids, a name that
+ * it does not know would be kept for somebody who never comes.
+ */
+const personCalled = async (
+  { shop, outsideId, directory }: Visit,
+  called: string,
+): Promise<PersonCalled> => {
+  if (directory === null) return { outside: outsideId(called), name: called };
+  const known = directory.person(called);
+  if (known !== null) return { outside: known.id, name: known.name };
+  const met = await findPerson(shop, called);
+  if (met.ok) return met.value;
+  const nearest = met.refusal.code === 'notFound' ? met.refusal.nearest : [];
+  return { refusal: { code: 'notFound', what: 'stranger', word: called, nearest } };
+};
+
+type PersonCalled =
+  | { readonly outside: string; readonly name: string }
+  | { readonly refusal: Refusal };
+
 /** Somebody who has not spoken yet, by the name or id they will come with. */
 const add = defineCommand({
   path: ['shop', 'people', 'add'],
@@ -132,11 +154,11 @@ const add = defineCommand({
   lead,
   allowed: 'owner',
   run: (context, given) =>
-    visiting(context, async ({ shop, outsideId, directory }) => {
+    visiting(context, async (visit) => {
       if (given.name === undefined) return refused(nameless(NAME));
-      const name = directory?.person(given.name)?.name ?? given.name;
-      const who = { outside: outsideId(given.name), name };
-      const met = await meetPerson(shop, who, given.role ?? 'operator');
+      const who = await personCalled(visit, given.name);
+      if ('refusal' in who) return refused(who.refusal);
+      const met = await meetPerson(visit.shop, who, given.role ?? 'operator');
       return met.ok ? named(context, met.value.name, met.value.role) : refused(met.refusal);
     }),
 });

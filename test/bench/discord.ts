@@ -99,7 +99,9 @@ export const benchDiscord = async () => {
   await register({ ...common, dryRun: false, book: en, fleet: FLEET, print: () => undefined });
   try {
     const cards = await crowd(platform, { file: path.join(folder, 'records.sqlite') });
-    const bare = await crowd(platform, { says: platform.posted.find(({ by }) => by === 'reply')?.body });
+    const bare = await crowd(platform, {
+      says: platform.posted.find(({ by }) => by === 'reply')?.body,
+    });
     return { bare, cards };
   } finally {
     await platform.stop();

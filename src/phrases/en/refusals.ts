@@ -165,6 +165,8 @@ const notFound = ({ what, word, nearest }: NotFound): string => {
     return nearest.length > 0
       ? `There is no question${name} here. Did you mean ${list(nearest)}?`
       : `There is no question${name} here. /knurl questions lists those that are open.`;
+  if (what === 'stranger')
+    return `I cannot tell who${name} is here. Type @ and pick them from what is offered, such as /shop people add @${nearest[0] ?? 'Mara'} engineer.`;
   if (nearest.length > 0)
     return `There is no ${thing(what)}${name} here. Did you mean ${list(nearest)}?`;
   if (what === 'material')

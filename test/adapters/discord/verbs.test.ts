@@ -27,9 +27,11 @@ const codeIn = (message: Posted): string =>
 /** What is asked has a code of its own. */
 const questionIn = (message: Posted): string | undefined =>
   /\bQuestion ([2346789CFHJKMPRTWXY]{5,12}) is put up/u.exec(readIn(message))?.[1];
-/** Examples name a card and a number of the list that no shop of a test has. */
-const ownNames = (line: string, code: string): string =>
+/** Examples name somebody, a card and a number of the list that no shop of a test has. */
+const ownNames = (line: string, code: string, ben: string): string =>
   line
+    // People are named here by a mention.
+    .replace(/^(\/shop people (?!group)\w+ )Ben\b/u, `$1<@${ben}>`)
     .replaceAll(/\b(?=\w*\d)(?=\w*[A-Z])[2346789CFHJKMPRTWXY]{5}\b/gu, code)
     .replaceAll(/\b([QR])\d+\b/gu, '$11');
 
@@ -76,21 +78,25 @@ const brought = async (act: () => Promise<unknown>, quietMs = 0): Promise<readon
   return all;
 };
 
+type Served = { readonly who: Someone; readonly code: string; readonly ben: string };
+
 /** A server of its own, with a card to speak of and whatever the verb's list holds. */
-const shopFor = async (name: string, command: Command): Promise<{ who: Someone; code: string }> => {
+const shopFor = async (name: string, command: Command): Promise<Served> => {
   const who = platform.addGuild(name);
+  const ben = platform.newId();
+  platform.meetPerson({ ...who, id: ben, name: 'Ben', manages: false });
   const first = await brought(() => people.slash(SETUP, { words: LINE }, who));
   let code = first.map(codeIn).join('');
   for (const maker of makersFor(command)) {
     // The first makes what is needed; a list gets all of them.
     const needed = maker.path.at(-1) === 'add' ? maker.examples : maker.examples.slice(0, 1);
     for (const example of needed) {
-      const options = optionsFor(people, maker, ownNames(example, code));
+      const options = optionsFor(people, maker, ownNames(example, code, ben));
       const made = await brought(() => people.slash(maker.path, options, who));
       code = made.map(questionIn).find((each) => each !== undefined) ?? code;
     }
   }
-  return { who, code };
+  return { who, code, ben };
 };
 
 const typed = (path: readonly string[], options: Readonly<Record<string, unknown>>): string =>
@@ -105,16 +111,17 @@ const examplesOf = async (
   command: Command,
   fill: (line: string) => Readonly<Record<string, Value>>,
 ) => {
-  const { who, code } = await shopFor(name, command);
+  const { who, code, ben } = await shopFor(name, command);
+  const plain = (text: string): string => text.replaceAll(code, 'CODE').replaceAll(ben, 'BEN');
   const asked: string[] = [];
   const seen: string[] = [];
   for (const example of command.examples) {
-    const options = fill(ownNames(example, code));
+    const options = fill(ownNames(example, code, ben));
     // Files are made while they are handed over: nothing is heard of them for a while.
     const quietMs = command.path.at(-1) === 'export' ? 400 : 0;
     const messages = await brought(() => people.slash(command.path, options, who), quietMs);
-    asked.push(typed(command.path, options).replaceAll(code, 'CODE'));
-    seen.push(withoutCodes(messages.map(seenAs).join('\n\n')).replaceAll(code, 'CODE'));
+    asked.push(plain(typed(command.path, options)));
+    seen.push(plain(withoutCodes(messages.map(seenAs).join('\n\n'))));
   }
   return { asked, seen };
 };
@@ -141,10 +148,10 @@ const MOST_PRESSES = 40;
 test.each(VERBS)(
   'every button and form of /%s is answered, and private stays private',
   async (name, command) => {
-    const { who, code } = await shopFor(`${name} pressed`, command);
+    const { who, code, ben } = await shopFor(`${name} pressed`, command);
     const waiting: Posted[] = [];
     for (const example of command.examples) {
-      const options = optionsFor(people, command, ownNames(example, code));
+      const options = optionsFor(people, command, ownNames(example, code, ben));
       const quietMs = command.path.at(-1) === 'export' ? 400 : 0;
       const hidden = { ...options, 'only-me': true };
       for (const asked of [options, hidden])

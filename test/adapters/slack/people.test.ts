@@ -35,6 +35,13 @@ test('a person mentioned in a line is meant by their id, by slash command and by
   expect(added).toContain('Name of U0SECOND');
 });
 
+test('a name without a mention is nobody who could ever come, and is not kept', async () => {
+  const bot = await opened();
+  const refused = await bot.shop('people add Newhand engineer', 'U0OWNER');
+  expect(refused).toContain('I cannot tell who “Newhand” is here. Type @ and pick them');
+  expect(await bot.shop('people list', 'U0OWNER')).not.toContain('Newhand');
+});
+
 test('an administrator is known as the owner where the workspace has no user groups', async () => {
   const bot = await opened();
   bot.platform.meet('usergroups.list', { error: 'missing_scope' }, { error: 'missing_scope' });
