@@ -45,7 +45,7 @@ const shopOn = async (engine: (typeof ENGINES)[number]) => {
       const effect = queued as Effect;
       effects.push(effect);
       const before = earlier as { place: string; message: string } | null;
-      const at = 'place' in effect && effect.place !== undefined ? effect.place : before?.place;
+      const at = 'place' in effect ? effect.place : before?.place;
       const place = effect.effect === 'thread' ? `questions/${effect.of}` : (at ?? '');
       const says = 'card' in effect ? speakCard(en, effect.card).headline : '';
       const ring = effect.effect === 'post' ? (effect.ring?.people ?? []).join(',') : '';
