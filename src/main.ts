@@ -11,6 +11,7 @@ import { en } from './phrases/index.ts';
 import { recordsFault, recordsPlace } from './records.ts';
 import { openQuestionReminders } from './reminders.ts';
 import { openStore } from './store/index.ts';
+import { startUpkeep } from './upkeep.ts';
 
 /** Says what is wrong and ends with an exit code that a supervisor of processes understands. */
 const refuse = (sentences: readonly string[]): never => {
@@ -62,9 +63,11 @@ const chat = async (config: Config): Promise<void> => {
     onFault,
   });
   reminders.start();
+  const upkeep = startUpkeep(store, { now: Date.now, onFault });
   end = (code) => {
     reminders
       .stop()
+      .then(() => upkeep.stop())
       .then(() => deliveries.stop())
       .then(() => running.stop())
       .then(() => store.close())

@@ -52,8 +52,11 @@ export const answerTo = async <A>(view: ShopView, interaction: string): Promise<
   return answer === null ? null : (JSON.parse(answer) as A);
 };
 
-/** How long an answer is given again. Judgement: platforms repeat within the hour, not the week. */
-export const REPEATS_MS = 7 * 24 * 3_600_000;
+/**
+ * How long an answer is given again, and the buttons under it work. Judgement: platforms repeat
+ * within the hour, and people press what they scroll back to within half a year.
+ */
+export const REPEATS_MS = 180 * 24 * 3_600_000;
 
 /** Forgets answers that nobody will ask for again. What was done stays. */
 export const forgetAnswers = async (store: Store, at: number): Promise<void> => {

@@ -70,7 +70,7 @@ export const interactions = (engine: Engine): void => {
       expect(await act(other, 'i1', 2)).toMatchObject({ first: true, answer: { run: 2 } });
     });
 
-    it('are forgotten after a week, what they did is not', async () => {
+    it('are forgotten after half a year, what they did is not', async () => {
       const { store } = await newRecords(engine);
       const shop = await newShop(store);
       await act(shop, 'i1', 1);
