@@ -13,3 +13,14 @@ export const askChoices = ({ visit }: Context): readonly Choice[] =>
           ofCard: true,
         },
       ];
+
+/** What is seen on the part, held against this very set-up: only the symptom is still to be said. */
+export const troubleChoice = ({ text }: Context): Choice => ({
+  label: label('troubleSeen', {}),
+  words: `/knurl trouble ${bareLine(text)}`.trimEnd(),
+  ask: ['symptom'],
+});
+
+/** A line without what says which verb it is for. */
+export const bareLine = (text: string): string =>
+  text.replace(/^\s*\/?knurl\b\s*/iu, '').replace(/^(?:setup|trouble)\b\s*/iu, '');

@@ -28,7 +28,7 @@ import {
 import type { Context } from '../../src/desk/index.ts';
 import { type Machine, onDial } from '../../src/shop/index.ts';
 import { partOf } from '../../src/words/index.ts';
-import { askChoices } from './nextMoves.ts';
+import { askChoices, troubleChoice } from './nextMoves.ts';
 import { setupPictures } from './pictures.ts';
 import { logChoices } from './resultChoices.ts';
 import type { SetupWords } from './setupParameters.ts';
@@ -348,6 +348,7 @@ const choices = (w: Worked): readonly Choice[] => {
       words: reworded(context, ['units'], `show ${turned}`),
     },
     ...materialChoices(w),
+    troubleChoice(context),
     ...askChoices(context),
   ];
 };

@@ -21,6 +21,7 @@ import {
   refuse,
 } from '../../src/desk/index.ts';
 import { causeCounts, latestCards, type Wheel } from '../../src/shop/index.ts';
+import { bareLine } from './nextMoves.ts';
 import { shopRequestOf } from './shopRequest.ts';
 import { troubleCard } from './troubleCard.ts';
 import { type TroubleWords, troubleFields } from './troubleFields.ts';
@@ -85,10 +86,6 @@ const ranked = async (
 /** Cards that are looked through for the last set-up. Judgement. */
 const LOOKED_THROUGH = 20;
 
-/** A line without what says which verb it is for. */
-const bare = (text: string): string =>
-  text.replace(/^\s*\/?knurl\b\s*/iu, '').replace(/^(?:setup|trouble)\b\s*/iu, '');
-
 /** The same trouble with the set-up this person was last given here; null where there is none. */
 const ofLastSetup = async (context: Context): Promise<Reply | null> => {
   const { visit, text } = context;
@@ -97,7 +94,7 @@ const ofLastSetup = async (context: Context): Promise<Reply | null> => {
   const own = await latestCards(visit.shop, { limit: LOOKED_THROUGH, madeBy, place });
   const last = own.find(({ kind }) => kind === 'setup');
   if (last === undefined) return null;
-  const words = `/knurl trouble ${bare(text)} ${bare(last.words)}`;
+  const words = `/knurl trouble ${bareLine(text)} ${bareLine(last.words)}`;
   const reply = await context.again(words);
   // Words that do not go together with it are ranked by themselves.
   if ('refusal' in reply) return null;

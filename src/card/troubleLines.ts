@@ -19,7 +19,7 @@ export type TroubleLines = {
 };
 
 /** What the buttons of a trouble say. */
-export type TroubleLabels = { setUpCard: Nothing; checkCard: Nothing };
+export type TroubleLabels = { setUpCard: Nothing; checkCard: Nothing; troubleSeen: Nothing };
 
 export type TroubleRows = {
   cause: CauseSaid & { readonly place: number };

@@ -53,6 +53,7 @@ export const troubleLabels: {
   readonly [K in keyof TroubleLabels]: (values: TroubleLabels[K], show: Show) => string;
 } = {
   setUpCard: () => 'Set-up card',
+  troubleSeen: () => 'Trouble',
   checkCard: () => 'Check this blank',
 };
 

@@ -88,9 +88,16 @@ test('every button of a card is answered, in the place of the card', async () =>
   const { message: card } = await next(() => bot.people.slash(LINE));
   const buttons = buttonsOf(card.body);
   expect(buttons.length).toBeGreaterThan(2);
-  for (const index of buttons.keys()) {
-    const { message } = await next(() => bot.people.press(card, index));
+  for (const [index, { text }] of buttons.entries()) {
+    const pressed = (): Promise<unknown> => bot.people.press(card, index);
+    // What is seen has to be said first: that one brings a form.
+    const answered = async (): Promise<unknown> =>
+      text?.text === 'Trouble'
+        ? await bot.people.submit(await nextView(pressed), { symptom: 'double' })
+        : await pressed();
+    const { message } = await next(answered);
     expect(message.channel).toBe(card.channel);
+    if (text?.text === 'Trouble') expect(readable(message.body)).toContain('Most likely');
   }
 });
 
