@@ -1,6 +1,7 @@
 /** Who is who in a server, what is offered while somebody types, and files that come and go. */
 import http from 'node:http';
 import type { AddressInfo } from 'node:net';
+import { setTimeout as pause } from 'node:timers/promises';
 import { afterAll, expect, test } from 'vitest';
 import { en } from '../../../src/phrases/index.ts';
 import { ENGINEER, OPERATOR, OWNER, STRANGER, SUPERVISORS } from '../../platforms/discord/world.ts';
@@ -105,6 +106,14 @@ const handedOver = (): readonly string[] =>
     .flatMap((each) => each.files.map(({ name }) => name))
     .filter((name) => /csv|json/u.test(name));
 
+/** Files are made while they are handed over: they are all there when no more come. */
+const allHandedOver = async (): Promise<void> => {
+  for (let count = -1; count !== handedOver().length; ) {
+    count = handedOver().length;
+    await pause(400);
+  }
+};
+
 const imported = (size = SHEET.length) => {
   const id = '1600000000000000001';
   const file = { id, filename: 'wheels.csv', size, url: address, proxy_url: address };
@@ -129,6 +138,7 @@ test('what a shop has kept goes as files to its owner alone', async () => {
   await people.slash(['shop', 'export'], {}, OWNER);
   await until(() => platform.posted.some(({ files: all }) => all.length > 0), 'the files');
   await until(() => handedOver().includes('wheel.csv'), 'the list of wheels');
+  await allHandedOver();
   const sent = platform.posted.slice(before).filter((each) => each.files.length > 0);
   for (const { only } of sent) expect(only).toBe(OWNER.id);
   // In a channel, without a slash command, there is nothing to see but the card.
@@ -136,10 +146,13 @@ test('what a shop has kept goes as files to its owner alone', async () => {
   const direct = () =>
     platform.posted.filter(({ guild, files: all }) => guild === null && all.length > 0);
   await until(() => direct().length === sent.length, 'the files, by direct message');
+  await allHandedOver();
+  expect(direct()).toHaveLength(sent.length);
 });
 
 test('nobody but the owner gets a file', async () => {
   const before = handedOver().length;
   await asks('shop export', {}, ENGINEER);
+  await allHandedOver();
   expect(handedOver()).toHaveLength(before);
 });
