@@ -8,6 +8,9 @@ type Memory = {
   /** The same line in plain characters, place for place. */
   readonly plain: string;
   readonly tokens: readonly Token[];
+  /** The words as they were typed, and after which of them a comma is only supposed. */
+  readonly typed: readonly Token[];
+  readonly supposed: readonly number[];
   /** Quantities already read, by token: many readers ask for the same one. */
   readonly quantities: (Quantity | null | undefined)[];
 };
@@ -26,7 +29,13 @@ export type Cursor = {
 export const cursorOf = (text: string, units: ShopUnits, at = 0): Cursor => {
   const plain = plainText(text);
   const tokens = tokensOf(text, plain);
-  return { text, tokens, at, units, memory: { plain, tokens, quantities: [] } };
+  return {
+    text,
+    tokens,
+    at,
+    units,
+    memory: { plain, tokens, typed: tokens, supposed: [], quantities: [] },
+  };
 };
 
 /** The line in plain characters, place for place. */
@@ -55,7 +64,15 @@ export const withComma = (cursor: Cursor, ahead: number): Cursor => {
   const tokens = cursor.tokens.map((token, index) =>
     index === cursor.at + ahead ? { ...token, closed: true } : token,
   );
-  return { ...cursor, tokens, memory: { plain: plainOf(cursor), tokens, quantities: [] } };
+  const { typed = cursor.tokens, supposed = [] } = cursor.memory ?? {};
+  const memory = {
+    plain: plainOf(cursor),
+    tokens,
+    typed,
+    supposed: [...supposed, cursor.at + ahead],
+    quantities: [],
+  };
+  return { ...cursor, tokens, memory };
 };
 
 /** From the first to the last of a number of tokens. */

@@ -86,8 +86,18 @@ const put = (progress: Progress, cursor: Cursor, found: Found, ear: Ear): Refusa
   return null;
 };
 
+/** Longer than this nobody types, but a platform lets through. Judgement. */
+const LONG_LINE = 60;
+
+/** A long line is heard from its end first, so that looking ahead never has far to go. */
+const fromTheEnd = (start: Cursor, ear: Ear): void => {
+  if (start.tokens.length <= LONG_LINE) return;
+  for (let at = start.tokens.length - 1; at >= start.at; at -= 1) ear.step({ ...start, at });
+};
+
 /** Reads word by word until the end, or until something has to be asked. */
 const listen = (start: Cursor, ear: Ear): { readonly read: ReadLine } | Fault => {
+  fromTheEnd(start, ear);
   const progress: Progress = { values: new Map(), spans: new Map() };
   let cursor = start;
   while (cursor.at < cursor.tokens.length) {

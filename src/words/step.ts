@@ -5,6 +5,7 @@ import { betweenTwo } from './between.ts';
 import { type Cursor, moved, textAt, tokenAt } from './cursor.ts';
 import { type Ear, isFound, type Step, stepOf } from './ear.ts';
 import { quantityAt } from './quantity.ts';
+import type { Token } from './tokens.ts';
 import { unitOf } from './unit.ts';
 import { unreadable } from './unreadable.ts';
 
@@ -42,7 +43,7 @@ const byItself = (cursor: Cursor, ear: Ear): Weighed | null => {
 
 /** The x of `1.0 x 21tpi` parts a size from what says itself what it is. */
 const isPart = (cursor: Cursor, ear: Ear): boolean => {
-  if (textAt(cursor) !== 'x' || cursor.at === 0) return false;
+  if (textAt(cursor) !== 'x' || textAt(cursor, 1) === 'x' || cursor.at === 0) return false;
   const next = ear.step(moved(cursor, 1));
   return isFound(next) && next.found.parameter.bare !== true;
 };
@@ -77,8 +78,33 @@ const stepAt = (cursor: Cursor, ear: Ear): Step => {
   return loneUnit(cursor, ear) ?? unreadable(cursor, ear.vocabulary.words);
 };
 
-/** What listens to a line with this vocabulary, in a shop with these names. */
+/**
+ * What tells a place from every other: which commas are supposed before it makes no difference,
+ * but for the one right before.
+ */
+const placeKey = ({ at, units }: Cursor, supposed: readonly number[]): string => {
+  const ahead = supposed.filter((index) => index >= at - 1);
+  return `${units} ${String(at)} ${ahead.join(' ')}`;
+};
+
+/**
+ * What listens to a line with this vocabulary, in a shop with these names. A place is heard once:
+ * who looks ahead over words that look ahead themselves would else hear the end of the line twice
+ * as often with each of them.
+ */
 export const earFor = (vocabulary: Ear['vocabulary'], names: Ear['names']): Ear => {
-  const ear: Ear = { vocabulary, names, step: (cursor) => stepAt(cursor, ear) };
+  const heard = new WeakMap<readonly Token[], Map<string, Step>>();
+  const hear = (cursor: Cursor): Step => {
+    const { memory } = cursor;
+    // What a reader has put in the place of the words that were typed is heard by itself.
+    if (memory?.tokens !== cursor.tokens) return stepAt(cursor, ear);
+    const known = heard.get(memory.typed) ?? new Map<string, Step>();
+    heard.set(memory.typed, known);
+    const key = placeKey(cursor, memory.supposed);
+    const step = known.get(key) ?? stepAt(cursor, ear);
+    known.set(key, step);
+    return step;
+  };
+  const ear: Ear = { vocabulary, names, step: hear };
   return ear;
 };
