@@ -132,7 +132,7 @@ export const checks: Book['checks'] = {
         case 'convexPlunge':
           return 'convex edges are for travelling: a plunge leaves the ends shallow';
         case 'onePieceTravel':
-          return 'one crossed wheel only plunges: take a pair or a shorter knurl';
+          return 'one crossed wheel only plunges: a shorter knurl, or for a diamond a pair';
         case 'squareCut':
           return 'square, cuts';
         case 'notSquareCut':

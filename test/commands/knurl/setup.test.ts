@@ -366,3 +366,10 @@ describe('what cannot be answered', () => {
     for (const { words } of choices) await cardFor(words);
   });
 });
+
+it('a square pattern that would have to travel is not sent to a pair, which leaves none', async () => {
+  // It once said: take a pair or a shorter knurl, for squares as well.
+  const answer = await cardFor('1.000 square 21tpi 1018 long 1');
+  expect(checkOf(answer, 'edge')).toContain('stop');
+  expect(said(textOf(answer, 200))).toContain('a shorter knurl, or for a diamond a pair');
+});
